@@ -1,0 +1,31 @@
+import type { KeyScope } from '@/lib/access';
+
+/** A signed-in person, as services take them. */
+export interface Person {
+  id: string;
+  name: string;
+  email: string;
+}
+
+export interface MemberWorkshop {
+  id: string;
+  name: string;
+  admin: boolean;
+}
+
+/** A key as listed: never the key itself, only the visible fragment that tells it from others. */
+export interface ApiKeyLine {
+  id: string;
+  label: string;
+  fragment: string;
+  scopes: KeyScope[];
+  madeAt: string;
+  expiresAt: string | null;
+  lastUsedAt: string | null;
+  revokedAt: string | null;
+}
+
+/** A key as shown once, at its making. */
+export interface NewApiKey extends ApiKeyLine {
+  key: string;
+}

@@ -1,0 +1,125 @@
+import { z } from 'zod';
+
+/**
+ * What one version of a notebook holds. The same schema checks a save, a draft kept by the browser
+ * and a seed; it is strict, so that a field nobody knows is refused instead of silently lost.
+ */
+export const CONTENT_LIMITS = {
+  /** Cells in a notebook. */
+  cells: 400,
+  /** UTF-16 units of one cell's source. */
+  source: 20_000,
+  /** UTF-16 units of all sources together. */
+  total: 400_000,
+  /** UTF-16 units of a cell's id. */
+  cellId: 40,
+  /** Significant digits a notebook may ask its decimals to have. */
+  digits: 1000,
+  /** UTF-16 units of a cutting step such as `0.5 mm`. */
+  step: 40,
+} as const;
+
+const plural = (n: number, one: string) => `${n} ${one}${n === 1 ? '' : 's'}`;
+
+export const NotebookSettings = z.strictObject({
+  digits: z
+    .int({ error: 'The number of digits must be a whole number.' })
+    .min(1, { error: 'The number of digits must be at least 1.' })
+    .max(CONTENT_LIMITS.digits, {
+      error: `The number of digits can be at most ${CONTENT_LIMITS.digits}.`,
+    }),
+  unit: z.enum(['mm', 'cm', 'm', 'in', 'ft'], {
+    error: 'The unit must be one of mm, cm, m, in, ft.',
+  }),
+  step: z
+    .string()
+    .trim()
+    .min(1, { error: 'The cutting step is empty; write a length such as 0.5 mm, or null for none.' })
+    .max(CONTENT_LIMITS.step, {
+      error: `The cutting step is longer than ${CONTENT_LIMITS.step} characters.`,
+    })
+    .nullable(),
+  rounding: z.enum(['half-even', 'half-up', 'up', 'down'], {
+    error: 'The rounding must be one of half-even, half-up, up, down.',
+  }),
+});
+export type NotebookSettings = z.infer<typeof NotebookSettings>;
+
+/** The settings of a notebook nobody has set yet (the defaults of the result schema). */
+export const DEFAULT_NOTEBOOK_SETTINGS: NotebookSettings = {
+  digits: 30,
+  unit: 'mm',
+  step: null,
+  rounding: 'half-even',
+};
+
+export const NotebookCell = z.strictObject({
+  id: z
+    .string()
+    .regex(/^[A-Za-z0-9_-]+$/, {
+      error: 'A cell id is made of letters, digits, hyphens and underscores.',
+    })
+    .max(CONTENT_LIMITS.cellId, {
+      error: `A cell id is at most ${CONTENT_LIMITS.cellId} characters long.`,
+    }),
+  kind: z.enum(['dimension', 'note'], { error: 'The kind of a cell is dimension or note.' }),
+  source: z.string().max(CONTENT_LIMITS.source, {
+    error: (issue) =>
+      `The source of a cell is ${plural(String(issue.input).length, 'character')} long; ` +
+      `at most ${CONTENT_LIMITS.source} are allowed.`,
+  }),
+});
+export type NotebookCell = z.infer<typeof NotebookCell>;
+
+export const NotebookContent = z
+  .strictObject({
+    format: z.literal(1, { error: 'The format of the content must be 1.' }),
+    settings: NotebookSettings,
+    cells: z.array(NotebookCell).max(CONTENT_LIMITS.cells, {
+      error: (issue) =>
+        `The notebook has ${plural((issue.input as unknown[]).length, 'cell')}; ` +
+        `at most ${CONTENT_LIMITS.cells} are allowed.`,
+    }),
+  })
+  .superRefine((content, context) => {
+    const seen = new Set<string>();
+    content.cells.forEach((cell, index) => {
+      if (seen.has(cell.id)) {
+        context.addIssue({
+          code: 'custom',
+          path: ['cells', index, 'id'],
+          message: `Two cells have the id “${cell.id}”; every cell needs its own.`,
+        });
+      }
+      seen.add(cell.id);
+    });
+    const total = content.cells.reduce((sum, cell) => sum + cell.source.length, 0);
+    if (total > CONTENT_LIMITS.total) {
+      context.addIssue({
+        code: 'custom',
+        path: ['cells'],
+        message:
+          `The sources of all cells together are ${total} characters long; ` +
+          `at most ${CONTENT_LIMITS.total} are allowed.`,
+      });
+    }
+  });
+export type NotebookContent = z.infer<typeof NotebookContent>;
+
+/** A fresh notebook: default settings and no cells. */
+export function emptyContent(): NotebookContent {
+  return { format: 1, settings: { ...DEFAULT_NOTEBOOK_SETTINGS }, cells: [] };
+}
+
+/**
+ * One spelling per content (fixed order of fields, no white space), so that equal contents have
+ * equal text and equal hashes whatever order a client sent the fields in.
+ */
+export function canonicalText(content: NotebookContent): string {
+  const { digits, unit, step, rounding } = content.settings;
+  return JSON.stringify({
+    format: content.format,
+    settings: { digits, unit, step, rounding },
+    cells: content.cells.map(({ id, kind, source }) => ({ id, kind, source })),
+  });
+}
