@@ -1,0 +1,109 @@
+import { createHash } from 'node:crypto';
+import type { Knex } from 'knex';
+import type { Database } from '../client';
+
+/** A version without its content, as the list shows it. */
+export interface VersionEntry {
+  number: number;
+  author: { id: string; name: string };
+  savedAt: Date;
+  note: string | null;
+  restoredFrom: number | null;
+}
+
+export interface Version extends VersionEntry {
+  /** As stored; the service checks its shape. */
+  content: unknown;
+  contentHash: string;
+}
+
+interface EntryRow {
+  number: number;
+  author_id: string;
+  author_name: string;
+  saved_at: Date;
+  note: string | null;
+  restored_from: number | null;
+}
+
+interface VersionRow extends EntryRow {
+  content: string;
+  content_hash: string;
+}
+
+const entryColumns = [
+  'versions.number',
+  'versions.author_id',
+  'users.name as author_name',
+  'versions.saved_at',
+  'versions.note',
+  'versions.restored_from',
+];
+
+const toEntry = (row: EntryRow): VersionEntry => ({
+  number: row.number,
+  author: { id: row.author_id, name: row.author_name },
+  savedAt: row.saved_at,
+  note: row.note,
+  restoredFrom: row.restored_from,
+});
+
+const ofNotebook = (db: Database, notebookId: string) =>
+  db('versions')
+    .join('users', 'users.id', 'versions.author_id')
+    .where('versions.notebook_id', notebookId);
+
+/** All versions of a notebook, newest first. */
+export async function listVersions(db: Database, notebookId: string): Promise<VersionEntry[]> {
+  const rows = (await ofNotebook(db, notebookId)
+    .orderBy('versions.number', 'desc')
+    .select(entryColumns)) as EntryRow[];
+  return rows.map(toEntry);
+}
+
+export async function findVersion(
+  db: Database,
+  notebookId: string,
+  number: number,
+): Promise<Version | null> {
+  const row = (await ofNotebook(db, notebookId)
+    .where('versions.number', number)
+    .first([...entryColumns, 'versions.content', 'versions.content_hash'])) as
+    VersionRow | undefined;
+  if (row === undefined) return null;
+  const content = JSON.parse(row.content) as unknown;
+  return { ...toEntry(row), content, contentHash: row.content_hash };
+}
+
+export interface NewVersion {
+  notebookId: string;
+  number: number;
+  authorId: string;
+  content: unknown;
+  note?: string | null;
+  restoredFrom?: number | null;
+}
+
+/**
+ * Stores a version and makes it the notebook's head. The caller has read the head with `lockHead`
+ * in the same transaction; `number` is one more than it.
+ * @throws what `isDuplicate` recognises when the number is taken after all
+ */
+export async function insertVersion(trx: Knex.Transaction, version: NewVersion): Promise<Date> {
+  const savedAt = new Date();
+  const content = JSON.stringify(version.content);
+  await trx('versions').insert({
+    notebook_id: version.notebookId,
+    number: version.number,
+    author_id: version.authorId,
+    saved_at: savedAt,
+    note: version.note ?? null,
+    restored_from: version.restoredFrom ?? null,
+    content,
+    content_hash: createHash('sha256').update(content).digest('hex'),
+  });
+  await trx('notebooks')
+    .where({ id: version.notebookId })
+    .update({ head: version.number, changed_at: savedAt });
+  return savedAt;
+}
