@@ -1,0 +1,75 @@
+import type { ReactNode } from 'react';
+
+/** Zone letters leave out I and O, which read as figures (ISO 5457). */
+const LETTERS = 'ABCDEFGHJKLMNPQRSTUVWXYZ';
+
+/** The letter of a zone counted from 0; after Z come AA, AB … */
+export function zoneLetter(zone: number): string {
+  const last = LETTERS[zone % LETTERS.length] ?? '';
+  return zone < LETTERS.length ? last : zoneLetter(Math.floor(zone / LETTERS.length) - 1) + last;
+}
+
+/** Zones along the side are as tall as this; the strip is cut off where the sheet ends. */
+const ZONE_REM = 13;
+
+interface SheetFrameProps {
+  children: ReactNode;
+  /** The title block, at the foot. */
+  foot?: ReactNode;
+  /** About how many rows of zones the sheet may be tall; too many costs nothing. */
+  zones?: number;
+}
+
+function Centring({ className }: { className: string }) {
+  return <span aria-hidden="true" className={`absolute bg-ink ${className}`} />;
+}
+
+/**
+ * The sheet itself: trimmed edge, zone letters and figures, ruled border with centring marks, and
+ * the title block in its lower right corner.
+ */
+export function SheetFrame({ children, foot, zones = 40 }: SheetFrameProps) {
+  return (
+    <div className="relative border border-rule bg-sheet sm:px-zone print:border-0 print:p-0">
+      <div
+        aria-hidden="true"
+        className="flex h-zone select-none items-center text-tag tracking-normal text-soft print:hidden"
+      >
+        {Array.from({ length: 8 }, (_, index) => (
+          <span
+            key={index}
+            className={`flex-1 text-center ${index > 3 ? 'max-sm:hidden' : ''} ${index > 0 ? 'border-l border-hairline' : ''}`}
+          >
+            {index + 1}
+          </span>
+        ))}
+      </div>
+      {(['left-0', 'right-0'] as const).map((side) => (
+        <div
+          key={side}
+          aria-hidden="true"
+          className={`absolute inset-y-zone w-zone select-none overflow-hidden text-tag tracking-normal text-soft max-sm:hidden print:hidden ${side}`}
+        >
+          {Array.from({ length: zones }, (_, index) => (
+            <span
+              key={index}
+              className="flex items-center justify-center border-b border-hairline"
+              style={{ height: `${ZONE_REM}rem` }}
+            >
+              {zoneLetter(index)}
+            </span>
+          ))}
+        </div>
+      ))}
+      <div className="relative flex min-h-[60vh] flex-col border-2 border-ink max-sm:border-x-0">
+        <Centring className="-top-2.5 left-1/2 h-2.5 w-0.5 -translate-x-1/2" />
+        <Centring className="-bottom-2.5 left-1/2 h-2.5 w-0.5 -translate-x-1/2" />
+        <Centring className="-left-2.5 top-1/2 h-0.5 w-2.5 max-sm:hidden" />
+        <Centring className="-right-2.5 top-1/2 h-0.5 w-2.5 max-sm:hidden" />
+        <div className="grow">{children}</div>
+        {foot}
+      </div>
+      <div aria-hidden="true" className="h-zone" />
+    </div>
+  );
+}
