@@ -20,6 +20,14 @@ export async function findHits(db: Database, bucket: string, windowStart: Date):
   return row?.hits ?? 0;
 }
 
+/** Takes one hit of a window back, for instance of an attempt that turned out to be rightful. */
+export async function takeHitBack(db: Database, bucket: string, windowStart: Date): Promise<void> {
+  await db('rate_limits')
+    .where({ bucket, window_start: windowStart })
+    .where('hits', '>', 0)
+    .decrement('hits', 1);
+}
+
 /** Forgets a bucket, for instance after the right password. */
 export async function clearHits(db: Database, bucket: string): Promise<void> {
   await db('rate_limits').where({ bucket }).delete();

@@ -74,3 +74,8 @@ export async function changePassword(
     .where({ id })
     .update({ password_hash: passwordHash, token_version: db.raw('token_version + 1') });
 }
+
+/** Ends every session the person has. */
+export async function endSessions(db: Database, id: string): Promise<void> {
+  await db<UserRow>('users').where({ id }).increment('token_version', 1);
+}

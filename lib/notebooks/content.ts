@@ -34,7 +34,9 @@ export const NotebookSettings = z.strictObject({
   step: z
     .string()
     .trim()
-    .min(1, { error: 'The cutting step is empty; write a length such as 0.5 mm, or null for none.' })
+    .min(1, {
+      error: 'The cutting step is empty; write a length such as 0.5 mm, or null for none.',
+    })
     .max(CONTENT_LIMITS.step, {
       error: `The cutting step is longer than ${CONTENT_LIMITS.step} characters.`,
     })
@@ -112,14 +114,14 @@ export function emptyContent(): NotebookContent {
 }
 
 /**
- * One spelling per content (fixed order of fields, no white space), so that equal contents have
- * equal text and equal hashes whatever order a client sent the fields in.
+ * The same content with its fields in one fixed order, so that equal contents have equal JSON and
+ * equal hashes whatever order a client sent the fields in.
  */
-export function canonicalText(content: NotebookContent): string {
+export function canonicalContent(content: NotebookContent): NotebookContent {
   const { digits, unit, step, rounding } = content.settings;
-  return JSON.stringify({
+  return {
     format: content.format,
     settings: { digits, unit, step, rounding },
     cells: content.cells.map(({ id, kind, source }) => ({ id, kind, source })),
-  });
+  };
 }

@@ -75,8 +75,6 @@ export interface NotebookPerson {
 export interface ClientLinkLine {
   id: string;
   label: string | null;
-  /** The first characters of the token, to tell links apart; not enough to use one. */
-  fragment: string;
   madeAt: Moment;
   madeBy: string;
   revokedAt: Moment | null;

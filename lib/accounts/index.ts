@@ -1,0 +1,17 @@
+export { addressOf } from './address';
+export { isId } from './ids';
+export { KeyRequest, createKey, holderOfKey, listKeys, revokeKey } from './keys';
+export type { KeyHolder } from './keys';
+export { LIMITS, countAgainst } from './limits';
+export {
+  EmailAddress,
+  SignUp,
+  oneLine,
+  signIn,
+  signOutEverywhere,
+  signUp,
+  workshopsOf,
+} from './people';
+export { hashPassword } from './passwords';
+export { hashOf, newSecret } from './secrets';
+export type { ApiKeyLine, MemberWorkshop, NewApiKey, Person } from './types';

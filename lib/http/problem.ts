@@ -1,0 +1,68 @@
+import type { Failure, FailureCode } from '@/lib/access';
+
+/** The only table from a service's failure code to HTTP: the status, and the problem's title. */
+export const PROBLEMS: Readonly<Record<FailureCode | 'fault', { status: number; title: string }>> =
+  {
+    'sign-in-needed': { status: 401, title: 'Sign-in needed' },
+    'bad-credentials': { status: 401, title: 'Wrong e-mail address or password' },
+    'bad-key': { status: 401, title: 'Key not accepted' },
+    forbidden: { status: 403, title: 'Not allowed' },
+    'foreign-origin': { status: 403, title: 'Request from another site' },
+    'not-found': { status: 404, title: 'Not found' },
+    'method-not-allowed': { status: 405, title: 'Method not allowed' },
+    'email-taken': { status: 409, title: 'E-mail address taken' },
+    'already-added': { status: 409, title: 'Already added' },
+    'stale-version': { status: 409, title: 'Saved meanwhile by somebody else' },
+    archived: { status: 409, title: 'Notebook archived' },
+    'last-owner': { status: 409, title: 'Last owner' },
+    'limit-reached': { status: 409, title: 'Limit reached' },
+    'too-large': { status: 413, title: 'Request too large' },
+    'wrong-type': { status: 415, title: 'Content type not accepted' },
+    unreadable: { status: 400, title: 'Request not readable' },
+    invalid: { status: 422, title: 'Request not valid' },
+    'unknown-email': { status: 422, title: 'No such account' },
+    'too-many': { status: 429, title: 'Too many requests' },
+    busy: { status: 503, title: 'Busy' },
+    fault: { status: 500, title: 'A fault of ours' },
+  };
+
+/**
+ * A problem document (RFC 9457). `type` is a tag URI, which names the kind of problem and is not
+ * meant to be opened; `code` is its last part, for programs.
+ */
+export function problemResponse(failure: Failure, requestId: string): Response {
+  const { code, message, extra } = failure;
+  const headers = new Headers();
+  if (extra.retryAfter !== undefined) headers.set('retry-after', String(extra.retryAfter));
+  if (code === 'bad-key') headers.set('www-authenticate', 'Bearer');
+  return write(code, message, requestId, headers, {
+    ...(extra.fields === undefined ? {} : { fields: extra.fields }),
+    ...(extra.head === undefined ? {} : { head: extra.head }),
+  });
+}
+
+/** What leaves the server when something broke: nothing of the cause, only where to look it up. */
+export function faultResponse(requestId: string): Response {
+  return write(
+    'fault',
+    `Something went wrong on the server, and the request could not be answered. Its number is ${requestId}.`,
+    requestId,
+    new Headers(),
+    {},
+  );
+}
+
+function write(
+  code: FailureCode | 'fault',
+  detail: string,
+  requestId: string,
+  headers: Headers,
+  extra: Record<string, unknown>,
+): Response {
+  const { status, title } = PROBLEMS[code];
+  headers.set('content-type', 'application/problem+json; charset=utf-8');
+  headers.set('cache-control', 'no-store');
+  const type = `tag:surdwork.example,2026:problem/${code}`;
+  const body = JSON.stringify({ type, title, status, detail, code, requestId, ...extra });
+  return new Response(body, { status, headers });
+}

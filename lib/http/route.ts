@@ -1,0 +1,138 @@
+import { randomUUID } from 'node:crypto';
+import type { z } from 'zod';
+import { Failure, keyAllows, type KeyScope } from '@/lib/access';
+import { LIMITS, addressOf, countAgainst, holderOfKey, type Person } from '@/lib/accounts';
+import { currentPerson } from '@/lib/accounts/session';
+import { finish } from './answer';
+import { SMALL_BODY, check, readJson } from './body';
+import { logFault } from './faults';
+import { demandSameOrigin } from './origin';
+import { faultResponse, problemResponse } from './problem';
+
+type Params = Record<string, string>;
+
+/** What a route needs of a request before its handler runs; whatever is left out is not read. */
+export interface RouteOptions<B extends z.ZodType, Q extends z.ZodType> {
+  /** `required`: without a signed-in person the answer is 401. `none`: nobody is looked up. */
+  person: 'required' | 'none';
+  /** Also takes an API key with this scope as `Authorization: Bearer …`, in place of a session. */
+  key?: KeyScope;
+  body?: B;
+  /** Most bytes the body may have; by default what no request without a notebook exceeds. */
+  bodyLimit?: number;
+  query?: Q;
+}
+
+/** What a handler is given: checked, typed, and with the person where one is required. */
+export interface Call<Who, B, Q> {
+  request: Request;
+  person: Who;
+  /** The id of the API key the request came with, if it came with one. */
+  keyId: string | null;
+  address: string;
+  params: Params;
+  body: B;
+  query: Q;
+}
+
+interface Context {
+  params: Promise<object>;
+}
+
+type Handler<Who, B, Q> = (call: Call<Who, B, Q>) => Promise<Response | object>;
+
+/**
+ * Makes a route handler: finds out who asks, refuses writes from other sites, reads and checks query
+ * and body, runs the handler, and turns failures into problem documents. Whatever else is thrown is
+ * logged under the request's number and answered without a word of its cause.
+ */
+export function route<B extends z.ZodType = z.ZodUndefined, Q extends z.ZodType = z.ZodUndefined>(
+  options: RouteOptions<B, Q> & { person: 'required' },
+  handler: Handler<Person, z.output<B>, z.output<Q>>,
+): (request: Request, context: Context) => Promise<Response>;
+export function route<B extends z.ZodType = z.ZodUndefined, Q extends z.ZodType = z.ZodUndefined>(
+  options: RouteOptions<B, Q> & { person: 'none' },
+  handler: Handler<null, z.output<B>, z.output<Q>>,
+): (request: Request, context: Context) => Promise<Response>;
+export function route<B extends z.ZodType, Q extends z.ZodType>(
+  options: RouteOptions<B, Q>,
+  handler: Handler<never, z.output<B>, z.output<Q>>,
+): (request: Request, context: Context) => Promise<Response> {
+  return async (request, context) => {
+    const requestId = randomUUID();
+    try {
+      const { person, keyId } = await whoAsks(request, options);
+      const call = {
+        request,
+        person: person as never,
+        keyId,
+        address: addressOf(request.headers),
+        params: (await context.params) as Params,
+        query: options.query && check(options.query, queryOf(request)),
+        body:
+          options.body &&
+          check(options.body, await readJson(request, options.bodyLimit ?? SMALL_BODY)),
+      };
+      const answer = await handler(call as Call<never, z.output<B>, z.output<Q>>);
+      return finish(answer instanceof Response ? answer : Response.json(answer), requestId);
+    } catch (error) {
+      if (error instanceof Failure) return finish(problemResponse(error, requestId), requestId);
+      logFault(error, request, requestId);
+      return finish(faultResponse(requestId), requestId);
+    }
+  };
+}
+
+interface Asking {
+  person: Person | null;
+  keyId: string | null;
+}
+
+async function whoAsks(
+  request: Request,
+  options: { person: 'required' | 'none'; key?: KeyScope },
+): Promise<Asking> {
+  if (options.person === 'none') return { person: null, keyId: null };
+  const authorization = request.headers.get('authorization');
+  if (options.key !== undefined && authorization !== null) {
+    return whoHolds(authorization, options.key, addressOf(request.headers));
+  }
+  const person = await currentPerson();
+  if (person === null) {
+    const how =
+      options.key === undefined ? '' : ', or send an API key as “Authorization: Bearer …”';
+    throw new Failure('sign-in-needed', `You are not signed in. Sign in first${how}.`);
+  }
+  demandSameOrigin(request);
+  return { person, keyId: null };
+}
+
+async function whoHolds(authorization: string, scope: KeyScope, address: string): Promise<Asking> {
+  const [scheme, sent, ...rest] = authorization.trim().split(/\s+/);
+  const holder =
+    scheme?.toLowerCase() === 'bearer' && sent !== undefined && rest.length === 0
+      ? await holderOfKey(sent)
+      : null;
+  if (holder === null) {
+    await countAgainst(LIMITS.badKey, address);
+    throw new Failure(
+      'bad-key',
+      'This key is not known here, has expired or was revoked; expected “Bearer” and a key made in the settings.',
+    );
+  }
+  if (!keyAllows(holder.scopes, scope)) {
+    throw new Failure('forbidden', `This key may not be used to ${scope}.`);
+  }
+  return { person: holder.person, keyId: holder.keyId };
+}
+
+/** Query parameters as an object; one that is given twice is a list, which no schema here takes. */
+function queryOf(request: Request): Record<string, string | string[]> {
+  const parameters = new URL(request.url).searchParams;
+  const query: Record<string, string | string[]> = {};
+  for (const name of new Set(parameters.keys())) {
+    const values = parameters.getAll(name);
+    query[name] = values.length === 1 ? (values[0] ?? '') : values;
+  }
+  return query;
+}

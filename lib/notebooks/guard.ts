@@ -1,0 +1,47 @@
+import type { Knex } from 'knex';
+import { database, type Database } from '@/db/client';
+import { findNotebookRole } from '@/db/queries/notebook-roles';
+import { findNotebook, lockHead, type Notebook } from '@/db/queries/notebooks';
+import { demand, standingOf, type Action, type Actor, type Role } from '@/lib/access';
+import { isId, type Person } from '@/lib/accounts';
+
+export interface Opened {
+  notebook: Notebook;
+  role: Role;
+}
+
+/**
+ * The notebook, for a person who may do this to it.
+ * @throws Failure `not-found` for an unknown notebook and for one the person has no role on, alike;
+ *   `forbidden` for somebody who may read it and no more
+ */
+export async function openFor(
+  person: Person,
+  action: Action,
+  id: string,
+  db: Database = database(),
+): Promise<Opened> {
+  const actor: Actor = { kind: 'person', id: person.id };
+  const notebook = isId(id) ? await findNotebook(db, id) : null;
+  const role = notebook === null ? null : await findNotebookRole(db, id, person.id);
+  const guarded = { id, roles: new Map(role === null ? [] : [[person.id, role]]) };
+  demand(actor, action, notebook === null ? null : guarded);
+  if (notebook === null || role === null) {
+    throw new Error(`Access let ${standingOf(actor, guarded)} through to a notebook.`);
+  }
+  return { notebook, role };
+}
+
+/**
+ * The same inside a transaction that is going to change the notebook: its row is held first, so
+ * that changes to one notebook happen one after another and rights are those of that moment.
+ */
+export async function holdFor(
+  trx: Knex.Transaction,
+  person: Person,
+  action: Action,
+  id: string,
+): Promise<Opened> {
+  if (isId(id)) await lockHead(trx, id);
+  return openFor(person, action, id, trx);
+}

@@ -1,0 +1,27 @@
+export {
+  LinkRequest,
+  createLink,
+  listLinks,
+  readByToken,
+  readByTokenForExport,
+  revokeLink,
+} from './links';
+export {
+  NewNotebook,
+  NotebookChange,
+  changeNotebook,
+  createNotebook,
+  listNotebooks,
+  readNotebook,
+} from './notebooks';
+export { NewPerson, RoleChange, addPerson, changeRole, listPeople, removePerson } from './people';
+export {
+  RestoreRequest,
+  SaveRequest,
+  listVersions,
+  readForExport,
+  readVersion,
+  restoreVersion,
+  saveVersion,
+} from './versions';
+export type * from './types';
