@@ -1,0 +1,13 @@
+/** Sizes beyond which a source is refused with `limit-size` before any arithmetic starts. */
+export const LANGUAGE_LIMITS = {
+  /** Characters in one line. */
+  lineLength: 20_000,
+  /** Brackets, roots, exponents and signs inside one another. */
+  nesting: 200,
+  /** Lines that are not blank, in all cells together. */
+  lines: 5_000,
+  /** Factors of √ in a root exponent such as 1/8. */
+  rootIndex: 64,
+} as const;
+
+export type LanguageLimits = { readonly [name in keyof typeof LANGUAGE_LIMITS]: number };

@@ -1,0 +1,10 @@
+import { classOfWord } from '../names';
+import { ConstantName, FunctionName, UnitName } from './cell.parser.terms';
+
+const TERMS = { function: FunctionName, unit: UnitName, constant: ConstantName };
+
+/** Called by the parser for each name: the token that a kept word becomes, or -1 for a name that may be a mark. */
+export function specializeName(name: string): number {
+  const wordClass = classOfWord(name);
+  return wordClass === null ? -1 : TERMS[wordClass];
+}

@@ -1,0 +1,192 @@
+import type { Engine, Num } from '../engine/index';
+import { fail } from './failure';
+
+/**
+ * A finite sum of c·π^k with algebraic coefficients c and whole exponents k, negative ones included.
+ * Since π is transcendental (Lindemann 1882) the powers of π are independent over the algebraic numbers: two sums are
+ * equal exactly when all their coefficients are, and a sum is algebraic exactly when only k = 0 occurs. Zero
+ * coefficients are never kept, so the empty map is 0. Immutable.
+ */
+export type PiSum = ReadonlyMap<number, Num>;
+
+const LARGEST_EXPONENT = 1000;
+
+export function fromNum(engine: Engine, value: Num): PiSum {
+  return engine.isZero(value) ? new Map() : new Map([[0, value]]);
+}
+
+export function pi(engine: Engine): PiSum {
+  return new Map([[1, engine.integer(1n)]]);
+}
+
+/** The value as an algebraic number, or null when a power of π is in it. */
+export function asAlgebraic(engine: Engine, value: PiSum): Num | null {
+  if (value.size === 0) return engine.integer(0n);
+  return value.size === 1 ? (value.get(0) ?? null) : null;
+}
+
+export function addSums(engine: Engine, a: PiSum, b: PiSum): PiSum {
+  const sum = new Map(a);
+  for (const [exponent, coefficient] of b) {
+    const before = sum.get(exponent);
+    store(engine, sum, exponent, before === undefined ? coefficient : engine.add(before, coefficient));
+  }
+  return sum;
+}
+
+export function mapSum(engine: Engine, a: PiSum, change: (coefficient: Num) => Num): PiSum {
+  const changed = new Map<number, Num>();
+  for (const [exponent, coefficient] of a) store(engine, changed, exponent, change(coefficient));
+  return changed;
+}
+
+export function negateSum(engine: Engine, a: PiSum): PiSum {
+  return mapSum(engine, a, (coefficient) => engine.neg(coefficient));
+}
+
+export function multiplySums(engine: Engine, a: PiSum, b: PiSum): PiSum {
+  const product = new Map<number, Num>();
+  for (const [i, x] of a) {
+    for (const [j, y] of b) {
+      checkExponent(i + j);
+      const term = engine.mul(x, y);
+      const before = product.get(i + j);
+      store(engine, product, i + j, before === undefined ? term : engine.add(before, term));
+    }
+  }
+  return product;
+}
+
+/** Division by a sum of several powers of π has no value of this form: `not-exact`. */
+export function divideSums(engine: Engine, a: PiSum, b: PiSum): PiSum {
+  if (b.size === 0) fail('division-by-zero', 'The divisor is exactly 0; a value other than 0 was expected.');
+  const [divisor] = b;
+  if (b.size > 1 || divisor === undefined) {
+    fail('not-exact', 'The divisor is a sum with different powers of π; only division by a single multiple of a power of π is exact here.');
+  }
+  const [exponent, coefficient] = divisor;
+  const quotient = new Map<number, Num>();
+  for (const [i, x] of a) {
+    checkExponent(i - exponent);
+    store(engine, quotient, i - exponent, engine.div(x, coefficient));
+  }
+  return quotient;
+}
+
+/** √ of c·π^(2k), the principal root; of other sums with π in them there is no value of this form. */
+export function sqrtSum(engine: Engine, a: PiSum): PiSum {
+  if (a.size === 0) return a;
+  const [term] = a;
+  if (a.size > 1 || term === undefined || term[0] % 2 !== 0) {
+    fail('not-exact', 'The square root of this value with π in it is not a multiple of a whole power of π, so it has no exact form here.');
+  }
+  return new Map([[term[0] / 2, engine.sqrt(term[1])]]);
+}
+
+export function powSum(engine: Engine, a: PiSum, exponent: bigint): PiSum {
+  const algebraic = asAlgebraic(engine, a);
+  if (algebraic !== null) return fromNum(engine, engine.pow(algebraic, exponent));
+  if (exponent < 0n) return divideSums(engine, new Map([[0, engine.integer(1n)]]), powSum(engine, a, -exponent));
+  if (exponent > BigInt(LARGEST_EXPONENT)) checkExponent(LARGEST_EXPONENT + 1);
+  const [term] = a;
+  if (a.size === 1 && term !== undefined) {
+    checkExponent(term[0] * Number(exponent));
+    return new Map([[term[0] * Number(exponent), engine.pow(term[1], exponent)]]);
+  }
+  let result: PiSum = new Map([[0, engine.integer(1n)]]);
+  let square = a;
+  for (let left = exponent; left > 0n; left >>= 1n) {
+    if (left & 1n) result = multiplySums(engine, result, square);
+    if (left > 1n) square = multiplySums(engine, square, square);
+  }
+  return result;
+}
+
+function store(engine: Engine, sum: Map<number, Num>, exponent: number, coefficient: Num): void {
+  if (engine.isZero(coefficient)) sum.delete(exponent);
+  else sum.set(exponent, coefficient);
+}
+
+function checkExponent(exponent: number): void {
+  if (Math.abs(exponent) > LARGEST_EXPONENT) {
+    fail('limit-size', `The exponent of π would be ${Math.abs(exponent)} or more; the limit is ${LARGEST_EXPONENT}.`);
+  }
+}
+
+/** Two algebraic numbers around a real sum, closer to each other the more bits are asked for. */
+export interface Enclosure {
+  readonly low: Num;
+  readonly high: Num;
+}
+
+/**
+ * Encloses a real sum between algebraic numbers by putting rational bounds in place of π, term by term.
+ * Accepts real coefficients only. The width goes to 0 as `bits` grows.
+ */
+export function enclose(engine: Engine, sum: PiSum, bits: number): Enclosure {
+  const { low: lowPi, high: highPi, denominator } = boundsOfPi(bits);
+  let low = engine.integer(0n);
+  let high = low;
+  for (const [exponent, coefficient] of sum) {
+    const power = (numerator: bigint): Num => engine.pow(engine.rational(numerator, denominator), BigInt(exponent));
+    const [smaller, larger] = exponent < 0 ? [power(highPi), power(lowPi)] : [power(lowPi), power(highPi)];
+    const positive = engine.sign(coefficient) >= 0;
+    low = engine.add(low, engine.mul(coefficient, positive ? smaller : larger));
+    high = engine.add(high, engine.mul(coefficient, positive ? larger : smaller));
+  }
+  return { low, high };
+}
+
+const MOST_BITS = 1 << 17;
+
+/**
+ * Asks a question of ever narrower enclosures until it is answered. The questions put here (a sign, rounded digits,
+ * a whole part) always have an answer, as the value is transcendental: it is never 0 and never a tie.
+ */
+export function decideByEnclosures<T>(engine: Engine, sum: PiSum, startBits: number, ask: (enclosure: Enclosure) => T | null): T {
+  for (let bits = startBits; bits <= MOST_BITS; bits *= 2) {
+    const answer = ask(enclose(engine, sum, bits));
+    if (answer !== null) return answer;
+  }
+  return fail('limit-digits', `π would be needed to more than ${MOST_BITS} binary digits, which is the limit.`);
+}
+
+/** Exact sign of a real sum. */
+export function signOfSum(engine: Engine, sum: PiSum): -1 | 0 | 1 {
+  const algebraic = asAlgebraic(engine, sum);
+  if (algebraic !== null) return engine.sign(algebraic);
+  return decideByEnclosures(engine, sum, 64, ({ low, high }) => {
+    const sign = engine.sign(low);
+    return sign === engine.sign(high) && sign !== 0 ? sign : null;
+  });
+}
+
+const cachedBounds = new Map<number, { low: bigint; high: bigint; denominator: bigint }>();
+
+/**
+ * π between low/2^bits and high/2^bits with high - low = 2, by Machin's formula π = 16 arctan(1/5) - 4 arctan(1/239)
+ * (1706) in integers with guard bits. Each truncated division errs by less than one unit and the series alternates, so
+ * the guard bits cover the whole error.
+ */
+export function boundsOfPi(bits: number): { low: bigint; high: bigint; denominator: bigint } {
+  const known = cachedBounds.get(bits);
+  if (known !== undefined) return known;
+  const guard = BigInt(16 + Math.ceil(Math.log2(bits + 2)));
+  const one = 1n << (BigInt(bits) + guard);
+  const scaled = 16n * arctanOfInverse(5n, one) - 4n * arctanOfInverse(239n, one);
+  const middle = scaled >> guard;
+  const bounds = { low: middle - 1n, high: middle + 1n, denominator: 1n << BigInt(bits) };
+  if (cachedBounds.size > 16) cachedBounds.clear();
+  cachedBounds.set(bits, bounds);
+  return bounds;
+}
+
+function arctanOfInverse(x: bigint, one: bigint): bigint {
+  let power = one / x;
+  let sum = power;
+  for (let k = 3n, sign = -1n; power !== 0n; k += 2n, sign = -sign) {
+    power /= x * x;
+    sum += (sign * power) / k;
+  }
+  return sum;
+}
