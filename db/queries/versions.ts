@@ -82,6 +82,8 @@ export interface NewVersion {
   content: unknown;
   note?: string | null;
   restoredFrom?: number | null;
+  /** Now when left out. */
+  savedAt?: Date;
 }
 
 /**
@@ -90,7 +92,7 @@ export interface NewVersion {
  * @throws what `isDuplicate` recognises when the number is taken after all
  */
 export async function insertVersion(trx: Knex.Transaction, version: NewVersion): Promise<Date> {
-  const savedAt = new Date();
+  const savedAt = version.savedAt ?? new Date();
   const content = JSON.stringify(version.content);
   await trx('versions').insert({
     notebook_id: version.notebookId,
