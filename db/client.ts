@@ -23,6 +23,16 @@ export async function closeDatabase(): Promise<void> {
   await open?.destroy();
 }
 
+/** Whether the database answers at all, within a second. */
+export async function answersQueries(): Promise<boolean> {
+  try {
+    await database().raw('select 1').timeout(1000, { cancel: false });
+    return true;
+  } catch {
+    return false;
+  }
+}
+
 const DEADLOCK = 1213;
 const ATTEMPTS = 4;
 

@@ -1,15 +1,10 @@
-import { randomUUID } from 'node:crypto';
 import type { z } from 'zod';
 import { Failure, keyAllows, type KeyScope } from '@/lib/access';
 import { LIMITS, addressOf, countAgainst, holderOfKey, type Person } from '@/lib/accounts';
 import { currentPerson } from '@/lib/accounts/session';
-import { finish } from './answer';
 import { SMALL_BODY, check, readJson } from './body';
-import { logFault } from './faults';
+import { answered } from './guarded';
 import { demandSameOrigin } from './origin';
-import { faultResponse, problemResponse } from './problem';
-
-type Params = Record<string, string>;
 
 /** What a route needs of a request before its handler runs; whatever is left out is not read. */
 export interface RouteOptions<B extends z.ZodType, Q extends z.ZodType> {
@@ -30,7 +25,8 @@ export interface Call<Who, B, Q> {
   /** The id of the API key the request came with, if it came with one. */
   keyId: string | null;
   address: string;
-  params: Params;
+  /** A part of the path by its name in the route's folder, such as `id` for `[id]`. */
+  part: (name: string) => string;
   body: B;
   query: Q;
 }
@@ -43,8 +39,7 @@ type Handler<Who, B, Q> = (call: Call<Who, B, Q>) => Promise<Response | object>;
 
 /**
  * Makes a route handler: finds out who asks, refuses writes from other sites, reads and checks query
- * and body, runs the handler, and turns failures into problem documents. Whatever else is thrown is
- * logged under the request's number and answered without a word of its cause.
+ * and body, runs the handler, and turns failures into problem documents and faults into silence.
  */
 export function route<B extends z.ZodType = z.ZodUndefined, Q extends z.ZodType = z.ZodUndefined>(
   options: RouteOptions<B, Q> & { person: 'required' },
@@ -58,28 +53,30 @@ export function route<B extends z.ZodType, Q extends z.ZodType>(
   options: RouteOptions<B, Q>,
   handler: Handler<never, z.output<B>, z.output<Q>>,
 ): (request: Request, context: Context) => Promise<Response> {
-  return async (request, context) => {
-    const requestId = randomUUID();
-    try {
+  return (request, context) =>
+    answered(request, async () => {
       const { person, keyId } = await whoAsks(request, options);
+      const limit = options.bodyLimit ?? SMALL_BODY;
       const call = {
         request,
         person: person as never,
         keyId,
         address: addressOf(request.headers),
-        params: (await context.params) as Params,
+        part: partsOf(await context.params),
         query: options.query && check(options.query, queryOf(request)),
-        body:
-          options.body &&
-          check(options.body, await readJson(request, options.bodyLimit ?? SMALL_BODY)),
+        body: options.body && check(options.body, await readJson(request, limit)),
       };
       const answer = await handler(call as Call<never, z.output<B>, z.output<Q>>);
-      return finish(answer instanceof Response ? answer : Response.json(answer), requestId);
-    } catch (error) {
-      if (error instanceof Failure) return finish(problemResponse(error, requestId), requestId);
-      logFault(error, request, requestId);
-      return finish(faultResponse(requestId), requestId);
-    }
+      return answer instanceof Response ? answer : Response.json(answer);
+    });
+}
+
+function partsOf(params: object): (name: string) => string {
+  const parts = new Map(Object.entries(params));
+  return (name) => {
+    const part: unknown = parts.get(name);
+    if (typeof part !== 'string') throw new TypeError(`The route's path has no part “${name}”.`);
+    return part;
   };
 }
 

@@ -1,0 +1,89 @@
+import { randomBytes } from 'node:crypto';
+import { NextResponse, type NextRequest } from 'next/server';
+import { getToken } from 'next-auth/jwt';
+import { env } from '@/lib/env';
+
+/** Pages that make sense only with a person; the services behind them ask again and decide. */
+const NEEDS_PERSON = /^\/(notebooks|settings)(\/|$)/;
+
+/**
+ * Runs before every page: sends signed-out people to sign in, and puts the security headers on.
+ * A convenience and a second fence; no right is decided here.
+ */
+export async function proxy(request: NextRequest): Promise<NextResponse> {
+  const { pathname, search } = request.nextUrl;
+  if (NEEDS_PERSON.test(pathname) && !(await hasSession(request))) {
+    const next = encodeURIComponent(pathname + search);
+    // A relative address, so that the person stays on the host the browser knows.
+    return withHeaders(
+      new NextResponse(null, { status: 307, headers: { location: `/sign-in?next=${next}` } }),
+    );
+  }
+  const nonce = randomBytes(16).toString('base64');
+  const policy = contentPolicy(nonce);
+  // Next reads the nonce from the request's policy and puts it on every script it writes.
+  const headers = new Headers(request.headers);
+  headers.set('x-nonce', nonce);
+  headers.set('content-security-policy', policy);
+  const response = withHeaders(NextResponse.next({ request: { headers } }));
+  response.headers.set('content-security-policy', policy);
+  if (pathname.startsWith('/client/')) response.headers.set('x-robots-tag', 'noindex, nofollow');
+  return response;
+}
+
+export const config = {
+  // Not for the API, which sets headers of its own, nor for files that a build names by their hash.
+  matcher: ['/((?!api/|_next/static/|_next/image).*)'],
+};
+
+async function hasSession(request: NextRequest): Promise<boolean> {
+  const cookies = Object.fromEntries(
+    request.cookies.getAll().map(({ name, value }) => [name, value]),
+  );
+  const token = await getToken({
+    req: { cookies, headers: {} } as Parameters<typeof getToken>[0]['req'],
+    secret: env().NEXTAUTH_SECRET,
+    secureCookie: env().NEXTAUTH_URL.startsWith('https:'),
+  });
+  return token !== null;
+}
+
+/**
+ * Scripts run only with the nonce of this answer. Style elements need it too; style attributes are
+ * let through, because typeset formulas place their parts with them.
+ */
+function contentPolicy(nonce: string): string {
+  const development = env().NODE_ENV === 'development';
+  const secure = env().NEXTAUTH_URL.startsWith('https:');
+  return [
+    "default-src 'none'",
+    // React's development build rebuilds server stacks with eval; the production build has none.
+    `script-src 'self' 'nonce-${nonce}' 'strict-dynamic'${development ? " 'unsafe-eval'" : ''}`,
+    `style-src 'self' 'nonce-${nonce}'`,
+    "style-src-attr 'unsafe-inline'",
+    "img-src 'self' data:",
+    "font-src 'self'",
+    `connect-src 'self'${development ? ' ws:' : ''}`,
+    "manifest-src 'self'",
+    "object-src 'none'",
+    "base-uri 'none'",
+    "form-action 'self'",
+    "frame-ancestors 'none'",
+    ...(secure ? ['upgrade-insecure-requests'] : []),
+  ].join('; ');
+}
+
+function withHeaders(response: NextResponse): NextResponse {
+  const { headers } = response;
+  headers.set('cross-origin-opener-policy', 'same-origin');
+  headers.set('cross-origin-resource-policy', 'same-origin');
+  headers.set('permissions-policy', 'camera=(), geolocation=(), microphone=(), payment=(), usb=()');
+  // Client links are secrets in an address: it goes to no other site.
+  headers.set('referrer-policy', 'same-origin');
+  headers.set('x-content-type-options', 'nosniff');
+  headers.set('x-frame-options', 'DENY');
+  if (env().NEXTAUTH_URL.startsWith('https:')) {
+    headers.set('strict-transport-security', 'max-age=31536000');
+  }
+  return response;
+}
