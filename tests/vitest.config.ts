@@ -45,7 +45,7 @@ export default defineConfig({
           name: 'database',
           include: inFolders(onDatabase),
           setupFiles: ['tests/setup/seed.ts'],
-          globalSetup: ['tests/setup/database.ts'],
+          globalSetup: ['tests/setup/database.mjs'],
           fileParallelism: false,
           testTimeout: 30_000,
           hookTimeout: 30_000,

@@ -13,6 +13,7 @@ import {
 } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { dirname, join } from 'node:path';
+import { fileURLToPath } from 'node:url';
 import { findProgram, isAlive, run, say, SetupError, waitUntil } from './run-command.mjs';
 import { findFreePort, portIsFree, readState, remember, secret } from './state.mjs';
 
@@ -113,6 +114,7 @@ export class PrivateServer {
       `--datadir=${half}`,
       '--auth-root-authentication-method=normal',
       '--skip-test-db',
+      `--extra-file=${fileURLToPath(new URL('./initial-accounts.sql', import.meta.url))}`,
       INNODB_LOG,
     ]);
     renameSync(half, data);
