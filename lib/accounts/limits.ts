@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { database } from '@/db/client';
-import { clearHits, countHit, pruneHits, takeHitBack } from '@/db/queries/rate-limits';
+import { clearHits, countHit, findHits, pruneHits, takeHitBack } from '@/db/queries/rate-limits';
 import { Failure } from '@/lib/access';
 
 /** How often something may happen: `hits` in each window of `seconds`. */
@@ -12,10 +12,7 @@ export interface Limit {
   what: string;
 }
 
-/**
- * All limits, kept in MariaDB so that instances share them. Windows are fixed, so at the seam of
- * two windows up to twice the number may pass; the numbers are chosen with that in mind.
- */
+/** All limits, kept in MariaDB so that instances share them. */
 export const LIMITS = {
   signInAddress: { name: 'sign-in-address', hits: 60, seconds: 900, what: 'attempts to sign in' },
   signInEmail: { name: 'sign-in-email', hits: 10, seconds: 900, what: 'attempts to sign in' },
@@ -38,27 +35,45 @@ const KEEP_MS = 24 * 3600 * 1000;
 
 /**
  * Counts one hit of `subject` (an address, an e-mail, a person's id) against a limit. Counting comes
- * before the work it guards, so that many requests at once cannot all pass the check.
+ * before the work it guards, so that many requests at once cannot all pass the check. Of the window
+ * before, the share counts that still lies within one window's length, so that no seam between two
+ * windows lets twice the number through.
  * @throws Failure `too-many`, with the seconds to wait
  */
 export async function countAgainst(limit: Limit, subject: string): Promise<Hit> {
   const db = database();
   const span = limit.seconds * 1000;
-  const now = Date.now();
-  const windowStart = new Date(Math.floor(now / span) * span);
+  const elapsed = Date.now() % span;
+  const windowStart = new Date(Date.now() - elapsed);
   const hit = { bucket: bucketOf(limit, subject), windowStart };
   const hits = await countHit(db, hit.bucket, windowStart);
-  if (hits === 1) await pruneHits(db, new Date(now - KEEP_MS));
-  if (hits > limit.hits) {
-    const retryAfter = Math.ceil((windowStart.getTime() + span - now) / 1000);
-    throw new Failure(
-      'too-many',
-      `Too many ${limit.what}: ${limit.hits} are allowed in ${inWords(limit.seconds)}. ` +
-        `Try again in ${retryAfter === 1 ? '1 second' : inWords(retryAfter)}.`,
-      { retryAfter },
-    );
+  if (hits === 1) await pruneHits(db, new Date(windowStart.getTime() - KEEP_MS));
+  const before = await findHits(db, hit.bucket, new Date(windowStart.getTime() - span));
+  if (hits + Math.ceil(before * (1 - elapsed / span)) > limit.hits) {
+    throw tooMany(limit, secondsToWait(limit, hits, before, elapsed));
   }
   return hit;
+}
+
+/** How long until the next hit passes, if nothing else happens meanwhile. */
+function secondsToWait(limit: Limit, hits: number, before: number, elapsed: number): number {
+  const span = limit.seconds * 1000;
+  /** The moment in a window at which this many hits of the window before leave room for `free`. */
+  const fadedTo = (free: number, earlier: number) => span * Math.max(0, 1 - free / earlier);
+  const wait =
+    hits < limit.hits
+      ? fadedTo(limit.hits - hits - 1, before) - elapsed
+      : span - elapsed + fadedTo(limit.hits - 1, hits);
+  return Math.max(1, Math.ceil(wait / 1000));
+}
+
+function tooMany(limit: Limit, retryAfter: number): Failure {
+  return new Failure(
+    'too-many',
+    `Too many ${limit.what}: ${limit.hits} are allowed in ${inWords(limit.seconds)}. ` +
+      `Try again in ${inWords(retryAfter)}.`,
+    { retryAfter },
+  );
 }
 
 export async function takeBack(hit: Hit): Promise<void> {
@@ -75,6 +90,6 @@ function bucketOf(limit: Limit, subject: string): string {
 }
 
 function inWords(seconds: number): string {
-  if (seconds < 120) return `${seconds} seconds`;
+  if (seconds < 120) return seconds === 1 ? '1 second' : `${seconds} seconds`;
   return `${Math.ceil(seconds / 60)} minutes`;
 }

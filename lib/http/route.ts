@@ -32,7 +32,8 @@ export interface Call<Who, B, Q> {
 }
 
 interface Context {
-  params: Promise<object>;
+  /** Undefined for a route without parts in its path. */
+  params: Promise<object | undefined>;
 }
 
 type Handler<Who, B, Q> = (call: Call<Who, B, Q>) => Promise<Response | object>;
@@ -62,7 +63,7 @@ export function route<B extends z.ZodType, Q extends z.ZodType>(
         person: person as never,
         keyId,
         address: addressOf(request.headers),
-        part: partsOf(await context.params),
+        part: partsOf((await context.params) ?? {}),
         query: options.query && check(options.query, queryOf(request)),
         body: options.body && check(options.body, await readJson(request, limit)),
       };
