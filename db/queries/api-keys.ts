@@ -75,9 +75,9 @@ export async function listApiKeys(db: Database, userId: string): Promise<ApiKey[
 export async function findLiveApiKey(db: Database, keyHash: string): Promise<ApiKey | null> {
   const row = (await db('api_keys')
     .where({ key_hash: keyHash, revoked_at: null })
-    .where((expiry) =>
-      expiry.whereNull('expires_at').orWhere('expires_at', '>', db.raw('current_timestamp(3)')),
-    )
+    .where((expiry) => {
+      void expiry.whereNull('expires_at').orWhere('expires_at', '>', db.fn.now(3));
+    })
     .first()) as ApiKeyRow | undefined;
   return row === undefined ? null : toApiKey(row);
 }

@@ -55,9 +55,9 @@ const ofNotebook = (db: Database, notebookId: string) =>
 
 /** All versions of a notebook, newest first. */
 export async function listVersions(db: Database, notebookId: string): Promise<VersionEntry[]> {
-  const rows = (await ofNotebook(db, notebookId)
+  const rows = await ofNotebook(db, notebookId)
     .orderBy('versions.number', 'desc')
-    .select(entryColumns)) as EntryRow[];
+    .select<EntryRow[]>(entryColumns);
   return rows.map(toEntry);
 }
 
@@ -66,10 +66,9 @@ export async function findVersion(
   notebookId: string,
   number: number,
 ): Promise<Version | null> {
-  const row = (await ofNotebook(db, notebookId)
+  const row = await ofNotebook(db, notebookId)
     .where('versions.number', number)
-    .first([...entryColumns, 'versions.content', 'versions.content_hash'])) as
-    VersionRow | undefined;
+    .first<VersionRow | undefined>([...entryColumns, 'versions.content', 'versions.content_hash']);
   if (row === undefined) return null;
   const content = JSON.parse(row.content) as unknown;
   return { ...toEntry(row), content, contentHash: row.content_hash };

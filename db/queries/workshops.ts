@@ -73,15 +73,15 @@ export async function listWorkshopsOf(
   db: Database,
   userId: string,
 ): Promise<(Workshop & { role: WorkshopRole })[]> {
-  const rows = (await db('memberships')
+  const rows = await db('memberships')
     .join('workshops', 'workshops.id', 'memberships.workshop_id')
     .where('memberships.user_id', userId)
     .orderBy(['memberships.created_at', 'workshops.id'])
-    .select(
+    .select<(WorkshopRow & { role: WorkshopRole })[]>(
       'workshops.id',
       'workshops.name',
       'workshops.defaults',
       'memberships.role',
-    )) as (WorkshopRow & { role: WorkshopRole })[];
+    );
   return rows.map((row) => ({ ...toWorkshop(row), role: row.role }));
 }
