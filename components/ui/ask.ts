@@ -46,6 +46,9 @@ export async function ask<T>(path: string, { method, body, signal }: Asking = {}
   );
 }
 
+/** The fetcher of SWR: what stands at an address. */
+export const askFor = <T>(path: string): Promise<T> => ask<T>(path);
+
 function sentenceOf(document: Record<string, unknown> | null): string | null {
   if (typeof document?.detail === 'string') return document.detail;
   return typeof document?.title === 'string' ? document.title : null;

@@ -1,0 +1,94 @@
+import Link from 'next/link';
+import type { NotebookLine } from '@/lib/notebooks/types';
+import { Moment } from '@/components/ui/moment';
+import { NotebookTools } from './notebook-tools';
+
+interface NotebookTableProps {
+  notebooks: readonly NotebookLine[];
+  archived: boolean;
+}
+
+const CELL = 'px-3 py-2.5 align-top max-md:block max-md:py-0.5';
+const HEAD = 'px-3 py-2 text-left text-small font-semibold';
+
+/** Every notebook the person may read, last changed first; on a narrow screen each row is a card. */
+export function NotebookTable({ notebooks, archived }: NotebookTableProps) {
+  if (notebooks.length === 0) {
+    return (
+      <div className="border border-rule bg-sheet p-1.5">
+        <div className="border-2 border-ink px-6 py-14 text-center">
+          <p className="font-serif text-head font-semibold">
+            {archived ? 'Nothing is archived.' : 'No notebook yet.'}
+          </p>
+          <p className="mx-auto mt-2 max-w-prose text-soft">
+            {archived
+              ? 'A notebook that is done with can be archived: it can still be read, but not changed.'
+              : 'A notebook holds the figures of one piece of work: what was given, what follows from it, and what is cut. Begin one, or ask a colleague to add you to theirs.'}
+          </p>
+        </div>
+      </div>
+    );
+  }
+  return (
+    <div className="border border-rule bg-sheet">
+      <table className="w-full border-collapse max-md:block">
+        <caption className="sr-only">Notebooks you may read</caption>
+        <thead className="border-b-2 border-ink max-md:sr-only">
+          <tr>
+            <th scope="col" className={HEAD}>
+              Title
+            </th>
+            <th scope="col" className={HEAD}>
+              Workshop
+            </th>
+            <th scope="col" className={HEAD}>
+              My role
+            </th>
+            <th scope="col" className={`${HEAD} text-right`}>
+              Version
+            </th>
+            <th scope="col" className={HEAD}>
+              Changed
+            </th>
+            <td />
+          </tr>
+        </thead>
+        <tbody className="max-md:block">
+          {notebooks.map((notebook) => (
+            <tr
+              key={notebook.id}
+              className="border-b border-hairline last:border-b-0 hover:bg-hand max-md:block max-md:py-2.5"
+            >
+              <th scope="row" className={`${CELL} text-left font-normal`}>
+                <Link
+                  href={`/notebooks/${notebook.id}`}
+                  className="font-serif text-note font-semibold text-snapline underline-offset-4 hover:underline [overflow-wrap:anywhere]"
+                >
+                  {notebook.title}
+                </Link>
+              </th>
+              <td className={`${CELL} [overflow-wrap:anywhere]`}>{notebook.workshop.name}</td>
+              <td className={CELL}>{notebook.role}</td>
+              <td className={`${CELL} font-mono tabular-nums md:text-right`}>
+                <span className="font-sans md:hidden">version </span>
+                {notebook.version}
+              </td>
+              <td className={CELL}>
+                <Moment at={notebook.changedAt} />
+                {notebook.changedBy && (
+                  <span className="block text-small text-soft max-md:inline">
+                    {' '}
+                    by {notebook.changedBy}
+                  </span>
+                )}
+              </td>
+              <td className={`${CELL} md:text-right`}>
+                <NotebookTools notebook={notebook} />
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}

@@ -1,0 +1,75 @@
+'use client';
+
+import { useState } from 'react';
+import { Disclosure, DISCLOSURE_ROW } from '@/components/ui/disclosure';
+import type { Result } from './result';
+
+/** The forms in which a value leaves the sheet. */
+export function copyForms(result: Result): { label: string; text: string }[] {
+  switch (result.kind) {
+    case 'number': {
+      const { re, im } = result.decimal;
+      const decimal = im === null ? re : `${re} ${im.startsWith('-') ? '-' : '+'} ${im.replace(/^-/, '')} i`;
+      const forms = [
+        { label: 'Exact text', text: result.exact.text },
+        { label: 'TeX', text: result.exact.tex },
+        { label: 'Decimal', text: decimal },
+      ];
+      return result.cut ? [...forms, { label: 'Cut size', text: result.cut.value }] : forms;
+    }
+    case 'angle':
+      return [
+        { label: 'Exact text', text: result.exact.text },
+        { label: 'TeX', text: result.exact.tex },
+        { label: 'Degrees', text: result.decimal.re },
+      ];
+    default:
+      return [];
+  }
+}
+
+/** Copies a value as exact text, TeX or decimal. */
+export function CopyMenu({ result }: { result: Result }) {
+  const [said, setSaid] = useState('');
+  const forms = copyForms(result);
+  if (forms.length === 0) return null;
+  const name = result.mark ?? result.source.trim();
+
+  const copy = (label: string, text: string) =>
+    navigator.clipboard.writeText(text).then(
+      () => setSaid(`${label} copied`),
+      () => setSaid('The browser refused to copy'),
+    );
+
+  return (
+    <div className="flex items-center gap-2 text-small">
+      <Disclosure
+        label="Copy"
+        name={`Copy the value of ${name}`}
+        className="min-h-7 px-1 text-snapline underline-offset-4 hover:underline"
+      >
+        {(close) =>
+          forms.map(({ label, text }) => (
+            <button
+              key={label}
+              type="button"
+              className={DISCLOSURE_ROW}
+              onClick={() => {
+                void copy(label, text);
+                close();
+              }}
+            >
+              <span>{label}</span>
+              <span className="max-w-32 truncate font-mono text-soft" aria-hidden="true">
+                {text}
+              </span>
+            </button>
+          ))
+        }
+      </Disclosure>
+      <span role="status" className="text-soft">
+        {said}
+      </span>
+    </div>
+  );
+}

@@ -1,0 +1,173 @@
+import { standardKeymap } from '@codemirror/commands';
+import {
+  bracketMatching,
+  HighlightStyle,
+  Language,
+  LRLanguage,
+  syntaxHighlighting,
+} from '@codemirror/language';
+import { setDiagnostics, type Diagnostic } from '@codemirror/lint';
+import { Annotation, EditorState, Prec } from '@codemirror/state';
+import { EditorView, keymap, placeholder } from '@codemirror/view';
+import { tags } from '@lezer/highlight';
+import { parser } from '@/lib/language/parser/cell.parser';
+
+export interface EditorOptions {
+  parent: HTMLElement;
+  source: string;
+  kind: 'dimension' | 'note';
+  label: string;
+  nonce: string | undefined;
+  onWrite: (source: string) => void;
+  /** Escape, or an arrow beyond the first or last line. */
+  onLeave: (to: 'here' | 'before' | 'after') => boolean;
+}
+
+export interface PlacedFault {
+  line: number;
+  from: number;
+  to: number;
+  message: string;
+  severity: 'error' | 'warning';
+}
+
+export interface EditorHandle {
+  setSource: (source: string) => void;
+  setFaults: (faults: readonly PlacedFault[]) => void;
+  focus: () => void;
+  destroy: () => void;
+}
+
+const cellLanguage: Language = LRLanguage.define({ name: 'cell', parser });
+
+const highlighting = HighlightStyle.define([
+  { tag: tags.definition(tags.variableName), color: 'var(--ruddle)', fontWeight: '500' },
+  { tag: tags.function(tags.variableName), color: 'var(--snapline)' },
+  { tag: tags.constant(tags.variableName), color: 'var(--snapline)' },
+  { tag: tags.unit, color: 'var(--lichen)' },
+  { tag: tags.lineComment, color: 'var(--soft)', fontStyle: 'italic' },
+]);
+
+const theme = EditorView.theme({
+  '&': { color: 'var(--ink)', backgroundColor: 'transparent', fontSize: '0.9375rem' },
+  '&.cm-focused': { outline: 'none' },
+  '.cm-content': {
+    fontFamily: 'var(--font-mono), monospace',
+    lineHeight: '1.5rem',
+    padding: '0',
+    caretColor: 'var(--ruddle)',
+  },
+  '.cm-line': { padding: '0' },
+  '.cm-scroller': { fontFamily: 'inherit', lineHeight: '1.5rem' },
+  '.cm-cursor': { borderLeftColor: 'var(--ruddle)', borderLeftWidth: '2px' },
+  '.cm-placeholder': { color: 'var(--soft)' },
+  '.cm-matchingBracket, &.cm-focused .cm-matchingBracket': {
+    backgroundColor: 'var(--snapline-wash)',
+    outline: '1px solid var(--snapline)',
+  },
+  '.cm-lintRange-error': {
+    backgroundImage: 'none',
+    textDecoration: 'underline wavy 1px var(--ruddle)',
+    textUnderlineOffset: '4px',
+    backgroundColor: 'var(--ruddle-wash)',
+  },
+  '.cm-lintRange-warning': {
+    backgroundImage: 'none',
+    textDecoration: 'underline dotted 2px var(--ochre)',
+    textUnderlineOffset: '4px',
+  },
+  '.cm-tooltip': {
+    border: '1px solid var(--ink)',
+    backgroundColor: 'var(--sheet)',
+    color: 'var(--ink)',
+    fontFamily: 'var(--font-grotesque), sans-serif',
+    fontSize: '0.8125rem',
+  },
+  '.cm-diagnostic': { padding: '0.25rem 0.5rem' },
+  '.cm-diagnostic-warning': { borderLeft: '3px solid var(--ochre)' },
+  '.cm-diagnostic-error': { borderLeft: '3px solid var(--ruddle)' },
+});
+
+/** Marks a change that came from outside (undo of the notebook, another version), not from typing. */
+const fromOutside = Annotation.define<boolean>();
+
+const PLACEHOLDERS = { dimension: 'p = 2 R sin(turn/34)', note: 'A note, in Markdown' } as const;
+
+/** Opens the source of one cell in place. Loaded only when the first cell is taken in hand. */
+export function makeEditor(options: EditorOptions): EditorHandle {
+  const { kind, label, nonce, onWrite, onLeave } = options;
+  const atEdge = (view: EditorView, edge: 'before' | 'after') => {
+    const { main } = view.state.selection;
+    if (!main.empty) return false;
+    const line = view.state.doc.lineAt(main.head).number;
+    const last = edge === 'before' ? 1 : view.state.doc.lines;
+    return line === last && onLeave(edge);
+  };
+  const view = new EditorView({
+    parent: options.parent,
+    state: EditorState.create({
+      doc: options.source,
+      selection: { anchor: options.source.length },
+      extensions: [
+        nonce ? EditorView.cspNonce.of(nonce) : [],
+        Prec.high(
+          keymap.of([
+            { key: 'Escape', run: () => onLeave('here') },
+            { key: 'ArrowUp', run: (view) => atEdge(view, 'before') },
+            { key: 'ArrowDown', run: (view) => atEdge(view, 'after') },
+          ]),
+        ),
+        // No history here: the notebook has one of its own, across all cells.
+        keymap.of(standardKeymap),
+        kind === 'dimension' ? [cellLanguage, syntaxHighlighting(highlighting), bracketMatching()] : [],
+        theme,
+        placeholder(PLACEHOLDERS[kind]),
+        EditorView.lineWrapping,
+        EditorView.contentAttributes.of({
+          'aria-label': label,
+          spellcheck: kind === 'note' ? 'true' : 'false',
+          autocapitalize: 'off',
+          autocorrect: 'off',
+        }),
+        EditorView.updateListener.of((update) => {
+          const outside = update.transactions.some((one) => one.annotation(fromOutside));
+          if (update.docChanged && !outside) onWrite(update.state.doc.toString());
+        }),
+      ],
+    }),
+  });
+
+  return {
+    setSource(source) {
+      const old = view.state.doc.toString();
+      if (old === source) return;
+      view.dispatch({ changes: smallestChange(old, source), annotations: fromOutside.of(true) });
+    },
+    setFaults(faults) {
+      const placed = faults.flatMap((fault) => place(view.state, fault));
+      view.dispatch(setDiagnostics(view.state, placed));
+    },
+    focus: () => view.focus(),
+    destroy: () => view.destroy(),
+  };
+}
+
+/** The change between two texts without their common beginning and end, so the cursor stays put. */
+export function smallestChange(old: string, next: string) {
+  const most = Math.min(old.length, next.length);
+  let from = 0;
+  while (from < most && old[from] === next[from]) from += 1;
+  let end = 0;
+  while (end < most - from && old[old.length - 1 - end] === next[next.length - 1 - end]) end += 1;
+  return { from, to: old.length - end, insert: next.slice(from, next.length - end) };
+}
+
+/** A fault of an older text may lie beyond the end of the present one; then it has no place. */
+function place(state: EditorState, { line, from, to, message, severity }: PlacedFault): Diagnostic[] {
+  if (line < 1 || line > state.doc.lines) return [];
+  const text = state.doc.line(line);
+  const start = Math.min(text.from + from, text.to);
+  const end = Math.min(Math.max(text.from + to, start), text.to);
+  const shown = start === end && start > text.from ? start - 1 : start;
+  return [{ from: shown, to: end, severity, message }];
+}

@@ -1,0 +1,104 @@
+import type { ReactNode } from 'react';
+import { Balloon } from '@/components/drawing/balloon';
+import { Compartments } from '@/components/drawing/compartments';
+import { DimensionLine } from '@/components/drawing/dimension-line';
+import { Tex } from '@/components/ui/tex';
+import type { Result } from './result';
+import type { ShownLine } from './state/shown';
+import { compartmentsOf, sayDimension } from './wording';
+
+interface EntryLineProps {
+  line: ShownLine;
+  /** An older answer is being shown while a newer one is awaited or cannot be had. */
+  greyed?: boolean;
+  /** In hand: every figure is shown. */
+  full?: boolean;
+  /** The source, where a cell of one line shows it between value and compartments. */
+  source?: ReactNode;
+  /** What can be done with the value (copying); none on a sheet that is only read. */
+  actions?: ReactNode;
+}
+
+const signOf = ({ mark, kind }: Result) => mark ?? (kind === 'truth' ? '=' : null);
+
+/** The value of one line, typeset; a line that never parsed stands as its text. */
+function Value({ result }: { result: Result }) {
+  const tex = 'exact' in result ? result.exact.tex : result.typeset;
+  if (tex === null) return <span className="font-mono text-source">{result.source.trim()}</span>;
+  return <Tex tex={tex} display />;
+}
+
+/** The named quadratics of a value too wide to read in one piece, one under another. */
+function Steps({ result }: { result: Result }) {
+  if (result.kind !== 'number' || !result.exact.staged || !result.tower) return null;
+  return (
+    <ol className="mt-1 space-y-1 border-l border-hairline pl-3" aria-label="Steps, lowest first">
+      {result.tower.map(({ name, tex }) => (
+        <li key={name} className="overflow-x-auto overflow-y-hidden py-0.5 text-base" tabIndex={0}>
+          <Tex tex={tex} />
+        </li>
+      ))}
+    </ol>
+  );
+}
+
+/** One line of a dimension cell on the sheet: balloon, exact value, drawn dimension, compartments. */
+export function EntryLine({ line, greyed = false, full = false, source, actions }: EntryLineProps) {
+  const { result, before } = line;
+  const faulty = result.kind === 'error';
+  const value = faulty ? before : result;
+  const dimension = value && sayDimension(value);
+  const dim = greyed || faulty;
+
+  return (
+    <div className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 max-sm:grid-cols-1 lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem]">
+      <div className="max-sm:w-24">
+        <Balloon sign={signOf(result)} faulty={faulty} />
+      </div>
+      <div className="min-w-0 space-y-1.5">
+        {value && (
+          <div
+            className={`-ml-1 min-h-balloon overflow-x-auto overflow-y-hidden py-1 pl-1 text-value ${dim ? 'opacity-55' : ''}`}
+            tabIndex={0}
+            role="group"
+            aria-label={faulty ? 'Last good value' : 'Exact value'}
+          >
+            <Value result={value} />
+            <Steps result={value} />
+          </div>
+        )}
+        {faulty && <Fault result={result} />}
+        {source}
+        {full && 'notices' in result && result.notices.map((notice) => (
+          <p key={notice.from} className="text-small text-ochre">
+            <span className="font-semibold">Read so: </span>
+            {notice.message}
+          </p>
+        ))}
+        <div className="flex flex-wrap items-end gap-x-3 gap-y-1.5">
+          <div className={`min-w-0 max-w-full ${greyed ? 'opacity-55' : ''}`}>
+            {!faulty && <Compartments items={compartmentsOf(result, full)} />}
+          </div>
+          {actions}
+        </div>
+      </div>
+      {dimension && (
+        <div className="w-44 max-sm:mt-1 sm:col-start-2 lg:col-start-3 lg:row-start-1 lg:w-full">
+          <DimensionLine {...dimension} greyed={dim} />
+        </div>
+      )}
+    </div>
+  );
+}
+
+/** An error in words; where it stands is underlined in the source. */
+function Fault({ result }: { result: Extract<Result, { kind: 'error' }> }) {
+  return (
+    <p className="flex min-h-balloon items-center text-base text-ruddle">
+      <span>
+        <span className="font-semibold">Line {result.line}: </span>
+        {result.error.message}
+      </span>
+    </p>
+  );
+}

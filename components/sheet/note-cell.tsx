@@ -1,0 +1,87 @@
+'use client';
+
+import { memo, type MouseEvent } from 'react';
+import type { NotebookCell } from '@/lib/notebooks/content';
+import { CellTools } from './cell-tools';
+import { cellAnchor, cellFocusId, focusCell, type SheetActions } from './cells';
+import { onCellKey } from './cell-keys';
+import { SourceEditor } from './editor/source-editor';
+import { NoteText } from './note-text';
+
+interface NoteCellProps {
+  cell: NotebookCell;
+  place: number;
+  open: boolean;
+  lazy: boolean;
+  readOnly: boolean;
+  nonce: string | undefined;
+  actions: SheetActions;
+}
+
+const NO_RESULTS = [] as const;
+
+/** A note: set in the text serif; its Markdown opens beneath it when it is taken in hand. */
+export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
+  const { cell, place, open, lazy, readOnly, nonce, actions } = props;
+  const { id } = cell;
+  const label = `Note ${place}`;
+
+  const leave = (to: 'here' | 'before' | 'after') => {
+    if (to === 'here') {
+      actions.take(null);
+      requestAnimationFrame(() => focusCell(id));
+      return true;
+    }
+    return actions.step(id, to === 'before' ? -1 : 1);
+  };
+
+  // A press on the text opens it, except on a link or when a stretch of it is being selected.
+  const press = (event: MouseEvent) => {
+    const onLink = event.target instanceof Element && event.target.closest('a') !== null;
+    if (!readOnly && !open && !onLink && getSelection()?.isCollapsed !== false) actions.take(id);
+  };
+
+  return (
+    <section
+      id={cellAnchor(id)}
+      aria-label={label}
+      onKeyDown={(event) => onCellKey(event, id, open, actions)}
+      className={`group/cell relative border px-3 py-2 max-sm:px-2 ${open ? 'border-snapline bg-hand' : 'border-transparent'} ${lazy ? 'entry-lazy' : ''}`}
+    >
+      <div className="space-y-3 sm:ml-[6.125rem]">
+        <div onClick={press} className={open || readOnly ? undefined : 'cursor-text'}>
+          {cell.source.trim() === '' && !open ? (
+            <p className="font-serif text-note italic text-soft">Empty note</p>
+          ) : (
+            <NoteText source={cell.source} />
+          )}
+        </div>
+        {open ? (
+          <>
+            <SourceEditor
+              source={cell.source}
+              kind="note"
+              label={`Source of ${label}`}
+              nonce={nonce}
+              results={NO_RESULTS}
+              onWrite={(source) => actions.dispatch({ kind: 'write', id, source })}
+              onLeave={leave}
+              meanwhile={<pre className="whitespace-pre-wrap font-mono text-source">{cell.source}</pre>}
+            />
+            <CellTools id={id} actions={actions} />
+          </>
+        ) : readOnly ? null : (
+          <button
+            type="button"
+            id={cellFocusId(id)}
+            data-entry={id}
+            onClick={() => actions.take(id)}
+            className="absolute right-2 top-2 bg-sheet px-1.5 text-small text-snapline opacity-0 hover:underline focus-visible:opacity-100 group-hover/cell:opacity-100 print:hidden"
+          >
+            Write<span className="sr-only">{` ${label}`}</span>
+          </button>
+        )}
+      </div>
+    </section>
+  );
+});

@@ -1,0 +1,66 @@
+import { TitleBlock, type TitleField } from '@/components/drawing/title-block';
+import type { NotebookContent } from '@/lib/notebooks/content';
+import { cellAnchor } from './cells';
+import { EntryLine } from './entry-line';
+import { NoteText } from './note-text';
+import { SheetIndex } from './sheet-index';
+import { SheetLayout, zonesFor } from './sheet-layout';
+import { SourceText } from './source-text';
+import { foldAnswer, type CellAnswer } from './state/shown';
+
+interface ReadOnlySheetProps {
+  content: NotebookContent;
+  answers: CellAnswer[];
+  fields: readonly TitleField[];
+}
+
+/** A sheet that is only read: drawn on the server, it needs no script. */
+export function ReadOnlySheet({ content, answers, fields }: ReadOnlySheetProps) {
+  const shown = foldAnswer(new Map(), answers);
+  return (
+    <SheetLayout
+      index={<SheetIndex content={content} shown={shown} />}
+      foot={<TitleBlock fields={fields} />}
+      zones={zonesFor(content.cells.length)}
+    >
+      {content.cells.length === 0 && (
+        <p className="py-10 text-center font-serif text-note italic text-soft">
+          Nothing has been written on this sheet yet.
+        </p>
+      )}
+      <div className="space-y-4">
+        {content.cells.map(({ id, kind, source }) => {
+          if (kind === 'note') {
+            return (
+              <section key={id} id={cellAnchor(id)} className="px-3 py-2 max-sm:px-2 sm:pl-[6.875rem]">
+                <NoteText source={source} />
+              </section>
+            );
+          }
+          const lines = shown.get(id) ?? [];
+          const text = (
+            <div className="pl-3">
+              <SourceText source={source} results={lines.map((line) => line.result)} />
+            </div>
+          );
+          return (
+            <section
+              key={id}
+              id={cellAnchor(id)}
+              className="space-y-5 px-3 py-2.5 max-sm:px-2 [break-inside:avoid]"
+            >
+              {lines.map((line, index) => (
+                <EntryLine
+                  key={index}
+                  line={line}
+                  source={lines.length === 1 ? text : undefined}
+                />
+              ))}
+              {lines.length !== 1 && <div className="sm:ml-[6.125rem]">{text}</div>}
+            </section>
+          );
+        })}
+      </div>
+    </SheetLayout>
+  );
+}

@@ -1,0 +1,108 @@
+'use client';
+
+import Link from 'next/link';
+import type { NotebookHead } from '@/lib/notebooks/types';
+import { Button, LinkButton } from '@/components/ui/button';
+import { Disclosure, DISCLOSURE_ROW } from '@/components/ui/disclosure';
+import type { Panel } from './sheet-dialogs';
+import type { Evaluation } from './state/use-evaluation';
+import type { NotebookOnScreen } from './state/use-notebook';
+
+interface SheetBarProps {
+  notebook: NotebookHead;
+  sheet: NotebookOnScreen;
+  evaluation: Evaluation;
+  mayWrite: boolean;
+  mayShare: boolean;
+  onPanel: (panel: Panel) => void;
+}
+
+const STATES = {
+  settled: '',
+  pending: 'working out…',
+  slow: 'still working out; the figures shown are the last ones',
+  failed: 'no answer; the figures shown are the last ones',
+} as const;
+
+/** Above the sheet: which one it is, whether it is kept, and what can be done with it as a whole. */
+export function SheetBar(props: SheetBarProps) {
+  const { notebook, sheet, evaluation, mayWrite, mayShare, onPanel } = props;
+  return (
+    <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2">
+      <div className="min-w-0">
+        <p className="text-small text-soft">
+          <Link href="/notebooks" className="underline-offset-4 hover:underline">
+            {notebook.workshop.name}
+          </Link>
+        </p>
+        <h1 className="font-serif text-head font-semibold [overflow-wrap:anywhere]">
+          {notebook.title}
+        </h1>
+        <p className="text-small text-soft">
+          <span role="status" className={sheet.dirty ? 'font-semibold text-ochre' : ''}>
+            {sheet.dirty
+              ? `Changed since version ${sheet.kept.number}`
+              : `Version ${sheet.kept.number}, kept`}
+          </span>
+          {sheet.keepState.kind === 'keeping' && ' · keeping…'}
+          {STATES[evaluation.state] && ` · ${STATES[evaluation.state]}`}
+        </p>
+      </div>
+      <div className="flex flex-wrap gap-2 print:hidden">
+        {mayWrite && (
+          <>
+            <Button onClick={sheet.undo ?? undefined} disabled={sheet.undo === null}>
+              Undo
+            </Button>
+            <Button onClick={sheet.redo ?? undefined} disabled={sheet.redo === null}>
+              Redo
+            </Button>
+            <Button onClick={() => onPanel('settings')}>Unit and step</Button>
+          </>
+        )}
+        <LinkButton href={`/notebooks/${notebook.id}/versions`}>Versions</LinkButton>
+        <Disclosure
+          label="Hand over"
+          className="inline-flex min-h-9 items-center rounded-cut border border-rule bg-sheet px-3 text-small font-medium hover:border-ink"
+        >
+          {(close) => (
+            <>
+              {(['people', 'links'] as const)
+                .filter((panel) => panel === 'people' || mayShare)
+                .map((panel) => (
+                  <button
+                    key={panel}
+                    type="button"
+                    className={DISCLOSURE_ROW}
+                    onClick={() => {
+                      close();
+                      onPanel(panel);
+                    }}
+                  >
+                    {panel === 'people' ? 'People on this notebook' : 'Client links'}
+                  </button>
+                ))}
+              {(['json', 'tex'] as const).map((format) => (
+                <a
+                  key={format}
+                  download
+                  href={`/api/notebooks/${notebook.id}/export?format=${format}`}
+                  className={DISCLOSURE_ROW}
+                  onClick={close}
+                >
+                  {format === 'json' ? 'Results as JSON' : 'Sheet as TeX'}
+                  <span className="text-soft">version {sheet.kept.number}</span>
+                </a>
+              ))}
+            </>
+          )}
+        </Disclosure>
+        {mayWrite && (
+          <Button look="main" disabled={!sheet.dirty} onClick={() => onPanel('keep')}>
+            Keep version {sheet.kept.number + 1}
+          </Button>
+        )}
+      </div>
+    </div>
+  );
+}

@@ -1,0 +1,86 @@
+'use client';
+
+import { useState } from 'react';
+import type { NotebookHead } from '@/lib/notebooks/types';
+import { ConflictDialog } from './panels/conflict-dialog';
+import { KeepDialog } from './panels/keep-dialog';
+import { LinksDialog } from './panels/links-dialog';
+import { PeopleDialog } from './panels/people-dialog';
+import { SettingsDialog } from './panels/settings-dialog';
+import type { NotebookOnScreen } from './state/use-notebook';
+
+export type Panel = 'keep' | 'settings' | 'people' | 'links' | 'conflict';
+
+interface SheetDialogsProps {
+  panel: Panel | null;
+  notebook: NotebookHead;
+  sheet: NotebookOnScreen;
+  personName: string;
+  mayShare: boolean;
+  onClose: () => void;
+}
+
+export function SheetDialogs(props: SheetDialogsProps) {
+  const { panel, notebook, sheet, personName, mayShare, onClose } = props;
+  const { content, conflict, kept, keep, keepState, dispatch } = sheet;
+  const [later, setLater] = useState<typeof conflict>(null);
+
+  // A conflict opens by itself, once; whoever closes it finds it again in the news above the sheet.
+  if (conflict && (panel === 'conflict' || conflict !== later)) {
+    const close = () => {
+      setLater(conflict);
+      onClose();
+    };
+    return (
+      <ConflictDialog
+        base={kept.content}
+        mine={content}
+        head={conflict}
+        state={keepState}
+        onClose={close}
+        onKeep={(together) => {
+          dispatch({ kind: 'replace', content: together });
+          void keep(together, conflict.number, `brought together with version ${conflict.number}`, personName).then(
+            (done) => {
+              if (done) close();
+            },
+          );
+        }}
+        onTakeTheirs={() => {
+          const { number, content: theirs, savedAt, author } = conflict;
+          sheet.putAside({ number, content: theirs, savedAt, savedBy: author });
+          close();
+        }}
+      />
+    );
+  }
+  switch (panel) {
+    case 'keep':
+      return (
+        <KeepDialog
+          next={kept.number + 1}
+          state={keepState}
+          onClose={onClose}
+          onKeep={(note) => {
+            void keep(content, kept.number, note, personName).then((done) => {
+              if (done) onClose();
+            });
+          }}
+        />
+      );
+    case 'settings':
+      return (
+        <SettingsDialog
+          settings={content.settings}
+          onSet={(settings) => dispatch({ kind: 'set', settings })}
+          onClose={onClose}
+        />
+      );
+    case 'people':
+      return <PeopleDialog notebookId={notebook.id} mayChange={mayShare} onClose={onClose} />;
+    case 'links':
+      return <LinksDialog notebookId={notebook.id} onClose={onClose} />;
+    default:
+      return null;
+  }
+}

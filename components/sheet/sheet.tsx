@@ -1,0 +1,197 @@
+'use client';
+
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import { SWRConfig } from 'swr';
+import type { NotebookHead } from '@/lib/notebooks/types';
+import type { NotebookContent } from '@/lib/notebooks/content';
+import { TitleBlock } from '@/components/drawing/title-block';
+import { cellAnchor, focusCell, type SheetActions } from './cells';
+import { preloadEditor } from './editor/source-editor';
+import { Entries } from './entries';
+import { SheetBar } from './sheet-bar';
+import { SheetDialogs, type Panel } from './sheet-dialogs';
+import { SheetIndex } from './sheet-index';
+import { SheetLayout, zonesFor } from './sheet-layout';
+import { SheetNews } from './sheet-news';
+import { BoundedCache } from './state/bounded-cache';
+import { newCellId } from './state/changes';
+import type { CellAnswer } from './state/shown';
+import { useEvaluation } from './state/use-evaluation';
+import { useNotebook } from './state/use-notebook';
+import { titleFields } from './title-fields';
+import { sayResult } from './wording';
+
+export interface SheetProps {
+  notebook: NotebookHead;
+  content: NotebookContent;
+  /** The figures as the server computed them with the page; null when it could not. */
+  answers: CellAnswer[] | null;
+  /** Name of the person who looks. */
+  personName: string;
+  mayWrite: boolean;
+  mayShare: boolean;
+  nonce: string | undefined;
+}
+
+/** Answers kept in the browser: enough for undo to be at once. */
+const ANSWERS = 80;
+
+export function Sheet(props: SheetProps) {
+  const [cache] = useState(() => new BoundedCache(ANSWERS));
+  return (
+    <SWRConfig value={{ provider: () => cache }}>
+      <SheetOnScreen {...props} />
+    </SWRConfig>
+  );
+}
+
+function SheetOnScreen(props: SheetProps) {
+  const { notebook, content: first, answers, personName, mayWrite, nonce } = props;
+  const [kept] = useState({
+    number: notebook.version,
+    content: first,
+    savedAt: notebook.savedAt,
+    savedBy: notebook.savedBy,
+  });
+  const sheet = useNotebook(notebook.id, kept, !mayWrite);
+  const { content, dispatch, undo, redo } = sheet;
+  const evaluation = useEvaluation(content, answers);
+  const [hand, setHand] = useState<string | null>(null);
+  const [panel, setPanel] = useState<Panel | null>(null);
+  const actions = useSheetActions(content, hand, setHand, dispatch);
+
+  useEffect(() => {
+    if (!mayWrite) return;
+    const idle = window.requestIdleCallback ?? ((work: () => void) => setTimeout(work, 800));
+    idle(() => preloadEditor());
+  }, [mayWrite]);
+
+  useEffect(() => {
+    const onKey = (event: KeyboardEvent) => {
+      if (!mayWrite || !(event.ctrlKey || event.metaKey) || event.altKey) return;
+      const key = event.key.toLowerCase();
+      if (key === 's') {
+        event.preventDefault();
+        if (sheet.dirty && panel === null) setPanel('keep');
+        return;
+      }
+      const inField = event.target instanceof Element && event.target.closest('input, textarea, dialog');
+      if (inField || (key !== 'z' && key !== 'y')) return;
+      event.preventDefault();
+      (key === 'y' || event.shiftKey ? redo : undo)?.();
+    };
+    window.addEventListener('keydown', onKey);
+    return () => window.removeEventListener('keydown', onKey);
+  }, [mayWrite, panel, redo, sheet.dirty, undo]);
+
+  const spoken =
+    hand !== null && evaluation.state === 'settled'
+      ? (evaluation.shown.get(hand) ?? []).map(({ result }) => sayResult(result)).join(' ')
+      : '';
+
+  return (
+    <div className="space-y-3">
+      <SheetBar
+        notebook={notebook}
+        sheet={sheet}
+        evaluation={evaluation}
+        mayWrite={mayWrite}
+        mayShare={props.mayShare}
+        onPanel={setPanel}
+      />
+      <SheetNews sheet={sheet} evaluation={evaluation} archived={notebook.archivedAt !== null} onPanel={setPanel} />
+      <SheetLayout
+        index={<SheetIndex content={content} shown={evaluation.shown} />}
+        zones={zonesFor(content.cells.length)}
+        foot={
+          <TitleBlock
+            fields={titleFields({
+              workshop: notebook.workshop.name,
+              title: notebook.title,
+              id: notebook.id,
+              version: sheet.kept.number,
+              savedAt: sheet.kept.savedAt,
+              savedBy: sheet.kept.savedBy,
+              settings: content.settings,
+            })}
+          />
+        }
+      >
+        <Entries
+          content={content}
+          evaluation={evaluation}
+          hand={mayWrite ? hand : null}
+          mayWrite={mayWrite}
+          nonce={nonce}
+          actions={actions}
+        />
+      </SheetLayout>
+      <div role="status" aria-live="polite" className="sr-only">
+        {spoken}
+      </div>
+      <SheetDialogs
+        panel={panel}
+        notebook={notebook}
+        sheet={sheet}
+        personName={personName}
+        mayShare={props.mayShare}
+        onClose={() => setPanel(null)}
+      />
+    </div>
+  );
+}
+
+/** The actions of the cells: one object for as long as the sheet is on the screen. */
+function useSheetActions(
+  content: NotebookContent,
+  hand: string | null,
+  setHand: (id: string | null) => void,
+  dispatch: SheetActions['dispatch'],
+): SheetActions {
+  const latest = useRef({ content, hand });
+  useEffect(() => {
+    latest.current = { content, hand };
+  });
+  const at = useCallback(
+    (id: string) => latest.current.content.cells.findIndex((cell) => cell.id === id),
+    [],
+  );
+
+  return useMemo<SheetActions>(
+    () => ({
+      dispatch,
+      take: setHand,
+      step(id, by) {
+        const next = latest.current.content.cells[at(id) + by];
+        if (!next) return false;
+        if (latest.current.hand === null) focusCell(next.id);
+        else setHand(next.id);
+        return true;
+      },
+      insert(kind, beside, where) {
+        const cell = { id: newCellId(), kind, source: '' };
+        const place = beside === '' ? latest.current.content.cells.length : at(beside);
+        dispatch({ kind: 'insert', cell, at: place + (where === 'after' && beside !== '' ? 1 : 0) });
+        setHand(cell.id);
+      },
+      move(id, by) {
+        const focused = document.activeElement;
+        dispatch({ kind: 'move', id, by });
+        requestAnimationFrame(() => {
+          if (focused instanceof HTMLElement) focused.focus();
+          document.getElementById(cellAnchor(id))?.scrollIntoView({ block: 'nearest' });
+        });
+      },
+      remove(id) {
+        const { cells } = latest.current.content;
+        const next = cells[at(id) + 1] ?? cells[at(id) - 1];
+        dispatch({ kind: 'delete', id });
+        setHand(null);
+        requestAnimationFrame(() => {
+          if (next) focusCell(next.id);
+        });
+      },
+    }),
+    [at, dispatch, setHand],
+  );
+}

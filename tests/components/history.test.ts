@@ -1,0 +1,124 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { applyChange, newCellId, sameContent, type Change } from '@/components/sheet/state/changes';
+import { beginHistory, historyReducer, type History } from '@/components/sheet/state/history';
+import { contentOf, dimension, note } from './sample';
+
+const start = contentOf(dimension('a', 'R = 1200 mm'), note('b', '# Ring'), dimension('c', 'R/2'));
+const ids = ['a', 'b', 'c', 'd', 'e'];
+
+const anyChange: fc.Arbitrary<Change> = fc.oneof(
+  fc.record({
+    kind: fc.constant('write' as const),
+    id: fc.constantFrom(...ids),
+    source: fc.string(),
+  }),
+  fc.record({
+    kind: fc.constant('insert' as const),
+    cell: fc.constantFrom(...ids).map((id) => dimension(id, 'x')),
+    at: fc.nat(4),
+  }),
+  fc.record({ kind: fc.constant('delete' as const), id: fc.constantFrom(...ids) }),
+  fc.record({
+    kind: fc.constant('move' as const),
+    id: fc.constantFrom(...ids),
+    by: fc.constantFrom(-1 as const, 1 as const),
+  }),
+  fc.record({
+    kind: fc.constant('set' as const),
+    settings: fc.record({ digits: fc.integer({ min: 1, max: 50 }) }),
+  }),
+);
+
+/** Each change a long pause after the one before, so each is a step of its own. */
+const play = (changes: Change[], pause = 10_000): History =>
+  changes.reduce(
+    (history, change, index) => historyReducer(history, { kind: 'change', change, at: index * pause }),
+    beginHistory(start),
+  );
+const times = (history: History, kind: 'undo' | 'redo', count: number) =>
+  Array.from({ length: count }).reduce<History>((h) => historyReducer(h, { kind }), history);
+
+describe('the history of a notebook', () => {
+  it('goes all the way back and all the way forward again, whatever was done', () => {
+    fc.assert(
+      fc.property(fc.array(anyChange, { maxLength: 30 }), (changes) => {
+        const end = play(changes);
+        const back = times(end, 'undo', end.past.length);
+        expect(sameContent(back.present, start)).toBe(true);
+        const forward = times(back, 'redo', end.past.length);
+        expect(forward.present).toEqual(end.present);
+      }),
+    );
+  });
+
+  it('never has two cells with one id', () => {
+    fc.assert(
+      fc.property(fc.array(anyChange, { maxLength: 30 }), (changes) => {
+        const { cells } = play(changes).present;
+        expect(new Set(cells.map((cell) => cell.id)).size).toBe(cells.length);
+      }),
+    );
+  });
+
+  it('takes a burst of typing in one cell back in one step, and a pause divides it', () => {
+    const write = (source: string): Change => ({ kind: 'write', id: 'a', source });
+    const burst = play([write('R'), write('R='), write('R=1')], 100);
+    expect(burst.past).toHaveLength(1);
+    expect(times(burst, 'undo', 1).present).toBe(start);
+    expect(play([write('R'), write('R=')], 5000).past).toHaveLength(2);
+  });
+
+  it('does not join typing in two cells', () => {
+    const changes: Change[] = [
+      { kind: 'write', id: 'a', source: '1' },
+      { kind: 'write', id: 'c', source: '2' },
+      { kind: 'write', id: 'a', source: '3' },
+    ];
+    expect(play(changes, 10).past).toHaveLength(3);
+  });
+
+  it('brings a deleted cell back at its place', () => {
+    const gone = play([{ kind: 'delete', id: 'b' }]);
+    expect(gone.present.cells.map((cell) => cell.id)).toEqual(['a', 'c']);
+    expect(times(gone, 'undo', 1).present.cells.map((cell) => cell.id)).toEqual(['a', 'b', 'c']);
+  });
+
+  it('forgets what was undone once something new is done', () => {
+    const undone = times(play([{ kind: 'delete', id: 'b' }]), 'undo', 1);
+    const anew = historyReducer(undone, {
+      kind: 'change',
+      change: { kind: 'write', id: 'a', source: 'R = 1' },
+      at: 0,
+    });
+    expect(anew.future).toEqual([]);
+  });
+
+  it('is untouched by a change that changes nothing', () => {
+    const history = beginHistory(start);
+    for (const change of [
+      { kind: 'write', id: 'a', source: 'R = 1200 mm' },
+      { kind: 'write', id: 'nowhere', source: 'x' },
+      { kind: 'move', id: 'a', by: -1 },
+      { kind: 'delete', id: 'nowhere' },
+    ] satisfies Change[]) {
+      expect(historyReducer(history, { kind: 'change', change, at: 0 })).toBe(history);
+    }
+    expect(historyReducer(history, { kind: 'undo' })).toBe(history);
+    expect(historyReducer(history, { kind: 'redo' })).toBe(history);
+  });
+});
+
+describe('a change', () => {
+  it('leaves every other cell the same object, so that only one is drawn again', () => {
+    const after = applyChange(start, { kind: 'write', id: 'c', source: 'R/3' });
+    expect(after.cells[0]).toBe(start.cells[0]);
+    expect(after.cells[1]).toBe(start.cells[1]);
+    expect(after.cells[2]).not.toBe(start.cells[2]);
+  });
+
+  it('gives new cells ids that the server accepts', () => {
+    expect(newCellId()).toMatch(/^[0-9a-f]{24}$/);
+    expect(newCellId()).not.toBe(newCellId());
+  });
+});
