@@ -43,11 +43,12 @@ const KEEP_MS = 24 * 3600 * 1000;
 export async function countAgainst(limit: Limit, subject: string): Promise<Hit> {
   const db = database();
   const span = limit.seconds * 1000;
-  const elapsed = Date.now() % span;
-  const windowStart = new Date(Date.now() - elapsed);
+  const now = Date.now();
+  const elapsed = now % span;
+  const windowStart = new Date(now - elapsed);
   const hit = { bucket: bucketOf(limit, subject), windowStart };
   const hits = await countHit(db, hit.bucket, windowStart);
-  if (hits === 1) await pruneHits(db, new Date(windowStart.getTime() - KEEP_MS));
+  if (hits === 1) await pruneHits(db, new Date(now - KEEP_MS));
   const before = await findHits(db, hit.bucket, new Date(windowStart.getTime() - span));
   if (hits + Math.ceil(before * (1 - elapsed / span)) > limit.hits) {
     throw tooMany(limit, secondsToWait(limit, hits, before, elapsed));
