@@ -1,3 +1,4 @@
+export { answersQueries } from '@/db/client';
 export { addressOf } from './address';
 export { isId } from './ids';
 export { KeyRequest, createKey, holderOfKey, listKeys, revokeKey } from './keys';

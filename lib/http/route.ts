@@ -27,6 +27,8 @@ export interface Call<Who, B, Q> {
   address: string;
   /** A part of the path by its name in the route's folder, such as `id` for `[id]`. */
   part: (name: string) => string;
+  /** The same for a number that counts from 1, written as it is counted; anything else is NaN. */
+  count: (name: string) => number;
   body: B;
   query: Q;
 }
@@ -58,12 +60,14 @@ export function route<B extends z.ZodType, Q extends z.ZodType>(
     answered(request, async () => {
       const { person, keyId } = await whoAsks(request, options);
       const limit = options.bodyLimit ?? SMALL_BODY;
+      const part = partsOf((await context.params) ?? {});
       const call = {
         request,
         person: person as never,
         keyId,
         address: addressOf(request.headers),
-        part: partsOf((await context.params) ?? {}),
+        part,
+        count: (name: string) => (/^[1-9]\d{0,9}$/.test(part(name)) ? Number(part(name)) : NaN),
         query: options.query && check(options.query, queryOf(request)),
         body: options.body && check(options.body, await readJson(request, limit)),
       };

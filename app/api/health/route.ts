@@ -1,5 +1,5 @@
-import { answersQueries } from '@/db/client';
 import { Failure } from '@/lib/access';
+import { answersQueries } from '@/lib/accounts';
 import { route } from '@/lib/http';
 
 /** Whether this instance can serve: it runs, and its database answers. */
