@@ -2,44 +2,45 @@ import Link from 'next/link';
 import { Logo } from '@/components/ui/logo';
 
 interface SiteHeaderProps {
-  /** The person signed in, if any. */
-  name: string | null;
+  /** The person signed in; `guest` for whoever came by a client link and needs no way in. */
+  who: { name: string } | 'nobody' | 'guest';
 }
 
 const LINK = 'underline-offset-4 hover:underline';
 
-export function SiteHeader({ name }: SiteHeaderProps) {
+export function SiteHeader({ who }: SiteHeaderProps) {
+  const signedIn = typeof who === 'object';
   return (
     <header className="border-b border-hairline print:hidden">
       <div className="mx-auto flex max-w-sheet flex-wrap items-center justify-between gap-x-6 gap-y-1 px-3 py-2 sm:px-6">
-        <Link href={name === null ? '/' : '/notebooks'} className="flex items-center gap-2">
+        <Link href={signedIn ? '/notebooks' : '/'} className="flex items-center gap-2">
           <Logo />
           <span className="text-figure font-semibold">Surdwork</span>
         </Link>
-        <nav aria-label="Main" className="flex flex-wrap items-center gap-x-5 gap-y-1 text-small">
-          {name === null ? (
-            <>
-              <Link className={LINK} href="/help">
-                How to write cells
-              </Link>
-              <Link className={LINK} href="/sign-in">
-                Sign in
-              </Link>
-            </>
-          ) : (
-            <>
+        {who !== 'guest' && (
+          <nav
+            aria-label="Main"
+            className="flex flex-wrap items-center gap-x-5 gap-y-1 text-small"
+          >
+            {signedIn && (
               <Link className={LINK} href="/notebooks">
                 Notebooks
               </Link>
-              <Link className={LINK} href="/help">
-                How to write cells
+            )}
+            <Link className={LINK} href="/help">
+              How to write cells
+            </Link>
+            {signedIn ? (
+              <Link className={`${LINK} max-w-40 truncate`} href="/settings" title={who.name}>
+                {who.name}
               </Link>
-              <Link className={`${LINK} max-w-40 truncate`} href="/settings" title={name}>
-                {name}
+            ) : (
+              <Link className={LINK} href="/sign-in">
+                Sign in
               </Link>
-            </>
-          )}
-        </nav>
+            )}
+          </nav>
+        )}
       </div>
     </header>
   );

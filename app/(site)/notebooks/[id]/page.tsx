@@ -1,0 +1,44 @@
+import type { Metadata } from 'next';
+import { headers } from 'next/headers';
+import { cache } from 'react';
+import { answersFor } from '@/components/sheet/answers';
+import { Sheet } from '@/components/sheet/sheet';
+import { orNotFound } from '@/components/site/or-not-found';
+import { can } from '@/lib/access';
+import { personForPage } from '@/lib/accounts/session';
+import { readNotebook } from '@/lib/notebooks';
+
+interface PageProps {
+  params: Promise<{ id: string }>;
+}
+
+const open = cache(async (id: string) => {
+  const person = await personForPage(`/notebooks/${id}`);
+  return { person, ...(await orNotFound(readNotebook(person, id))) };
+});
+
+export async function generateMetadata({ params }: PageProps): Promise<Metadata> {
+  const { notebook } = await open((await params).id);
+  return { title: notebook.title };
+}
+
+export default async function NotebookPage({ params }: PageProps) {
+  const { person, notebook, content } = await open((await params).id);
+  const actor = { kind: 'person', id: person.id } as const;
+  const guarded = { id: notebook.id, roles: new Map([[person.id, notebook.role]]) };
+  const inUse = notebook.archivedAt === null;
+  return (
+    <div className="mx-auto max-w-sheet">
+      <Sheet
+        key={`${notebook.id}-${notebook.version}`}
+        notebook={notebook}
+        content={content}
+        answers={await answersFor(content)}
+        personName={person.name}
+        mayWrite={inUse && can(actor, 'versions.save', guarded)}
+        mayShare={can(actor, 'people.change', guarded)}
+        nonce={(await headers()).get('x-nonce') ?? undefined}
+      />
+    </div>
+  );
+}

@@ -1,0 +1,169 @@
+import { render, screen, within } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { describe, expect, it, vi } from 'vitest';
+import { splitMark } from '@/components/drawing/balloon';
+import { zoneLetter } from '@/components/drawing/sheet-frame';
+import { placedFaults } from '@/components/sheet/editor/source-editor';
+import { smallestChange } from '@/components/sheet/editor/make-editor';
+import { EntryLine } from '@/components/sheet/entry-line';
+import { headingsOf, renderNote } from '@/components/sheet/note';
+import { ConflictDialog } from '@/components/sheet/panels/conflict-dialog';
+import { readStep } from '@/components/sheet/panels/settings-dialog';
+import { piecesOf } from '@/components/sheet/source-text';
+import { contentOf, dimension } from './sample';
+import { errorResult, numberResult, SUM_OF_ROOTS } from './sample-results';
+
+describe('an entry', () => {
+  it('shows balloon, value with MathML, drawn dimension and compartments', () => {
+    const { container } = render(<EntryLine line={{ result: numberResult(), before: null }} />);
+    expect(screen.getByTitle('R')).toBeInTheDocument();
+    expect(container.querySelector('math')).not.toBeNull();
+    expect(within(screen.getByRole('figure')).getByText('500 mm')).toBeInTheDocument();
+    expect(screen.getByText('straightedge and compass')).toBeInTheDocument();
+  });
+
+  it('shows what went wrong as a sentence with its line, and the last good value with it', () => {
+    render(<EntryLine line={{ result: errorResult(3, 'R = (', 5, 5), before: SUM_OF_ROOTS }} />);
+    expect(screen.getByText('A closing bracket was expected here.')).toBeInTheDocument();
+    expect(screen.getByText('Line 3:')).toBeInTheDocument();
+    expect(screen.getByRole('group', { name: 'Last good value' })).toBeInTheDocument();
+    expect(screen.queryByText('Degree')).toBeNull();
+  });
+});
+
+describe('the place of an error', () => {
+  it('cuts the line where the error begins and ends', () => {
+    expect(piecesOf('R = 1 ++ 2', { from: 6, to: 8 })).toEqual([
+      { text: 'R = 1 ', faulty: false },
+      { text: '++', faulty: true },
+      { text: ' 2', faulty: false },
+    ]);
+  });
+
+  it('marks the last character for an error at the end, and never loses or doubles text', () => {
+    expect(piecesOf('R = (', { from: 5, to: 5 }).at(-1)).toEqual({ text: '(', faulty: true });
+    for (const [from, to] of [[0, 0], [2, 99], [50, 60], [-3, 1]] as const) {
+      expect(piecesOf('R = (', { from, to }).map((piece) => piece.text).join('')).toBe('R = (');
+    }
+  });
+
+  it('is handed to the editor with its line and sentence', () => {
+    expect(placedFaults(errorResult(2, 'x', 0, 1))).toEqual([
+      { line: 2, from: 0, to: 1, message: 'A closing bracket was expected here.', severity: 'error' },
+    ]);
+    const notices = [{ message: 'Read as half of R.', from: 2, to: 4 }];
+    expect(placedFaults(numberResult({ notices }))).toEqual([
+      { line: 1, ...notices[0], severity: 'warning' },
+    ]);
+  });
+});
+
+describe('a change from outside the editor', () => {
+  it.each([
+    ['R = 12', 'R = 120', { from: 6, to: 6, insert: '0' }],
+    ['aaa', 'aa', { from: 2, to: 3, insert: '' }],
+    ['', 'x', { from: 0, to: 0, insert: 'x' }],
+    ['abc', 'axc', { from: 1, to: 2, insert: 'x' }],
+  ])('from %j to %j touches only what differs', (old, next, expected) => {
+    const change = smallestChange(old, next);
+    expect(change).toEqual(expected);
+    expect(old.slice(0, change.from) + change.insert + old.slice(change.to)).toBe(next);
+  });
+});
+
+describe('a note', () => {
+  it('sets TeX between dollar signs and leaves prices alone', () => {
+    expect(renderNote('side $\\sqrt{2}$')).toContain('<math');
+    expect(renderNote('from $5 to $6')).not.toContain('<math');
+    expect(renderNote('half of `$x$`')).not.toContain('<math');
+  });
+
+  it.each([
+    ['<script>alert(1)</script>', '<script'],
+    ['<img src=x onerror=alert(1)>', '<img'],
+    ['[x](javascript:alert(1))', 'href'],
+    ['![x](https://example.org/x.png)', '<img'],
+    ['$\\href{javascript:alert(1)}{x}$', 'href="javascript'],
+    ['$\\htmlData{x=1}{y}$', 'data-x'],
+  ])('never lets %j through as %j', (source, forbidden) => {
+    expect(renderNote(source)).not.toContain(forbidden);
+  });
+
+  it('begins its headings one level below that of the page, and lists them', () => {
+    expect(renderNote('# Ring')).toBe('<h2>Ring</h2>\n');
+    expect(headingsOf('# Ring\n\ntext\n\n## *Foils*')).toEqual([
+      { level: 1, text: 'Ring' },
+      { level: 2, text: 'Foils' },
+    ]);
+  });
+
+  it('stays on the page whatever TeX is written', () => {
+    expect(() => renderNote('$\\frac{1}{$ and $\\def\\a{\\a\\a}\\a$')).not.toThrow();
+  });
+});
+
+describe('a cutting step', () => {
+  it.each([
+    ['', { step: null }],
+    ['0.5 mm', { step: '0.5 mm' }],
+    ['0.5', { step: '0.5 mm' }],
+    ['1/64 in', { step: '1/64 in' }],
+  ])('reads %j', (text, expected) => {
+    expect(readStep(text, 'mm')).toEqual(expected);
+  });
+
+  it.each(['0', '0.0 mm', '-1 mm', '1/0 in', 'half', '5 kg', '1e3'])('refuses %j in a sentence', (text) => {
+    const read = readStep(text, 'mm');
+    expect('fault' in read && read.fault).toContain('is not a length');
+  });
+});
+
+describe('the drawing', () => {
+  it('letters zones without I and O, and goes on after Z', () => {
+    const letters = Array.from({ length: 50 }, (_, zone) => zoneLetter(zone));
+    expect(letters.slice(7, 15)).toEqual(['H', 'J', 'K', 'L', 'M', 'N', 'P', 'Q']);
+    expect(letters[24]).toBe('AA');
+    expect(new Set(letters).size).toBe(50);
+  });
+
+  it('hangs the figures of a mark below its letter', () => {
+    expect(splitMark('k_12')).toEqual({ stem: 'k', below: '12' });
+    expect(splitMark('pitch')).toEqual({ stem: 'pitch', below: '' });
+  });
+});
+
+describe('the choice after a conflict', () => {
+  const base = contentOf(dimension('a', 'R = 1'), dimension('b', 'S = 1'));
+  const mine = contentOf(dimension('a', 'R = 2'), dimension('b', 'S = 1'));
+  const head = {
+    number: 5,
+    author: 'Tam Osgood',
+    savedAt: '2026-01-02T03:04:05.000Z',
+    content: contentOf(dimension('a', 'R = 3'), dimension('b', 'S = 9')),
+  };
+
+  it('shows both texts and keeps what was chosen, cell by cell', async () => {
+    HTMLDialogElement.prototype.showModal ??= function (this: HTMLDialogElement) {
+      this.setAttribute('open', '');
+    };
+    const keep = vi.fn();
+    render(
+      <ConflictDialog
+        base={base}
+        mine={mine}
+        head={head}
+        state={{ kind: 'idle' }}
+        onKeep={keep}
+        onTakeTheirs={vi.fn()}
+        onClose={vi.fn()}
+      />,
+    );
+    for (const text of ['R = 2', 'R = 3', 'S = 1', 'S = 9']) expect(screen.getByText(text)).toBeInTheDocument();
+    const user = userEvent.setup();
+    await user.click(screen.getByRole('button', { name: 'Keep as version 6' }));
+    expect(keep.mock.lastCall?.[0].cells.map((cell: { source: string }) => cell.source)).toEqual(['R = 2', 'S = 9']);
+    await user.click(screen.getAllByRole('radio', { name: /Tam Osgood/ })[0]!);
+    await user.click(screen.getByRole('button', { name: 'Keep as version 6' }));
+    expect(keep.mock.lastCall?.[0].cells.map((cell: { source: string }) => cell.source)).toEqual(['R = 3', 'S = 9']);
+  });
+});

@@ -1,0 +1,128 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { copyForms } from '@/components/sheet/copy-menu';
+import { compartmentsOf, sayBriefly, sayDecimal, sayDimension, sayResult, shorten } from '@/components/sheet/wording';
+import { DECIDED, errorResult, numberResult, SUM_OF_ROOTS } from './sample-results';
+
+const labels = (result: Parameters<typeof compartmentsOf>[0], full = false) =>
+  compartmentsOf(result, full).map(({ label }) => label);
+
+describe('a shortened decimal', () => {
+  it('is a beginning of the decimal, never a rounding, and says that it was cut', () => {
+    expect(shorten('3.14626436994197234232913506571')).toBe('3.1462643699419…');
+    expect(shorten('0.000123456789012345678', 5)).toBe('0.00012345…');
+    expect(shorten('999.9999999', 4)).toBe('999.9…');
+  });
+
+  it('leaves short ones, whole ones and the exponent alone', () => {
+    for (const text of ['0', '500', '-0.75', '12345678901234567890']) expect(shorten(text)).toBe(text);
+    expect(shorten('1.2345678901234567890e-40')).toBe('1.2345678901234…e-40');
+  });
+
+  it('keeps every figure before the point, whatever the number', () => {
+    fc.assert(
+      fc.property(fc.bigInt({ min: 0n, max: 10n ** 30n }), fc.bigInt({ min: 10n ** 20n, max: 10n ** 25n }), (whole, part) => {
+        const cut = shorten(`${whole}.${part}`);
+        expect(cut.startsWith(`${whole}`)).toBe(true);
+        expect(`${whole}.${part}`.startsWith(cut.replace('…', ''))).toBe(true);
+      }),
+    );
+  });
+});
+
+describe('the compartments', () => {
+  it('say decimal, degree, reach and tower of √2 + √3', () => {
+    const items = compartmentsOf(SUM_OF_ROOTS, false);
+    expect(items.map(({ label, value }) => [label, value])).toEqual([
+      ['Decimal', '3.1462643699419…'],
+      ['Degree', '4'],
+      ['Reach', 'straightedge and compass'],
+      ['Tower', '2 roots'],
+    ]);
+    expect(items.find(({ label }) => label === 'Reach')?.tone).toBe('reached');
+  });
+
+  it('spend the room on every figure when the cell is in hand', () => {
+    expect(compartmentsOf(SUM_OF_ROOTS, true)[0]?.value).toBe('3.14626436994197234232913506571');
+  });
+
+  it('say in words what is not reached, and why when there is room', () => {
+    const seven = numberResult({
+      unit: null,
+      degree: 3,
+      tower: null,
+      reach: { straightedgeAndCompass: false, withTrisector: true, reason: 'Degree 3 is no power of two.' },
+    });
+    const reach = compartmentsOf(seven, true).find(({ label }) => label === 'Reach');
+    expect(reach?.tone).toBe('approximate');
+    expect(reach?.value).toBe('not with straightedge and compass; with an angle trisector, yes');
+    expect(labels(seven, true)).toContain('Because');
+    expect(labels(seven, false)).not.toContain('Because');
+  });
+
+  it('do not call a degree transcendental that only went over a limit', () => {
+    const pi = numberResult({ degree: null, tower: null, minimalPolynomial: null });
+    expect(compartmentsOf(pi, false).find(({ label }) => label === 'Degree')?.value).toBe('none: transcendental');
+    const over = { ...pi, omitted: [{ field: 'degree', code: 'limit-tower', message: 'Too high.' } as const] };
+    expect(compartmentsOf(over, false).find(({ label }) => label === 'Degree')?.value).toBe('over the limit');
+    expect(compartmentsOf(over, true).at(-1)).toMatchObject({ label: 'Left out', value: 'Too high.' });
+  });
+
+  it('write a value that is not real with both its parts, and say that it is not', () => {
+    const result = numberResult({
+      real: false,
+      unit: null,
+      decimal: { re: '0.5', im: '-0.25', digits: 30, terminates: true },
+    });
+    expect(sayDecimal(result, false)).toBe('0.5 − 0.25 i');
+    expect(labels(result)).toContain('Kind');
+  });
+
+  it('say of a statement that it is false, not only by colour', () => {
+    expect(compartmentsOf(DECIDED, false)[0]).toMatchObject({ value: 'false, exactly', tone: 'fault' });
+  });
+});
+
+describe('the drawn dimension', () => {
+  it('carries the cut size and the way it was rounded', () => {
+    const cut = { value: '551.0', step: '0.5 mm', rounding: 'half-even', direction: 'down' } as const;
+    expect(sayDimension(numberResult({ cut }))).toEqual({ figure: '551.0 mm', below: 'rounded down to 0.5 mm' });
+    expect(sayDimension(numberResult({ cut: { ...cut, direction: 'exact' } }))?.below).toBe('exact');
+  });
+
+  it('never passes a shortened figure off as exact', () => {
+    const long = numberResult({ decimal: { re: '551.2485534496', im: null, digits: 13, terminates: true } });
+    expect(sayDimension(long)).toEqual({ figure: '551.2485… mm', below: 'not rounded: no cutting step' });
+    expect(sayDimension(numberResult())?.below).toBe('exact');
+  });
+
+  it('is drawn for real lengths only', () => {
+    expect(sayDimension(SUM_OF_ROOTS)).toBeNull();
+    expect(sayDimension(numberResult({ unit: 'mm^2' }))).toBeNull();
+    expect(sayDimension(numberResult({ real: false }))).toBeNull();
+    expect(sayDimension(DECIDED)).toBeNull();
+  });
+});
+
+describe('a result in words', () => {
+  it('names the mark, the size, the degree and the reach', () => {
+    expect(sayResult(numberResult())).toBe('R is 500 mm, degree 1, reached with straightedge and compass.');
+    expect(sayResult(errorResult(1, 'R = (', 5, 5))).toContain('A closing bracket was expected here.');
+  });
+
+  it('is brief in the index of marks', () => {
+    expect(sayBriefly(numberResult())).toBe('500 mm');
+    expect(sayBriefly(numberResult({ unit: 'mm^2' }))).toBe('500 mm²');
+    expect(sayBriefly(DECIDED)).toBe('false');
+    expect(sayBriefly(errorResult(1, 'R', 0, 1))).toBe('error');
+  });
+
+  it('leaves the sheet as exact text, TeX, decimal and cut size, whole', () => {
+    expect(copyForms(SUM_OF_ROOTS).map(({ text }) => text)).toEqual([
+      'sqrt(2)+sqrt(3)',
+      '\\sqrt{2}+\\sqrt{3}',
+      '3.14626436994197234232913506571',
+    ]);
+    expect(copyForms(errorResult(1, 'R', 0, 1))).toEqual([]);
+  });
+});
