@@ -9,7 +9,7 @@ import {
   writeFileSync,
 } from 'node:fs';
 import { join } from 'node:path';
-import { isAlive, run, say, SetupError } from './run-command.mjs';
+import { isProcessOf, run, say, SetupError } from './run-command.mjs';
 
 const SOURCES = [
   'app',
@@ -75,7 +75,9 @@ export async function ensureBuild(root) {
 
 function refuseWhileServed(root) {
   if (!existsSync(servingFolder(root))) return;
-  const serving = readdirSync(servingFolder(root)).map(Number).filter(isAlive);
+  const serving = readdirSync(servingFolder(root))
+    .map(Number)
+    .filter((pid) => isProcessOf(pid, 'lib/setup/'));
   if (serving.length === 0) return;
   throw new SetupError(
     `the sources have changed, but process ${serving.join(', ')} is serving the present build; stop it first.`,

@@ -25,6 +25,13 @@ export function findProgram(name) {
   return null;
 }
 
+const running = new Set();
+
+/** Ends the programs that `run` still waits for. */
+export function endRunning() {
+  for (const child of running) child.kill('SIGTERM');
+}
+
 /**
  * Runs a program to its end. Its output is held back, and part of the error when it fails; with
  * `show` it goes to the terminal instead.
@@ -35,6 +42,7 @@ export function run(program, args, { show = false, input, ...options } = {}) {
   const stdio = show ? [stdin, 'inherit', 'inherit'] : [stdin, 'pipe', 'pipe'];
   return new Promise((resolve, reject) => {
     const child = spawn(program, args, { ...options, stdio });
+    running.add(child);
     let output = '';
     let all = '';
     child.stdout?.on('data', (chunk) => {
@@ -47,6 +55,7 @@ export function run(program, args, { show = false, input, ...options } = {}) {
     child.stdin?.end(input);
     child.on('error', reject);
     child.on('close', (code, signal) => {
+      running.delete(child);
       if (code === 0) return resolve(output);
       const tail = all.trim().split('\n').slice(-25).join('\n');
       reject(new SetupError(`${program} ${args.join(' ')} ended with ${code ?? signal}\n${tail}`));
@@ -64,6 +73,16 @@ export function isAlive(pid) {
   try {
     const stat = readFileSync(`/proc/${pid}/stat`, 'utf8');
     return !stat.slice(stat.lastIndexOf(')')).startsWith(') Z');
+  } catch {
+    return true;
+  }
+}
+
+/** Whether the process runs and its command line holds `word`: not a later one with the same number. */
+export function isProcessOf(pid, word) {
+  if (!Number.isInteger(pid) || !isAlive(pid)) return false;
+  try {
+    return readFileSync(`/proc/${pid}/cmdline`, 'utf8').includes(word);
   } catch {
     return true;
   }

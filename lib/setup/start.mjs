@@ -7,7 +7,7 @@ import { checkNodeVersion, ensureNodePackages } from './node-packages.mjs';
 import { readOptions } from './options.mjs';
 import { prepareDatabase } from './prepare-database.mjs';
 import { PrivateServer } from './private-server.mjs';
-import { isAlive, say, SetupError } from './run-command.mjs';
+import { endRunning, isProcessOf, say, SetupError } from './run-command.mjs';
 import { serve, stopLeftover } from './serve.mjs';
 import { makeDataFolder, portIsFree, secret } from './state.mjs';
 
@@ -20,6 +20,7 @@ let stopping = null;
 
 function stop() {
   stopping ??= (async () => {
+    endRunning();
     for (const step of undo.reverse()) await step();
   })();
   return stopping;
@@ -90,19 +91,9 @@ async function findEarlier(mark) {
   } catch {
     return null;
   }
-  if (isStartOf(note.pid)) return note;
-  if (isStartOf(note.server, 'next')) await stopLeftover(note.server);
+  if (isProcessOf(note.pid, 'lib/setup/start.mjs')) return note;
+  if (isProcessOf(note.server, 'next')) await stopLeftover(note.server);
   return null;
-}
-
-/** Whether the process is one of ours, and not a later one that was given the same number. */
-function isStartOf(pid, word = 'lib/setup/start.mjs') {
-  if (!Number.isInteger(pid) || !isAlive(pid)) return false;
-  try {
-    return readFileSync(`/proc/${pid}/cmdline`, 'utf8').includes(word);
-  } catch {
-    return true;
-  }
 }
 
 /** Starts the private database unless another one is named, and says what the application needs to know. */

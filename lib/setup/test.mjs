@@ -4,7 +4,7 @@ import { fileURLToPath } from 'node:url';
 import { ensureBuild, markServing, runScript } from './build.mjs';
 import { ensureDebianPackages, SERVER_PACKAGES, TEST_PACKAGES } from './debian-packages.mjs';
 import { checkNodeVersion, ensureNodePackages } from './node-packages.mjs';
-import { findProgram, run, say, SetupError } from './run-command.mjs';
+import { endRunning, findProgram, run, say, SetupError } from './run-command.mjs';
 import { serve } from './serve.mjs';
 import { findFreePort } from './state.mjs';
 import { openTestDatabase } from './test-database.mjs';
@@ -26,6 +26,7 @@ async function cleanUp() {
 for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
   process.on(signal, () => {
     say('stopping …');
+    endRunning();
     cleanUp().finally(() => process.exit(130));
   });
 }
