@@ -1,0 +1,58 @@
+/** Expressions as plain text that parses back, and as TeX. */
+
+import type { Sum, Term } from './form';
+
+interface Style {
+  root(inner: string): string;
+  i: string;
+  /** Joins the factors of a product: coefficient, i, roots. */
+  product(coef: string | null, factors: string[]): string;
+  quotient(top: string, bottom: string, needsBrackets: boolean): string;
+}
+
+const TEXT: Style = {
+  root: (inner) => `sqrt(${inner})`,
+  i: 'i',
+  product: (coef, factors) => [...(coef === null ? [] : [coef]), ...factors].join('*'),
+  quotient: (top, bottom, brackets) => (brackets ? `(${top})/${bottom}` : `${top}/${bottom}`),
+};
+
+const TEX: Style = {
+  root: (inner) => `\\sqrt{${inner}}`,
+  i: 'i',
+  product: (coef, factors) => `${coef ?? ''}${factors.join(' ')}`,
+  quotient: (top, bottom) => `\\frac{${top}}{${bottom}}`,
+};
+
+export function textOf(s: Sum): string {
+  return render(s, TEXT);
+}
+
+export function texOf(s: Sum): string {
+  return render(s, TEX);
+}
+
+function render(s: Sum, style: Style): string {
+  if (s.terms.length === 0) return '0';
+  if (s.den === 1n) return renderTerms(s.terms, style);
+  const negative = s.terms.every((t) => t.coef < 0n);
+  const terms = negative ? s.terms.map((t) => ({ ...t, coef: -t.coef })) : s.terms;
+  const body = style.quotient(renderTerms(terms, style), s.den.toString(), terms.length > 1);
+  return negative ? `-${body}` : body;
+}
+
+function renderTerms(terms: readonly Term[], style: Style): string {
+  let out = '';
+  for (const t of terms) {
+    const negative = t.coef < 0n;
+    const size = negative ? -t.coef : t.coef;
+    const factors = [
+      ...(t.imaginary ? [style.i] : []),
+      ...t.roots.map((r) => style.root(render(r, style))),
+    ];
+    const coef = factors.length > 0 && size === 1n ? null : size.toString();
+    const body = style.product(coef, factors);
+    out += negative ? `-${body}` : out === '' ? body : `+${body}`;
+  }
+  return out;
+}
