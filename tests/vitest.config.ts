@@ -23,7 +23,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'node',
-          include: ['tests/**/*.test.ts'],
+          include: ['tests/**/*.test.{ts,mjs}'],
           exclude: [...elsewhere, ...inFolders(onDatabase)],
           setupFiles: ['tests/setup/seed.ts'],
           testTimeout: 20_000,
