@@ -9,12 +9,31 @@ import { findFunction } from './names';
  */
 export function explainSyntax(source: string, refused: Span): Problem {
   const found = new Explainer(tokenize(source)).run();
-  const { message, span } = found ?? { message: 'This part of the line cannot be read; an expression was expected.', span: refused };
+  const { message, span } = found ?? {
+    message: 'This part of the line cannot be read; an expression was expected.',
+    span: refused,
+  };
   const to = Math.max(span.to, Math.min(span.from + 1, source.length));
   return { code: 'syntax', message, from: Math.min(span.from, to), to };
 }
 
-type TokenKind = 'number' | 'name' | 'function' | 'open' | 'close' | 'comma' | 'sign' | 'times' | 'caret' | 'superscript' | 'root' | 'relation' | 'equals' | 'value' | 'other' | 'end';
+type TokenKind =
+  | 'number'
+  | 'name'
+  | 'function'
+  | 'open'
+  | 'close'
+  | 'comma'
+  | 'sign'
+  | 'times'
+  | 'caret'
+  | 'superscript'
+  | 'root'
+  | 'relation'
+  | 'equals'
+  | 'value'
+  | 'other'
+  | 'end';
 
 interface Token extends Span {
   readonly kind: TokenKind;
@@ -88,7 +107,7 @@ const MENDS: Readonly<Record<string, string>> = {
   '¾': 'write `3/4`',
   '¹': 'write a power with `^`',
   '⁴': 'write a power with `^`, as in `x^4`',
-  '_': 'a mark begins with a letter',
+  _: 'a mark begins with a letter',
   '!': 'two values are unequal when `!=` holds between them',
   $: 'prices have no place here; a mark begins with a letter',
 };
@@ -107,15 +126,24 @@ class Explainer {
 
   run(): Finding | null {
     const [first, second] = this.tokens;
-    if (first !== undefined && second?.kind === 'equals' && ['name', 'function', 'value'].includes(first.kind)) {
+    if (
+      first !== undefined &&
+      second?.kind === 'equals' &&
+      ['name', 'function', 'value'].includes(first.kind)
+    ) {
       this.defines = true;
       this.index = 2;
-      if (first.kind === 'value') return { message: `\`${first.text}\` cannot be a mark; a mark begins with a letter.`, span: first };
+      if (first.kind === 'value')
+        return {
+          message: `\`${first.text}\` cannot be a mark; a mark begins with a letter.`,
+          span: first,
+        };
     }
     let due: 'value' | 'operator' = 'value';
     for (;;) {
       const token = this.current();
-      const step: Finding | 'value' | 'operator' | null = due === 'value' ? this.valueDue(token) : this.operatorDue(token);
+      const step: Finding | 'value' | 'operator' | null =
+        due === 'value' ? this.valueDue(token) : this.operatorDue(token);
       if (step === null || typeof step === 'object') return step;
       due = step;
       this.index += 1;
@@ -146,28 +174,55 @@ class Explainer {
         this.open.push({ token, call: this.previous()?.kind === 'function' });
         return 'value';
       case 'sign':
+        if (this.previous()?.kind === 'root')
+          return {
+            message: `\`√\` takes the next number, name or bracket; put what starts with \`${token.text}\` in brackets.`,
+            span: token,
+          };
+        return 'value';
       case 'root':
         return 'value';
       case 'close': {
         const before = this.previous();
-        if (before?.kind === 'open') return { message: 'There is nothing between these brackets; a value was expected.', span: { from: before.from, to: token.to } };
-        if (this.open.length === 0) return { message: 'This `)` closes a bracket that was never opened.', span: token };
-        return { message: `A value was expected before \`)\`${this.afterPrevious()}.`, span: token };
+        if (before?.kind === 'open')
+          return {
+            message: 'There is nothing between these brackets; a value was expected.',
+            span: { from: before.from, to: token.to },
+          };
+        if (this.open.length === 0)
+          return { message: 'This `)` closes a bracket that was never opened.', span: token };
+        return {
+          message: `A value was expected before \`)\`${this.afterPrevious()}.`,
+          span: token,
+        };
       }
       case 'times':
         if (this.previous()?.text === '*' && token.text === '*') {
-          return { message: 'A power is written with `^`, not with `**`.', span: { from: token.from - 1, to: token.to } };
+          return {
+            message: 'A power is written with `^`, not with `**`.',
+            span: { from: token.from - 1, to: token.to },
+          };
         }
-        return { message: `Found \`${token.text}\` where a value was expected${this.afterPrevious()}.`, span: token };
+        return {
+          message: `Found \`${token.text}\` where a value was expected${this.afterPrevious()}.`,
+          span: token,
+        };
       case 'end': {
         const before = this.previous();
-        if (before === undefined) return { message: 'A value was expected, and the line is empty.', span: token };
-        return { message: `The line ends${this.afterPrevious()}; a value was expected.`, span: before };
+        if (before === undefined)
+          return { message: 'A value was expected, and the line is empty.', span: token };
+        return {
+          message: `The line ends${this.afterPrevious()}; a value was expected.`,
+          span: before,
+        };
       }
       case 'other':
         return this.foreign(token, 'a value');
       default:
-        return { message: `Found \`${token.text}\` where a value was expected${this.afterPrevious()}.`, span: token };
+        return {
+          message: `Found \`${token.text}\` where a value was expected${this.afterPrevious()}.`,
+          span: token,
+        };
     }
   }
 
@@ -190,17 +245,24 @@ class Explainer {
         return this.valueDue(token);
       case 'superscript':
         return this.previous()?.kind === 'superscript'
-          ? { message: 'Two exponents stand side by side; put the first power in brackets.', span: token }
+          ? {
+              message: 'Two exponents stand side by side; put the first power in brackets.',
+              span: token,
+            }
           : 'operator';
       case 'close':
-        if (this.open.pop() === undefined) return { message: 'This `)` closes a bracket that was never opened.', span: token };
+        if (this.open.pop() === undefined)
+          return { message: 'This `)` closes a bracket that was never opened.', span: token };
         return 'operator';
       case 'sign':
       case 'times':
         return 'value';
       case 'caret':
         return this.previous()?.kind === 'superscript'
-          ? { message: 'Two exponents stand side by side; put the first power in brackets.', span: token }
+          ? {
+              message: 'Two exponents stand side by side; put the first power in brackets.',
+              span: token,
+            }
           : 'value';
       case 'comma':
         if (this.open.at(-1)?.call === true) return 'value';
@@ -219,8 +281,16 @@ class Explainer {
           span: token,
         };
       case 'relation':
-        if (this.open.length > 0) return { message: `\`${token.text}\` compares whole sides of a line and cannot stand inside brackets.`, span: token };
-        if (this.defines) return { message: `A mark holds a value; \`${token.text}\` decides and needs a line of its own.`, span: token };
+        if (this.open.length > 0)
+          return {
+            message: `\`${token.text}\` compares whole sides of a line and cannot stand inside brackets.`,
+            span: token,
+          };
+        if (this.defines)
+          return {
+            message: `A mark holds a value; \`${token.text}\` decides and needs a line of its own.`,
+            span: token,
+          };
         return 'value';
       case 'end':
         return this.unclosed(token);

@@ -1,4 +1,4 @@
-/** The error codes of the result schema. */
+/** The error codes of the result schema; `fault` marks a line that met a mistake of the program itself. */
 export type ErrorCode =
   | 'syntax'
   | 'unknown-name'
@@ -13,7 +13,8 @@ export type ErrorCode =
   | 'limit-tower'
   | 'limit-digits'
   | 'limit-time'
-  | 'limit-memory';
+  | 'limit-memory'
+  | 'fault';
 
 /** A part of a line: offsets in UTF-16 units, the end not included. */
 export interface Span {

@@ -14,14 +14,26 @@ export interface FunctionWord {
   readonly most: number | null;
 }
 
-function word(signature: string, meaning: string, least = 1, most: number | null = least): FunctionWord {
+function word(
+  signature: string,
+  meaning: string,
+  least = 1,
+  most: number | null = least,
+): FunctionWord {
   return { name: signature.slice(0, signature.indexOf('(')), signature, meaning, least, most };
 }
 
 export const FUNCTIONS: readonly FunctionWord[] = [
-  word('sqrt(x)', 'The principal square root; halves a dimension, so the root of an area is a length.'),
+  word(
+    'sqrt(x)',
+    'The principal square root; halves a dimension, so the root of an area is a length.',
+  ),
   word('cbrt(x)', 'The real cube root, where it has a form in square roots.'),
-  word('root(p, near)', 'The real root of the polynomial p in x that lies nearest to the second value.', 2),
+  word(
+    'root(p, near)',
+    'The real root of the polynomial p in x that lies nearest to the second value.',
+    2,
+  ),
   word('abs(x)', 'The size of x: its distance from 0.'),
   word('re(x)', 'The real part.'),
   word('im(x)', 'The imaginary part, a real value.'),
@@ -29,14 +41,37 @@ export const FUNCTIONS: readonly FunctionWord[] = [
   word('sin(angle)', 'The sine of an angle; a plain number is in radians.'),
   word('cos(angle)', 'The cosine of an angle; a plain number is in radians.'),
   word('tan(angle)', 'The tangent of an angle; a plain number is in radians.'),
-  word('asin(x)', 'The angle from -90° to 90° with this sine, where it is an exact part of a turn.'),
-  word('acos(x)', 'The angle from 0° to 180° with this cosine, where it is an exact part of a turn.'),
-  word('atan(x)', 'The angle from -90° to 90° with this tangent, where it is an exact part of a turn.'),
+  word(
+    'asin(x)',
+    'The angle from -90° to 90° with this sine, where it is an exact part of a turn.',
+  ),
+  word(
+    'acos(x)',
+    'The angle from 0° to 180° with this cosine, where it is an exact part of a turn.',
+  ),
+  word(
+    'atan(x)',
+    'The angle from -90° to 90° with this tangent, where it is an exact part of a turn.',
+  ),
   word('min(a, b, …)', 'The least of the values.', 1, null),
   word('max(a, b, …)', 'The greatest of the values.', 1, null),
-  word('floor(x, step)', 'The greatest whole number, or multiple of the step, that is not above x.', 1, 2),
-  word('round(x, step)', 'The nearest whole number, or multiple of the step; a tie goes to the even one.', 1, 2),
-  word('chord(R, angle)', 'The straight line between two points of a circle of radius R, that angle apart.', 2),
+  word(
+    'floor(x, step)',
+    'The greatest whole number, or multiple of the step, that is not above x.',
+    1,
+    2,
+  ),
+  word(
+    'round(x, step)',
+    'The nearest whole number, or multiple of the step; a tie goes to the even one.',
+    1,
+    2,
+  ),
+  word(
+    'chord(R, angle)',
+    'The straight line between two points of a circle of radius R, that angle apart.',
+    2,
+  ),
   word('sagitta(R, angle)', 'From the middle of that chord to the arc: R (1 - cos(angle/2)).', 2),
   word('versine(angle)', '1 - cos(angle).'),
 ];

@@ -29,7 +29,12 @@ export function addSums(engine: Engine, a: PiSum, b: PiSum): PiSum {
   const sum = new Map(a);
   for (const [exponent, coefficient] of b) {
     const before = sum.get(exponent);
-    store(engine, sum, exponent, before === undefined ? coefficient : engine.add(before, coefficient));
+    store(
+      engine,
+      sum,
+      exponent,
+      before === undefined ? coefficient : engine.add(before, coefficient),
+    );
   }
   return sum;
 }
@@ -59,10 +64,14 @@ export function multiplySums(engine: Engine, a: PiSum, b: PiSum): PiSum {
 
 /** Division by a sum of several powers of π has no value of this form: `not-exact`. */
 export function divideSums(engine: Engine, a: PiSum, b: PiSum): PiSum {
-  if (b.size === 0) fail('division-by-zero', 'The divisor is exactly 0; a value other than 0 was expected.');
+  if (b.size === 0)
+    fail('division-by-zero', 'The divisor is exactly 0; a value other than 0 was expected.');
   const [divisor] = b;
   if (b.size > 1 || divisor === undefined) {
-    fail('not-exact', 'The divisor is a sum with different powers of π; only division by a single multiple of a power of π is exact here.');
+    fail(
+      'not-exact',
+      'The divisor is a sum with different powers of π; only division by a single multiple of a power of π is exact here.',
+    );
   }
   const [exponent, coefficient] = divisor;
   const quotient = new Map<number, Num>();
@@ -78,7 +87,10 @@ export function sqrtSum(engine: Engine, a: PiSum): PiSum {
   if (a.size === 0) return a;
   const [term] = a;
   if (a.size > 1 || term === undefined || term[0] % 2 !== 0) {
-    fail('not-exact', 'The square root of this value with π in it is not a multiple of a whole power of π, so it has no exact form here.');
+    fail(
+      'not-exact',
+      'The square root of this value with π in it is not a multiple of a whole power of π, so it has no exact form here.',
+    );
   }
   return new Map([[term[0] / 2, engine.sqrt(term[1])]]);
 }
@@ -86,7 +98,8 @@ export function sqrtSum(engine: Engine, a: PiSum): PiSum {
 export function powSum(engine: Engine, a: PiSum, exponent: bigint): PiSum {
   const algebraic = asAlgebraic(engine, a);
   if (algebraic !== null) return fromNum(engine, engine.pow(algebraic, exponent));
-  if (exponent < 0n) return divideSums(engine, new Map([[0, engine.integer(1n)]]), powSum(engine, a, -exponent));
+  if (exponent < 0n)
+    return divideSums(engine, new Map([[0, engine.integer(1n)]]), powSum(engine, a, -exponent));
   if (exponent > BigInt(LARGEST_EXPONENT)) checkExponent(LARGEST_EXPONENT + 1);
   const [term] = a;
   if (a.size === 1 && term !== undefined) {
@@ -109,7 +122,10 @@ function store(engine: Engine, sum: Map<number, Num>, exponent: number, coeffici
 
 function checkExponent(exponent: number): void {
   if (Math.abs(exponent) > LARGEST_EXPONENT) {
-    fail('limit-size', `The exponent of π would be ${Math.abs(exponent)} or more; the limit is ${LARGEST_EXPONENT}.`);
+    fail(
+      'limit-size',
+      `The exponent of π would be ${Math.abs(exponent)} or more; the limit is ${LARGEST_EXPONENT}.`,
+    );
   }
 }
 
@@ -128,8 +144,10 @@ export function enclose(engine: Engine, sum: PiSum, bits: number): Enclosure {
   let low = engine.integer(0n);
   let high = low;
   for (const [exponent, coefficient] of sum) {
-    const power = (numerator: bigint): Num => engine.pow(engine.rational(numerator, denominator), BigInt(exponent));
-    const [smaller, larger] = exponent < 0 ? [power(highPi), power(lowPi)] : [power(lowPi), power(highPi)];
+    const power = (numerator: bigint): Num =>
+      engine.pow(engine.rational(numerator, denominator), BigInt(exponent));
+    const [smaller, larger] =
+      exponent < 0 ? [power(highPi), power(lowPi)] : [power(lowPi), power(highPi)];
     const positive = engine.sign(coefficient) >= 0;
     low = engine.add(low, engine.mul(coefficient, positive ? smaller : larger));
     high = engine.add(high, engine.mul(coefficient, positive ? larger : smaller));
@@ -143,12 +161,20 @@ const MOST_BITS = 1 << 17;
  * Asks a question of ever narrower enclosures until it is answered. The questions put here (a sign, rounded digits,
  * a whole part) always have an answer, as the value is transcendental: it is never 0 and never a tie.
  */
-export function decideByEnclosures<T>(engine: Engine, sum: PiSum, startBits: number, ask: (enclosure: Enclosure) => T | null): T {
+export function decideByEnclosures<T>(
+  engine: Engine,
+  sum: PiSum,
+  startBits: number,
+  ask: (enclosure: Enclosure) => T | null,
+): T {
   for (let bits = startBits; bits <= MOST_BITS; bits *= 2) {
     const answer = ask(enclose(engine, sum, bits));
     if (answer !== null) return answer;
   }
-  return fail('limit-digits', `π would be needed to more than ${MOST_BITS} binary digits, which is the limit.`);
+  return fail(
+    'limit-digits',
+    `π would be needed to more than ${MOST_BITS} binary digits, which is the limit.`,
+  );
 }
 
 /** Exact sign of a real sum. */

@@ -29,7 +29,10 @@ const RELATIONS: Readonly<Record<string, Relation>> = { '≤': '<=', '≥': '>='
  * Accepts any text without line breaks; offsets in the answer are offsets in it. Never throws: a line that does not
  * parse, is too long or too deeply nested is answered with a problem. Cost: linear in the length.
  */
-export function readLine(source: string, limits: Pick<typeof LANGUAGE_LIMITS, 'lineLength' | 'nesting'> = LANGUAGE_LIMITS): Reading {
+export function readLine(
+  source: string,
+  limits: Pick<typeof LANGUAGE_LIMITS, 'lineLength' | 'nesting'> = LANGUAGE_LIMITS,
+): Reading {
   if (source.length > limits.lineLength) {
     const message = `The line has ${source.length} characters; the limit is ${limits.lineLength}.`;
     return problem('limit-size', message, { from: limits.lineLength, to: source.length });
@@ -110,15 +113,25 @@ class TreeReader {
         return { kind: 'problem', problem: keptWord(mark, target) };
       }
       const markSpan = { from: target.from, to: target.to };
-      return { kind: 'statement', statement: { kind: 'definition', mark, markSpan, value: this.expression(value), ...span } };
+      return {
+        kind: 'statement',
+        statement: { kind: 'definition', mark, markSpan, value: this.expression(value), ...span },
+      };
     }
     if (node.name === 'Decision') {
       const children = childrenOf(node);
-      const relations = children.filter((child) => child.name === 'Relation').map((child) => this.relation(child));
-      const sides = children.filter((child) => child.name !== 'Relation').map((child) => this.expression(child));
+      const relations = children
+        .filter((child) => child.name === 'Relation')
+        .map((child) => this.relation(child));
+      const sides = children
+        .filter((child) => child.name !== 'Relation')
+        .map((child) => this.expression(child));
       return { kind: 'statement', statement: { kind: 'decision', sides, relations, ...span } };
     }
-    return { kind: 'statement', statement: { kind: 'value', value: this.expression(node), ...span } };
+    return {
+      kind: 'statement',
+      statement: { kind: 'value', value: this.expression(node), ...span },
+    };
   }
 
   private relation(node: SyntaxNode): Relation {
@@ -139,7 +152,13 @@ class TreeReader {
         return this.unit(node);
       case 'Quantity': {
         const [number, unit] = this.exactly(node, 2);
-        return { kind: 'quantity', numerator: this.number(number), denominator: null, unit: this.unitOrPower(unit), ...span };
+        return {
+          kind: 'quantity',
+          numerator: this.number(number),
+          denominator: null,
+          unit: this.unitOrPower(unit),
+          ...span,
+        };
       }
       case 'Sum':
         return this.sum(node);
@@ -173,7 +192,13 @@ class TreeReader {
 
   private unit(node: SyntaxNode): UnitNode {
     const text = this.text(node);
-    return { kind: 'unit', name: text === '°' ? 'deg' : text, degreeSign: text === '°', from: node.from, to: node.to };
+    return {
+      kind: 'unit',
+      name: text === '°' ? 'deg' : text,
+      degreeSign: text === '°',
+      from: node.from,
+      to: node.to,
+    };
   }
 
   private unitOrPower(node: SyntaxNode): UnitNode | PowerNode {
@@ -219,27 +244,49 @@ class TreeReader {
     const children = childrenOf(node);
     const [base, raised] = children;
     const exponent = children[2];
-    if (base === undefined || raised === undefined) throw new Error('A power has a base and an exponent.');
+    if (base === undefined || raised === undefined)
+      throw new Error('A power has a base and an exponent.');
     const span = { from: node.from, to: node.to };
     if (exponent === undefined) {
       const text = this.text(raised) === '²' ? '2' : '3';
       const two: NumberNode = { kind: 'number', text, from: raised.from, to: raised.to };
-      return { kind: 'power', base: this.expression(base), exponent: two, superscript: true, ...span };
+      return {
+        kind: 'power',
+        base: this.expression(base),
+        exponent: two,
+        superscript: true,
+        ...span,
+      };
     }
-    return { kind: 'power', base: this.expression(base), exponent: this.expression(exponent), superscript: false, ...span };
+    return {
+      kind: 'power',
+      base: this.expression(base),
+      exponent: this.expression(exponent),
+      superscript: false,
+      ...span,
+    };
   }
 
   private call(node: SyntaxNode): CallNode {
     const [name, list] = this.exactly(node, 2);
-    const args = childrenOf(list).filter((child) => !['OpenBracket', 'CloseBracket', 'Comma'].includes(child.name));
-    return { kind: 'call', name: this.text(name), args: args.map((arg) => this.expression(arg)), from: node.from, to: node.to };
+    const args = childrenOf(list).filter(
+      (child) => !['OpenBracket', 'CloseBracket', 'Comma'].includes(child.name),
+    );
+    return {
+      kind: 'call',
+      name: this.text(name),
+      args: args.map((arg) => this.expression(arg)),
+      from: node.from,
+      to: node.to,
+    };
   }
 
   private exactly(node: SyntaxNode, count: 2): [SyntaxNode, SyntaxNode];
   private exactly(node: SyntaxNode, count: 3): [SyntaxNode, SyntaxNode, SyntaxNode];
   private exactly(node: SyntaxNode, count: number): SyntaxNode[] {
     const children = childrenOf(node);
-    if (children.length !== count) throw new Error(`A ${node.name} has ${count} parts, not ${children.length}.`);
+    if (children.length !== count)
+      throw new Error(`A ${node.name} has ${count} parts, not ${children.length}.`);
     return children;
   }
 
@@ -252,7 +299,9 @@ class TreeReader {
  * `3/4 in` is three quarters of an inch, as on every rule, although `R / 4 in` divides by four inches: a whole number
  * over a whole number with a unit is one quantity, unless the first is itself a divisor.
  */
-function joinFractions(factors: readonly ProductNode['factors'][number][]): ProductNode['factors'][number][] {
+function joinFractions(
+  factors: readonly ProductNode['factors'][number][],
+): ProductNode['factors'][number][] {
   const joined: ProductNode['factors'][number][] = [];
   for (const factor of factors) {
     const before = joined.at(-1);
@@ -265,7 +314,12 @@ function joinFractions(factors: readonly ProductNode['factors'][number][]): Prod
       factor.value.denominator === null &&
       isWhole(factor.value.numerator)
     ) {
-      const value: QuantityNode = { ...factor.value, numerator: before.value, denominator: factor.value.numerator, from: before.value.from };
+      const value: QuantityNode = {
+        ...factor.value,
+        numerator: before.value,
+        denominator: factor.value.numerator,
+        from: before.value.from,
+      };
       joined[joined.length - 1] = { ...before, value };
     } else {
       joined.push(factor);

@@ -2,7 +2,12 @@ import type { Span } from './failure';
 
 /** The syntax tree of one line. Sums and products are flat; brackets stay in the tree so that a line is set as typed. */
 export type Statement =
-  | ({ readonly kind: 'definition'; readonly mark: string; readonly markSpan: Span; readonly value: Expression } & Span)
+  | ({
+      readonly kind: 'definition';
+      readonly mark: string;
+      readonly markSpan: Span;
+      readonly value: Expression;
+    } & Span)
   | ({
       readonly kind: 'decision';
       /** One more side than relations: `a < b <= c` has three sides. */
@@ -32,7 +37,11 @@ export type NumberNode = { readonly kind: 'number'; readonly text: string } & Sp
 
 export type MarkNode = { readonly kind: 'mark'; readonly name: string } & Span;
 
-export type UnitNode = { readonly kind: 'unit'; readonly name: string; readonly degreeSign: boolean } & Span;
+export type UnitNode = {
+  readonly kind: 'unit';
+  readonly name: string;
+  readonly degreeSign: boolean;
+} & Span;
 
 /** A number with its unit, read as one: `1200 mm`, `3/4 in`, `5 mm^2`. */
 export type QuantityNode = {
@@ -45,7 +54,11 @@ export type QuantityNode = {
 export type SumNode = {
   readonly kind: 'sum';
   /** The first term always has the sign `+`; a line that starts with a minus has a `negative` there. */
-  readonly terms: readonly { readonly sign: '+' | '-'; readonly value: Expression; readonly operator: Span }[];
+  readonly terms: readonly {
+    readonly sign: '+' | '-';
+    readonly value: Expression;
+    readonly operator: Span;
+  }[];
 } & Span;
 
 export type ProductNode = {
@@ -65,7 +78,11 @@ export type PowerNode = {
   readonly superscript: boolean;
 } & Span;
 
-export type CallNode = { readonly kind: 'call'; readonly name: string; readonly args: readonly Expression[] } & Span;
+export type CallNode = {
+  readonly kind: 'call';
+  readonly name: string;
+  readonly args: readonly Expression[];
+} & Span;
 
 /** The expressions directly inside this one. */
 export function partsOf(node: Expression): readonly Expression[] {
@@ -76,7 +93,9 @@ export function partsOf(node: Expression): readonly Expression[] {
     case 'unit':
       return [];
     case 'quantity':
-      return node.denominator === null ? [node.numerator, node.unit] : [node.numerator, node.denominator, node.unit];
+      return node.denominator === null
+        ? [node.numerator, node.unit]
+        : [node.numerator, node.denominator, node.unit];
     case 'sum':
       return node.terms.map((term) => term.value);
     case 'product':

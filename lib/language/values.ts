@@ -36,7 +36,10 @@ const LARGEST_DIMENSION = 60;
 
 export function number(sum: PiSum, length = 0): NumberValue {
   if (Math.abs(length) > LARGEST_DIMENSION) {
-    fail('limit-size', `The unit would have the exponent ${length}; the limit is ${LARGEST_DIMENSION}.`);
+    fail(
+      'limit-size',
+      `The unit would have the exponent ${length}; the limit is ${LARGEST_DIMENSION}.`,
+    );
   }
   return { kind: 'number', sum, length };
 }
@@ -48,12 +51,20 @@ export function angle(turns: Num): AngleValue {
 /** What a value is, to be read in a sentence: `a length`, `an area`, `a plain number`, `an angle`. */
 export function describe(value: Value): string {
   if (value.kind === 'angle') return 'an angle';
-  const names: Readonly<Record<number, string>> = { 0: 'a plain number', 1: 'a length', 2: 'an area', 3: 'a volume' };
+  const names: Readonly<Record<number, string>> = {
+    0: 'a plain number',
+    1: 'a length',
+    2: 'an area',
+    3: 'a volume',
+  };
   return names[value.length] ?? `a value in mm^${value.length}`;
 }
 
 function mismatch(action: string, a: Value, b: Value, hint = ''): never {
-  return fail('unit-mismatch', `The left side is ${describe(a)} and the right side is ${describe(b)}; ${action}${hint}.`);
+  return fail(
+    'unit-mismatch',
+    `The left side is ${describe(a)} and the right side is ${describe(b)}; ${action}${hint}.`,
+  );
 }
 
 function hintFor(a: Value, b: Value): string {
@@ -65,7 +76,8 @@ function hintFor(a: Value, b: Value): string {
 
 export function add(engine: Engine, a: Value, b: Value): Value {
   if (a.kind === 'angle' && b.kind === 'angle') return angle(engine.add(a.turns, b.turns));
-  if (a.kind === 'number' && b.kind === 'number' && a.length === b.length) return number(addSums(engine, a.sum, b.sum), a.length);
+  if (a.kind === 'number' && b.kind === 'number' && a.length === b.length)
+    return number(addSums(engine, a.sum, b.sum), a.length);
   return mismatch('a sum needs two values of one kind', a, b, hintFor(a, b));
 }
 
@@ -78,11 +90,16 @@ export function subtract(engine: Engine, a: Value, b: Value): Value {
 }
 
 export function negate(engine: Engine, a: Value): Value {
-  return a.kind === 'angle' ? angle(engine.neg(a.turns)) : number(negateSum(engine, a.sum), a.length);
+  return a.kind === 'angle'
+    ? angle(engine.neg(a.turns))
+    : number(negateSum(engine, a.sum), a.length);
 }
 
 export function multiply(engine: Engine, a: Value, b: Value): Value {
-  if (a.kind === 'angle') return b.kind === 'angle' ? mismatch('two angles cannot be multiplied', a, b) : scale(engine, a, b, a, b);
+  if (a.kind === 'angle')
+    return b.kind === 'angle'
+      ? mismatch('two angles cannot be multiplied', a, b)
+      : scale(engine, a, b, a, b);
   if (b.kind === 'angle') return scale(engine, b, a, a, b);
   return number(multiplySums(engine, a.sum, b.sum), a.length + b.length);
 }
@@ -90,7 +107,8 @@ export function multiply(engine: Engine, a: Value, b: Value): Value {
 export function divide(engine: Engine, a: Value, b: Value): Value {
   if (b.kind === 'angle') {
     if (a.kind !== 'angle') return mismatch('only an angle can be divided by an angle', a, b);
-    if (engine.isZero(b.turns)) fail('division-by-zero', 'The divisor is an angle of exactly 0; another angle was expected.');
+    if (engine.isZero(b.turns))
+      fail('division-by-zero', 'The divisor is an angle of exactly 0; another angle was expected.');
     return number(fromNum(engine, engine.div(a.turns, b.turns)));
   }
   if (a.kind === 'angle') {
@@ -101,13 +119,29 @@ export function divide(engine: Engine, a: Value, b: Value): Value {
 }
 
 /** An angle times a plain, real, algebraic number. */
-function scale(engine: Engine, turned: AngleValue, factor: NumberValue, left: Value, right: Value): AngleValue {
+function scale(
+  engine: Engine,
+  turned: AngleValue,
+  factor: NumberValue,
+  left: Value,
+  right: Value,
+): AngleValue {
   if (factor.length !== 0) {
-    mismatch('an angle is multiplied or divided only by a plain number', left, right, ' (the length of an arc is `2 pi R angle / turn`)');
+    mismatch(
+      'an angle is multiplied or divided only by a plain number',
+      left,
+      right,
+      ' (the length of an arc is `2 pi R angle / turn`)',
+    );
   }
   const algebraic = asAlgebraic(engine, factor.sum);
-  if (algebraic === null) return fail('not-exact', 'An angle times a value with π in it has no exact form here; a factor without π was expected.');
-  if (!engine.isReal(algebraic)) return fail('domain', 'An angle is multiplied only by a real number; this factor is not real.');
+  if (algebraic === null)
+    return fail(
+      'not-exact',
+      'An angle times a value with π in it has no exact form here; a factor without π was expected.',
+    );
+  if (!engine.isReal(algebraic))
+    return fail('domain', 'An angle is multiplied only by a real number; this factor is not real.');
   return angle(engine.mul(turned.turns, algebraic));
 }
 
@@ -115,16 +149,25 @@ export function power(engine: Engine, base: Value, exponent: bigint): Value {
   const plain = needNumber(base, 'A power needs a number as its base');
   const least = BigInt(LARGEST_DIMENSION);
   if (plain.length !== 0 && (exponent > least || exponent < -least)) {
-    fail('limit-size', `The unit would have an exponent beyond ${LARGEST_DIMENSION}, which is the limit.`);
+    fail(
+      'limit-size',
+      `The unit would have an exponent beyond ${LARGEST_DIMENSION}, which is the limit.`,
+    );
   }
-  return number(powSum(engine, plain.sum, exponent), plain.length * Number(plain.length === 0 ? 0n : exponent));
+  return number(
+    powSum(engine, plain.sum, exponent),
+    plain.length * Number(plain.length === 0 ? 0n : exponent),
+  );
 }
 
 /** The principal square root. A dimension must be even to be halved. */
 export function squareRoot(engine: Engine, value: Value): NumberValue {
   const plain = needNumber(value, 'A square root needs a number');
   if (plain.length % 2 !== 0) {
-    fail('unit-mismatch', `A square root halves the dimension and this is ${describe(plain)}; an area or a plain number was expected.`);
+    fail(
+      'unit-mismatch',
+      `A square root halves the dimension and this is ${describe(plain)}; an area or a plain number was expected.`,
+    );
   }
   return number(sqrtSum(engine, plain.sum), plain.length / 2);
 }
@@ -138,9 +181,12 @@ export function needNumber(value: Value, need: string): NumberValue {
 /** A number without a unit and without π. `need` begins the sentence. */
 export function needAlgebraic(engine: Engine, value: Value, need: string): Num {
   const plain = needNumber(value, need);
-  if (plain.length !== 0) fail('unit-mismatch', `${need} without a unit, and this is ${describe(plain)}.`);
+  if (plain.length !== 0)
+    fail('unit-mismatch', `${need} without a unit, and this is ${describe(plain)}.`);
   const algebraic = asAlgebraic(engine, plain.sum);
-  return algebraic ?? fail('not-exact', `${need} without π in it; with π there is no exact form here.`);
+  return (
+    algebraic ?? fail('not-exact', `${need} without π in it; with π there is no exact form here.`)
+  );
 }
 
 export function isRealValue(engine: Engine, value: Value): boolean {
@@ -164,19 +210,28 @@ export function differenceForDecision(engine: Engine, a: Value, b: Value): Value
 /** Sign of a real value; the order of others is asked in vain: `domain`. */
 export function signOf(engine: Engine, value: Value): -1 | 0 | 1 {
   if (value.kind === 'angle') return engine.sign(value.turns);
-  if (!isRealValue(engine, value)) fail('domain', 'Only real values have an order, and the difference of these is not real.');
+  if (!isRealValue(engine, value))
+    fail('domain', 'Only real values have an order, and the difference of these is not real.');
   return signOfSum(engine, value.sum);
 }
 
 /** -1, 0 or 1 as a is below, equal to or above b; both must be real and of one kind. */
 export function compareValues(engine: Engine, a: Value, b: Value): -1 | 0 | 1 {
-  for (const [value, side] of [[a, 'left'], [b, 'right']] as const) {
-    if (!isRealValue(engine, value)) fail('domain', `Only real values have an order, and the ${side} one is not real.`);
+  for (const [value, side] of [
+    [a, 'left'],
+    [b, 'right'],
+  ] as const) {
+    if (!isRealValue(engine, value))
+      fail('domain', `Only real values have an order, and the ${side} one is not real.`);
   }
   return signOf(engine, differenceForDecision(engine, a, b));
 }
 
 /** Applies a change that keeps real and imaginary parts apart, such as conjugation, to every coefficient. */
-export function mapNumber(engine: Engine, value: NumberValue, change: (coefficient: Num) => Num): NumberValue {
+export function mapNumber(
+  engine: Engine,
+  value: NumberValue,
+  change: (coefficient: Num) => Num,
+): NumberValue {
   return number(mapSum(engine, value.sum, change), value.length);
 }

@@ -51,7 +51,11 @@ function editDistance(a: string, b: string): number {
     const current = [row];
     for (let column = 1; column <= b.length; column += 1) {
       const change = a[row - 1] === b[column - 1] ? 0 : 1;
-      let cost = Math.min(at(last, column) + 1, at(current, column - 1) + 1, at(last, column - 1) + change);
+      let cost = Math.min(
+        at(last, column) + 1,
+        at(current, column - 1) + 1,
+        at(last, column - 1) + change,
+      );
       if (row > 1 && column > 1 && a[row - 1] === b[column - 2] && a[row - 2] === b[column - 1]) {
         cost = Math.min(cost, at(beforeLast, column - 2) + 1);
       }

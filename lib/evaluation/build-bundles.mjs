@@ -1,0 +1,3 @@
+import { ensureBundles } from './bundles.mjs';
+
+await ensureBundles({ force: true });

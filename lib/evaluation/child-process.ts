@@ -1,0 +1,102 @@
+import { type ChildProcess, spawn } from 'node:child_process';
+import path from 'node:path';
+import { createInterface } from 'node:readline';
+import type { Socket } from 'node:net';
+import { EVALUATION_LIMITS } from './limits';
+import type { Job, Report } from './messages';
+
+/** The bundle of `child.ts`. The path is made at run time so that a bundler of the application leaves it alone. */
+export function bundlePath(): string {
+  return path.join(/* turbopackIgnore: true */ process.cwd(), '.build', 'child.mjs');
+}
+
+/** How a child ended: by us, by running out of heap, by the system's limit on processor time, or otherwise. */
+export type Ending = 'stopped' | 'memory' | 'processor-time' | 'crash';
+
+/**
+ * One child process with its limits. It works on one job at a time and does not keep the parent alive while idle.
+ * A heap beyond its limit aborts the child and nothing else; the system ends a child that spins for ever even when its
+ * parent is gone, through the limit on processor time that it is started with.
+ */
+export class EvaluationChild {
+  processorTime = 0;
+  private readonly child: ChildProcess;
+  private stopped = false;
+  private listener: ((report: Report) => void) | null = null;
+  readonly ended: Promise<Ending>;
+  private over = false;
+
+  constructor() {
+    const limit = `ulimit -t ${EVALUATION_LIMITS.childProcessorTime}; ulimit -c 0; exec "$0" "$@"`;
+    const options = [
+      `--max-old-space-size=${EVALUATION_LIMITS.childHeap}`,
+      '--stack-size=900',
+      bundlePath(),
+    ];
+    this.child = spawn('/bin/sh', ['-c', limit, process.execPath, ...options], {
+      env: { NODE_ENV: 'production' },
+      stdio: ['ignore', 'pipe', 'ignore', 'ipc'],
+    });
+    this.ended = new Promise((resolve) => {
+      this.child.once('error', () => this.finish(resolve, 'crash'));
+      this.child.once('exit', (code, signal) => this.finish(resolve, this.endingOf(code, signal)));
+    });
+    if (this.child.stdout !== null) {
+      createInterface({ input: this.child.stdout }).on('line', (line) =>
+        this.listener?.(JSON.parse(line) as Report),
+      );
+    }
+    // A send that meets a dying child is reported here as well; `ended` already says so.
+    this.child.on('error', () => undefined);
+    this.hold(false);
+  }
+
+  get alive(): boolean {
+    return !this.over;
+  }
+
+  /** Sends a job; reports go to the listener until another job is sent. */
+  start(job: Job, listener: (report: Report) => void): void {
+    this.hold(true);
+    this.listener = (report) => {
+      if (report.job !== job.job) return;
+      if (report.kind === 'done') this.processorTime = report.processorTime;
+      listener(report);
+    };
+    this.child.send(job, () => undefined);
+  }
+
+  /** Ends the work on a job and lets the parent end while this child waits. */
+  rest(): void {
+    this.listener = null;
+    this.hold(false);
+  }
+
+  kill(): void {
+    this.stopped = true;
+    this.child.kill('SIGKILL');
+  }
+
+  private finish(resolve: (ending: Ending) => void, ending: Ending): void {
+    if (this.over) return;
+    this.over = true;
+    resolve(ending);
+  }
+
+  private endingOf(code: number | null, signal: NodeJS.Signals | null): Ending {
+    if (this.stopped) return 'stopped';
+    if (signal === 'SIGXCPU' || signal === 'SIGKILL') return 'processor-time';
+    // The run time aborts when the heap is exhausted: by signal, or as 128 + 6 through a shell.
+    return signal === 'SIGABRT' || signal === 'SIGTRAP' || signal === 'SIGILL' || code === 134
+      ? 'memory'
+      : 'crash';
+  }
+
+  private hold(needed: boolean): void {
+    const stdout = this.child.stdout as Socket | null;
+    for (const handle of [this.child, this.child.channel, stdout]) {
+      if (needed) handle?.ref();
+      else handle?.unref();
+    }
+  }
+}

@@ -1,0 +1,57 @@
+import { writeSync } from 'node:fs';
+import { evaluateCells, evaluateExpression } from '@/lib/language/index';
+import type { Job, Refusal, Report } from './messages';
+
+/**
+ * The program of a child process: takes one job after another and reports line by line.
+ * Reports go out by a blocking write, so that a report stands even if the next line never ends or ends the process.
+ */
+function report(message: Report): void {
+  const bytes = Buffer.from(`${JSON.stringify(message)}\n`);
+  for (let written = 0; written < bytes.length;) written += writeSync(1, bytes, written);
+}
+
+function run(job: Job): void {
+  const options = {
+    started: ({ cell, line }: { cell: number; line: number }) =>
+      report({ kind: 'started', job: job.job, cell, line }),
+    finished: (
+      { cell, line }: { cell: number; line: number },
+      result: Extract<Report, { kind: 'finished' }>['result'],
+    ) => report({ kind: 'finished', job: job.job, cell, line, result }),
+    known: new Map(job.known),
+    refused: new Map(job.refused),
+  };
+  try {
+    const result =
+      job.expression === null ? null : evaluateExpression(job.expression, job.settings, options);
+    if (job.expression === null) evaluateCells(job.cells, job.settings, options);
+    const { user, system } = process.cpuUsage();
+    report({ kind: 'done', job: job.job, result, processorTime: (user + system) / 1e6 });
+  } catch (error) {
+    report({
+      kind: 'fault',
+      job: job.job,
+      refusal: refusalOf(error),
+      detail: error instanceof Error ? (error.stack ?? error.message) : String(error),
+    });
+  }
+}
+
+/** The run time's own limits (stack, length of an array or integer) speak through a RangeError. */
+function refusalOf(error: unknown): Refusal {
+  if (error instanceof RangeError) {
+    return {
+      code: 'limit-size',
+      message:
+        'A value in this line grew beyond what the program can hold; a smaller one was expected.',
+    };
+  }
+  return {
+    code: 'fault',
+    message: 'This line met a mistake in the program; the line itself may be right.',
+  };
+}
+
+process.on('message', (job) => run(job as Job));
+process.on('disconnect', () => process.exit(0));

@@ -1,0 +1,42 @@
+import type { CellSource, ErrorCode, Result, Settings } from '@/lib/language/index';
+
+/** What the pool asks a child. Keys name a line by the position of its cell and its number there. */
+export interface Job {
+  readonly job: number;
+  readonly expression: string | null;
+  readonly cells: readonly CellSource[];
+  readonly settings: Partial<Settings>;
+  readonly known: readonly (readonly [string, Result])[];
+  readonly refused: readonly (readonly [string, Refusal])[];
+}
+
+/** Why a line is not to be evaluated. */
+export interface Refusal {
+  readonly code: ErrorCode;
+  readonly message: string;
+}
+
+/** What a child reports, one JSON line each, written before it goes on. */
+export type Report =
+  | { readonly kind: 'started'; readonly job: number; readonly cell: number; readonly line: number }
+  | {
+      readonly kind: 'finished';
+      readonly job: number;
+      readonly cell: number;
+      readonly line: number;
+      readonly result: Result;
+    }
+  | {
+      readonly kind: 'fault';
+      readonly job: number;
+      readonly refusal: Refusal;
+      readonly detail: string;
+    }
+  | {
+      readonly kind: 'done';
+      readonly job: number;
+      /** Only for an expression. */
+      readonly result: Result | null;
+      /** Processor time of the child since its start, in seconds. */
+      readonly processorTime: number;
+    };

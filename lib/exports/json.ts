@@ -1,0 +1,54 @@
+import type { Result, Settings } from '@/lib/language/index';
+import {
+  CAUTION,
+  type ExportedCell,
+  type ExportedNotebook,
+  type ExportedResults,
+  resultsOf,
+} from './notebook';
+
+/** A whole notebook as data: results by the result schema, with the identity of the version they belong to. */
+export interface NotebookDocument {
+  schema: 1;
+  /** Version of the engine that gave the results. */
+  engine: string;
+  notebook: { id: string; title: string; workshop: string };
+  version: { number: number; author: string; savedAt: string };
+  settings: Settings;
+  cells: (ExportedCell & { results?: readonly Result[] })[];
+  caution: string;
+}
+
+export function notebookDocument(
+  notebook: ExportedNotebook,
+  results: ExportedResults,
+  engine: string,
+): NotebookDocument {
+  const { id, title, workshop, version, settings, cells } = notebook;
+  return {
+    schema: 1,
+    engine,
+    notebook: { id, title, workshop },
+    version: { number: version.number, author: version.author, savedAt: version.savedAt },
+    settings: {
+      digits: settings.digits,
+      unit: settings.unit,
+      step: settings.step,
+      rounding: settings.rounding,
+    },
+    cells: cells.map((cell) => {
+      const own = { id: cell.id, kind: cell.kind, source: cell.source };
+      return cell.kind === 'note' ? own : { ...own, results: resultsOf(cell, results) };
+    }),
+    caution: CAUTION,
+  };
+}
+
+/** The document as text, indented, with a last line break. */
+export function writeNotebookJson(
+  notebook: ExportedNotebook,
+  results: ExportedResults,
+  engine: string,
+): string {
+  return `${JSON.stringify(notebookDocument(notebook, results, engine), null, 2)}\n`;
+}

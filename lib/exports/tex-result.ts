@@ -1,0 +1,102 @@
+import { type Cut, type Result, typesetMark } from '@/lib/language/index';
+import { breakableDigits, escapeTex } from './tex-text';
+
+/** A formula longer than this is set as running text, where TeX may break it over lines. */
+const LONGEST_DISPLAY = 160;
+
+/**
+ * TeX of one result, to be copied into a document that loads amsmath: the line as typed and what it is worth.
+ * A statement gives its verdict and an error its sentence.
+ */
+export function resultTex(result: Result): string {
+  switch (result.kind) {
+    case 'number': {
+      const unit = result.unit === null ? '' : unitTex(result.unit);
+      const value =
+        unit !== '' && /.[+-]/.test(result.exact.text)
+          ? `\\left(${result.exact.tex}\\right)${unit}`
+          : result.exact.tex + unit;
+      return result.exact.staged
+        ? stagedFormula(result.typeset, result.exact.tex, unit)
+        : formula(result.typeset, value);
+    }
+    case 'angle':
+      return formula(result.typeset, result.exact.tex);
+    case 'truth':
+      return `${displayed(result.typeset)}\n\\noindent ${result.truth.value ? 'True' : 'False'}. ${escapeTex(result.truth.reason)}\\par`;
+    case 'error': {
+      const typed = result.typeset === null ? '' : `${displayed(result.typeset)}\n`;
+      return `${typed}\\noindent Error (${escapeTex(result.error.code)}): ${escapeTex(result.error.message)}\\par`;
+    }
+  }
+}
+
+function formula(typed: string, value: string): string {
+  return displayed(typed === value ? typed : `${typed}=${value}`);
+}
+
+/** A staged value is a display of several lines by itself and stands below what was typed. */
+function stagedFormula(typed: string, stages: string, unit: string): string {
+  return `${displayed(typed)}\n\\noindent which is, in stages${unit === '' ? '' : ` and in $${unit}$`},\n${displayed(stages)}`;
+}
+
+function displayed(formulaTex: string): string {
+  return formulaTex.length > LONGEST_DISPLAY && !formulaTex.includes('\\begin')
+    ? `\\begin{sloppypar}\\noindent$\\displaystyle ${formulaTex}$\\end{sloppypar}`
+    : `\\[${formulaTex}\\]`;
+}
+
+/** `mm^2` as TeX. */
+export function unitTex(unit: string): string {
+  const [name = '', exponent] = unit.split('^');
+  return exponent === undefined ? `\\,\\mathrm{${name}}` : `\\,\\mathrm{${name}}^{${exponent}}`;
+}
+
+/** What stands beside a value, in plain words, one entry for each compartment of the sheet. */
+export function compartments(result: Result): { name: string; tex: string }[] {
+  if (result.kind === 'truth' || result.kind === 'error') return [];
+  const { decimal } = result;
+  const unit =
+    result.kind === 'angle' ? '^{\\circ}' : result.unit === null ? '' : unitTex(result.unit);
+  const digits = (value: string): string =>
+    breakableDigits(value.replace(/e([+-]?\d+)$/, '\\cdot 10^{$1}').replace('10^{+', '10^{'));
+  const imaginary =
+    decimal.im === null
+      ? ''
+      : `${decimal.im.startsWith('-') ? '' : '+'}${digits(decimal.im)}\\,\\mathrm{i}`;
+  const whole =
+    imaginary === '' ? digits(decimal.re) : `\\left(${digits(decimal.re)}${imaginary}\\right)`;
+  const entries = [
+    { name: 'Decimal', tex: `$${whole}${unit}$${decimal.terminates ? ', exactly' : ''}` },
+  ];
+  if (result.kind === 'number') {
+    if (result.cut !== undefined)
+      entries.push({ name: 'Cut size', tex: cutTex(result.cut, result.unit ?? '') });
+    entries.push({
+      name: 'Degree',
+      tex:
+        result.degree === null
+          ? result.omitted === undefined
+            ? 'none (transcendental)'
+            : 'not worked out'
+          : String(result.degree),
+    });
+  }
+  entries.push({ name: 'Reach', tex: escapeTex(result.reach.reason) });
+  return entries;
+}
+
+const DIRECTIONS: Readonly<Record<Cut['direction'], string>> = {
+  up: 'rounded up, so greater than the exact value',
+  down: 'rounded down, so less than the exact value',
+  exact: 'the exact value itself',
+};
+
+function cutTex(cut: Cut, unit: string): string {
+  return `$${breakableDigits(cut.value)}${unitTex(unit)}$, ${DIRECTIONS[cut.direction]} (step ${escapeTex(cut.step)}, ${cut.rounding})`;
+}
+
+/** The mark of a result, for the margin. */
+export function markTex(result: Result): string | null {
+  return result.mark === null ? null : `$${typesetMark(result.mark)}$`;
+}

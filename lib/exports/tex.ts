@@ -1,0 +1,83 @@
+import type { Result } from '@/lib/language/index';
+import {
+  CAUTION,
+  type ExportedCell,
+  type ExportedNotebook,
+  type ExportedResults,
+  resultsOf,
+} from './notebook';
+import { noteTex } from './tex-note';
+import { compartments, markTex, resultTex } from './tex-result';
+import { escapeTex, typewriter } from './tex-text';
+
+/**
+ * A notebook as a complete LaTeX document: title block, every entry with its mark, exact value, decimal, cut size and
+ * reach in words, the notes, and the caution. Needs amsmath and nothing else; any TeX engine compiles it, as it is
+ * ASCII. No text of the notebook reaches TeX as a command.
+ */
+export function writeNotebookTex(notebook: ExportedNotebook, results: ExportedResults): string {
+  return [
+    '\\documentclass[a4paper]{article}',
+    '\\usepackage{amsmath}',
+    '\\setlength{\\parindent}{0pt}',
+    '\\setlength{\\parskip}{0.5\\baselineskip}',
+    '\\allowdisplaybreaks',
+    '\\emergencystretch=3em',
+    '\\begin{document}',
+    titleBlock(notebook),
+    ...notebook.cells.map((cell) => cellTex(cell, resultsOf(cell, results))),
+    '\\bigskip\\hrule\\medskip',
+    `{\\small\\textbf{Caution.} ${escapeTex(CAUTION)}\\par}`,
+    '\\end{document}',
+    '',
+  ].join('\n\n');
+}
+
+/** One cell, as it stands in the document; to be copied into another that loads amsmath. */
+export function cellTex(cell: ExportedCell, results: readonly Result[]): string {
+  return cell.kind === 'note' ? noteTex(cell.source) : results.map(entryTex).join('\n\n');
+}
+
+function entryTex(result: Result): string {
+  const mark = markTex(result);
+  const head = mark === null ? '' : `\\fbox{${mark}}\\quad `;
+  const lines = compartments(result).map(
+    ({ name, tex }) => `{\\small\\textbf{${name}:} ${tex}\\par}`,
+  );
+  return [
+    `\\medskip\\noindent ${head}${typewriter(result.source.trim())}\\par`,
+    resultTex(result),
+    ...lines,
+  ].join('\n');
+}
+
+const ROUNDING_WORDS: Readonly<Record<ExportedNotebook['settings']['rounding'], string>> = {
+  'half-even': 'to the nearest step, ties to the even one',
+  'half-up': 'to the nearest step, ties up',
+  up: 'up to a step',
+  down: 'down to a step',
+};
+
+function titleBlock(notebook: ExportedNotebook): string {
+  const { settings, version } = notebook;
+  const fields: [string, string][] = [
+    ['Workshop', notebook.workshop],
+    ['Notebook', notebook.id],
+    ['Version', String(version.number)],
+    ['Saved', `${version.savedAt} (UTC)`],
+    ['Author', version.author],
+    ['Unit', settings.unit],
+    [
+      'Cutting step',
+      settings.step === null ? 'none' : `${settings.step}, ${ROUNDING_WORDS[settings.rounding]}`,
+    ],
+  ];
+  const rows = fields.map(([name, value]) => `\\textbf{${name}:} ${escapeTex(value)}\\par`);
+  return [
+    '\\hrule\\medskip',
+    `{\\Large\\bfseries ${escapeTex(notebook.title)}\\par}`,
+    '\\medskip',
+    ...rows,
+    '\\medskip\\hrule\\bigskip',
+  ].join('\n');
+}

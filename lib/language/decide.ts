@@ -1,0 +1,120 @@
+import type { Engine } from '../engine/index';
+import { decimalOfSum, inUnit, unitName, writeSum } from './give-value';
+import { attemptOrFail } from './attempt';
+import type { Evaluator } from './evaluator';
+import { fromNum } from './pi-sum';
+import type { Settings } from './settings';
+import type { Relation, Statement } from './syntax';
+import {
+  type Value,
+  compareValues,
+  differenceForDecision,
+  isRealValue,
+  isZeroValue,
+  signOf,
+} from './values';
+
+type Decision = Extract<Statement, { kind: 'decision' }>;
+
+const HOLDS: Readonly<Record<Relation, (order: -1 | 0 | 1) => boolean>> = {
+  '==': (order) => order === 0,
+  '!=': (order) => order !== 0,
+  '<': (order) => order < 0,
+  '<=': (order) => order <= 0,
+  '>': (order) => order > 0,
+  '>=': (order) => order >= 0,
+};
+
+const LONGEST_VALUE_IN_A_REASON = 160;
+
+/**
+ * Decides a chain of relations exactly: it is true when each holds between its two sides. The reason speaks of the
+ * first relation that fails, or of the last one.
+ */
+export function decide(
+  engine: Engine,
+  evaluator: Evaluator,
+  statement: Decision,
+  settings: Settings,
+): { value: boolean; reason: string } {
+  const values = attemptOrFail(engine, () => statement.sides.map((side) => evaluator.value(side)));
+  let reason = '';
+  for (const [index, relation] of statement.relations.entries()) {
+    const [left, right] = [values[index], values[index + 1]] as [Value, Value];
+    evaluator.at = {
+      from: statement.sides[index]?.from ?? 0,
+      to: statement.sides[index + 1]?.to ?? 0,
+    };
+    const holds = attemptOrFail(engine, () => holdsBetween(engine, left, relation, right));
+    reason = attemptOrFail(engine, () => explain(engine, left, right, settings));
+    if (!holds)
+      return {
+        value: false,
+        reason: statement.relations.length > 1 ? `Relation ${index + 1} fails. ${reason}` : reason,
+      };
+  }
+  return {
+    value: true,
+    reason:
+      statement.relations.length > 1 ? `All ${statement.relations.length} relations hold.` : reason,
+  };
+}
+
+function holdsBetween(engine: Engine, left: Value, relation: Relation, right: Value): boolean {
+  if (relation === '==' || relation === '!=') {
+    return isZeroValue(engine, differenceForDecision(engine, left, right)) === (relation === '==');
+  }
+  return HOLDS[relation](compareValues(engine, left, right));
+}
+
+/** One sentence on how the sides stand to each other. */
+function explain(engine: Engine, left: Value, right: Value, settings: Settings): string {
+  const difference = differenceForDecision(engine, left, right);
+  if (isZeroValue(engine, difference)) {
+    const { text, approximate } = inWords(engine, left, settings);
+    return approximate
+      ? `Both sides are the same value, about ${text}.`
+      : `Both sides are ${text}.`;
+  }
+  if (!isRealValue(engine, difference))
+    return `The sides differ by about ${about(engine, difference, settings)}.`;
+  const [word, gap] =
+    signOf(engine, difference) > 0
+      ? ['greater', difference]
+      : ['less', differenceForDecision(engine, right, left)];
+  return `The left side is ${word} by about ${about(engine, gap, settings)}.`;
+}
+
+function inWords(
+  engine: Engine,
+  value: Value,
+  settings: Settings,
+): { text: string; approximate: boolean } {
+  if (value.kind === 'angle') {
+    const degrees = engine.mul(value.turns, engine.integer(360n));
+    return { text: `${engine.write(degrees).text} deg`, approximate: false };
+  }
+  const { text, staged } = writeSum(engine, inUnit(engine, value, settings.unit));
+  if (staged || text.length > LONGEST_VALUE_IN_A_REASON)
+    return { text: about(engine, value, settings), approximate: true };
+  return { text: withUnit(text, unitName(settings.unit, value.length)), approximate: false };
+}
+
+const DIGITS_IN_A_REASON = 4;
+
+function about(engine: Engine, value: Value, settings: Settings): string {
+  const sum =
+    value.kind === 'angle'
+      ? fromNum(engine, engine.mul(value.turns, engine.integer(360n)))
+      : inUnit(engine, value, settings.unit);
+  const { re, im } = decimalOfSum(engine, sum, DIGITS_IN_A_REASON);
+  const unit = value.kind === 'angle' ? 'deg' : unitName(settings.unit, value.length);
+  if (im === null) return withUnit(re, unit);
+  const imaginary = im.startsWith('-') ? `- ${im.slice(1)}` : `+ ${im}`;
+  return unit === null ? `${re} ${imaginary} i` : `(${re} ${imaginary} i) ${unit}`;
+}
+
+function withUnit(text: string, unit: string | null): string {
+  if (unit === null) return text;
+  return /.[+-]/.test(text) ? `(${text}) ${unit}` : `${text} ${unit}`;
+}

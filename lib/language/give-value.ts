@@ -1,0 +1,196 @@
+import type { Engine, Num } from '../engine/index';
+import { attemptOrFail } from './attempt';
+import { fail } from './failure';
+import { findUnit } from './names';
+import { type PiSum, asAlgebraic, decideByEnclosures, mapSum } from './pi-sum';
+import type { DecimalResult, Exact, NumberResult, Omission } from './result';
+import { TRANSCENDENTAL_REACH, reachOfAngle, reachOfConstructible } from './reach';
+import { cutSize } from './cut';
+import { MOST_DIGITS, type Settings, type Step } from './settings';
+import { type AngleValue, type NumberValue, type Value, isRealValue } from './values';
+
+export type GivenSettings = Settings & { readonly stepLength: Step | null };
+
+type Given<T> = Omit<T, 'line' | 'source' | 'mark' | 'typeset' | 'notices'>;
+export type GivenNumber = Given<NumberResult>;
+export interface GivenAngle {
+  kind: 'angle';
+  exact: Exact;
+  decimal: DecimalResult;
+  reach: NumberResult['reach'];
+}
+
+/**
+ * Writes a value out as the result schema has it, in the unit of the settings. Degree, minimal polynomial and tower
+ * that go over a limit are left out and named; everything else that fails, fails the whole with a `Failure`. Each part
+ * has a step budget of its own.
+ */
+export function giveValue(
+  engine: Engine,
+  value: Value,
+  settings: GivenSettings,
+): GivenNumber | GivenAngle {
+  return value.kind === 'angle'
+    ? giveAngle(engine, value, settings)
+    : giveNumber(engine, value, settings);
+}
+
+function giveNumber(engine: Engine, value: NumberValue, settings: GivenSettings): GivenNumber {
+  const sum = attemptOrFail(engine, () => inUnit(engine, value, settings.unit));
+  const algebraic = asAlgebraic(engine, sum);
+  const real = isRealValue(engine, value);
+  const { stepLength } = settings;
+  const cut =
+    real && value.length === 1 && stepLength !== null
+      ? { cut: attemptOrFail(engine, () => cutSize(engine, value.sum, settings, stepLength)) }
+      : {};
+  const common = {
+    kind: 'number' as const,
+    exact: attemptOrFail(engine, () => writeSum(engine, sum)),
+    unit: unitName(settings.unit, value.length),
+    real,
+    decimal: attemptOrFail(engine, () => decimalOfSum(engine, sum, settings.digits)),
+    ...cut,
+  };
+  return algebraic === null
+    ? {
+        ...common,
+        degree: null,
+        minimalPolynomial: null,
+        tower: null,
+        reach: { ...TRANSCENDENTAL_REACH },
+      }
+    : { ...common, ...giveStructure(engine, algebraic) };
+}
+
+function giveStructure(
+  engine: Engine,
+  value: Num,
+): Pick<GivenNumber, 'degree' | 'minimalPolynomial' | 'tower' | 'reach' | 'omitted'> {
+  const omitted: Omission[] = [];
+  const attempt = <T>(field: Omission['field'], work: () => T): T | null => {
+    const outcome = engine.attempt(work);
+    if (outcome.kind === 'value') return outcome.value;
+    omitted.push({ field, code: outcome.code, message: outcome.message });
+    return null;
+  };
+  const degree = attempt('degree', () => engine.degree(value));
+  const polynomial = attempt('minimalPolynomial', () =>
+    engine.minimalPolynomial(value).map(String),
+  );
+  const tower = attempt('tower', () => engine.tower(value));
+  const reach = reachOfConstructible(engine.isRational(value), tower?.length ?? null);
+  return {
+    degree,
+    minimalPolynomial: polynomial,
+    tower,
+    reach,
+    ...(omitted.length > 0 ? { omitted } : {}),
+  };
+}
+
+function giveAngle(engine: Engine, value: AngleValue, settings: GivenSettings): GivenAngle {
+  return {
+    kind: 'angle',
+    exact: attemptOrFail(engine, () => writeAngle(engine, value.turns)),
+    decimal: attemptOrFail(engine, () =>
+      engine.decimal(engine.mul(value.turns, engine.integer(360n)), settings.digits),
+    ),
+    reach: attemptOrFail(engine, () => reachOfAngle(engine, value.turns)),
+  };
+}
+
+/** The number of units of the settings that a value in millimetres is. */
+export function inUnit(engine: Engine, value: NumberValue, unit: Settings['unit']): PiSum {
+  const word = findUnit(unit);
+  if (word === undefined)
+    throw new Error(`The unit "${unit}" of the settings is not in the name table.`);
+  if (value.length === 0 || unit === 'mm') return value.sum;
+  const factor = engine.pow(engine.rational(word.size.d, word.size.n), BigInt(value.length));
+  return mapSum(engine, value.sum, (coefficient) => engine.mul(coefficient, factor));
+}
+
+export function unitName(unit: Settings['unit'], length: number): string | null {
+  if (length === 0) return null;
+  return length === 1 ? unit : `${unit}^${length}`;
+}
+
+/** An angle as a number of degrees where that is a whole number, else as a part of a turn. */
+function writeAngle(engine: Engine, turns: Num): Exact {
+  const degrees = engine.mul(turns, engine.integer(360n));
+  if (engine.isInteger(degrees)) {
+    const { text, tex } = engine.write(degrees);
+    return { text: `${text} deg`, tex: `${tex}^{\\circ}`, staged: false };
+  }
+  const part = engine.asRational(turns);
+  if (part === null) {
+    const { text, tex, staged } = engine.write(degrees);
+    return { text: `(${text}) deg`, tex: `\\left(${tex}\\right)^{\\circ}`, staged };
+  }
+  const [sign, size] = part.n < 0n ? ['-', -part.n] : ['', part.n];
+  const text = size === 1n ? `${sign}turn/${part.d}` : `${sign}${size} turn/${part.d}`;
+  return { text, tex: `${sign}\\frac{${size}}{${part.d}}\\,\\mathrm{turn}`, staged: false };
+}
+
+/** Text and TeX of a sum of multiples of powers of π, highest power first. */
+export function writeSum(engine: Engine, sum: PiSum): Exact {
+  const algebraic = asAlgebraic(engine, sum);
+  if (algebraic !== null) return engine.write(algebraic);
+  const terms = [...sum]
+    .sort(([a], [b]) => b - a)
+    .map(([exponent, coefficient]) => writeTerm(engine, exponent, coefficient));
+  const join = (parts: readonly string[]): string =>
+    parts.reduce((before, part) => before + (part.startsWith('-') ? part : `+${part}`));
+  return {
+    text: join(terms.map((term) => term.text)),
+    tex: join(terms.map((term) => term.tex)),
+    staged: terms.some((term) => term.staged),
+  };
+}
+
+function writeTerm(engine: Engine, exponent: number, coefficient: Num): Exact {
+  const written = engine.write(coefficient);
+  if (exponent === 0) return written;
+  const powerText = exponent === 1 ? 'pi' : `pi^${exponent}`;
+  const powerTex = exponent === 1 ? '\\pi' : `\\pi^{${exponent}}`;
+  const rational = engine.asRational(coefficient);
+  if (rational?.d === 1n && (rational.n === 1n || rational.n === -1n)) {
+    const sign = rational.n < 0n ? '-' : '';
+    return { text: sign + powerText, tex: sign + powerTex, staged: false };
+  }
+  const compound = rational === null && /.[+-]/.test(written.text);
+  return {
+    text: compound ? `(${written.text})*${powerText}` : `${written.text}*${powerText}`,
+    tex: compound ? `\\left(${written.tex}\\right)${powerTex}` : `${written.tex}\\,${powerTex}`,
+    staged: written.staged,
+  };
+}
+
+/** Correctly rounded digits of a value that may have π in it; a transcendental value never ties and never ends. */
+export function decimalOfSum(engine: Engine, sum: PiSum, digits: number): DecimalResult {
+  const algebraic = asAlgebraic(engine, sum);
+  if (algebraic !== null) return engine.decimal(algebraic, digits);
+  const part = (take: (coefficient: Num) => Num): DecimalResult =>
+    decimalOfReal(engine, mapSum(engine, sum, take), digits);
+  const re = part((coefficient) => engine.re(coefficient));
+  const im = [...sum.values()].every((coefficient) => engine.isReal(coefficient))
+    ? null
+    : part((coefficient) => engine.im(coefficient));
+  return {
+    re: re.re,
+    im: im?.re ?? null,
+    digits,
+    terminates: re.terminates && (im?.terminates ?? true),
+  };
+}
+
+function decimalOfReal(engine: Engine, sum: PiSum, digits: number): DecimalResult {
+  const algebraic = asAlgebraic(engine, sum);
+  if (algebraic !== null) return engine.decimal(algebraic, digits);
+  if (digits > MOST_DIGITS)
+    fail('limit-digits', `${digits} digits were asked for; the limit is ${MOST_DIGITS}.`);
+  return decideByEnclosures(engine, sum, 64 + 4 * digits, ({ low, high }) => {
+    const below = engine.decimal(low, digits);
+    return below.re === engine.decimal(high, digits).re ? { ...below, terminates: false } : null;
+  });
+}

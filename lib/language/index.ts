@@ -1,0 +1,24 @@
+/**
+ * The cell language: reading lines, evaluating cells that share marks, and giving results.
+ * Pure and synchronous. The application calls it through `lib/evaluation`, which bounds time and memory.
+ */
+export { evaluateCells, evaluateExpression, keyOf } from './evaluate';
+export type { CellResults, EvaluationOptions, LinePlace } from './evaluate';
+export type { ErrorCode, Problem, Span } from './failure';
+export type {
+  AngleResult,
+  Cut,
+  DecimalResult,
+  ErrorResult,
+  Exact,
+  Notice,
+  NumberResult,
+  Omission,
+  Reach,
+  Result,
+  TruthResult,
+} from './result';
+export { DEFAULT_SETTINGS, LENGTH_UNITS, MOST_DIGITS, ROUNDINGS, readStep } from './settings';
+export type { LengthUnit, Settings } from './settings';
+export type { CellSource } from './lines';
+export { typesetMark } from './typeset';

@@ -1,0 +1,79 @@
+import type { Problem } from './failure';
+import { classOfWord } from './names';
+import { orderByDependence } from './graph';
+import { readLine } from './read';
+import { type MarkNode, type Statement, marksReadBy } from './syntax';
+
+export interface CellSource {
+  readonly id: string;
+  readonly source: string;
+}
+
+/** A line that is not blank, with what is known of it before any arithmetic. */
+export interface SourceLine {
+  /** Position of its cell among the cells. */
+  readonly cell: number;
+  /** 1-based line in the cell. */
+  readonly line: number;
+  readonly source: string;
+  readonly mark: string | null;
+  /** Null when the line has a problem of its own. */
+  readonly statement: Statement | null;
+  readonly problem: Problem | null;
+  readonly reads: readonly MarkNode[];
+}
+
+export interface LineGraph {
+  readonly lines: readonly SourceLine[];
+  /** Lines that define a mark, in order of the page; more than one is an error at each. */
+  readonly definitions: ReadonlyMap<string, readonly number[]>;
+  /** Order in which to evaluate. */
+  readonly order: readonly number[];
+  readonly cycles: ReadonlyMap<number, readonly number[]>;
+}
+
+/** Reads all lines of all cells and orders them so that what a line reads comes before it. */
+export function readCells(cells: readonly CellSource[]): LineGraph {
+  const lines = cells.flatMap((cell, index) => readCell(cell.source, index));
+  const definitions = new Map<string, number[]>();
+  lines.forEach(({ mark }, index) => {
+    if (mark === null) return;
+    const known = definitions.get(mark);
+    if (known === undefined) definitions.set(mark, [index]);
+    else known.push(index);
+  });
+  const reads = lines.map((line) => line.reads.flatMap(({ name }) => definitions.get(name) ?? []));
+  return { lines, definitions, ...orderByDependence(reads) };
+}
+
+function readCell(source: string, cell: number): SourceLine[] {
+  return source.split(/\r\n|\n|\r/).flatMap((text, index): SourceLine[] => {
+    const reading = readLine(text);
+    const common = { cell, line: index + 1, source: text };
+    switch (reading.kind) {
+      case 'blank':
+        return [];
+      case 'problem':
+        return [
+          {
+            ...common,
+            mark: markOfBrokenLine(text),
+            statement: null,
+            problem: reading.problem,
+            reads: [],
+          },
+        ];
+      case 'statement': {
+        const { statement } = reading;
+        const mark = statement.kind === 'definition' ? statement.mark : null;
+        return [{ ...common, mark, statement, problem: null, reads: marksReadBy(statement) }];
+      }
+    }
+  });
+}
+
+/** The mark that a line means to define although it does not parse, so that its readers are told of the right thing. */
+function markOfBrokenLine(text: string): string | null {
+  const name = /^\s*(\p{L}[\p{L}\d_]*)\s*=(?!=)/u.exec(text.slice(0, 200))?.[1];
+  return name === undefined || classOfWord(name) !== null ? null : name;
+}
