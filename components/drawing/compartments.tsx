@@ -47,11 +47,11 @@ function ApproximateSign() {
 export function Compartments({ items }: { items: readonly Compartment[] }) {
   if (items.length === 0) return null;
   return (
-    <dl className="flex flex-wrap border-l border-t border-hairline text-small">
+    <dl className="flex flex-wrap pl-px pt-px text-small">
       {items.map(({ label, value, tone = 'plain', figures }) => (
         <div
           key={label}
-          className={`min-w-0 max-w-full grow-0 border-b border-r border-hairline px-2.5 pb-1 pt-0.5 ${TONES[tone]}`}
+          className={`-ml-px -mt-px min-w-0 max-w-full border border-hairline px-2.5 pb-1 pt-0.5 ${TONES[tone]}`}
         >
           <dt className="text-tag font-normal text-soft">{label}</dt>
           <dd className={`break-words ${figures ? 'font-mono [overflow-wrap:anywhere]' : ''}`}>

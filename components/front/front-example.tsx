@@ -1,8 +1,7 @@
 import { SheetFrame } from '@/components/drawing/sheet-frame';
 import { TitleBlock } from '@/components/drawing/title-block';
 import { answersFor } from '@/components/sheet/answers';
-import { EntryLine } from '@/components/sheet/entry-line';
-import { SourceText } from '@/components/sheet/source-text';
+import { CellRows } from '@/components/sheet/cell-rows';
 import { foldAnswer } from '@/components/sheet/state/shown';
 import type { NotebookContent } from '@/lib/notebooks/content';
 
@@ -38,19 +37,9 @@ export async function FrontExample() {
         }
       >
         <div className="space-y-5 px-3 py-5">
-          {EXAMPLE.cells.flatMap(({ id, source }) =>
-            (shown.get(id) ?? []).map((line) => (
-              <EntryLine
-                key={id}
-                line={line}
-                source={
-                  <div className="pl-3">
-                    <SourceText source={source} results={[line.result]} />
-                  </div>
-                }
-              />
-            )),
-          )}
+          {EXAMPLE.cells.map(({ id, source }) => (
+            <CellRows key={id} source={source} lines={shown.get(id) ?? []} />
+          ))}
         </div>
       </SheetFrame>
     </section>

@@ -1,11 +1,11 @@
 import type { KeyboardEvent } from 'react';
-import type { SheetActions } from './cells';
+import { focusNeighbour, type SheetActions } from './cells';
 
 /** The keys of the sheet, as the help page lists them; `Mod` is Ctrl, or Cmd on a Mac. */
 export const KEYS = [
-  { keys: ['Enter'], does: 'Open the source of the cell that has the focus' },
+  { keys: ['Enter'], does: 'Open the source of the line that has the focus; in the source, begin a new line' },
   { keys: ['Esc'], does: 'Close the source' },
-  { keys: ['↑', '↓'], does: 'Go to the cell above or below' },
+  { keys: ['↑', '↓'], does: 'Go to the line above or below' },
   { keys: ['Mod+Enter'], does: 'Add a dimension cell below' },
   { keys: ['Mod+Shift+Enter'], does: 'Add a note below' },
   { keys: ['Alt+↑', 'Alt+↓'], does: 'Move the cell up or down' },
@@ -17,16 +17,16 @@ export const KEYS = [
 const isMod = (event: KeyboardEvent) => event.ctrlKey || event.metaKey;
 
 /** Keys pressed anywhere within a cell, its source open or not. */
-export function onCellKey(event: KeyboardEvent, id: string, open: boolean, actions: SheetActions) {
+export function onCellKey(event: KeyboardEvent, id: string, actions: SheetActions) {
   if (event.defaultPrevented) return;
-  const handled = handle(event, id, open, actions);
+  const handled = handle(event, id, actions);
   if (handled) {
     event.preventDefault();
     event.stopPropagation();
   }
 }
 
-function handle(event: KeyboardEvent, id: string, open: boolean, actions: SheetActions): boolean {
+function handle(event: KeyboardEvent, id: string, actions: SheetActions): boolean {
   if (event.key === 'Enter' && isMod(event)) {
     actions.insert(event.shiftKey ? 'note' : 'dimension', id, 'after');
     return true;
@@ -36,9 +36,8 @@ function handle(event: KeyboardEvent, id: string, open: boolean, actions: SheetA
     actions.move(id, by);
     return true;
   }
-  const onCell = event.target instanceof HTMLElement && event.target.dataset.entry === id;
-  if (open || !onCell) return false;
-  if (by !== null && !isMod(event) && !event.shiftKey) return actions.step(id, by);
+  if (!(event.target instanceof HTMLElement) || event.target.dataset.entry !== id) return false;
+  if (by !== null && !isMod(event) && !event.shiftKey) return focusNeighbour(event.target, by);
   if (event.key === 'Delete') {
     actions.remove(id);
     return true;

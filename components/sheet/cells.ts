@@ -1,22 +1,42 @@
 import type { NotebookCell } from '@/lib/notebooks/content';
 import type { Change } from './state/changes';
 
+/** What is in hand: a cell, one of its lines, and where in that line the cursor begins. */
+export interface Hand {
+  id: string;
+  /** Of a dimension cell, from 0; a note is taken in hand as a whole (line 0). */
+  line: number;
+  /** UTF-16 units into the line; beyond its end means the end. */
+  column: number;
+}
+
+export const AT_END = Number.MAX_SAFE_INTEGER;
+
 /** What a cell may ask of its sheet; one stable object, so that cells are drawn only when they change. */
 export interface SheetActions {
   dispatch: (change: Change) => void;
-  /** Takes a cell in hand (its source opens), or puts down whatever was. */
-  take: (id: string | null) => void;
-  /** Puts the focus on a cell's neighbour; false when there is none. */
-  step: (id: string, by: -1 | 1) => boolean;
-  insert: (kind: NotebookCell['kind'], beside: string, where: 'before' | 'after') => void;
+  /** Takes a line in hand (its source opens), or puts down whatever was. */
+  take: (hand: Hand | null) => void;
+  /** Goes from the line in hand to the one above or below, into the next cell if need be. */
+  step: (hand: Hand, by: -1 | 1) => boolean;
+  insert: (kind: NotebookCell['kind'], beside: string | null, where: 'before' | 'after') => void;
   move: (id: string, by: -1 | 1) => void;
   remove: (id: string) => void;
 }
 
-/** The element of a cell that takes the focus while its source is closed. */
-export const cellFocusId = (id: string) => `entry-${id}`;
 export const cellAnchor = (id: string) => `cell-${id}`;
 
-export function focusCell(id: string) {
-  document.getElementById(cellFocusId(id))?.focus();
+/** The element that takes the focus for a line while its source is closed. */
+export const entryId = (id: string, line: number) => `entry-${id}-${line}`;
+
+export function focusEntry(id: string, line = 0) {
+  document.getElementById(entryId(id, line))?.focus();
+}
+
+/** Puts the focus on the entry before or after the one that has it, in the order of the sheet. */
+export function focusNeighbour(from: Element, by: -1 | 1): boolean {
+  const entries = [...document.querySelectorAll<HTMLElement>('[data-entry]')];
+  const next = entries[entries.findIndex((entry) => entry === from) + by];
+  next?.focus();
+  return next !== undefined;
 }

@@ -1,14 +1,15 @@
 'use client';
 
-import { memo } from 'react';
+import { memo, type ReactNode } from 'react';
 import type { NotebookCell } from '@/lib/notebooks/content';
+import { CellRows } from './cell-rows';
 import { CellTools } from './cell-tools';
-import { cellAnchor, cellFocusId, focusCell, type SheetActions } from './cells';
+import { AT_END, cellAnchor, entryId, focusEntry, type Hand, type SheetActions } from './cells';
 import { onCellKey } from './cell-keys';
 import { CopyMenu } from './copy-menu';
 import { SourceEditor } from './editor/source-editor';
-import { EntryLine } from './entry-line';
-import { SourceText } from './source-text';
+import { linesOf } from './source-text';
+import { joinAfter, joinBefore, replaceLine, type LineEdit } from './state/line-edits';
 import type { ShownLine } from './state/shown';
 
 interface DimensionCellProps {
@@ -16,7 +17,8 @@ interface DimensionCellProps {
   lines: readonly ShownLine[];
   /** Where the cell stands on the sheet, from 1: what a screen reader calls it. */
   place: number;
-  open: boolean;
+  /** The line of this cell that is in hand, if one is. */
+  hand: Hand | null;
   greyed: boolean;
   lazy: boolean;
   readOnly: boolean;
@@ -24,80 +26,86 @@ interface DimensionCellProps {
   actions: SheetActions;
 }
 
-/** A dimension cell: its lines with their values, its source, and the source opened when in hand. */
+/** A dimension cell: its lines with their values, and the source of the line in hand opened in place. */
 export const DimensionCell = memo(function DimensionCell(props: DimensionCellProps) {
-  const { cell, lines, place, open, greyed, lazy, readOnly, nonce, actions } = props;
-  const { id } = cell;
-  const results = lines.map((line) => line.result);
-  const names = results.map((result) => result.mark).filter((mark) => mark !== null);
+  const { cell, lines, place, hand, greyed, lazy, readOnly, nonce, actions } = props;
+  const { id, source } = cell;
+  const names = lines.map(({ result }) => result.mark).filter((mark) => mark !== null);
   const label = `Dimension cell ${place}${names.length > 0 ? `, ${names.join(', ')}` : ''}`;
-  const text = <SourceText source={cell.source} results={results} />;
 
-  const leave = (to: 'here' | 'before' | 'after') => {
-    if (to === 'here') {
-      actions.take(null);
-      requestAnimationFrame(() => focusCell(id));
-      return true;
-    }
-    return actions.step(id, to === 'before' ? -1 : 1);
+  const edit = (made: LineEdit | null, stay = false) => {
+    if (made === null) return false;
+    actions.dispatch({ kind: 'write', id, source: made.source });
+    if (!stay) actions.take({ id, line: made.line, column: made.column });
+    return true;
   };
 
-  const source = readOnly ? (
-    <div className="pl-3">{text}</div>
-  ) : open ? (
-    <SourceEditor
-      source={cell.source}
-      kind="dimension"
-      label={`Source of ${label}`}
-      nonce={nonce}
-      results={results}
-      onWrite={(written) => actions.dispatch({ kind: 'write', id, source: written })}
-      onLeave={leave}
-      meanwhile={text}
-    />
-  ) : (
-    <button
-      type="button"
-      id={cellFocusId(id)}
-      data-entry={id}
-      onClick={() => actions.take(id)}
-      className="block w-full border-l-2 border-transparent pl-2.5 text-left hover:border-hairline"
-    >
-      <span className="sr-only">{`Open the source of ${label}: `}</span>
-      {cell.source.trim() === '' ? (
-        <span className="font-serif text-note italic text-soft">Empty: write a dimension here</span>
-      ) : (
-        text
-      )}
-    </button>
-  );
-  const single = lines.length === 1;
+  const renderSource = (index: number, standing: ReactNode) => {
+    const text = linesOf(source)[index] ?? '';
+    const results = lines.flatMap(({ result }) => (result.line === index + 1 ? [result] : []));
+    if (hand?.line === index) {
+      return (
+        <SourceEditor
+          key={index}
+          source={text}
+          kind="dimension"
+          column={hand.column}
+          label={`Line ${index + 1} of ${label}`}
+          nonce={nonce}
+          results={results}
+          meanwhile={standing}
+          onWrite={(written, cursor) =>
+            edit(replaceLine(source, index, written, cursor), !written.includes('\n'))
+          }
+          onJoin={(side) => edit(side === 'before' ? joinBefore(source, index) : joinAfter(source, index))}
+          onLeave={(to, column) => {
+            if (to !== 'here') return actions.step({ id, line: index, column }, to === 'before' ? -1 : 1);
+            actions.take(null);
+            requestAnimationFrame(() => focusEntry(id, index));
+            return true;
+          }}
+        />
+      );
+    }
+    const empty = text.trim() === '';
+    return (
+      <button
+        type="button"
+        id={entryId(id, index)}
+        data-entry={id}
+        onClick={() => actions.take({ id, line: index, column: AT_END })}
+        className="block w-full border-l-2 border-transparent pl-2.5 text-left hover:border-rule"
+      >
+        <span className="sr-only">{`Line ${index + 1} of ${label}: `}</span>
+        {empty && source.trim() === '' ? (
+          <span className="font-serif text-note italic text-soft">Empty: write a dimension here</span>
+        ) : (
+          standing
+        )}
+      </button>
+    );
+  };
 
   return (
     <section
       id={cellAnchor(id)}
       aria-label={label}
-      onKeyDown={(event) => onCellKey(event, id, open, actions)}
-      className={`group/cell border px-3 py-2.5 max-sm:px-2 ${open ? 'border-snapline bg-hand' : 'border-transparent'} ${lazy ? 'entry-lazy' : ''} [break-inside:avoid]`}
+      onKeyDown={readOnly ? undefined : (event) => onCellKey(event, id, actions)}
+      className={`border px-3 py-3 max-sm:px-2 ${hand ? 'border-snapline bg-hand' : 'border-transparent'} ${lazy ? 'entry-lazy' : ''}`}
     >
-      <div className="space-y-5">
-        {lines.map((line, index) => (
-          <EntryLine
-            key={index}
-            line={line}
-            greyed={greyed}
-            full={open}
-            source={single ? source : undefined}
-            actions={<CopyMenu result={line.result} />}
-          />
-        ))}
-        {!single && <div className="sm:ml-[6.125rem]">{source}</div>}
-        {open && (
-          <div className="sm:ml-[6.125rem]">
-            <CellTools id={id} actions={actions} />
-          </div>
-        )}
-      </div>
+      <CellRows
+        source={source}
+        lines={lines}
+        greyed={greyed}
+        inHand={hand?.line ?? null}
+        renderSource={readOnly ? undefined : renderSource}
+        renderActions={({ result }) => <CopyMenu result={result} />}
+      />
+      {hand && (
+        <div className="mt-3 sm:ml-[6.125rem]">
+          <CellTools id={id} actions={actions} />
+        </div>
+      )}
     </section>
   );
 });

@@ -3,7 +3,7 @@
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { Button } from '@/components/ui/button';
 import { Gap } from './cell-tools';
-import type { SheetActions } from './cells';
+import type { Hand, SheetActions } from './cells';
 import { DimensionCell } from './dimension-cell';
 import { NoteCell } from './note-cell';
 import type { ShownLine } from './state/shown';
@@ -12,7 +12,7 @@ import type { Evaluation } from './state/use-evaluation';
 interface EntriesProps {
   content: NotebookContent;
   evaluation: Evaluation;
-  hand: string | null;
+  hand: Hand | null;
   mayWrite: boolean;
   nonce: string | undefined;
   actions: SheetActions;
@@ -35,14 +35,22 @@ export function Entries(props: EntriesProps) {
       <div>
         {cells.map((cell, index) => {
           const lines = evaluation.shown.get(cell.id) ?? NONE;
-          const common = { cell, place: index + 1, open: hand === cell.id, lazy, nonce, actions };
+          const common = {
+            cell,
+            place: index + 1,
+            hand: hand?.id === cell.id ? hand : null,
+            lazy,
+            readOnly: !mayWrite,
+            nonce,
+            actions,
+          };
           return (
             <div key={cell.id} className={mayWrite ? undefined : 'mb-5'}>
               {mayWrite && <Gap before={cell.id} actions={actions} />}
               {cell.kind === 'note' ? (
-                <NoteCell {...common} readOnly={!mayWrite} />
+                <NoteCell {...common} />
               ) : (
-                <DimensionCell {...common} lines={lines} greyed={late} readOnly={!mayWrite} />
+                <DimensionCell {...common} lines={lines} greyed={late} />
               )}
             </div>
           );
@@ -50,8 +58,8 @@ export function Entries(props: EntriesProps) {
       </div>
       {mayWrite && (
         <div className="mt-6 flex flex-wrap gap-2 px-3 sm:ml-[6.125rem] print:hidden">
-          <Button onClick={() => actions.insert('dimension', '', 'after')}>Add a dimension</Button>
-          <Button onClick={() => actions.insert('note', '', 'after')}>Add a note</Button>
+          <Button onClick={() => actions.insert('dimension', null, 'after')}>Add a dimension</Button>
+          <Button onClick={() => actions.insert('note', null, 'after')}>Add a note</Button>
         </div>
       )}
     </>

@@ -67,8 +67,8 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
             <Steps result={value} />
           </div>
         )}
-        {faulty && <Fault result={result} />}
         {source}
+        {faulty && <p className="text-base text-ruddle">{result.error.message}</p>}
         {full && 'notices' in result && result.notices.map((notice) => (
           <p key={notice.from} className="text-small text-ochre">
             <span className="font-semibold">Read so: </span>
@@ -88,17 +88,5 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
         </div>
       )}
     </div>
-  );
-}
-
-/** An error in words; where it stands is underlined in the source. */
-function Fault({ result }: { result: Extract<Result, { kind: 'error' }> }) {
-  return (
-    <p className="flex min-h-balloon items-center text-base text-ruddle">
-      <span>
-        <span className="font-semibold">Line {result.line}: </span>
-        {result.error.message}
-      </span>
-    </p>
   );
 }

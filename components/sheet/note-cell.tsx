@@ -3,7 +3,7 @@
 import { memo, type MouseEvent } from 'react';
 import type { NotebookCell } from '@/lib/notebooks/content';
 import { CellTools } from './cell-tools';
-import { cellAnchor, cellFocusId, focusCell, type SheetActions } from './cells';
+import { AT_END, cellAnchor, entryId, focusEntry, type Hand, type SheetActions } from './cells';
 import { onCellKey } from './cell-keys';
 import { SourceEditor } from './editor/source-editor';
 import { NoteText } from './note-text';
@@ -11,7 +11,7 @@ import { NoteText } from './note-text';
 interface NoteCellProps {
   cell: NotebookCell;
   place: number;
-  open: boolean;
+  hand: Hand | null;
   lazy: boolean;
   readOnly: boolean;
   nonce: string | undefined;
@@ -22,30 +22,30 @@ const NO_RESULTS = [] as const;
 
 /** A note: set in the text serif; its Markdown opens beneath it when it is taken in hand. */
 export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
-  const { cell, place, open, lazy, readOnly, nonce, actions } = props;
+  const { cell, place, hand, lazy, readOnly, nonce, actions } = props;
   const { id } = cell;
+  const open = hand !== null;
   const label = `Note ${place}`;
 
-  const leave = (to: 'here' | 'before' | 'after') => {
-    if (to === 'here') {
-      actions.take(null);
-      requestAnimationFrame(() => focusCell(id));
-      return true;
-    }
-    return actions.step(id, to === 'before' ? -1 : 1);
+  const take = () => actions.take({ id, line: 0, column: AT_END });
+  const leave = (to: 'here' | 'before' | 'after', column: number) => {
+    if (to !== 'here') return actions.step({ id, line: 0, column }, to === 'before' ? -1 : 1);
+    actions.take(null);
+    requestAnimationFrame(() => focusEntry(id));
+    return true;
   };
 
   // A press on the text opens it, except on a link or when a stretch of it is being selected.
   const press = (event: MouseEvent) => {
     const onLink = event.target instanceof Element && event.target.closest('a') !== null;
-    if (!readOnly && !open && !onLink && getSelection()?.isCollapsed !== false) actions.take(id);
+    if (!readOnly && !open && !onLink && getSelection()?.isCollapsed !== false) take();
   };
 
   return (
     <section
       id={cellAnchor(id)}
       aria-label={label}
-      onKeyDown={(event) => onCellKey(event, id, open, actions)}
+      onKeyDown={readOnly ? undefined : (event) => onCellKey(event, id, actions)}
       className={`group/cell relative border px-3 py-2 max-sm:px-2 ${open ? 'border-snapline bg-hand' : 'border-transparent'} ${lazy ? 'entry-lazy' : ''}`}
     >
       <div className="space-y-3 sm:ml-[6.125rem]">
@@ -61,6 +61,7 @@ export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
             <SourceEditor
               source={cell.source}
               kind="note"
+              column={hand.column}
               label={`Source of ${label}`}
               nonce={nonce}
               results={NO_RESULTS}
@@ -73,9 +74,9 @@ export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
         ) : readOnly ? null : (
           <button
             type="button"
-            id={cellFocusId(id)}
+            id={entryId(id, 0)}
             data-entry={id}
-            onClick={() => actions.take(id)}
+            onClick={take}
             className="absolute right-2 top-2 bg-sheet px-1.5 text-small text-snapline opacity-0 hover:underline focus-visible:opacity-100 group-hover/cell:opacity-100 print:hidden"
           >
             Write<span className="sr-only">{` ${label}`}</span>

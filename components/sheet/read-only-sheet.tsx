@@ -1,11 +1,10 @@
 import { TitleBlock, type TitleField } from '@/components/drawing/title-block';
 import type { NotebookContent } from '@/lib/notebooks/content';
+import { CellRows } from './cell-rows';
 import { cellAnchor } from './cells';
-import { EntryLine } from './entry-line';
 import { NoteText } from './note-text';
 import { SheetIndex } from './sheet-index';
 import { SheetLayout, zonesFor } from './sheet-layout';
-import { SourceText } from './source-text';
 import { foldAnswer, type CellAnswer } from './state/shown';
 
 interface ReadOnlySheetProps {
@@ -37,26 +36,9 @@ export function ReadOnlySheet({ content, answers, fields }: ReadOnlySheetProps) 
               </section>
             );
           }
-          const lines = shown.get(id) ?? [];
-          const text = (
-            <div className="pl-3">
-              <SourceText source={source} results={lines.map((line) => line.result)} />
-            </div>
-          );
           return (
-            <section
-              key={id}
-              id={cellAnchor(id)}
-              className="space-y-5 px-3 py-2.5 max-sm:px-2 [break-inside:avoid]"
-            >
-              {lines.map((line, index) => (
-                <EntryLine
-                  key={index}
-                  line={line}
-                  source={lines.length === 1 ? text : undefined}
-                />
-              ))}
-              {lines.length !== 1 && <div className="sm:ml-[6.125rem]">{text}</div>}
+            <section key={id} id={cellAnchor(id)} className="px-3 py-3 max-sm:px-2">
+              <CellRows source={source} lines={shown.get(id) ?? []} />
             </section>
           );
         })}

@@ -5,7 +5,7 @@ import { SWRConfig } from 'swr';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { TitleBlock } from '@/components/drawing/title-block';
-import { cellAnchor, focusCell, type SheetActions } from './cells';
+import { AT_END, cellAnchor, focusEntry, type Hand, type SheetActions } from './cells';
 import { preloadEditor } from './editor/source-editor';
 import { Entries } from './entries';
 import { SheetBar } from './sheet-bar';
@@ -18,6 +18,7 @@ import { newCellId } from './state/changes';
 import type { CellAnswer } from './state/shown';
 import { useEvaluation } from './state/use-evaluation';
 import { useNotebook } from './state/use-notebook';
+import { linesOf } from './source-text';
 import { titleFields } from './title-fields';
 import { sayResult } from './wording';
 
@@ -56,9 +57,9 @@ function SheetOnScreen(props: SheetProps) {
   const sheet = useNotebook(notebook.id, kept, !mayWrite);
   const { content, dispatch, undo, redo } = sheet;
   const evaluation = useEvaluation(content, answers);
-  const [hand, setHand] = useState<string | null>(null);
+  const [hand, setHand] = useState<Hand | null>(null);
   const [panel, setPanel] = useState<Panel | null>(null);
-  const actions = useSheetActions(content, hand, setHand, dispatch);
+  const actions = useSheetActions(content, setHand, dispatch);
 
   useEffect(() => {
     if (!mayWrite) return;
@@ -86,7 +87,10 @@ function SheetOnScreen(props: SheetProps) {
 
   const spoken =
     hand !== null && evaluation.state === 'settled'
-      ? (evaluation.shown.get(hand) ?? []).map(({ result }) => sayResult(result)).join(' ')
+      ? (evaluation.shown.get(hand.id) ?? [])
+          .filter(({ result }) => result.line === hand.line + 1)
+          .map(({ result }) => sayResult(result))
+          .join(' ')
       : '';
 
   return (
@@ -144,35 +148,38 @@ function SheetOnScreen(props: SheetProps) {
 /** The actions of the cells: one object for as long as the sheet is on the screen. */
 function useSheetActions(
   content: NotebookContent,
-  hand: string | null,
-  setHand: (id: string | null) => void,
+  setHand: (hand: Hand | null) => void,
   dispatch: SheetActions['dispatch'],
 ): SheetActions {
-  const latest = useRef({ content, hand });
+  const latest = useRef(content);
   useEffect(() => {
-    latest.current = { content, hand };
+    latest.current = content;
   });
-  const at = useCallback(
-    (id: string) => latest.current.content.cells.findIndex((cell) => cell.id === id),
-    [],
-  );
+  const at = useCallback((id: string) => latest.current.cells.findIndex((cell) => cell.id === id), []);
 
   return useMemo<SheetActions>(
     () => ({
       dispatch,
       take: setHand,
-      step(id, by) {
-        const next = latest.current.content.cells[at(id) + by];
+      step({ id, line, column }, by) {
+        const { cells } = latest.current;
+        const own = cells[at(id)];
+        if (own?.kind === 'dimension' && linesOf(own.source)[line + by] !== undefined) {
+          setHand({ id, line: line + by, column });
+          return true;
+        }
+        const next = cells[at(id) + by];
         if (!next) return false;
-        if (latest.current.hand === null) focusCell(next.id);
-        else setHand(next.id);
+        const last = next.kind === 'dimension' ? linesOf(next.source).length - 1 : 0;
+        setHand({ id: next.id, line: by < 0 ? last : 0, column });
         return true;
       },
       insert(kind, beside, where) {
         const cell = { id: newCellId(), kind, source: '' };
-        const place = beside === '' ? latest.current.content.cells.length : at(beside);
-        dispatch({ kind: 'insert', cell, at: place + (where === 'after' && beside !== '' ? 1 : 0) });
-        setHand(cell.id);
+        const end = latest.current.cells.length;
+        const place = beside === null ? end : at(beside) + (where === 'after' ? 1 : 0);
+        dispatch({ kind: 'insert', cell, at: place });
+        setHand({ id: cell.id, line: 0, column: AT_END });
       },
       move(id, by) {
         const focused = document.activeElement;
@@ -183,12 +190,12 @@ function useSheetActions(
         });
       },
       remove(id) {
-        const { cells } = latest.current.content;
+        const { cells } = latest.current;
         const next = cells[at(id) + 1] ?? cells[at(id) - 1];
         dispatch({ kind: 'delete', id });
         setHand(null);
         requestAnimationFrame(() => {
-          if (next) focusCell(next.id);
+          if (next) focusEntry(next.id);
         });
       },
     }),

@@ -1,8 +1,6 @@
-import type { Result } from './result';
-
-interface SourceTextProps {
-  source: string;
-  results: readonly Result[];
+interface SourceLineProps {
+  text: string;
+  error?: { from: number; to: number } | null;
 }
 
 interface Piece {
@@ -22,31 +20,31 @@ export function piecesOf(text: string, error: { from: number; to: number } | nul
   ].filter((piece) => piece.text !== '');
 }
 
-/** The source of a cell as it stands on the sheet, errors underlined at their place. */
-export function SourceText({ source, results }: SourceTextProps) {
-  const errors = new Map(
-    results.map((result) => [result.line, result.kind === 'error' ? result.error : null]),
-  );
+/** A line of source as it stands on the sheet: an error underlined at its place, a remark quieter. */
+export function SourceLine({ text, error = null }: SourceLineProps) {
+  const remark = text.indexOf('#');
+  const code = remark < 0 ? text : text.slice(0, remark);
   return (
     <code className="block whitespace-pre-wrap font-mono text-source [overflow-wrap:anywhere]">
-      {source.split(/\r?\n/).map((text, index) => (
-        <span key={index} className={`block ${/^\s*#/.test(text) ? 'text-soft' : ''}`}>
-          {text === ''
-            ? '\u200b'
-            : piecesOf(text, errors.get(index + 1) ?? null).map((piece, at) =>
-                piece.faulty ? (
-                  <span
-                    key={at}
-                    className="bg-ruddle-wash text-ruddle underline decoration-wavy decoration-1 underline-offset-4"
-                  >
-                    {piece.text}
-                  </span>
-                ) : (
-                  <span key={at}>{piece.text}</span>
-                ),
-              )}
-        </span>
-      ))}
+      {text === '' && '\u200b'}
+      {piecesOf(code, code === '' ? null : error).map((piece, index) =>
+        piece.faulty ? (
+          <span
+            key={index}
+            className="bg-ruddle-wash text-ruddle underline decoration-wavy decoration-1 underline-offset-4"
+          >
+            {piece.text}
+          </span>
+        ) : (
+          <span key={index}>{piece.text}</span>
+        ),
+      )}
+      {remark >= 0 && <span className="text-soft">{text.slice(remark)}</span>}
     </code>
   );
 }
+
+export const errorOf = (result: { kind: string; error?: { from: number; to: number } } | undefined) =>
+  result?.kind === 'error' ? (result.error ?? null) : null;
+
+export const linesOf = (source: string): string[] => source.split(/\r?\n/);

@@ -80,7 +80,8 @@ function decimalCompartment(
   unit: string | null,
   full: boolean,
 ): Compartment[] {
-  if (decimal.terminates && decimal.re === exact.text) return [];
+  const same = [decimal.re, `${decimal.re} ${unit ?? ''}`].includes(exact.text);
+  if (decimal.terminates && same) return [];
   const text = sayDecimal({ decimal }, full);
   return [{ label: 'Decimal', value: unit ? `${text} ${unit}` : text, figures: true }];
 }

@@ -22,10 +22,9 @@ describe('an entry', () => {
     expect(screen.getByText('straightedge and compass')).toBeInTheDocument();
   });
 
-  it('shows what went wrong as a sentence with its line, and the last good value with it', () => {
+  it('shows what went wrong as a sentence, and the last good value with it', () => {
     render(<EntryLine line={{ result: errorResult(3, 'R = (', 5, 5), before: SUM_OF_ROOTS }} />);
     expect(screen.getByText('A closing bracket was expected here.')).toBeInTheDocument();
-    expect(screen.getByText('Line 3:')).toBeInTheDocument();
     expect(screen.getByRole('group', { name: 'Last good value' })).toBeInTheDocument();
     expect(screen.queryByText('Degree')).toBeNull();
   });
@@ -47,13 +46,13 @@ describe('the place of an error', () => {
     }
   });
 
-  it('is handed to the editor with its line and sentence', () => {
+  it('is handed to the editor with its sentence', () => {
     expect(placedFaults(errorResult(2, 'x', 0, 1))).toEqual([
-      { line: 2, from: 0, to: 1, message: 'A closing bracket was expected here.', severity: 'error' },
+      { from: 0, to: 1, message: 'A closing bracket was expected here.', severity: 'error' },
     ]);
     const notices = [{ message: 'Read as half of R.', from: 2, to: 4 }];
     expect(placedFaults(numberResult({ notices }))).toEqual([
-      { line: 1, ...notices[0], severity: 'warning' },
+      { ...notices[0], severity: 'warning' },
     ]);
   });
 });

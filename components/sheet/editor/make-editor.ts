@@ -14,17 +14,22 @@ import { parser } from '@/lib/language/parser/cell.parser';
 
 export interface EditorOptions {
   parent: HTMLElement;
+  /** One line of a dimension cell, or a whole note. */
   source: string;
   kind: 'dimension' | 'note';
   label: string;
   nonce: string | undefined;
-  onWrite: (source: string) => void;
+  /** Where the cursor begins. */
+  column: number;
+  /** What was written and where the cursor stands; a line broken in two comes with its line break. */
+  onWrite: (source: string, cursor: number) => void;
   /** Escape, or an arrow beyond the first or last line. */
-  onLeave: (to: 'here' | 'before' | 'after') => boolean;
+  onLeave: (to: 'here' | 'before' | 'after', column: number) => boolean;
+  /** Backspace at the beginning or Delete at the end: the neighbouring line is to be joined. */
+  onJoin?: (side: 'before' | 'after') => boolean;
 }
 
 export interface PlacedFault {
-  line: number;
   from: number;
   to: number;
   message: string;
@@ -34,7 +39,7 @@ export interface PlacedFault {
 export interface EditorHandle {
   setSource: (source: string) => void;
   setFaults: (faults: readonly PlacedFault[]) => void;
-  focus: () => void;
+  focus: (column: number) => void;
   destroy: () => void;
 }
 
@@ -93,28 +98,35 @@ const fromOutside = Annotation.define<boolean>();
 
 const PLACEHOLDERS = { dimension: 'p = 2 R sin(turn/34)', note: 'A note, in Markdown' } as const;
 
-/** Opens the source of one cell in place. Loaded only when the first cell is taken in hand. */
+/** Opens a source in place. Loaded only when the first line is taken in hand. */
 export function makeEditor(options: EditorOptions): EditorHandle {
-  const { kind, label, nonce, onWrite, onLeave } = options;
+  const { kind, label, nonce, onWrite, onLeave, onJoin } = options;
   const atEdge = (view: EditorView, edge: 'before' | 'after') => {
     const { main } = view.state.selection;
-    if (!main.empty) return false;
-    const line = view.state.doc.lineAt(main.head).number;
-    const last = edge === 'before' ? 1 : view.state.doc.lines;
-    return line === last && onLeave(edge);
+    // A long line wraps: the arrow leaves it only from its first or last row.
+    const next = view.moveVertically(main, edge === 'after');
+    const within = next.head !== main.head && view.coordsAtPos(next.head)?.top !== view.coordsAtPos(main.head)?.top;
+    return main.empty && !within && onLeave(edge, main.head);
+  };
+  const join = (view: EditorView, side: 'before' | 'after') => {
+    const { main } = view.state.selection;
+    const edge = side === 'before' ? 0 : view.state.doc.length;
+    return main.empty && main.head === edge && (onJoin?.(side) ?? false);
   };
   const view = new EditorView({
     parent: options.parent,
     state: EditorState.create({
       doc: options.source,
-      selection: { anchor: options.source.length },
+      selection: { anchor: Math.min(options.column, options.source.length) },
       extensions: [
         nonce ? EditorView.cspNonce.of(nonce) : [],
         Prec.high(
           keymap.of([
-            { key: 'Escape', run: () => onLeave('here') },
+            { key: 'Escape', run: () => onLeave('here', 0) },
             { key: 'ArrowUp', run: (view) => atEdge(view, 'before') },
             { key: 'ArrowDown', run: (view) => atEdge(view, 'after') },
+            { key: 'Backspace', run: (view) => join(view, 'before') },
+            { key: 'Delete', run: (view) => join(view, 'after') },
           ]),
         ),
         // No history here: the notebook has one of its own, across all cells.
@@ -131,7 +143,8 @@ export function makeEditor(options: EditorOptions): EditorHandle {
         }),
         EditorView.updateListener.of((update) => {
           const outside = update.transactions.some((one) => one.annotation(fromOutside));
-          if (update.docChanged && !outside) onWrite(update.state.doc.toString());
+          if (!update.docChanged || outside) return;
+          onWrite(update.state.doc.toString(), update.state.selection.main.head);
         }),
       ],
     }),
@@ -144,10 +157,14 @@ export function makeEditor(options: EditorOptions): EditorHandle {
       view.dispatch({ changes: smallestChange(old, source), annotations: fromOutside.of(true) });
     },
     setFaults(faults) {
-      const placed = faults.flatMap((fault) => place(view.state, fault));
+      const placed = faults.map((fault) => place(view.state, fault));
       view.dispatch(setDiagnostics(view.state, placed));
     },
-    focus: () => view.focus(),
+    focus(column) {
+      const anchor = Math.min(column, view.state.doc.length);
+      if (anchor !== view.state.selection.main.head) view.dispatch({ selection: { anchor } });
+      view.focus();
+    },
     destroy: () => view.destroy(),
   };
 }
@@ -162,12 +179,9 @@ export function smallestChange(old: string, next: string) {
   return { from, to: old.length - end, insert: next.slice(from, next.length - end) };
 }
 
-/** A fault of an older text may lie beyond the end of the present one; then it has no place. */
-function place(state: EditorState, { line, from, to, message, severity }: PlacedFault): Diagnostic[] {
-  if (line < 1 || line > state.doc.lines) return [];
-  const text = state.doc.line(line);
-  const start = Math.min(text.from + from, text.to);
-  const end = Math.min(Math.max(text.from + to, start), text.to);
-  const shown = start === end && start > text.from ? start - 1 : start;
-  return [{ from: shown, to: end, severity, message }];
+/** A fault of an older text may lie beyond the end of the present one; it is kept within. */
+function place({ doc }: EditorState, { from, to, message, severity }: PlacedFault): Diagnostic {
+  const start = Math.min(from, doc.length);
+  const end = Math.min(Math.max(to, start), doc.length);
+  return { from: start === end && start > 0 ? start - 1 : start, to: end, severity, message };
 }

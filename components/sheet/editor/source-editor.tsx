@@ -1,28 +1,41 @@
 'use client';
 
-import { useEffect, useRef, useState, type ReactNode } from 'react';
+import { useEffect, useLayoutEffect, useRef, useState, type ReactNode } from 'react';
 import type { Result } from '../result';
 import type { EditorHandle, EditorOptions, PlacedFault } from './make-editor';
 
-interface SourceEditorProps extends Pick<EditorOptions, 'source' | 'kind' | 'label' | 'nonce' | 'onWrite' | 'onLeave'> {
+type Loaded = typeof import('./make-editor');
+
+interface SourceEditorProps
+  extends Pick<
+    EditorOptions,
+    'source' | 'kind' | 'label' | 'nonce' | 'column' | 'onWrite' | 'onLeave' | 'onJoin'
+  > {
   results: readonly Result[];
   /** What stands here until the editor has been loaded. */
   meanwhile: ReactNode;
 }
 
+/** Once loaded, an editor opens at once: no keystroke falls between one line and the next. */
+let loaded: Loaded | null = null;
+
 /** What the editor underlines for one line: its error, or readings that may surprise. */
 export function placedFaults(result: Result): PlacedFault[] {
-  const { line } = result;
   if (result.kind === 'error') {
     const { from, to, message } = result.error;
-    return [{ line, from, to, message, severity: 'error' }];
+    return [{ from, to, message, severity: 'error' }];
   }
-  return result.notices.map((notice) => ({ line, ...notice, severity: 'warning' }));
+  return result.notices.map((notice) => ({ ...notice, severity: 'warning' }));
+}
+
+async function loadEditor(): Promise<Loaded> {
+  loaded ??= await import('./make-editor');
+  return loaded;
 }
 
 /** Fetches the editor while the browser is idle, so that the first cell opens at once. */
 export function preloadEditor() {
-  void import('./make-editor');
+  void loadEditor();
 }
 
 /** CodeMirror, opened where the source stood; what it is told changes without making it anew. */
@@ -32,29 +45,36 @@ export function SourceEditor({ results, meanwhile, ...options }: SourceEditorPro
   const latest = useRef(options);
   /** Texts typed here that have not come back as `source` yet; an answer to one is no news. */
   const typed = useRef<string[]>([]);
-  const [ready, setReady] = useState(false);
-  const { source } = options;
+  const [ready, setReady] = useState(loaded !== null);
+  const { source, column } = options;
 
-  useEffect(() => {
+  useLayoutEffect(() => {
     latest.current = options;
   });
 
-  useEffect(() => {
+  useLayoutEffect(() => {
     let gone = false;
-    void import('./make-editor').then(({ makeEditor }) => {
+    const open = ({ makeEditor }: Loaded) => {
       if (gone || !parent.current) return;
       handle.current = makeEditor({
         ...latest.current,
         parent: parent.current,
-        onWrite: (text) => {
+        onWrite: (text, cursor) => {
           typed.current.push(text);
-          latest.current.onWrite(text);
+          latest.current.onWrite(text, cursor);
         },
-        onLeave: (to) => latest.current.onLeave(to),
+        onLeave: (to, at) => latest.current.onLeave(to, at),
+        onJoin: (side) => latest.current.onJoin?.(side) ?? false,
       });
-      handle.current.focus();
-      setReady(true);
-    });
+      handle.current.focus(latest.current.column);
+    };
+    if (loaded) open(loaded);
+    else {
+      void loadEditor().then((module) => {
+        open(module);
+        setReady(true);
+      });
+    }
     return () => {
       gone = true;
       handle.current?.destroy();
@@ -62,12 +82,16 @@ export function SourceEditor({ results, meanwhile, ...options }: SourceEditorPro
     };
   }, []);
 
-  useEffect(() => {
+  useLayoutEffect(() => {
     if (!ready) return;
     const at = typed.current.indexOf(source);
     typed.current = at < 0 ? [] : typed.current.slice(at + 1);
     if (at < 0) handle.current?.setSource(source);
   }, [ready, source]);
+
+  useLayoutEffect(() => {
+    if (ready) handle.current?.focus(column);
+  }, [ready, column]);
 
   useEffect(() => {
     if (!ready) return;
