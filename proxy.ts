@@ -14,10 +14,8 @@ export async function proxy(request: NextRequest): Promise<NextResponse> {
   const { pathname, search } = request.nextUrl;
   if (NEEDS_PERSON.test(pathname) && !(await hasSession(request))) {
     const next = encodeURIComponent(pathname + search);
-    // A relative address, so that the person stays on the host the browser knows.
-    return withHeaders(
-      new NextResponse(null, { status: 307, headers: { location: `/sign-in?next=${next}` } }),
-    );
+    // Next sends an address of its own host as a path, so the person stays on the host they know.
+    return withHeaders(NextResponse.redirect(new URL(`/sign-in?next=${next}`, request.url)));
   }
   const nonce = randomBytes(16).toString('base64');
   const policy = contentPolicy(nonce);

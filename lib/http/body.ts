@@ -83,7 +83,18 @@ function wordsFor(issue: z.core.$ZodIssue): string {
   if (issue.code === 'invalid_value' && custom.startsWith('Invalid')) {
     return `It is not one of ${issue.values.map(String).join(', ')}.`;
   }
+  if (issue.code === 'too_big' && custom.startsWith('Too big')) return tooBig(issue);
   return custom;
+}
+
+function tooBig(issue: z.core.$ZodIssueTooBig): string {
+  const { input, maximum } = issue;
+  if (typeof input === 'string') {
+    return `It has ${input.length} characters; at most ${maximum} are allowed.`;
+  }
+  if (Array.isArray(input))
+    return `It has ${input.length} entries; at most ${maximum} are allowed.`;
+  return `It is above ${maximum}, which is the most that is allowed.`;
 }
 
 const NAMES: Readonly<Record<string, string>> = {

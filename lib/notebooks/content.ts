@@ -67,7 +67,7 @@ export const NotebookCell = z.strictObject({
   kind: z.enum(['dimension', 'note'], { error: 'The kind of a cell is dimension or note.' }),
   source: z.string().max(CONTENT_LIMITS.source, {
     error: (issue) =>
-      `The source of a cell is ${plural(String(issue.input).length, 'character')} long; ` +
+      `The source of a cell is ${plural((issue.input as string).length, 'character')} long; ` +
       `at most ${CONTENT_LIMITS.source} are allowed.`,
   }),
 });
