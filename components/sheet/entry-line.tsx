@@ -5,6 +5,7 @@ import { DimensionLine } from '@/components/drawing/dimension-line';
 import { Tex } from '@/components/ui/tex';
 import type { Result } from './result';
 import type { ShownLine } from './state/shown';
+import { stepTex, valueTex } from './value-tex';
 import { compartmentsOf, sayDimension } from './wording';
 
 interface EntryLineProps {
@@ -23,7 +24,7 @@ const signOf = ({ mark, kind }: Result) => mark ?? (kind === 'truth' ? '=' : nul
 
 /** The value of one line, typeset; a line that never parsed stands as its text. */
 function Value({ result }: { result: Result }) {
-  const tex = 'exact' in result ? result.exact.tex : result.typeset;
+  const tex = valueTex(result);
   if (tex === null) return <span className="font-mono text-source">{result.source.trim()}</span>;
   return <Tex tex={tex} display />;
 }
@@ -33,9 +34,9 @@ function Steps({ result }: { result: Result }) {
   if (result.kind !== 'number' || !result.exact.staged || !result.tower) return null;
   return (
     <ol className="mt-1 space-y-1 border-l border-hairline pl-3" aria-label="Steps, lowest first">
-      {result.tower.map(({ name, tex }) => (
-        <li key={name} className="overflow-x-auto overflow-y-hidden py-0.5 text-base" tabIndex={0}>
-          <Tex tex={tex} />
+      {result.tower.map((step) => (
+        <li key={step.name} className="py-0.5 text-base">
+          <Tex tex={stepTex(step)} />
         </li>
       ))}
     </ol>

@@ -121,7 +121,7 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
           value: result.truth.value ? 'true, exactly' : 'false, exactly',
           tone: result.truth.value ? 'reached' : 'fault',
         },
-        { label: 'Because', value: result.truth.reason },
+        ...(full ? [{ label: 'Because', value: result.truth.reason }] : []),
       ];
     case 'error':
       return [];

@@ -10,6 +10,7 @@ import { headingsOf, renderNote } from '@/components/sheet/note';
 import { ConflictDialog } from '@/components/sheet/panels/conflict-dialog';
 import { readStep } from '@/components/sheet/panels/settings-dialog';
 import { piecesOf } from '@/components/sheet/source-text';
+import { isSum, stepTex, valueTex } from '@/components/sheet/value-tex';
 import { contentOf, dimension } from './sample';
 import { errorResult, numberResult, SUM_OF_ROOTS } from './sample-results';
 
@@ -27,6 +28,32 @@ describe('an entry', () => {
     expect(screen.getByText('A closing bracket was expected here.')).toBeInTheDocument();
     expect(screen.getByRole('group', { name: 'Last good value' })).toBeInTheDocument();
     expect(screen.queryByText('Degree')).toBeNull();
+  });
+});
+
+describe('the value on the sheet', () => {
+  it('carries its unit, in brackets where the value is a sum', () => {
+    expect(valueTex(numberResult({ exact: { text: '5+3*sqrt(2)', tex: '5+3\\sqrt{2}', staged: false } }))).toBe(
+      '\\left(5+3\\sqrt{2}\\right)\\,\\mathrm{mm}',
+    );
+    expect(valueTex(numberResult({ unit: 'mm^2', exact: { text: 'sqrt(2)', tex: '\\sqrt{2}', staged: false } }))).toBe(
+      '\\sqrt{2}\\,\\mathrm{mm}^{2}',
+    );
+    expect(valueTex(SUM_OF_ROOTS)).toBe('\\sqrt{2}+\\sqrt{3}');
+  });
+
+  it.each([
+    ['-5', false],
+    ['(1+i)/2', false],
+    ['300*sqrt(34-2*sqrt(17))', false],
+    ['1-sqrt(2)', true],
+    ['-1+2', true],
+  ])('takes %s for a sum: %s', (text, sum) => {
+    expect(isSum(text)).toBe(sum);
+  });
+
+  it('writes the roots of a tower with their names below', () => {
+    expect(stepTex({ name: 'r12', tex: '2' })).toBe('r_{12}=\\sqrt{2}');
   });
 });
 

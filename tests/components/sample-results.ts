@@ -13,7 +13,7 @@ export function numberResult(given: Partial<NumberResult> = {}): NumberResult {
     mark: 'R',
     typeset: 'R=500\\,\\mathrm{mm}',
     notices: [],
-    exact: { text: '500 mm', tex: '500\\,\\mathrm{mm}', staged: false },
+    exact: { text: '500', tex: '500', staged: false },
     unit: 'mm',
     real: true,
     decimal: { re: '500', im: null, digits: 30, terminates: true },
@@ -36,8 +36,8 @@ export const SUM_OF_ROOTS = numberResult({
   degree: 4,
   minimalPolynomial: ['1', '0', '-10', '0', '1'],
   tower: [
-    { name: 's_1', radicand: '2', tex: 's_1=\\sqrt{2}' },
-    { name: 's_2', radicand: '3', tex: 's_2=\\sqrt{3}' },
+    { name: 'r1', radicand: '2', tex: '2' },
+    { name: 'r2', radicand: '3', tex: '3' },
   ],
 });
 

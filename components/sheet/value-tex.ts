@@ -1,0 +1,41 @@
+import type { Result } from './result';
+
+/** A unit as TeX: `mm^2` upright with its power. */
+export function unitTex(unit: string): string {
+  const [name = unit, power] = unit.split('^');
+  const base = `\\mathrm{${name.replace(/[^A-Za-z]/g, '')}}`;
+  return power === undefined ? base : `${base}^{${power.replace(/[^\d-]/g, '')}}`;
+}
+
+/** Whether a text is a sum at its outermost level, so that a unit behind it would bind to its last term. */
+export function isSum(text: string): boolean {
+  let depth = 0;
+  for (let at = 0; at < text.length; at += 1) {
+    const sign = text.charAt(at);
+    if (sign === '(') depth += 1;
+    else if (sign === ')') depth -= 1;
+    else if (at > 0 && depth === 0 && (sign === '+' || sign === '-')) return true;
+  }
+  return false;
+}
+
+/** TeX of what stands large on the sheet: the exact value with its unit, or the statement as written. */
+export function valueTex(result: Result): string | null {
+  switch (result.kind) {
+    case 'number': {
+      const { exact, unit } = result;
+      if (unit === null) return exact.tex;
+      const value = isSum(exact.text) ? `\\left(${exact.tex}\\right)` : exact.tex;
+      return `${value}\\,${unitTex(unit)}`;
+    }
+    case 'angle':
+      return result.exact.tex;
+    default:
+      return result.typeset;
+  }
+}
+
+/** One root of a tower: `r_2 = √(…)`. */
+export function stepTex({ name, tex }: { name: string; tex: string }): string {
+  return `${name.replace(/^([A-Za-z])_?(\d+)$/, '$1_{$2}')}=\\sqrt{${tex}}`;
+}
