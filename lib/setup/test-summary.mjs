@@ -1,12 +1,14 @@
-import { readFileSync } from 'node:fs';
+import { existsSync, readFileSync } from 'node:fs';
 import { relative } from 'node:path';
 
 /**
  * Reads vitest's JSON report.
  * @returns `{ passed, failed, left, folders }`: counts of tests, `left` being those that did not
- *   run, and the number that ran by folder of `tests/`
+ *   run, and the number that ran by folder of `tests/`;
+ *   null when there is no report
  */
 export function readReport(path, root) {
+  if (!existsSync(path)) return null;
   const report = JSON.parse(readFileSync(path, 'utf8'));
   const folders = new Map();
   for (const file of report.testResults) {
