@@ -31,7 +31,12 @@ const config: Config = {
       'ruddle-wash': colour('ruddle-wash'),
     },
     fontFamily: {
-      sans: ['var(--font-grotesque)', 'var(--font-grotesque-ext)', 'var(--font-mono)', 'sans-serif'],
+      sans: [
+        'var(--font-grotesque)',
+        'var(--font-grotesque-ext)',
+        'var(--font-mono)',
+        'sans-serif',
+      ],
       serif: [
         'var(--font-serif)',
         'var(--font-serif-ext)',

@@ -12,8 +12,8 @@ export default function ErrorPage({ error, reset }: ErrorPageProps) {
   return (
     <Card title="This page could not be drawn">
       <p>
-        Something failed on our side. What was kept is safe on the server, and what was typed is still in
-        this browser.
+        Something failed on our side. What was kept is safe on the server, and what was typed is
+        still in this browser.
       </p>
       {error.digest && (
         <p className="text-small text-soft">

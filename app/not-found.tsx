@@ -9,11 +9,11 @@ export default function NotFound() {
   return (
     <PageShell who="guest">
       <Card title="There is no such sheet here">
-      <p>
-        The address leads nowhere: it may be incomplete, the sheet may not be shared with you, or a
-        client link may have been revoked. Ask whoever gave it to you for a new one.
-      </p>
-      <LinkButton href="/">To the front page</LinkButton>
+        <p>
+          The address leads nowhere: it may be incomplete, the sheet may not be shared with you, or
+          a client link may have been revoked. Ask whoever gave it to you for a new one.
+        </p>
+        <LinkButton href="/">To the front page</LinkButton>
       </Card>
     </PageShell>
   );

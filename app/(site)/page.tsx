@@ -3,10 +3,22 @@ import { FrontExample } from '@/components/front/front-example';
 import { currentPerson } from '@/lib/accounts/session';
 
 const POINTS = [
-  ['Says what can be struck', 'Which figures straightedge and compass reach exactly, and which they only approach.'],
-  ['Rounds once, and says which way', 'Cut sizes to your step, up, down or exact, from the value itself.'],
-  ['Decides, never guesses', 'Two routes to one length are equal or they are not; no decimal has a say.'],
-  ['Hands over safely', 'Architect, client and saw read and export each version; none can change it.'],
+  [
+    'Says what can be struck',
+    'Which figures straightedge and compass reach exactly, and which they only approach.',
+  ],
+  [
+    'Rounds once, and says which way',
+    'Cut sizes to your step, up, down or exact, from the value itself.',
+  ],
+  [
+    'Decides, never guesses',
+    'Two routes to one length are equal or they are not; no decimal has a say.',
+  ],
+  [
+    'Hands over safely',
+    'Architect, client and saw read and export each version; none can change it.',
+  ],
 ] as const;
 
 export default async function FrontPage() {
@@ -18,9 +30,10 @@ export default async function FrontPage() {
           Lengths you can strike, right to the last rounding
         </h1>
         <p className="max-w-prose font-serif text-note">
-          Setting-out offices in stone, joinery, leaded glass, tile and metal turn a design into lengths
-          that are struck full size, cut, and checked on site. Surdwork keeps that work in shared
-          notebooks and evaluates it exactly, in + − × ÷ √, so that nothing is lost before the saw.
+          Setting-out offices in stone, joinery, leaded glass, tile and metal turn a design into
+          lengths that are struck full size, cut, and checked on site. Surdwork keeps that work in
+          shared notebooks and evaluates it exactly, in + − × ÷ √, so that nothing is lost before
+          the saw.
         </p>
         <div className="flex flex-wrap gap-2">
           {person ? (

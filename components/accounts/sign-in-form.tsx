@@ -31,7 +31,9 @@ export function SignInForm({ next, refusal }: SignInFormProps) {
   const submit = async () => {
     setBusy(true);
     setFault(null);
-    const answer = await signIn('credentials', { email, password, redirect: false }).catch(() => null);
+    const answer = await signIn('credentials', { email, password, redirect: false }).catch(
+      () => null,
+    );
     if (answer?.ok && !answer.error) {
       window.location.assign(next);
       return;

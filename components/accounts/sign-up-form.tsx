@@ -16,7 +16,13 @@ const FIELDS = [
     type: 'text',
     hint: 'The yard or office your notebooks belong to; it stands in their title blocks.',
   },
-  { name: 'email', label: 'E-mail address', autoComplete: 'username', type: 'email', hint: undefined },
+  {
+    name: 'email',
+    label: 'E-mail address',
+    autoComplete: 'username',
+    type: 'email',
+    hint: undefined,
+  },
   {
     name: 'password',
     label: 'Password',

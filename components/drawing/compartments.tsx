@@ -33,12 +33,7 @@ function ReachedSign() {
 function ApproximateSign() {
   return (
     <svg viewBox="0 0 16 16" className="mr-1.5 inline size-3.5 align-[-2px]" aria-hidden="true">
-      <path
-        d="M1 11h5M10 11h5M6 7v8M10 7v8"
-        fill="none"
-        stroke="currentColor"
-        strokeWidth="1.4"
-      />
+      <path d="M1 11h5M10 11h5M6 7v8M10 7v8" fill="none" stroke="currentColor" strokeWidth="1.4" />
     </svg>
   );
 }

@@ -1,9 +1,18 @@
 /** What the help page says, as data: the page only sets it. Functions and units come from the language. */
 export const EXAMPLES = [
-  { name: 'R = 1200 mm', meaning: 'Gives a length the mark R. Order on the sheet does not matter.' },
-  { name: 's = 2 R sin(turn/34)', meaning: 'A side of a regular seventeen-sided figure, from the mark R.' },
+  {
+    name: 'R = 1200 mm',
+    meaning: 'Gives a length the mark R. Order on the sheet does not matter.',
+  },
+  {
+    name: 's = 2 R sin(turn/34)',
+    meaning: 'A side of a regular seventeen-sided figure, from the mark R.',
+  },
   { name: 'sqrt(5 + 2 sqrt(6))', meaning: 'A value without a mark. √(5+2√6) is read too.' },
-  { name: 's^2 == 2 R^2 (1 - cos(turn/17))', meaning: 'A statement. It is decided exactly, never by decimals.' },
+  {
+    name: 's^2 == 2 R^2 (1 - cos(turn/17))',
+    meaning: 'A statement. It is decided exactly, never by decimals.',
+  },
   { name: 'a < b', meaning: 'Order is decided exactly as well; so are <=, >, >= and !=.' },
   { name: '# from drawing 14', meaning: 'A remark: whatever follows # is not read.' },
 ] as const;
@@ -19,16 +28,31 @@ export const RULES = [
 
 export const WORDS = [
   { name: 'mark', meaning: 'The name a line gives to a value: the letter on a drawing.' },
-  { name: 'cut size', meaning: 'A length rounded to the cutting step of the sheet, with the way it was rounded.' },
+  {
+    name: 'cut size',
+    meaning: 'A length rounded to the cutting step of the sheet, with the way it was rounded.',
+  },
   {
     name: 'reach',
     meaning:
       'Which tools reach a value exactly: straightedge and compass, those plus an angle trisector, or neither.',
   },
-  { name: 'degree', meaning: 'The degree of the simplest equation with whole coefficients that the value solves.' },
-  { name: 'tower', meaning: 'The chain of square roots that builds the value, each with what stands under it.' },
-  { name: 'version', meaning: 'A kept state of the notebook. It never changes; the next one has the next number.' },
-  { name: 'client link', meaning: 'An address that shows the newest version to read and export, without an account.' },
+  {
+    name: 'degree',
+    meaning: 'The degree of the simplest equation with whole coefficients that the value solves.',
+  },
+  {
+    name: 'tower',
+    meaning: 'The chain of square roots that builds the value, each with what stands under it.',
+  },
+  {
+    name: 'version',
+    meaning: 'A kept state of the notebook. It never changes; the next one has the next number.',
+  },
+  {
+    name: 'client link',
+    meaning: 'An address that shows the newest version to read and export, without an account.',
+  },
 ] as const;
 
 export const CAUTIONS = [

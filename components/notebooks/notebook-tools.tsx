@@ -36,7 +36,11 @@ export function NotebookTools({ notebook }: { notebook: NotebookLine }) {
 
   return (
     <span className="inline-flex gap-1 max-md:-ml-1.5">
-      <Button look="quiet" onClick={() => setOpen('rename')} aria-label={`Rename ${notebook.title}`}>
+      <Button
+        look="quiet"
+        onClick={() => setOpen('rename')}
+        aria-label={`Rename ${notebook.title}`}
+      >
         Rename
       </Button>
       {notebook.role === 'owner' && (

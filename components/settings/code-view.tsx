@@ -34,10 +34,7 @@ export function CodeView({ text, label, nonce }: CodeViewProps) {
       <div className="border border-rule bg-sheet">
         <div ref={parent} />
         {!ready && (
-          <pre
-            tabIndex={0}
-            className="overflow-x-auto p-3.5 font-mono text-small"
-          >
+          <pre tabIndex={0} className="overflow-x-auto p-3.5 font-mono text-small">
             {text}
           </pre>
         )}

@@ -10,7 +10,12 @@ import { Choice, Field } from '@/components/ui/field';
 import { Moment } from '@/components/ui/moment';
 import { Notice } from '@/components/ui/notice';
 
-const EXPIRIES = { '30': '30 days', '90': '90 days', '365': 'a year', '': 'until revoked' } as const;
+const EXPIRIES = {
+  '30': '30 days',
+  '90': '90 days',
+  '365': 'a year',
+  '': 'until revoked',
+} as const;
 
 /** The person's API keys: made here, shown once, revoked at once. */
 export function Keys({ keys }: { keys: readonly ApiKeyLine[] }) {

@@ -8,7 +8,10 @@ const highlighting = HighlightStyle.define([
   { tag: [tags.keyword, tags.operatorKeyword], color: 'var(--ruddle)' },
   { tag: [tags.string, tags.special(tags.string)], color: 'var(--lichen)' },
   { tag: [tags.number, tags.bool, tags.null], color: 'var(--ochre)' },
-  { tag: [tags.function(tags.variableName), tags.function(tags.propertyName)], color: 'var(--snapline)' },
+  {
+    tag: [tags.function(tags.variableName), tags.function(tags.propertyName)],
+    color: 'var(--snapline)',
+  },
   { tag: tags.comment, color: 'var(--soft)', fontStyle: 'italic' },
 ]);
 
@@ -20,7 +23,12 @@ const theme = EditorView.theme({
 });
 
 /** Source to be read and copied, not changed. */
-export function makeView(parent: HTMLElement, text: string, label: string, nonce: string | undefined) {
+export function makeView(
+  parent: HTMLElement,
+  text: string,
+  label: string,
+  nonce: string | undefined,
+) {
   return new EditorView({
     parent,
     state: EditorState.create({

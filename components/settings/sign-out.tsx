@@ -9,7 +9,9 @@ export function SignOut() {
   const leave = () => signOut({ callbackUrl: '/' });
   return (
     <div className="flex flex-wrap gap-2">
-      <Button onClick={() => void ask('/api/sessions', { method: 'DELETE' }).finally(() => void leave())}>
+      <Button
+        onClick={() => void ask('/api/sessions', { method: 'DELETE' }).finally(() => void leave())}
+      >
         Sign out everywhere
       </Button>
       <Button onClick={() => void leave()}>Sign out</Button>

@@ -3,14 +3,20 @@ import { focusNeighbour, type SheetActions } from './cells';
 
 /** The keys of the sheet, as the help page lists them; `Mod` is Ctrl, or Cmd on a Mac. */
 export const KEYS = [
-  { keys: ['Enter'], does: 'Open the source of the line that has the focus; in the source, begin a new line' },
+  {
+    keys: ['Enter'],
+    does: 'Open the source of the line that has the focus; in the source, begin a new line',
+  },
   { keys: ['Esc'], does: 'Close the source' },
   { keys: ['↑', '↓'], does: 'Go to the line above or below' },
   { keys: ['Mod+Enter'], does: 'Add a dimension cell below' },
   { keys: ['Mod+Shift+Enter'], does: 'Add a note below' },
   { keys: ['Alt+↑', 'Alt+↓'], does: 'Move the cell up or down' },
   { keys: ['Delete'], does: 'Delete the cell that has the focus (undo brings it back)' },
-  { keys: ['Mod+Z', 'Mod+Shift+Z'], does: 'Undo, redo: typing, moving, deleting and settings alike' },
+  {
+    keys: ['Mod+Z', 'Mod+Shift+Z'],
+    does: 'Undo, redo: typing, moving, deleting and settings alike',
+  },
   { keys: ['Mod+S'], does: 'Keep a version' },
 ] as const;
 

@@ -9,7 +9,8 @@ export function copyForms(result: Result): { label: string; text: string }[] {
   switch (result.kind) {
     case 'number': {
       const { re, im } = result.decimal;
-      const decimal = im === null ? re : `${re} ${im.startsWith('-') ? '-' : '+'} ${im.replace(/^-/, '')} i`;
+      const decimal =
+        im === null ? re : `${re} ${im.startsWith('-') ? '-' : '+'} ${im.replace(/^-/, '')} i`;
       const forms = [
         { label: 'Exact text', text: result.exact.text },
         { label: 'TeX', text: result.exact.tex },

@@ -57,9 +57,12 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
           onWrite={(written, cursor) =>
             edit(replaceLine(source, index, written, cursor), !written.includes('\n'))
           }
-          onJoin={(side) => edit(side === 'before' ? joinBefore(source, index) : joinAfter(source, index))}
+          onJoin={(side) =>
+            edit(side === 'before' ? joinBefore(source, index) : joinAfter(source, index))
+          }
           onLeave={(to, column) => {
-            if (to !== 'here') return actions.step({ id, line: index, column }, to === 'before' ? -1 : 1);
+            if (to !== 'here')
+              return actions.step({ id, line: index, column }, to === 'before' ? -1 : 1);
             actions.take(null);
             requestAnimationFrame(() => focusEntry(id, index));
             return true;
@@ -78,7 +81,9 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
       >
         <span className="sr-only">{`Line ${index + 1} of ${label}: `}</span>
         {empty && source.trim() === '' ? (
-          <span className="font-serif text-note italic text-soft">Empty: write a dimension here</span>
+          <span className="font-serif text-note italic text-soft">
+            Empty: write a dimension here
+          </span>
         ) : (
           standing
         )}

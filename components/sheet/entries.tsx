@@ -58,7 +58,9 @@ export function Entries(props: EntriesProps) {
       </div>
       {mayWrite && (
         <div className="mt-6 flex flex-wrap gap-2 px-3 sm:ml-[6.125rem] print:hidden">
-          <Button onClick={() => actions.insert('dimension', null, 'after')}>Add a dimension</Button>
+          <Button onClick={() => actions.insert('dimension', null, 'after')}>
+            Add a dimension
+          </Button>
           <Button onClick={() => actions.insert('note', null, 'after')}>Add a note</Button>
         </div>
       )}

@@ -52,7 +52,10 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
   const dim = greyed || faulty;
 
   return (
-    <div className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 max-sm:grid-cols-1 lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem]">
+    <div
+      data-row
+      className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 max-sm:grid-cols-1 lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem] [break-inside:avoid]"
+    >
       <div className="max-sm:w-24">
         <Balloon sign={signOf(result)} faulty={faulty} />
       </div>
@@ -69,13 +72,19 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
           </div>
         )}
         {source}
-        {faulty && <p className="text-base text-ruddle">{result.error.message}</p>}
-        {full && 'notices' in result && result.notices.map((notice) => (
-          <p key={notice.from} className="text-small text-ochre">
-            <span className="font-semibold">Read so: </span>
-            {notice.message}
+        {faulty && (
+          <p data-fault className="text-base text-ruddle">
+            {result.error.message}
           </p>
-        ))}
+        )}
+        {full &&
+          'notices' in result &&
+          result.notices.map((notice) => (
+            <p key={notice.from} className="text-small text-ochre">
+              <span className="font-semibold">Read so: </span>
+              {notice.message}
+            </p>
+          ))}
         <div className="flex flex-wrap items-end gap-x-3 gap-y-1.5">
           <div className={`min-w-0 max-w-full ${greyed ? 'opacity-55' : ''}`}>
             {!faulty && <Compartments items={compartmentsOf(result, full)} />}

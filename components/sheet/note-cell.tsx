@@ -67,7 +67,9 @@ export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
               results={NO_RESULTS}
               onWrite={(source) => actions.dispatch({ kind: 'write', id, source })}
               onLeave={leave}
-              meanwhile={<pre className="whitespace-pre-wrap font-mono text-source">{cell.source}</pre>}
+              meanwhile={
+                <pre className="whitespace-pre-wrap font-mono text-source">{cell.source}</pre>
+              }
             />
             <CellTools id={id} actions={actions} />
           </>

@@ -5,7 +5,12 @@ import MarkdownIt from 'markdown-it';
 const markdown = new MarkdownIt({ html: false, linkify: false, typographer: false });
 markdown.disable('image');
 
-const KATEX = { output: 'htmlAndMathml', throwOnError: false, trust: false, strict: 'ignore' } as const;
+const KATEX = {
+  output: 'htmlAndMathml',
+  throwOnError: false,
+  trust: false,
+  strict: 'ignore',
+} as const;
 /** Notes are typeset in the browser: KaTeX's own guards against macros that grow. */
 const GUARDS = { maxExpand: 1000, maxSize: 20, errorColor: 'var(--ruddle)' } as const;
 
@@ -17,7 +22,10 @@ markdown.inline.ruler.before('escape', 'tex', (state, silent) => {
   const to = src.indexOf(fence, from);
   const tex = to < 0 ? '' : src.slice(from, to);
   // A price is no formula: what stands between single signs must not begin or end with a space.
-  if (tex.trim() === '' || (fence === '$' && (/^\s|\s$/.test(tex) || /\d/.test(src.charAt(to + 1))))) {
+  if (
+    tex.trim() === '' ||
+    (fence === '$' && (/^\s|\s$/.test(tex) || /\d/.test(src.charAt(to + 1))))
+  ) {
     return false;
   }
   if (!silent) {
@@ -69,7 +77,12 @@ export function headingsOf(source: string): Heading[] {
   const tokens = markdown.parse(source, {});
   return tokens.flatMap((token, index) =>
     token.type === 'heading_open'
-      ? [{ level: Number(token.tag.slice(1)), text: tokens[index + 1]?.content.replace(/[*_`$]/g, '') ?? '' }]
+      ? [
+          {
+            level: Number(token.tag.slice(1)),
+            text: tokens[index + 1]?.content.replace(/[*_`$]/g, '') ?? '',
+          },
+        ]
       : [],
   );
 }

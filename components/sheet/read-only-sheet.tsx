@@ -31,7 +31,11 @@ export function ReadOnlySheet({ content, answers, fields }: ReadOnlySheetProps) 
         {content.cells.map(({ id, kind, source }) => {
           if (kind === 'note') {
             return (
-              <section key={id} id={cellAnchor(id)} className="px-3 py-2 max-sm:px-2 sm:pl-[6.875rem]">
+              <section
+                key={id}
+                id={cellAnchor(id)}
+                className="px-3 py-2 max-sm:px-2 sm:pl-[6.875rem]"
+              >
                 <NoteText source={source} />
               </section>
             );

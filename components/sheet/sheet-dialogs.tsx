@@ -40,11 +40,14 @@ export function SheetDialogs(props: SheetDialogsProps) {
         onClose={close}
         onKeep={(together) => {
           dispatch({ kind: 'replace', content: together });
-          void keep(together, conflict.number, `brought together with version ${conflict.number}`, personName).then(
-            (done) => {
-              if (done) close();
-            },
-          );
+          void keep(
+            together,
+            conflict.number,
+            `brought together with version ${conflict.number}`,
+            personName,
+          ).then((done) => {
+            if (done) close();
+          });
         }}
         onTakeTheirs={() => {
           const { number, content: theirs, savedAt, author } = conflict;

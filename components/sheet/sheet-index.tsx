@@ -43,7 +43,9 @@ export function SheetIndex(props: SheetIndexProps) {
     kind === 'note' ? headingsOf(source).map((heading) => ({ ...heading, id })) : [],
   );
   if (marks.length === 0 && headings.length === 0) {
-    return <p className="text-small text-soft">Marks and headings are listed here as you write them.</p>;
+    return (
+      <p className="text-small text-soft">Marks and headings are listed here as you write them.</p>
+    );
   }
   return (
     <div className="space-y-6">

@@ -38,7 +38,8 @@ export function SheetNews({ sheet, evaluation, archived, onPanel }: SheetNewsPro
       )}
       {found && !conflict && (
         <Notice>
-          What you typed here until <Moment at={found.at} /> had not been kept; it is on the sheet again.{' '}
+          What you typed here until <Moment at={found.at} /> had not been kept; it is on the sheet
+          again.{' '}
           <Button look="quiet" onClick={sheet.forgetFound}>
             Go on with it
           </Button>

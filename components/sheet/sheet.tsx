@@ -76,7 +76,8 @@ function SheetOnScreen(props: SheetProps) {
         if (sheet.dirty && panel === null) setPanel('keep');
         return;
       }
-      const inField = event.target instanceof Element && event.target.closest('input, textarea, dialog');
+      const inField =
+        event.target instanceof Element && event.target.closest('input, textarea, dialog');
       if (inField || (key !== 'z' && key !== 'y')) return;
       event.preventDefault();
       (key === 'y' || event.shiftKey ? redo : undo)?.();
@@ -103,7 +104,12 @@ function SheetOnScreen(props: SheetProps) {
         mayShare={props.mayShare}
         onPanel={setPanel}
       />
-      <SheetNews sheet={sheet} evaluation={evaluation} archived={notebook.archivedAt !== null} onPanel={setPanel} />
+      <SheetNews
+        sheet={sheet}
+        evaluation={evaluation}
+        archived={notebook.archivedAt !== null}
+        onPanel={setPanel}
+      />
       <SheetLayout
         index={<SheetIndex content={content} shown={evaluation.shown} />}
         zones={zonesFor(content.cells.length)}
@@ -155,7 +161,10 @@ function useSheetActions(
   useEffect(() => {
     latest.current = content;
   });
-  const at = useCallback((id: string) => latest.current.cells.findIndex((cell) => cell.id === id), []);
+  const at = useCallback(
+    (id: string) => latest.current.cells.findIndex((cell) => cell.id === id),
+    [],
+  );
 
   return useMemo<SheetActions>(
     () => ({

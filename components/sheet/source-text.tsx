@@ -44,7 +44,8 @@ export function SourceLine({ text, error = null }: SourceLineProps) {
   );
 }
 
-export const errorOf = (result: { kind: string; error?: { from: number; to: number } } | undefined) =>
-  result?.kind === 'error' ? (result.error ?? null) : null;
+export const errorOf = (
+  result: { kind: string; error?: { from: number; to: number } } | undefined,
+) => (result?.kind === 'error' ? (result.error ?? null) : null);
 
 export const linesOf = (source: string): string[] => source.split(/\r?\n/);

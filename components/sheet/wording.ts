@@ -91,12 +91,17 @@ function numberCompartments(result: NumberResult, full: boolean): Compartment[] 
   const left = new Map(result.omitted?.map(({ field, message }) => [field, message]));
   const items = decimalCompartment(result, unit, full);
   if (result.degree !== null) items.push({ label: 'Degree', value: String(result.degree) });
-  else items.push({ label: 'Degree', value: left.has('degree') ? 'over the limit' : 'none: transcendental' });
+  else
+    items.push({
+      label: 'Degree',
+      value: left.has('degree') ? 'over the limit' : 'none: transcendental',
+    });
   items.push(reachCompartment(result.reach));
   if (unit) items.push({ label: 'Unit', value: unit });
   const roots = result.tower?.length ?? 0;
   if (left.has('tower')) items.push({ label: 'Tower', value: 'over the limit' });
-  else if (roots > 0) items.push({ label: 'Tower', value: roots === 1 ? '1 root' : `${roots} roots` });
+  else if (roots > 0)
+    items.push({ label: 'Tower', value: roots === 1 ? '1 root' : `${roots} roots` });
   if (!result.real) items.push({ label: 'Kind', value: 'not real' });
   if (full) {
     if (!result.reach?.straightedgeAndCompass && result.reach?.reason) {

@@ -7,7 +7,8 @@ export async function orNotFound<T>(answer: Promise<T>): Promise<T> {
   try {
     return await answer;
   } catch (fault) {
-    if (fault instanceof Failure && (fault.code === 'not-found' || fault.code === 'forbidden')) notFound();
+    if (fault instanceof Failure && (fault.code === 'not-found' || fault.code === 'forbidden'))
+      notFound();
     throw fault;
   }
 }

@@ -18,10 +18,7 @@ export function SiteHeader({ who }: SiteHeaderProps) {
           <span className="text-figure font-semibold">Surdwork</span>
         </Link>
         {who !== 'guest' && (
-          <nav
-            aria-label="Main"
-            className="flex flex-wrap items-center gap-x-5 gap-y-1 text-small"
-          >
+          <nav aria-label="Main" className="flex flex-wrap items-center gap-x-5 gap-y-1 text-small">
             {signedIn && (
               <Link className={LINK} href="/notebooks">
                 Notebooks

@@ -33,7 +33,11 @@ export async function ask<T>(path: string, { method, body, signal }: Asking = {}
     });
   } catch (cause) {
     if (cause instanceof DOMException && cause.name === 'AbortError') throw cause;
-    throw new Refusal(0, 'unreachable', 'No answer came from the server; the connection may be down.');
+    throw new Refusal(
+      0,
+      'unreachable',
+      'No answer came from the server; the connection may be down.',
+    );
   }
   if (response.status === 204) return undefined as T;
   const document = (await response.json().catch(() => null)) as Record<string, unknown> | null;

@@ -24,7 +24,9 @@ export function RestoreButton({ notebookId, number, head }: RestoreButtonProps) 
     setBusy(true);
     setFault(null);
     try {
-      await ask(`/api/notebooks/${notebookId}/versions/${number}/restore`, { body: { base: head } });
+      await ask(`/api/notebooks/${notebookId}/versions/${number}/restore`, {
+        body: { base: head },
+      });
       router.push(`/notebooks/${notebookId}`);
       router.refresh();
     } catch (refused) {
@@ -35,15 +37,19 @@ export function RestoreButton({ notebookId, number, head }: RestoreButtonProps) 
 
   return (
     <>
-      <Button look="quiet" onClick={() => setOpen(true)} aria-label={`Keep version ${number} again`}>
+      <Button
+        look="quiet"
+        onClick={() => setOpen(true)}
+        aria-label={`Keep version ${number} again`}
+      >
         Keep again
       </Button>
       {open && (
         <Dialog title={`Keep version ${number} again`} onClose={() => setOpen(false)}>
           <div className="space-y-4 text-left">
             <p>
-              Version {number} becomes version {head + 1}, the newest. All versions up to {head} stay
-              in the list.
+              Version {number} becomes version {head + 1}, the newest. All versions up to {head}{' '}
+              stay in the list.
             </p>
             {fault && <Notice tone="fault">{fault}</Notice>}
             <div className="flex justify-end">

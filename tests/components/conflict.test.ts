@@ -6,7 +6,11 @@ import { contentOf, dimension, memoryStore, note } from './sample';
 const base = contentOf(dimension('a', 'R = 1'), dimension('b', 'R/2'), note('c', 'Ring'));
 
 describe('two texts that began from one version', () => {
-  const mine = contentOf(dimension('a', 'R = 2'), dimension('b', 'R/2'), dimension('m', 'new of mine'));
+  const mine = contentOf(
+    dimension('a', 'R = 2'),
+    dimension('b', 'R/2'),
+    dimension('m', 'new of mine'),
+  );
   const theirs = contentOf(
     dimension('a', 'R = 3'),
     dimension('t', 'new of theirs'),
@@ -56,7 +60,12 @@ describe('two texts that began from one version', () => {
 });
 
 describe('the draft in this browser', () => {
-  const draft = { base: 4, from: base, content: contentOf(note('n', 'kept')), at: '2026-01-02T03:04:05Z' };
+  const draft = {
+    base: 4,
+    from: base,
+    content: contentOf(note('n', 'kept')),
+    at: '2026-01-02T03:04:05Z',
+  };
 
   it('comes back as it was kept, on its own shelf and for its own notebook', () => {
     const store = memoryStore();

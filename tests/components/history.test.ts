@@ -33,7 +33,8 @@ const anyChange: fc.Arbitrary<Change> = fc.oneof(
 /** Each change a long pause after the one before, so each is a step of its own. */
 const play = (changes: Change[], pause = 10_000): History =>
   changes.reduce(
-    (history, change, index) => historyReducer(history, { kind: 'change', change, at: index * pause }),
+    (history, change, index) =>
+      historyReducer(history, { kind: 'change', change, at: index * pause }),
     beginHistory(start),
   );
 const times = (history: History, kind: 'undo' | 'redo', count: number) =>

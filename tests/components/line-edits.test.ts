@@ -23,12 +23,24 @@ describe('an edit of one line', () => {
   });
 
   it('takes pasted lines, the cursor at the end of the paste', () => {
-    expect(replaceLine('', 0, 'a = 1\nb = 2\nc', 13)).toEqual({ source: 'a = 1\nb = 2\nc', line: 2, column: 1 });
+    expect(replaceLine('', 0, 'a = 1\nb = 2\nc', 13)).toEqual({
+      source: 'a = 1\nb = 2\nc',
+      line: 2,
+      column: 1,
+    });
   });
 
   it('joins a line to the one before, or the one after to it', () => {
-    expect(joinBefore(source, 1)).toEqual({ source: 'R = 1200 mms = R/2\n# end', line: 0, column: 11 });
-    expect(joinAfter(source, 1)).toEqual({ source: 'R = 1200 mm\ns = R/2# end', line: 1, column: 7 });
+    expect(joinBefore(source, 1)).toEqual({
+      source: 'R = 1200 mms = R/2\n# end',
+      line: 0,
+      column: 11,
+    });
+    expect(joinAfter(source, 1)).toEqual({
+      source: 'R = 1200 mm\ns = R/2# end',
+      line: 1,
+      column: 7,
+    });
     expect(joinBefore(source, 0)).toBeNull();
     expect(joinAfter(source, 2)).toBeNull();
   });
@@ -42,7 +54,11 @@ describe('an edit of one line', () => {
         const whole = lines.join('\n');
         const broken = replaceLine(whole, at, `${own.slice(0, cut)}\n${own.slice(cut)}`, cut + 1);
         expect(broken).toMatchObject({ line: at + 1, column: 0 });
-        expect(joinBefore(broken.source, broken.line)).toEqual({ source: whole, line: at, column: cut });
+        expect(joinBefore(broken.source, broken.line)).toEqual({
+          source: whole,
+          line: at,
+          column: cut,
+        });
       }),
     );
   });

@@ -33,12 +33,16 @@ describe('an entry', () => {
 
 describe('the value on the sheet', () => {
   it('carries its unit, in brackets where the value is a sum', () => {
-    expect(valueTex(numberResult({ exact: { text: '5+3*sqrt(2)', tex: '5+3\\sqrt{2}', staged: false } }))).toBe(
-      '\\left(5+3\\sqrt{2}\\right)\\,\\mathrm{mm}',
-    );
-    expect(valueTex(numberResult({ unit: 'mm^2', exact: { text: 'sqrt(2)', tex: '\\sqrt{2}', staged: false } }))).toBe(
-      '\\sqrt{2}\\,\\mathrm{mm}^{2}',
-    );
+    expect(
+      valueTex(
+        numberResult({ exact: { text: '5+3*sqrt(2)', tex: '5+3\\sqrt{2}', staged: false } }),
+      ),
+    ).toBe('\\left(5+3\\sqrt{2}\\right)\\,\\mathrm{mm}');
+    expect(
+      valueTex(
+        numberResult({ unit: 'mm^2', exact: { text: 'sqrt(2)', tex: '\\sqrt{2}', staged: false } }),
+      ),
+    ).toBe('\\sqrt{2}\\,\\mathrm{mm}^{2}');
     expect(valueTex(SUM_OF_ROOTS)).toBe('\\sqrt{2}+\\sqrt{3}');
   });
 
@@ -68,8 +72,17 @@ describe('the place of an error', () => {
 
   it('marks the last character for an error at the end, and never loses or doubles text', () => {
     expect(piecesOf('R = (', { from: 5, to: 5 }).at(-1)).toEqual({ text: '(', faulty: true });
-    for (const [from, to] of [[0, 0], [2, 99], [50, 60], [-3, 1]] as const) {
-      expect(piecesOf('R = (', { from, to }).map((piece) => piece.text).join('')).toBe('R = (');
+    for (const [from, to] of [
+      [0, 0],
+      [2, 99],
+      [50, 60],
+      [-3, 1],
+    ] as const) {
+      expect(
+        piecesOf('R = (', { from, to })
+          .map((piece) => piece.text)
+          .join(''),
+      ).toBe('R = (');
     }
   });
 
@@ -138,10 +151,13 @@ describe('a cutting step', () => {
     expect(readStep(text, 'mm')).toEqual(expected);
   });
 
-  it.each(['0', '0.0 mm', '-1 mm', '1/0 in', 'half', '5 kg', '1e3'])('refuses %j in a sentence', (text) => {
-    const read = readStep(text, 'mm');
-    expect('fault' in read && read.fault).toContain('is not a length');
-  });
+  it.each(['0', '0.0 mm', '-1 mm', '1/0 in', 'half', '5 kg', '1e3'])(
+    'refuses %j in a sentence',
+    (text) => {
+      const read = readStep(text, 'mm');
+      expect('fault' in read && read.fault).toContain('is not a length');
+    },
+  );
 });
 
 describe('the drawing', () => {
@@ -184,12 +200,19 @@ describe('the choice after a conflict', () => {
         onClose={vi.fn()}
       />,
     );
-    for (const text of ['R = 2', 'R = 3', 'S = 1', 'S = 9']) expect(screen.getByText(text)).toBeInTheDocument();
+    for (const text of ['R = 2', 'R = 3', 'S = 1', 'S = 9'])
+      expect(screen.getByText(text)).toBeInTheDocument();
     const user = userEvent.setup();
     await user.click(screen.getByRole('button', { name: 'Keep as version 6' }));
-    expect(keep.mock.lastCall?.[0].cells.map((cell: { source: string }) => cell.source)).toEqual(['R = 2', 'S = 9']);
+    expect(keep.mock.lastCall?.[0].cells.map((cell: { source: string }) => cell.source)).toEqual([
+      'R = 2',
+      'S = 9',
+    ]);
     await user.click(screen.getAllByRole('radio', { name: /Tam Osgood/ })[0]!);
     await user.click(screen.getByRole('button', { name: 'Keep as version 6' }));
-    expect(keep.mock.lastCall?.[0].cells.map((cell: { source: string }) => cell.source)).toEqual(['R = 3', 'S = 9']);
+    expect(keep.mock.lastCall?.[0].cells.map((cell: { source: string }) => cell.source)).toEqual([
+      'R = 3',
+      'S = 9',
+    ]);
   });
 });

@@ -2,7 +2,11 @@ import type { Result } from '@/components/sheet/result';
 
 type NumberResult = Extract<Result, { kind: 'number' }>;
 
-const REACHED = { straightedgeAndCompass: true, withTrisector: true, reason: 'A tower of square roots.' };
+const REACHED = {
+  straightedgeAndCompass: true,
+  withTrisector: true,
+  reason: 'A tower of square roots.',
+};
 
 /** A result as the evaluation gives it; whatever a test does not speak of is 500 mm. */
 export function numberResult(given: Partial<NumberResult> = {}): NumberResult {

@@ -28,7 +28,10 @@ describe('a new answer', () => {
   });
 
   it('never gives one line the value of another', () => {
-    const failing = fold(fold(new Map(), good, numberResult({ mark: 'S' })), errorResult(1, 'x', 0, 1));
+    const failing = fold(
+      fold(new Map(), good, numberResult({ mark: 'S' })),
+      errorResult(1, 'x', 0, 1),
+    );
     expect(failing.get('a')?.[0]?.before).toBeNull();
   });
 

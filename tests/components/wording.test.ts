@@ -1,7 +1,14 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { copyForms } from '@/components/sheet/copy-menu';
-import { compartmentsOf, sayBriefly, sayDecimal, sayDimension, sayResult, shorten } from '@/components/sheet/wording';
+import {
+  compartmentsOf,
+  sayBriefly,
+  sayDecimal,
+  sayDimension,
+  sayResult,
+  shorten,
+} from '@/components/sheet/wording';
 import { DECIDED, errorResult, numberResult, SUM_OF_ROOTS } from './sample-results';
 
 const labels = (result: Parameters<typeof compartmentsOf>[0], full = false) =>
@@ -15,17 +22,22 @@ describe('a shortened decimal', () => {
   });
 
   it('leaves short ones, whole ones and the exponent alone', () => {
-    for (const text of ['0', '500', '-0.75', '12345678901234567890']) expect(shorten(text)).toBe(text);
+    for (const text of ['0', '500', '-0.75', '12345678901234567890'])
+      expect(shorten(text)).toBe(text);
     expect(shorten('1.2345678901234567890e-40')).toBe('1.2345678901234…e-40');
   });
 
   it('keeps every figure before the point, whatever the number', () => {
     fc.assert(
-      fc.property(fc.bigInt({ min: 0n, max: 10n ** 30n }), fc.bigInt({ min: 10n ** 20n, max: 10n ** 25n }), (whole, part) => {
-        const cut = shorten(`${whole}.${part}`);
-        expect(cut.startsWith(`${whole}`)).toBe(true);
-        expect(`${whole}.${part}`.startsWith(cut.replace('…', ''))).toBe(true);
-      }),
+      fc.property(
+        fc.bigInt({ min: 0n, max: 10n ** 30n }),
+        fc.bigInt({ min: 10n ** 20n, max: 10n ** 25n }),
+        (whole, part) => {
+          const cut = shorten(`${whole}.${part}`);
+          expect(cut.startsWith(`${whole}`)).toBe(true);
+          expect(`${whole}.${part}`.startsWith(cut.replace('…', ''))).toBe(true);
+        },
+      ),
     );
   });
 });
@@ -51,7 +63,11 @@ describe('the compartments', () => {
       unit: null,
       degree: 3,
       tower: null,
-      reach: { straightedgeAndCompass: false, withTrisector: true, reason: 'Degree 3 is no power of two.' },
+      reach: {
+        straightedgeAndCompass: false,
+        withTrisector: true,
+        reason: 'Degree 3 is no power of two.',
+      },
     });
     const reach = compartmentsOf(seven, true).find(({ label }) => label === 'Reach');
     expect(reach?.tone).toBe('approximate');
@@ -62,10 +78,20 @@ describe('the compartments', () => {
 
   it('do not call a degree transcendental that only went over a limit', () => {
     const pi = numberResult({ degree: null, tower: null, minimalPolynomial: null });
-    expect(compartmentsOf(pi, false).find(({ label }) => label === 'Degree')?.value).toBe('none: transcendental');
-    const over = { ...pi, omitted: [{ field: 'degree', code: 'limit-tower', message: 'Too high.' } as const] };
-    expect(compartmentsOf(over, false).find(({ label }) => label === 'Degree')?.value).toBe('over the limit');
-    expect(compartmentsOf(over, true).at(-1)).toMatchObject({ label: 'Left out', value: 'Too high.' });
+    expect(compartmentsOf(pi, false).find(({ label }) => label === 'Degree')?.value).toBe(
+      'none: transcendental',
+    );
+    const over = {
+      ...pi,
+      omitted: [{ field: 'degree', code: 'limit-tower', message: 'Too high.' } as const],
+    };
+    expect(compartmentsOf(over, false).find(({ label }) => label === 'Degree')?.value).toBe(
+      'over the limit',
+    );
+    expect(compartmentsOf(over, true).at(-1)).toMatchObject({
+      label: 'Left out',
+      value: 'Too high.',
+    });
   });
 
   it('write a value that is not real with both its parts, and say that it is not', () => {
@@ -79,20 +105,38 @@ describe('the compartments', () => {
   });
 
   it('say of a statement that it is false, not only by colour', () => {
-    expect(compartmentsOf(DECIDED, false)[0]).toMatchObject({ value: 'false, exactly', tone: 'fault' });
+    expect(compartmentsOf(DECIDED, false)[0]).toMatchObject({
+      value: 'false, exactly',
+      tone: 'fault',
+    });
   });
 });
 
 describe('the drawn dimension', () => {
   it('carries the cut size and the way it was rounded', () => {
-    const cut = { value: '551.0', step: '0.5 mm', rounding: 'half-even', direction: 'down' } as const;
-    expect(sayDimension(numberResult({ cut }))).toEqual({ figure: '551.0 mm', below: 'rounded down to 0.5 mm' });
-    expect(sayDimension(numberResult({ cut: { ...cut, direction: 'exact' } }))?.below).toBe('exact');
+    const cut = {
+      value: '551.0',
+      step: '0.5 mm',
+      rounding: 'half-even',
+      direction: 'down',
+    } as const;
+    expect(sayDimension(numberResult({ cut }))).toEqual({
+      figure: '551.0 mm',
+      below: 'rounded down to 0.5 mm',
+    });
+    expect(sayDimension(numberResult({ cut: { ...cut, direction: 'exact' } }))?.below).toBe(
+      'exact',
+    );
   });
 
   it('never passes a shortened figure off as exact', () => {
-    const long = numberResult({ decimal: { re: '551.2485534496', im: null, digits: 13, terminates: true } });
-    expect(sayDimension(long)).toEqual({ figure: '551.2485… mm', below: 'not rounded: no cutting step' });
+    const long = numberResult({
+      decimal: { re: '551.2485534496', im: null, digits: 13, terminates: true },
+    });
+    expect(sayDimension(long)).toEqual({
+      figure: '551.2485… mm',
+      below: 'not rounded: no cutting step',
+    });
     expect(sayDimension(numberResult())?.below).toBe('exact');
   });
 
@@ -106,8 +150,12 @@ describe('the drawn dimension', () => {
 
 describe('a result in words', () => {
   it('names the mark, the size, the degree and the reach', () => {
-    expect(sayResult(numberResult())).toBe('R is 500 mm, degree 1, reached with straightedge and compass.');
-    expect(sayResult(errorResult(1, 'R = (', 5, 5))).toContain('A closing bracket was expected here.');
+    expect(sayResult(numberResult())).toBe(
+      'R is 500 mm, degree 1, reached with straightedge and compass.',
+    );
+    expect(sayResult(errorResult(1, 'R = (', 5, 5))).toContain(
+      'A closing bracket was expected here.',
+    );
   });
 
   it('is brief in the index of marks', () => {

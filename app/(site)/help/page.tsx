@@ -38,8 +38,8 @@ export default function HelpPage() {
       <div>
         <h1 className="font-serif text-title font-semibold">How to write cells</h1>
         <p className="mt-2 max-w-prose text-soft">
-          A sheet holds dimension cells, whose lines are evaluated exactly, and notes in Markdown, with
-          TeX between dollar signs.
+          A sheet holds dimension cells, whose lines are evaluated exactly, and notes in Markdown,
+          with TeX between dollar signs.
         </p>
       </div>
       <Part title="Lines of a dimension cell">

@@ -18,7 +18,9 @@ export default async function SettingsPage() {
     <div className="mx-auto max-w-page space-y-8">
       <div className="flex flex-wrap items-start justify-between gap-4">
         <div>
-          <h1 className="font-serif text-head font-semibold [overflow-wrap:anywhere]">{person.name}</h1>
+          <h1 className="font-serif text-head font-semibold [overflow-wrap:anywhere]">
+            {person.name}
+          </h1>
           <p className="text-soft [overflow-wrap:anywhere]">
             {[person.email, ...workshops.map((workshop) => workshop.name)].join(' · ')}
           </p>

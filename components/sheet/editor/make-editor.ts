@@ -105,7 +105,9 @@ export function makeEditor(options: EditorOptions): EditorHandle {
     const { main } = view.state.selection;
     // A long line wraps: the arrow leaves it only from its first or last row.
     const next = view.moveVertically(main, edge === 'after');
-    const within = next.head !== main.head && view.coordsAtPos(next.head)?.top !== view.coordsAtPos(main.head)?.top;
+    const within =
+      next.head !== main.head &&
+      view.coordsAtPos(next.head)?.top !== view.coordsAtPos(main.head)?.top;
     return main.empty && !within && onLeave(edge, main.head);
   };
   const join = (view: EditorView, side: 'before' | 'after') => {
@@ -131,7 +133,9 @@ export function makeEditor(options: EditorOptions): EditorHandle {
         ),
         // No history here: the notebook has one of its own, across all cells.
         keymap.of(standardKeymap),
-        kind === 'dimension' ? [cellLanguage, syntaxHighlighting(highlighting), bracketMatching()] : [],
+        kind === 'dimension'
+          ? [cellLanguage, syntaxHighlighting(highlighting), bracketMatching()]
+          : [],
         theme,
         placeholder(PLACEHOLDERS[kind]),
         EditorView.lineWrapping,

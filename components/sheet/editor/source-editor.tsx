@@ -6,11 +6,10 @@ import type { EditorHandle, EditorOptions, PlacedFault } from './make-editor';
 
 type Loaded = typeof import('./make-editor');
 
-interface SourceEditorProps
-  extends Pick<
-    EditorOptions,
-    'source' | 'kind' | 'label' | 'nonce' | 'column' | 'onWrite' | 'onLeave' | 'onJoin'
-  > {
+interface SourceEditorProps extends Pick<
+  EditorOptions,
+  'source' | 'kind' | 'label' | 'nonce' | 'column' | 'onWrite' | 'onLeave' | 'onJoin'
+> {
   results: readonly Result[];
   /** What stands here until the editor has been loaded. */
   meanwhile: ReactNode;

@@ -36,9 +36,10 @@ export function ConflictDialog(props: ConflictDialogProps) {
   return (
     <Dialog title={`${head.author} kept version ${head.number} meanwhile`} onClose={onClose} wide>
       <p>
-        Version {head.number} was kept on <Moment at={head.savedAt} />, after you began. Choose for each
-        cell that differs; what you choose becomes version {head.number + 1}. Version {head.number}{' '}
-        stays in the list of versions, and your text stays in this browser until you have chosen.
+        Version {head.number} was kept on <Moment at={head.savedAt} />, after you began. Choose for
+        each cell that differs; what you choose becomes version {head.number + 1}. Version{' '}
+        {head.number} stays in the list of versions, and your text stays in this browser until you
+        have chosen.
       </p>
       <ul className="space-y-3">
         {differences.map((difference) => (
@@ -51,7 +52,9 @@ export function ConflictDialog(props: ConflictDialogProps) {
           />
         ))}
       </ul>
-      {differences.length === 0 && <p>The cells of both are the same; only order or settings differ.</p>}
+      {differences.length === 0 && (
+        <p>The cells of both are the same; only order or settings differ.</p>
+      )}
       {state.kind === 'failed' && <Notice tone="fault">{state.fault}</Notice>}
       <div className="flex flex-wrap justify-between gap-2 border-t border-hairline pt-3">
         <div className="flex flex-wrap gap-2">
@@ -84,7 +87,11 @@ interface DifferenceRowProps {
   onChoose: (side: Side) => void;
 }
 
-const CHANGED = { mine: 'changed by you', theirs: 'changed by them', both: 'changed by both' } as const;
+const CHANGED = {
+  mine: 'changed by you',
+  theirs: 'changed by them',
+  both: 'changed by both',
+} as const;
 
 function DifferenceRow({ difference, choice, author, onChoose }: DifferenceRowProps) {
   const { id, mine, theirs, changed } = difference;
@@ -124,7 +131,8 @@ function DifferenceRow({ difference, choice, author, onChoose }: DifferenceRowPr
 }
 
 function CellText({ cell }: { cell: NotebookCell | null }) {
-  if (cell === null) return <span className="block text-small italic text-soft">not on the sheet</span>;
+  if (cell === null)
+    return <span className="block text-small italic text-soft">not on the sheet</span>;
   return (
     <code className="block whitespace-pre-wrap font-mono text-small [overflow-wrap:anywhere]">
       {cell.source || '(empty)'}

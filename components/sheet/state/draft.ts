@@ -34,7 +34,9 @@ export function findDraft(store: Store, notebookId: string, shelf: Shelf = 'typi
   try {
     const text = store.getItem(keyOf(notebookId, shelf));
     const kept: unknown = text === null ? null : JSON.parse(text);
-    return isDraft(kept) ? { base: kept.base, from: kept.from, content: kept.content, at: kept.at } : null;
+    return isDraft(kept)
+      ? { base: kept.base, from: kept.from, content: kept.content, at: kept.at }
+      : null;
   } catch {
     return null;
   }

@@ -11,7 +11,9 @@ const split = (source: string) => source.split(/\r?\n/);
 export function replaceLine(source: string, line: number, text: string, cursor: number): LineEdit {
   const before = text.slice(0, cursor).split('\n');
   return {
-    source: split(source).toSpliced(line, 1, ...text.split('\n')).join('\n'),
+    source: split(source)
+      .toSpliced(line, 1, ...text.split('\n'))
+      .join('\n'),
     line: line + before.length - 1,
     column: before.at(-1)?.length ?? 0,
   };

@@ -68,7 +68,9 @@ export default async function VersionPage({ params }: PageProps) {
         </Notice>
       )}
       {answers === null && (
-        <Notice tone="caution">The figures cannot be worked out just now; the sources are shown.</Notice>
+        <Notice tone="caution">
+          The figures cannot be worked out just now; the sources are shown.
+        </Notice>
       )}
       <ReadOnlySheet
         content={content}
