@@ -1,4 +1,5 @@
 import { type ChildProcess, spawn } from 'node:child_process';
+import { readFileSync } from 'node:fs';
 import path from 'node:path';
 import { createInterface } from 'node:readline';
 import type { Socket } from 'node:net';
@@ -9,6 +10,8 @@ import type { Job, Report } from './messages';
 export function bundlePath(): string {
   return path.join(/* turbopackIgnore: true */ process.cwd(), '.build', 'child.mjs');
 }
+
+const PAGE = 4096;
 
 /** How a child ended: by us, by running out of heap, by the system's limit on processor time, or otherwise. */
 export type Ending = 'stopped' | 'memory' | 'processor-time' | 'crash';
@@ -26,12 +29,12 @@ export class EvaluationChild {
   readonly ended: Promise<Ending>;
   private over = false;
 
-  constructor() {
+  constructor(program: string) {
     const limit = `ulimit -t ${EVALUATION_LIMITS.childProcessorTime}; ulimit -c 0; exec "$0" "$@"`;
     const options = [
       `--max-old-space-size=${EVALUATION_LIMITS.childHeap}`,
       '--stack-size=900',
-      bundlePath(),
+      program,
     ];
     this.child = spawn('/bin/sh', ['-c', limit, process.execPath, ...options], {
       env: { NODE_ENV: 'production' },
@@ -39,7 +42,8 @@ export class EvaluationChild {
     });
     this.ended = new Promise((resolve) => {
       this.child.once('error', () => this.finish(resolve, 'crash'));
-      this.child.once('exit', (code, signal) => this.finish(resolve, this.endingOf(code, signal)));
+      // Not `exit`: what the child wrote last must have been read when its end is told.
+      this.child.once('close', (code, signal) => this.finish(resolve, this.endingOf(code, signal)));
     });
     if (this.child.stdout !== null) {
       createInterface({ input: this.child.stdout }).on('line', (line) =>
@@ -70,6 +74,16 @@ export class EvaluationChild {
   rest(): void {
     this.listener = null;
     this.hold(false);
+  }
+
+  /** Megabytes that the child holds now; null where the system does not tell. */
+  residentMemory(): number | null {
+    try {
+      const [, pages = ''] = readFileSync(`/proc/${this.child.pid ?? 0}/statm`, 'utf8').split(' ');
+      return (Number(pages) * PAGE) / 2 ** 20;
+    } catch {
+      return null;
+    }
   }
 
   kill(): void {

@@ -19,8 +19,11 @@ function run(job: Job): void {
       { cell, line }: { cell: number; line: number },
       result: Extract<Report, { kind: 'finished' }>['result'],
     ) => report({ kind: 'finished', job: job.job, cell, line, result }),
+    valued: ({ cell, line }: { cell: number; line: number }) =>
+      report({ kind: 'valued', job: job.job, cell, line }),
     known: new Map(job.known),
     refused: new Map(job.refused),
+    brief: new Map(job.brief),
   };
   try {
     const result =

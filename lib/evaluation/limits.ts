@@ -9,8 +9,12 @@ export const EVALUATION_LIMITS = {
   requestTime: 1_800,
   /** Milliseconds for one line; less when little of the request's time is left. */
   lineTime: 800,
-  /** Megabytes of heap of a child process. */
-  childHeap: 192,
+  /** Megabytes of memory of a child process, looked at every few milliseconds while it works. */
+  childMemory: 224,
+  /** Megabytes of heap at which the run time itself ends a child: the stop behind `childMemory`. */
+  childHeap: 320,
+  /** Milliseconds between two looks at a child's memory. */
+  memoryWatch: 40,
   /** Seconds of processor time after which the system ends a child, whatever has become of its parent. */
   childProcessorTime: 30,
   /** Seconds of processor time after which an idle child is replaced, well before the system would end it. */
@@ -18,3 +22,5 @@ export const EVALUATION_LIMITS = {
   /** Requests that may wait for a child. */
   waiting: 200,
 } as const;
+
+export type EvaluationLimits = { readonly [name in keyof typeof EVALUATION_LIMITS]: number };

@@ -8,6 +8,8 @@ export interface Job {
   readonly settings: Partial<Settings>;
   readonly known: readonly (readonly [string, Result])[];
   readonly refused: readonly (readonly [string, Refusal])[];
+  /** Lines that get their value but not its degree, polynomial and tower. */
+  readonly brief: readonly (readonly [string, Refusal])[];
 }
 
 /** Why a line is not to be evaluated. */
@@ -18,7 +20,12 @@ export interface Refusal {
 
 /** What a child reports, one JSON line each, written before it goes on. */
 export type Report =
-  | { readonly kind: 'started'; readonly job: number; readonly cell: number; readonly line: number }
+  | {
+      readonly kind: 'started' | 'valued';
+      readonly job: number;
+      readonly cell: number;
+      readonly line: number;
+    }
   | {
       readonly kind: 'finished';
       readonly job: number;

@@ -1,5 +1,5 @@
 import { availableParallelism } from 'node:os';
-import { EvaluationChild } from './child-process';
+import { EvaluationChild, bundlePath } from './child-process';
 import { EVALUATION_LIMITS } from './limits';
 
 /** Too many requests are waiting; the caller may try again later. */
@@ -21,7 +21,10 @@ export class Pool {
   private working = 0;
   private closed = false;
 
-  constructor(private readonly parallel = Math.max(2, Math.min(4, availableParallelism()))) {}
+  constructor(
+    private readonly parallel = Math.max(2, Math.min(4, availableParallelism())),
+    private readonly program = bundlePath(),
+  ) {}
 
   /** Waits for a turn; at most `parallel` requests work at once. */
   async enter(): Promise<void> {
@@ -77,7 +80,7 @@ export class Pool {
   }
 
   private spawn(): EvaluationChild {
-    const child = new EvaluationChild();
+    const child = new EvaluationChild(this.program);
     this.all.add(child);
     void child.ended.then(() => {
       this.all.delete(child);

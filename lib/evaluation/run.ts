@@ -1,6 +1,6 @@
 import { type Result, keyOf } from '@/lib/language/index';
 import type { Ending, EvaluationChild } from './child-process';
-import { EVALUATION_LIMITS } from './limits';
+import { EVALUATION_LIMITS, type EvaluationLimits } from './limits';
 import type { Job, Refusal, Report } from './messages';
 import type { Pool } from './pool';
 
@@ -23,34 +23,55 @@ type Attempt =
   | {
       readonly kind: 'refused';
       readonly line: string | null;
+      /** Whether the line had its value already. */
+      readonly valued: boolean;
       readonly refusal: Refusal;
       readonly detail: string | null;
     };
 
+/** What is known so far, from all attempts. */
+class Progress {
+  readonly results = new Map<string, Result>();
+  readonly refused = new Map<string, Refusal>();
+  readonly brief = new Map<string, Refusal>();
+  readonly faults: string[] = [];
+
+  /** Takes in how an attempt was stopped; false when that teaches nothing that another attempt could use. */
+  learn({ line, valued, refusal, detail }: Extract<Attempt, { kind: 'refused' }>): boolean {
+    if (detail !== null) this.faults.push(detail);
+    if (line === null || this.refused.has(line)) return false;
+    if (valued && !this.brief.has(line)) {
+      this.brief.set(line, refusal);
+    } else {
+      this.results.delete(line);
+      this.refused.set(line, refusal);
+    }
+    return true;
+  }
+
+  finished(expression: Result | null, complete: boolean): Finished {
+    const stopped = !complete || this.refused.size > 0 || this.brief.size > 0;
+    return { results: this.results, expression, stopped, faults: this.faults };
+  }
+}
+
 /**
  * Evaluates within the time of a request. Reports come line by line; when a child is stopped, or ends, the line in hand
  * is refused with the reason and the rest is evaluated again by a fresh child, results that are already there being
- * kept. One line gets half of the time that is left at most, so that several bad lines leave something for the others.
+ * kept. A line that had its value keeps it, and only its degree, polynomial and tower are left out. One line gets half
+ * of the time that is left at most, so that several bad lines leave something for the others.
  */
 export async function runWork(
   pool: Pool,
   work: Work,
-  now: () => number = () => performance.now(),
+  limits: EvaluationLimits = EVALUATION_LIMITS,
 ): Promise<Finished> {
-  const end = now() + EVALUATION_LIMITS.requestTime;
-  const results = new Map<string, Result>();
-  const refused = new Map<string, Refusal>();
-  const faults: string[] = [];
+  const end = performance.now() + limits.requestTime;
+  const progress = new Progress();
   for (;;) {
-    const attempt = await tryOnce(pool, work, results, refused, end, now);
-    if (attempt.kind === 'done')
-      return { results, expression: attempt.expression, stopped: refused.size > 0, faults };
-    if (attempt.detail !== null) faults.push(attempt.detail);
-    if (attempt.line === null || refused.has(attempt.line) || now() >= end) {
-      return { results, expression: null, stopped: true, faults };
-    }
-    results.delete(attempt.line);
-    refused.set(attempt.line, attempt.refusal);
+    const attempt = await tryOnce(pool, work, progress, end, limits);
+    if (attempt.kind === 'done') return progress.finished(attempt.expression, true);
+    if (!progress.learn(attempt) || performance.now() >= end) return progress.finished(null, false);
   }
 }
 
@@ -59,30 +80,32 @@ let jobs = 0;
 async function tryOnce(
   pool: Pool,
   work: Work,
-  results: Map<string, Result>,
-  refused: ReadonlyMap<string, Refusal>,
+  progress: Progress,
   end: number,
-  now: () => number,
+  limits: EvaluationLimits,
 ): Promise<Attempt> {
   const child = pool.take();
-  const watch = new Watch(child, end, now);
+  const watch = new Watch(child, end, limits);
   jobs += 1;
+  const job = {
+    job: jobs,
+    ...work,
+    known: [...progress.results],
+    refused: [...progress.refused],
+    brief: [...progress.brief],
+  };
   const attempt = await new Promise<Attempt>((resolve) => {
     const settle = (outcome: Attempt): void => {
       watch.stop();
       resolve(outcome);
     };
-    watch.start((refusal) => settle({ kind: 'refused', line: watch.line, refusal, detail: null }));
-    child.start({ job: jobs, ...work, known: [...results], refused: [...refused] }, (report) => {
-      take(report, watch, results);
+    const refuse = (refusal: Refusal, detail: string | null): void =>
+      settle({ kind: 'refused', line: watch.line, valued: watch.valued, refusal, detail });
+    watch.start((refusal) => refuse(refusal, null));
+    child.start(job, (report) => {
+      take(report, watch, progress.results);
       if (report.kind === 'done') settle({ kind: 'done', expression: report.result });
-      if (report.kind === 'fault')
-        settle({
-          kind: 'refused',
-          line: watch.line,
-          refusal: report.refusal,
-          detail: report.detail,
-        });
+      if (report.kind === 'fault') refuse(report.refusal, report.detail);
     });
   });
   if (attempt.kind === 'done') pool.give(child);
@@ -92,6 +115,7 @@ async function tryOnce(
 
 function take(report: Report, watch: Watch, results: Map<string, Result>): void {
   if (report.kind === 'started') watch.begin(keyOf(report));
+  if (report.kind === 'valued') watch.begin(keyOf(report), true);
   if (report.kind === 'finished') {
     results.set(keyOf(report), report.result);
     watch.begin(null);
@@ -101,49 +125,72 @@ function take(report: Report, watch: Watch, results: Map<string, Result>): void 
 /** Watches the clock and the child while a job runs, and knows which line is in hand. */
 class Watch {
   line: string | null = null;
+  valued = false;
   private timer: NodeJS.Timeout | undefined;
+  private memoryTimer: NodeJS.Timeout | undefined;
   private refuse: ((refusal: Refusal) => void) | null = null;
   private allowed = 0;
 
   constructor(
     private readonly child: EvaluationChild,
     private readonly end: number,
-    private readonly now: () => number,
+    private readonly limits: EvaluationLimits,
   ) {}
 
   start(refuse: (refusal: Refusal) => void): void {
     this.refuse = refuse;
-    void this.child.ended.then((ending) => this.refuse?.(refusalOf(ending, this.allowed)));
+    void this.child.ended.then((ending) => this.refuse?.(this.refusal(ending)));
+    this.memoryTimer = setInterval(() => {
+      const met = this.child.residentMemory();
+      if (met !== null && met > this.limits.childMemory) this.refuse?.(this.refusal('memory'));
+    }, this.limits.memoryWatch);
     this.begin(null);
   }
 
-  /** A line starts, or the time between two lines does. */
-  begin(line: string | null): void {
+  /** A line starts, or its second part after it has its value, or the time between two lines. */
+  begin(line: string | null, valued = false): void {
     this.line = line;
+    this.valued = valued;
     clearTimeout(this.timer);
-    const left = Math.max(0, this.end - this.now());
-    this.allowed = Math.ceil(line === null ? left : Math.min(EVALUATION_LIMITS.lineTime, left / 2));
-    this.timer = setTimeout(() => this.refuse?.(refusalOf('stopped', this.allowed)), this.allowed);
+    const left = Math.max(0, this.end - performance.now());
+    this.allowed = Math.ceil(line === null ? left : Math.min(this.limits.lineTime, left / 2));
+    this.timer = setTimeout(() => this.refuse?.(this.refusal('stopped')), this.allowed);
+  }
+
+  private refusal(ending: Ending): Refusal {
+    return refusalOf(
+      ending,
+      this.limits,
+      this.allowed,
+      this.valued ? 'The degree of this value' : 'The exact value of this line',
+    );
   }
 
   stop(): void {
     clearTimeout(this.timer);
+    clearInterval(this.memoryTimer);
     this.refuse = null;
   }
 }
 
-function refusalOf(ending: Ending, allowed: number): Refusal {
+/** `what` begins the sentence. */
+function refusalOf(
+  ending: Ending,
+  limits: EvaluationLimits,
+  allowed: number,
+  what: string,
+): Refusal {
   switch (ending) {
     case 'memory':
       return {
         code: 'limit-memory',
-        message: `The exact value of this line needs more than ${EVALUATION_LIMITS.childHeap} megabytes of memory, which is the limit.`,
+        message: `${what} needs more than ${limits.childMemory} megabytes of memory, which is the limit.`,
       };
     case 'stopped':
     case 'processor-time':
       return {
         code: 'limit-time',
-        message: `The exact value of this line took more than ${allowed} milliseconds, which was the limit for it.`,
+        message: `${what} took more than ${allowed} milliseconds, which was the limit for it.`,
       };
     case 'crash':
       return {

@@ -26,10 +26,14 @@ export interface EvaluationOptions {
   readonly engineLimits?: Partial<Limits>;
   /** Called before the arithmetic of a line starts. */
   readonly started?: (place: LinePlace) => void;
+  /** Called when a line has its value and only degree, polynomial and tower are still to come. */
+  readonly valued?: (place: LinePlace) => void;
   /** Called with each result as soon as it is there; not for those in `known`. */
   readonly finished?: (place: LinePlace, result: Result) => void;
   /** Results of an earlier run, by `keyOf` their place: the line is evaluated again only if another line reads it. */
   readonly known?: ReadonlyMap<string, Result>;
+  /** Lines whose degree, polynomial and tower are to be left out, with the reason, by `keyOf` their place. */
+  readonly brief?: ReadonlyMap<string, { readonly code: ErrorCode; readonly message: string }>;
   /** Lines that are not to be evaluated because they went over a limit, by `keyOf` their place. */
   readonly refused?: ReadonlyMap<string, { readonly code: ErrorCode; readonly message: string }>;
 }
@@ -177,7 +181,7 @@ class Evaluation {
     this.evaluator.at = statement;
     try {
       this.refuseByPlace(index, line, statement);
-      const given = this.giveStatement(index, statement);
+      const given = this.giveStatement(index, line, statement);
       return {
         ...common,
         typeset: typeset ?? '',
@@ -192,7 +196,7 @@ class Evaluation {
     }
   }
 
-  private giveStatement(index: number, statement: Statement) {
+  private giveStatement(index: number, line: SourceLine, statement: Statement) {
     if (statement.kind === 'decision') {
       return {
         kind: 'truth' as const,
@@ -201,7 +205,10 @@ class Evaluation {
     }
     const value = attemptOrFail(this.engine, () => this.evaluator.value(statement.value));
     this.evaluator.at = statement.value;
-    const given = giveValue(this.engine, value, this.settings);
+    const given = giveValue(this.engine, value, this.settings, {
+      started: () => this.options.valued?.(line),
+      refused: this.options.brief?.get(keyOf(line)) ?? null,
+    });
     this.values.set(index, value);
     return given;
   }

@@ -1,6 +1,6 @@
 import type { Engine, Num } from '../engine/index';
 import { attemptOrFail } from './attempt';
-import { fail } from './failure';
+import { type ErrorCode, fail } from './failure';
 import { findUnit } from './names';
 import { type PiSum, asAlgebraic, decideByEnclosures, mapSum } from './pi-sum';
 import type { DecimalResult, Exact, NumberResult, Omission } from './result';
@@ -20,6 +20,14 @@ export interface GivenAngle {
   reach: NumberResult['reach'];
 }
 
+/** How the last and often longest part of giving a number is watched, and whether it is to be left out. */
+export interface StructureWatch {
+  /** Called when value, digits and cut size are there and degree, polynomial and tower come next. */
+  readonly started: () => void;
+  /** Why these three are to be left out, when they are. */
+  readonly refused: { readonly code: ErrorCode; readonly message: string } | null;
+}
+
 /**
  * Writes a value out as the result schema has it, in the unit of the settings. Degree, minimal polynomial and tower
  * that go over a limit are left out and named; everything else that fails, fails the whole with a `Failure`. Each part
@@ -29,13 +37,19 @@ export function giveValue(
   engine: Engine,
   value: Value,
   settings: GivenSettings,
+  watch: StructureWatch,
 ): GivenNumber | GivenAngle {
   return value.kind === 'angle'
     ? giveAngle(engine, value, settings)
-    : giveNumber(engine, value, settings);
+    : giveNumber(engine, value, settings, watch);
 }
 
-function giveNumber(engine: Engine, value: NumberValue, settings: GivenSettings): GivenNumber {
+function giveNumber(
+  engine: Engine,
+  value: NumberValue,
+  settings: GivenSettings,
+  watch: StructureWatch,
+): GivenNumber {
   const sum = attemptOrFail(engine, () => inUnit(engine, value, settings.unit));
   const algebraic = asAlgebraic(engine, sum);
   const real = isRealValue(engine, value);
@@ -60,15 +74,21 @@ function giveNumber(engine: Engine, value: NumberValue, settings: GivenSettings)
         tower: null,
         reach: { ...TRANSCENDENTAL_REACH },
       }
-    : { ...common, ...giveStructure(engine, algebraic) };
+    : { ...common, ...giveStructure(engine, algebraic, watch) };
 }
 
 function giveStructure(
   engine: Engine,
   value: Num,
+  watch: StructureWatch,
 ): Pick<GivenNumber, 'degree' | 'minimalPolynomial' | 'tower' | 'reach' | 'omitted'> {
   const omitted: Omission[] = [];
+  watch.started();
   const attempt = <T>(field: Omission['field'], work: () => T): T | null => {
+    if (watch.refused !== null) {
+      omitted.push({ field, ...watch.refused });
+      return null;
+    }
     const outcome = engine.attempt(work);
     if (outcome.kind === 'value') return outcome.value;
     omitted.push({ field, code: outcome.code, message: outcome.message });

@@ -9,7 +9,7 @@ import { fail } from './failure';
  */
 export type PiSum = ReadonlyMap<number, Num>;
 
-const LARGEST_EXPONENT = 1000;
+const LARGEST_EXPONENT = 100;
 
 export function fromNum(engine: Engine, value: Num): PiSum {
   return engine.isZero(value) ? new Map() : new Map([[0, value]]);
@@ -140,19 +140,30 @@ export interface Enclosure {
  * Accepts real coefficients only. The width goes to 0 as `bits` grows.
  */
 export function enclose(engine: Engine, sum: PiSum, bits: number): Enclosure {
-  const { low: lowPi, high: highPi, denominator } = boundsOfPi(bits);
+  const one = 1n << BigInt(bits);
+  const bound = (numerator: bigint): Num => engine.rational(numerator, one);
   let low = engine.integer(0n);
   let high = low;
   for (const [exponent, coefficient] of sum) {
-    const power = (numerator: bigint): Num =>
-      engine.pow(engine.rational(numerator, denominator), BigInt(exponent));
-    const [smaller, larger] =
-      exponent < 0 ? [power(highPi), power(lowPi)] : [power(lowPi), power(highPi)];
+    const power = boundsOfPower(exponent, bits);
     const positive = engine.sign(coefficient) >= 0;
-    low = engine.add(low, engine.mul(coefficient, positive ? smaller : larger));
-    high = engine.add(high, engine.mul(coefficient, positive ? larger : smaller));
+    low = engine.add(low, engine.mul(coefficient, bound(positive ? power.low : power.high)));
+    high = engine.add(high, engine.mul(coefficient, bound(positive ? power.high : power.low)));
   }
   return { low, high };
+}
+
+/** π^exponent between low/2^bits and high/2^bits, each product rounded outwards to that many bits. */
+function boundsOfPower(exponent: number, bits: number): { low: bigint; high: bigint } {
+  const shift = BigInt(bits);
+  const one = 1n << shift;
+  const base = boundsOfPi(bits);
+  let [low, high] = [one, one];
+  for (let step = 0; step < Math.abs(exponent); step += 1) {
+    low = (low * base.low) >> shift;
+    high = ((high * base.high) >> shift) + 1n;
+  }
+  return exponent >= 0 ? { low, high } : { low: (one * one) / high, high: (one * one) / low + 1n };
 }
 
 const MOST_BITS = 1 << 17;
@@ -187,21 +198,21 @@ export function signOfSum(engine: Engine, sum: PiSum): -1 | 0 | 1 {
   });
 }
 
-const cachedBounds = new Map<number, { low: bigint; high: bigint; denominator: bigint }>();
+const cachedBounds = new Map<number, { low: bigint; high: bigint }>();
 
 /**
  * π between low/2^bits and high/2^bits with high - low = 2, by Machin's formula π = 16 arctan(1/5) - 4 arctan(1/239)
  * (1706) in integers with guard bits. Each truncated division errs by less than one unit and the series alternates, so
  * the guard bits cover the whole error.
  */
-export function boundsOfPi(bits: number): { low: bigint; high: bigint; denominator: bigint } {
+export function boundsOfPi(bits: number): { low: bigint; high: bigint } {
   const known = cachedBounds.get(bits);
   if (known !== undefined) return known;
   const guard = BigInt(16 + Math.ceil(Math.log2(bits + 2)));
   const one = 1n << (BigInt(bits) + guard);
   const scaled = 16n * arctanOfInverse(5n, one) - 4n * arctanOfInverse(239n, one);
   const middle = scaled >> guard;
-  const bounds = { low: middle - 1n, high: middle + 1n, denominator: 1n << BigInt(bits) };
+  const bounds = { low: middle - 1n, high: middle + 1n };
   if (cachedBounds.size > 16) cachedBounds.clear();
   cachedBounds.set(bits, bounds);
   return bounds;
