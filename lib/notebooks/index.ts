@@ -1,3 +1,4 @@
+export { answerTo, questionOf } from './answers';
 export {
   LinkRequest,
   createLink,

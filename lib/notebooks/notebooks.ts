@@ -12,8 +12,9 @@ import { insertVersion, type Version } from '@/db/queries/versions';
 import { findWorkshopRole, listWorkshopsOf } from '@/db/queries/workshops';
 import { Failure, type Role } from '@/lib/access';
 import { isId, oneLine, type Person } from '@/lib/accounts';
-import { NotebookContent, canonicalContent, emptyContent } from './content';
+import { canonicalContent, emptyContent } from './content';
 import { holdFor, openFor } from './guard';
+import { SavableContent } from './savable';
 import type { NotebookHead, NotebookLine, OpenNotebook } from './types';
 import { contentOf, getVersion } from './versions';
 
@@ -22,7 +23,7 @@ const Title = oneLine('The title', 200);
 export const NewNotebook = z.strictObject({
   title: Title,
   workshopId: z.string({ error: 'The workshop is not given by its id.' }).optional(),
-  content: NotebookContent.optional(),
+  content: SavableContent.optional(),
 });
 export type NewNotebook = z.infer<typeof NewNotebook>;
 

@@ -14,6 +14,7 @@ import { Failure, type Action } from '@/lib/access';
 import type { Person } from '@/lib/accounts';
 import { NotebookContent, canonicalContent } from './content';
 import { holdFor, openFor } from './guard';
+import { SavableContent } from './savable';
 import type { OpenNotebook, OpenVersion, Saved, StaleHead, VersionLine } from './types';
 
 /** Versions count in steps of one from 1; the column holds no more than this. */
@@ -26,7 +27,7 @@ const Base = z
 
 export const SaveRequest = z.strictObject({
   base: Base,
-  content: NotebookContent,
+  content: SavableContent,
   note: z
     .string()
     .trim()

@@ -127,6 +127,17 @@ describe('what is sent', () => {
     ]);
   });
 
+  it.each(['0.5 furlong', '0 mm', 'wide', '-1 mm'])(
+    'with the cutting step %s, which nobody can cut to, is refused',
+    async (step) => {
+      const wrong = { ...content('1'), settings: { ...content().settings, step } };
+      const answer = await cast.owner.post('/api/notebooks', { title: 'x', content: wrong });
+      expect(answer.status).toBe(422);
+      expect(answer.json.fields).toMatchObject([{ field: 'content.settings.step' }]);
+      expect(answer.json.detail).toContain(step);
+    },
+  );
+
   it('as a form is refused, so that no other site can send it without asking', async () => {
     const answer = await cast.owner.post('/api/notebooks', '{"title":"x"}', {
       'content-type': 'text/plain',

@@ -102,7 +102,7 @@ export async function newcomer(name: string): Promise<Visitor> {
     name,
     email: visitor.email,
     password: PASSWORD,
-    workshop: `${name}’s yard`,
+    workshop: 'Quarrymoor Yard',
   });
   if (made.status !== 201) throw new Error(`No account: ${made.text}`);
   await visitor.signIn(visitor.email);

@@ -1,0 +1,40 @@
+import {
+  EvaluateRequest,
+  PoolBusy,
+  evaluate,
+  storeAnswersIn,
+  type EvaluateAnswer,
+} from '@/lib/evaluation';
+import { databaseStore } from '@/lib/evaluation/database-store';
+import { Failure } from '@/lib/access';
+import type { NotebookContent } from './content';
+
+const holder = globalThis as typeof globalThis & { surdworkAnswersKept?: true };
+
+/**
+ * Evaluates for the application: what has been evaluated before, by any instance, comes from the
+ * database. @throws Failure `busy` when too many evaluations wait already
+ */
+export async function answerTo(request: EvaluateRequest): Promise<EvaluateAnswer> {
+  if (holder.surdworkAnswersKept === undefined) {
+    storeAnswersIn(databaseStore());
+    holder.surdworkAnswersKept = true;
+  }
+  try {
+    return await evaluate(request);
+  } catch (error) {
+    if (!(error instanceof PoolBusy)) throw error;
+    throw new Failure('busy', 'Too many evaluations are waiting; try again in a moment.', {
+      retryAfter: 1,
+    });
+  }
+}
+
+/** The question that a notebook's dimension cells put together, under the notebook's settings. */
+export function questionOf(content: NotebookContent): EvaluateRequest {
+  const dimensions = content.cells.filter(({ kind }) => kind === 'dimension');
+  return {
+    cells: dimensions.map(({ id, source }) => ({ id, source })),
+    settings: content.settings,
+  };
+}

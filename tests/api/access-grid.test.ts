@@ -1,0 +1,262 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { insertMembership } from '@/db/queries/workshops';
+import { ALLOWED, ROLES, type Action, type Role } from '@/lib/access';
+import { openDatabase } from '../setup/server';
+import { content, newCast, newKey, newLink, type Cast } from './support/notebook';
+import { Visitor, newcomer } from './support/visitor';
+
+/**
+ * Every endpoint of a notebook × everybody who might ask, with the expected answers worked out from
+ * the access table alone.
+ */
+interface Endpoint {
+  name: string;
+  action: Action;
+  method: string;
+  path: (scene: Scene) => string | Promise<string>;
+  body?: (scene: Scene) => unknown;
+  /** Status where the table allows it; chosen so that asking twice changes nothing that matters. */
+  allowed: number;
+}
+
+interface Scene extends Cast {
+  member: Visitor;
+  token: string;
+  key: string;
+  editorId: string;
+  ownerId: string;
+}
+
+const base = (scene: Scene) => `/api/notebooks/${scene.notebook}`;
+
+const endpoints: Endpoint[] = [
+  { name: 'GET notebook', action: 'notebook.read', method: 'GET', path: base, allowed: 200 },
+  {
+    name: 'PATCH title',
+    action: 'notebook.rename',
+    method: 'PATCH',
+    path: base,
+    body: () => ({ title: 'Rose window' }),
+    allowed: 204,
+  },
+  {
+    name: 'PATCH archived',
+    action: 'notebook.archive',
+    method: 'PATCH',
+    path: base,
+    body: () => ({ archived: false }),
+    allowed: 204,
+  },
+  {
+    name: 'GET versions',
+    action: 'versions.list',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/versions`,
+    allowed: 200,
+  },
+  {
+    name: 'POST versions',
+    action: 'versions.save',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/versions`,
+    body: () => ({ base: 1, content: content('R = 1200 mm') }),
+    allowed: 200,
+  },
+  {
+    name: 'GET version',
+    action: 'versions.read',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/versions/1`,
+    allowed: 200,
+  },
+  {
+    name: 'POST restore',
+    action: 'versions.restore',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/versions/1/restore`,
+    body: () => ({ base: 1 }),
+    allowed: 200,
+  },
+  {
+    name: 'GET people',
+    action: 'people.list',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/people`,
+    allowed: 200,
+  },
+  {
+    name: 'POST people',
+    action: 'people.change',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/people`,
+    body: (scene) => ({ email: scene.editor.email, role: 'owner' }),
+    allowed: 409,
+  },
+  {
+    name: 'PATCH person',
+    action: 'people.change',
+    method: 'PATCH',
+    path: (scene) => `${base(scene)}/people/${scene.editorId}`,
+    body: () => ({ role: 'editor' }),
+    allowed: 204,
+  },
+  {
+    name: 'DELETE person',
+    action: 'people.change',
+    method: 'DELETE',
+    path: (scene) => `${base(scene)}/people/${scene.ownerId}`,
+    allowed: 409,
+  },
+  {
+    name: 'GET links',
+    action: 'links.list',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/links`,
+    allowed: 200,
+  },
+  {
+    name: 'POST links',
+    action: 'links.change',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/links`,
+    body: () => ({}),
+    allowed: 201,
+  },
+  {
+    name: 'DELETE link',
+    action: 'links.change',
+    method: 'DELETE',
+    path: async (scene) =>
+      `${base(scene)}/links/${(await newLink(scene.owner, scene.notebook)).id}`,
+    allowed: 204,
+  },
+  {
+    name: 'GET export',
+    action: 'notebook.export',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/export?format=json`,
+    allowed: 200,
+  },
+];
+
+let scene: Scene;
+const db = openDatabase();
+
+beforeAll(async () => {
+  const cast = await newCast('R = 1200 mm');
+  const { owner, notebook } = cast;
+  const [{ token }, { key }, member, people, opened] = await Promise.all([
+    newLink(owner, notebook),
+    newKey(owner),
+    newcomer('Mab'),
+    owner.get(`/api/notebooks/${notebook}/people`),
+    owner.get(`/api/notebooks/${notebook}`),
+  ]);
+  const idOf = (email: string) =>
+    (people.json.people as { id: string; email: string }[]).find((one) => one.email === email)
+      ?.id ?? '';
+  const { workshop } = opened.json.notebook as { workshop: { id: string } };
+  const row: { id: string } = await db('users').where({ email: member.email }).first('id');
+  await insertMembership(db, workshop.id, row.id, 'admin');
+  scene = {
+    ...cast,
+    member,
+    token,
+    key,
+    editorId: idOf(cast.editor.email),
+    ownerId: idOf(owner.email),
+  };
+});
+
+afterAll(() => db.destroy());
+
+async function ask(endpoint: Endpoint, as: Visitor, headers: Record<string, string> = {}) {
+  const path = await endpoint.path(scene);
+  return as.ask(endpoint.method, path, {
+    headers,
+    ...(endpoint.body === undefined ? {} : { body: endpoint.body(scene) }),
+  });
+}
+
+/** Nobody who is turned away may learn anything of the notebook or of the people on it. */
+function expectNothingLeaked(text: string): void {
+  const { owner, editor, viewer } = scene;
+  for (const secret of ['Rose window', '1200', owner.email, editor.email, viewer.email]) {
+    expect(text).not.toContain(secret);
+  }
+}
+
+describe.each(endpoints)('$name ($action)', (endpoint) => {
+  it.each(ROLES.map((role) => [role]))('answers the %s as the table says', async (role: Role) => {
+    const answer = await ask(endpoint, scene[role]);
+    const expected = ALLOWED[role].has(endpoint.action) ? endpoint.allowed : 403;
+    expect(answer.status).toBe(expected);
+    if (expected === 403) {
+      expect(answer.json.code).toBe('forbidden');
+      expectNothingLeaked(answer.text);
+    }
+  });
+
+  it.each(['member', 'stranger'] as const)(
+    'says to a %s without a role what it says of an unknown notebook',
+    async (who) => {
+      const answer = await ask(endpoint, scene[who]);
+      const unknown = { ...scene, notebook: '00000000-0000-4000-8000-000000000000' };
+      const path =
+        endpoint.name === 'DELETE link'
+          ? `${base(unknown)}/links/${unknown.notebook}`
+          : await endpoint.path(unknown);
+      const other = await scene[who].ask(endpoint.method, path, {
+        ...(endpoint.body === undefined ? {} : { body: endpoint.body(scene) }),
+      });
+      expect([answer.status, other.status]).toEqual([404, 404]);
+      expect({ ...answer.json, requestId: '' }).toEqual({ ...other.json, requestId: '' });
+      expectNothingLeaked(answer.text);
+    },
+  );
+
+  it.each([
+    ['signed-out people', () => ({})],
+    ['holders of a client link', () => ({ authorization: `Bearer ${scene.token}` })],
+    ['holders of an API key', () => ({ authorization: `Bearer ${scene.key}` })],
+  ])('asks %s to sign in', async (_who, headers) => {
+    const answer = await ask(endpoint, new Visitor(), headers());
+    expect(answer.status).toBe(401);
+    expect(answer.json.code).toBe('sign-in-needed');
+    expectNothingLeaked(answer.text);
+  });
+
+  it('is not carried out for another site', async () => {
+    const answer = await ask(endpoint, scene.owner, { origin: 'https://elsewhere.example' });
+    const read = endpoint.method === 'GET';
+    expect(answer.status).toBe(read ? endpoint.allowed : 403);
+    if (!read) expect(answer.json.code).toBe('foreign-origin');
+  });
+});
+
+describe('endpoints about oneself', () => {
+  it.each([
+    ['GET', '/api/notebooks', undefined],
+    ['POST', '/api/notebooks', { title: 'Mine' }],
+    ['GET', '/api/keys', undefined],
+    ['POST', '/api/keys', { label: 'Saw' }],
+    ['DELETE', '/api/keys/00000000-0000-4000-8000-000000000000', undefined],
+    ['DELETE', '/api/sessions', undefined],
+    ['POST', '/api/evaluate', { expression: '1+1' }],
+  ])('%s %s needs a person', async (method, path, body) => {
+    const answer = await new Visitor().ask(method, path, { body });
+    expect(answer.status).toBe(401);
+    expect(answer.json.code).toBe('sign-in-needed');
+  });
+
+  it.each([
+    ['GET', '/api/keys', undefined],
+    ['POST', '/api/keys', { label: 'Another' }],
+    ['GET', '/api/notebooks', undefined],
+    ['DELETE', '/api/sessions', undefined],
+  ])('%s %s does not take an API key for one', async (method, path, body) => {
+    const headers = { authorization: `Bearer ${scene.key}` };
+    const answer = await new Visitor().ask(method, path, { body, headers });
+    expect(answer.status).toBe(401);
+  });
+});
