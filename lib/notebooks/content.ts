@@ -65,11 +65,20 @@ export const NotebookCell = z.strictObject({
       error: `A cell id is at most ${CONTENT_LIMITS.cellId} characters long.`,
     }),
   kind: z.enum(['dimension', 'note'], { error: 'The kind of a cell is dimension or note.' }),
-  source: z.string().max(CONTENT_LIMITS.source, {
-    error: (issue) =>
-      `The source of a cell is ${plural((issue.input as string).length, 'character')} long; ` +
-      `at most ${CONTENT_LIMITS.source} are allowed.`,
-  }),
+  source: z
+    .string()
+    .max(CONTENT_LIMITS.source, {
+      error: (issue) =>
+        `The source of a cell is ${plural((issue.input as string).length, 'character')} long; ` +
+        `at most ${CONTENT_LIMITS.source} are allowed.`,
+    })
+    // A lone surrogate has no UTF-8 and so cannot be stored as it is.
+    .regex(/^\P{Cs}*$/u, {
+      error: (issue) => {
+        const place = (issue.input as string).search(/\p{Cs}/u) + 1;
+        return `The source of a cell has half of a character at place ${place}; delete it and type it anew.`;
+      },
+    }),
 });
 export type NotebookCell = z.infer<typeof NotebookCell>;
 

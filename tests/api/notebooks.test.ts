@@ -92,6 +92,12 @@ describe('what is sent', () => {
     ['a number for the title', { title: 7 }, 422, 'invalid'],
     ['an empty title', { title: ' ' }, 422, 'invalid'],
     ['a title with half of a character', '{"title":"\\ud800"}', 422, 'invalid'],
+    [
+      'a source with half of a character',
+      { title: 'x', content: content('1 \ud800') },
+      422,
+      'invalid',
+    ],
     ['a field nobody knows', { title: 'x', owner: 'me' }, 422, 'invalid'],
     ['a prototype', '{"title":"x","__proto__":{"role":"owner"}}', 422, 'invalid'],
     ['an over-long title', { title: 'x'.repeat(201) }, 422, 'invalid'],

@@ -80,6 +80,7 @@ describe('content', () => {
 
   it.each([
     ['two cells of one id', { cells: [1, 2].map(() => ({ id: 'a', kind: 'note', source: '' })) }],
+    ['half of a character', { cells: [{ id: 'a', kind: 'note', source: 'x \ud83d y' }] }],
     ['an id with a blank', { cells: [{ id: 'a b', kind: 'note', source: '' }] }],
     ['a kind nobody knows', { cells: [{ id: 'a', kind: 'figure', source: '' }] }],
     ['a field nobody knows', { drawing: [] }],
