@@ -1,4 +1,4 @@
-import { type Cut, type Result, typesetMark } from '@/lib/language/index';
+import type { Cut, Result } from '@/lib/language/index';
 import { breakableDigits, escapeTex } from './tex-text';
 
 /** A formula longer than this is set as running text, where TeX may break it over lines. */
@@ -58,14 +58,14 @@ export function compartments(result: Result): { name: string; tex: string }[] {
   const { decimal } = result;
   const unit =
     result.kind === 'angle' ? '^{\\circ}' : result.unit === null ? '' : unitTex(result.unit);
-  const digits = (value: string): string =>
-    breakableDigits(value.replace(/e([+-]?\d+)$/, '\\cdot 10^{$1}').replace('10^{+', '10^{'));
   const imaginary =
     decimal.im === null
       ? ''
-      : `${decimal.im.startsWith('-') ? '' : '+'}${digits(decimal.im)}\\,\\mathrm{i}`;
+      : `${decimal.im.startsWith('-') ? '' : '+'}${decimalTex(decimal.im)}\\,\\mathrm{i}`;
   const whole =
-    imaginary === '' ? digits(decimal.re) : `\\left(${digits(decimal.re)}${imaginary}\\right)`;
+    imaginary === ''
+      ? decimalTex(decimal.re)
+      : `\\left(${decimalTex(decimal.re)}${imaginary}\\right)`;
   const entries = [
     { name: 'Decimal', tex: `$${whole}${unit}$${decimal.terminates ? ', exactly' : ''}` },
   ];
@@ -86,6 +86,13 @@ export function compartments(result: Result): { name: string; tex: string }[] {
   return entries;
 }
 
+/** A decimal string, with a power of ten where it has one. */
+function decimalTex(value: string): string {
+  const [mantissa = '', exponent] = value.split('e');
+  const power = exponent === undefined ? '' : `\\cdot 10^{${exponent.replace('+', '')}}`;
+  return breakableDigits(mantissa) + power;
+}
+
 const DIRECTIONS: Readonly<Record<Cut['direction'], string>> = {
   up: 'rounded up, so greater than the exact value',
   down: 'rounded down, so less than the exact value',
@@ -96,7 +103,9 @@ function cutTex(cut: Cut, unit: string): string {
   return `$${breakableDigits(cut.value)}${unitTex(unit)}$, ${DIRECTIONS[cut.direction]} (step ${escapeTex(cut.step)}, ${cut.rounding})`;
 }
 
-/** The mark of a result, for the margin. */
+/** The mark of a result, for the margin: as it stands before the sign of equality in the line as typeset. */
 export function markTex(result: Result): string | null {
-  return result.mark === null ? null : `$${typesetMark(result.mark)}$`;
+  if (result.mark === null) return null;
+  if (result.typeset === null) return escapeTex(result.mark);
+  return `$${result.typeset.slice(0, result.typeset.indexOf('='))}$`;
 }
