@@ -1,6 +1,6 @@
 import { SheetFrame } from '@/components/drawing/sheet-frame';
 import { TitleBlock } from '@/components/drawing/title-block';
-import { answersFor } from '@/components/sheet/answers';
+import { answersFor, isHurried } from '@/components/sheet/answers';
 import { CellRows } from '@/components/sheet/cell-rows';
 import { foldAnswer } from '@/components/sheet/state/shown';
 import type { NotebookContent } from '@/lib/notebooks/content';
@@ -20,7 +20,7 @@ const EXAMPLE: NotebookContent = {
 /** A real sheet on the front page, its figures worked out by this server. */
 export async function FrontExample() {
   const answers = await answersFor(EXAMPLE);
-  if (answers === null) return null;
+  if (answers === null || isHurried(answers)) return null;
   const shown = foldAnswer(new Map(), answers);
   return (
     <section aria-label="An example sheet" className="min-w-0">

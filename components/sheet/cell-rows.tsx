@@ -23,11 +23,7 @@ export function CellRows(props: CellRowsProps) {
       {linesOf(source).map((text, index) => {
         const line = byLine.get(index + 1);
         const standing = <SourceLine text={text} error={errorOf(line?.result)} />;
-        const shown = renderSource ? (
-          renderSource(index, standing)
-        ) : (
-          <div className="pl-3">{standing}</div>
-        );
+        const shown = renderSource ? renderSource(index, standing) : <div>{standing}</div>;
         if (!line) {
           const blank = text.trim() === '' && !renderSource;
           return blank ? null : (

@@ -1,4 +1,5 @@
 import type { NotebookCell } from '@/lib/notebooks/content';
+import type { KnownMark } from './editor/completion';
 import type { Change } from './state/changes';
 
 /** What is in hand: a cell, one of its lines, and where in that line the cursor begins. */
@@ -19,6 +20,8 @@ export interface SheetActions {
   take: (hand: Hand | null) => void;
   /** Goes from the line in hand to the one above or below, into the next cell if need be. */
   step: (hand: Hand, by: -1 | 1) => boolean;
+  /** The marks of the sheet as they stand, for completing a name. */
+  marks: () => readonly KnownMark[];
   insert: (kind: NotebookCell['kind'], beside: string | null, where: 'before' | 'after') => void;
   move: (id: string, by: -1 | 1) => void;
   remove: (id: string) => void;

@@ -49,24 +49,19 @@ export function CopyMenu({ result }: { result: Result }) {
         name={`Copy the value of ${name}`}
         className="min-h-7 px-1 text-snapline underline-offset-4 hover:underline"
       >
-        {(close) =>
-          forms.map(({ label, text }) => (
-            <button
-              key={label}
-              type="button"
-              className={DISCLOSURE_ROW}
-              onClick={() => {
-                void copy(label, text);
-                close();
-              }}
-            >
-              <span>{label}</span>
-              <span className="max-w-32 truncate font-mono text-soft" aria-hidden="true">
-                {text}
-              </span>
-            </button>
-          ))
-        }
+        {forms.map(({ label, text }) => (
+          <button
+            key={label}
+            type="button"
+            className={DISCLOSURE_ROW}
+            onClick={() => void copy(label, text)}
+          >
+            <span>{label}</span>
+            <span className="max-w-32 truncate font-mono text-soft" aria-hidden="true">
+              {text}
+            </span>
+          </button>
+        ))}
       </Disclosure>
       <span role="status" className="text-soft">
         {said}

@@ -54,6 +54,7 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
           nonce={nonce}
           results={results}
           meanwhile={standing}
+          marks={actions.marks}
           onWrite={(written, cursor) =>
             edit(replaceLine(source, index, written, cursor), !written.includes('\n'))
           }
@@ -77,7 +78,7 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
         id={entryId(id, index)}
         data-entry={id}
         onClick={() => actions.take({ id, line: index, column: AT_END })}
-        className="block w-full border-l-2 border-transparent pl-2.5 text-left hover:border-rule"
+        className="-ml-3 block w-[calc(100%+0.75rem)] border-l-2 border-transparent pl-2.5 text-left hover:border-rule"
       >
         <span className="sr-only">{`Line ${index + 1} of ${label}: `}</span>
         {empty && source.trim() === '' ? (
@@ -96,7 +97,7 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
       id={cellAnchor(id)}
       aria-label={label}
       onKeyDown={readOnly ? undefined : (event) => onCellKey(event, id, actions)}
-      className={`border px-3 py-3 max-sm:px-2 ${hand ? 'border-snapline bg-hand' : 'border-transparent'} ${lazy ? 'entry-lazy' : ''}`}
+      className={`border px-3 py-3 max-sm:px-2 ${hand ? 'border-snapline bg-hand [--surface:var(--hand)]' : 'border-transparent'} ${lazy ? 'entry-lazy' : ''}`}
     >
       <CellRows
         source={source}

@@ -29,6 +29,13 @@ function Value({ result }: { result: Result }) {
   return <Tex tex={tex} display />;
 }
 
+/** Long values are set smaller, so that most are seen whole beside their drawn dimension. */
+function sizeOf(result: Result): string {
+  const length = 'exact' in result ? result.exact.text.length : 0;
+  if (length < 48) return 'text-value';
+  return length < 90 ? 'text-figure' : 'text-base';
+}
+
 /** The named quadratics of a value too wide to read in one piece, one under another. */
 function Steps({ result }: { result: Result }) {
   if (result.kind !== 'number' || !result.exact.staged || !result.tower) return null;
@@ -62,7 +69,7 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
       <div className="min-w-0 space-y-1.5">
         {value && (
           <div
-            className={`-ml-1 min-h-balloon overflow-x-auto overflow-y-hidden py-1 pl-1 text-value ${dim ? 'opacity-55' : ''}`}
+            className={`-ml-1 min-h-balloon scroll-hint overflow-x-auto overflow-y-hidden py-1 pl-1 ${sizeOf(value)} ${dim ? 'opacity-55' : ''}`}
             tabIndex={0}
             role="group"
             aria-label={faulty ? 'Last good value' : 'Exact value'}

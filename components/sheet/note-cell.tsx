@@ -46,7 +46,7 @@ export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
       id={cellAnchor(id)}
       aria-label={label}
       onKeyDown={readOnly ? undefined : (event) => onCellKey(event, id, actions)}
-      className={`group/cell relative border px-3 py-2 max-sm:px-2 ${open ? 'border-snapline bg-hand' : 'border-transparent'} ${lazy ? 'entry-lazy' : ''}`}
+      className={`group/cell relative border px-3 py-2 max-sm:px-2 ${open ? 'border-snapline bg-hand [--surface:var(--hand)]' : 'border-transparent'} ${lazy ? 'entry-lazy' : ''}`}
     >
       <div className="space-y-3 sm:ml-[6.125rem]">
         <div onClick={press} className={open || readOnly ? undefined : 'cursor-text'}>

@@ -65,37 +65,29 @@ export function SheetBar(props: SheetBarProps) {
           label="Hand over"
           className="inline-flex min-h-9 items-center rounded-cut border border-rule bg-sheet px-3 text-small font-medium hover:border-ink"
         >
-          {(close) => (
-            <>
-              {(['people', 'links'] as const)
-                .filter((panel) => panel === 'people' || mayShare)
-                .map((panel) => (
-                  <button
-                    key={panel}
-                    type="button"
-                    className={DISCLOSURE_ROW}
-                    onClick={() => {
-                      close();
-                      onPanel(panel);
-                    }}
-                  >
-                    {panel === 'people' ? 'People on this notebook' : 'Client links'}
-                  </button>
-                ))}
-              {(['json', 'tex'] as const).map((format) => (
-                <a
-                  key={format}
-                  download
-                  href={`/api/notebooks/${notebook.id}/export?format=${format}`}
-                  className={DISCLOSURE_ROW}
-                  onClick={close}
-                >
-                  {format === 'json' ? 'Results as JSON' : 'Sheet as TeX'}
-                  <span className="text-soft">version {sheet.kept.number}</span>
-                </a>
-              ))}
-            </>
-          )}
+          {(['people', 'links'] as const)
+            .filter((panel) => panel === 'people' || mayShare)
+            .map((panel) => (
+              <button
+                key={panel}
+                type="button"
+                className={DISCLOSURE_ROW}
+                onClick={() => onPanel(panel)}
+              >
+                {panel === 'people' ? 'People on this notebook' : 'Client links'}
+              </button>
+            ))}
+          {(['json', 'tex'] as const).map((format) => (
+            <a
+              key={format}
+              download
+              href={`/api/notebooks/${notebook.id}/export?format=${format}`}
+              className={DISCLOSURE_ROW}
+            >
+              {format === 'json' ? 'Results as JSON' : 'Sheet as TeX'}
+              <span className="text-soft">version {sheet.kept.number}</span>
+            </a>
+          ))}
         </Disclosure>
         {mayWrite && (
           <Button look="main" disabled={!sheet.dirty} onClick={() => onPanel('keep')}>

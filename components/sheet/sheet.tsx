@@ -15,12 +15,12 @@ import { SheetLayout, zonesFor } from './sheet-layout';
 import { SheetNews } from './sheet-news';
 import { BoundedCache } from './state/bounded-cache';
 import { newCellId } from './state/changes';
-import type { CellAnswer } from './state/shown';
+import type { CellAnswer, Shown } from './state/shown';
 import { useEvaluation } from './state/use-evaluation';
 import { useNotebook } from './state/use-notebook';
 import { linesOf } from './source-text';
 import { titleFields } from './title-fields';
-import { sayResult } from './wording';
+import { sayBriefly, sayResult } from './wording';
 
 export interface SheetProps {
   notebook: NotebookHead;
@@ -59,12 +59,12 @@ function SheetOnScreen(props: SheetProps) {
   const evaluation = useEvaluation(content, answers);
   const [hand, setHand] = useState<Hand | null>(null);
   const [panel, setPanel] = useState<Panel | null>(null);
-  const actions = useSheetActions(content, setHand, dispatch);
+  const actions = useSheetActions(content, evaluation.shown, setHand, dispatch);
 
   useEffect(() => {
     if (!mayWrite) return;
-    const idle = window.requestIdleCallback ?? ((work: () => void) => setTimeout(work, 800));
-    idle(() => preloadEditor());
+    if ('requestIdleCallback' in window) window.requestIdleCallback(() => preloadEditor());
+    else setTimeout(preloadEditor, 800);
   }, [mayWrite]);
 
   useEffect(() => {
@@ -154,12 +154,15 @@ function SheetOnScreen(props: SheetProps) {
 /** The actions of the cells: one object for as long as the sheet is on the screen. */
 function useSheetActions(
   content: NotebookContent,
+  shown: Shown,
   setHand: (hand: Hand | null) => void,
   dispatch: SheetActions['dispatch'],
 ): SheetActions {
   const latest = useRef(content);
+  const figures = useRef(shown);
   useEffect(() => {
     latest.current = content;
+    figures.current = shown;
   });
   const at = useCallback(
     (id: string) => latest.current.cells.findIndex((cell) => cell.id === id),
@@ -170,6 +173,12 @@ function useSheetActions(
     () => ({
       dispatch,
       take: setHand,
+      marks: () =>
+        [...figures.current.values()]
+          .flat()
+          .flatMap(({ result }) =>
+            result.mark === null ? [] : [{ name: result.mark, size: sayBriefly(result) }],
+          ),
       step({ id, line, column }, by) {
         const { cells } = latest.current;
         const own = cells[at(id)];

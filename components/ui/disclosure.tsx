@@ -6,7 +6,8 @@ interface DisclosureProps {
   label: ReactNode;
   /** What a screen reader calls the button when its label is a sign. */
   name?: string;
-  children: (close: () => void) => ReactNode;
+  /** Buttons and links; pressing one closes the list. */
+  children: ReactNode;
   className?: string;
 }
 
@@ -54,12 +55,13 @@ export function Disclosure({ label, name, children, className = '' }: Disclosure
       {open && (
         <div
           id={listId}
-          className="absolute right-0 z-20 mt-1 min-w-48 border border-ink bg-sheet py-1 text-small shadow-[3px_3px_0_var(--hairline)]"
-        >
-          {children(() => {
+          onClick={() => {
             setOpen(false);
             button.current?.focus();
-          })}
+          }}
+          className="absolute right-0 z-20 mt-1 min-w-48 border border-ink bg-sheet py-1 text-small shadow-[3px_3px_0_var(--hairline)]"
+        >
+          {children}
         </div>
       )}
     </div>

@@ -11,6 +11,7 @@ import { ConflictDialog } from '@/components/sheet/panels/conflict-dialog';
 import { readStep } from '@/components/sheet/panels/settings-dialog';
 import { piecesOf } from '@/components/sheet/source-text';
 import { isSum, stepTex, valueTex } from '@/components/sheet/value-tex';
+import type { NotebookContent } from '@/lib/notebooks/content';
 import { contentOf, dimension } from './sample';
 import { errorResult, numberResult, SUM_OF_ROOTS } from './sample-results';
 
@@ -188,7 +189,8 @@ describe('the choice after a conflict', () => {
     HTMLDialogElement.prototype.showModal ??= function (this: HTMLDialogElement) {
       this.setAttribute('open', '');
     };
-    const keep = vi.fn();
+    const keep = vi.fn<(content: NotebookContent) => void>();
+    const kept = () => keep.mock.lastCall?.[0].cells.map(({ source }) => source);
     render(
       <ConflictDialog
         base={base}
@@ -204,15 +206,9 @@ describe('the choice after a conflict', () => {
       expect(screen.getByText(text)).toBeInTheDocument();
     const user = userEvent.setup();
     await user.click(screen.getByRole('button', { name: 'Keep as version 6' }));
-    expect(keep.mock.lastCall?.[0].cells.map((cell: { source: string }) => cell.source)).toEqual([
-      'R = 2',
-      'S = 9',
-    ]);
+    expect(kept()).toEqual(['R = 2', 'S = 9']);
     await user.click(screen.getAllByRole('radio', { name: /Tam Osgood/ })[0]!);
     await user.click(screen.getByRole('button', { name: 'Keep as version 6' }));
-    expect(keep.mock.lastCall?.[0].cells.map((cell: { source: string }) => cell.source)).toEqual([
-      'R = 3',
-      'S = 9',
-    ]);
+    expect(kept()).toEqual(['R = 3', 'S = 9']);
   });
 });

@@ -1,3 +1,4 @@
+import { autocompletion } from '@codemirror/autocomplete';
 import { standardKeymap } from '@codemirror/commands';
 import {
   bracketMatching,
@@ -10,6 +11,7 @@ import { setDiagnostics, type Diagnostic } from '@codemirror/lint';
 import { Annotation, EditorState, Prec } from '@codemirror/state';
 import { EditorView, keymap, placeholder } from '@codemirror/view';
 import { tags } from '@lezer/highlight';
+import { completeFrom, type KnownMark } from './completion';
 import { parser } from '@/lib/language/parser/cell.parser';
 
 export interface EditorOptions {
@@ -27,6 +29,8 @@ export interface EditorOptions {
   onLeave: (to: 'here' | 'before' | 'after', column: number) => boolean;
   /** Backspace at the beginning or Delete at the end: the neighbouring line is to be joined. */
   onJoin?: (side: 'before' | 'after') => boolean;
+  /** Names to complete from, in a dimension cell. */
+  marks?: () => readonly KnownMark[];
 }
 
 export interface PlacedFault {
@@ -88,6 +92,17 @@ const theme = EditorView.theme({
     fontFamily: 'var(--font-grotesque), sans-serif',
     fontSize: '0.8125rem',
   },
+  '.cm-tooltip.cm-tooltip-autocomplete > ul': { fontFamily: 'var(--font-mono), monospace' },
+  '.cm-tooltip-autocomplete ul li[aria-selected]': {
+    backgroundColor: 'var(--snapline-wash)',
+    color: 'var(--ink)',
+  },
+  '.cm-completionDetail': { color: 'var(--soft)', fontStyle: 'normal' },
+  '.cm-completionMatchedText': {
+    textDecoration: 'none',
+    fontWeight: '500',
+    color: 'var(--snapline)',
+  },
   '.cm-diagnostic': { padding: '0.25rem 0.5rem' },
   '.cm-diagnostic-warning': { borderLeft: '3px solid var(--ochre)' },
   '.cm-diagnostic-error': { borderLeft: '3px solid var(--ruddle)' },
@@ -97,6 +112,18 @@ const theme = EditorView.theme({
 const fromOutside = Annotation.define<boolean>();
 
 const PLACEHOLDERS = { dimension: 'p = 2 R sin(turn/34)', note: 'A note, in Markdown' } as const;
+
+const dimensionExtensions = (marks: EditorOptions['marks']) => [
+  cellLanguage,
+  syntaxHighlighting(highlighting),
+  bracketMatching(),
+  autocompletion({
+    override: [completeFrom(marks ?? (() => []))],
+    icons: false,
+    // Enter ends the line unless a name has been chosen with the arrows.
+    selectOnOpen: false,
+  }),
+];
 
 /** Opens a source in place. Loaded only when the first line is taken in hand. */
 export function makeEditor(options: EditorOptions): EditorHandle {
@@ -133,9 +160,7 @@ export function makeEditor(options: EditorOptions): EditorHandle {
         ),
         // No history here: the notebook has one of its own, across all cells.
         keymap.of(standardKeymap),
-        kind === 'dimension'
-          ? [cellLanguage, syntaxHighlighting(highlighting), bracketMatching()]
-          : [],
+        kind === 'dimension' ? dimensionExtensions(options.marks) : [],
         theme,
         placeholder(PLACEHOLDERS[kind]),
         EditorView.lineWrapping,

@@ -8,7 +8,7 @@ type Loaded = typeof import('./make-editor');
 
 interface SourceEditorProps extends Pick<
   EditorOptions,
-  'source' | 'kind' | 'label' | 'nonce' | 'column' | 'onWrite' | 'onLeave' | 'onJoin'
+  'source' | 'kind' | 'label' | 'nonce' | 'column' | 'marks' | 'onWrite' | 'onLeave' | 'onJoin'
 > {
   results: readonly Result[];
   /** What stands here until the editor has been loaded. */
@@ -98,7 +98,7 @@ export function SourceEditor({ results, meanwhile, ...options }: SourceEditorPro
   }, [ready, results]);
 
   return (
-    <div className="border-l-2 border-snapline pl-2.5">
+    <div className="-ml-3 border-l-2 border-snapline pl-2.5">
       <div ref={parent} />
       {!ready && meanwhile}
     </div>

@@ -19,7 +19,7 @@ interface LinksDialogProps {
 /** Read-only addresses of this notebook, for people without an account. */
 export function LinksDialog({ notebookId, onClose }: LinksDialogProps) {
   const path = `/api/notebooks/${notebookId}/links`;
-  const { data, error, mutate } = useSWR<{ links: ClientLinkLine[] }>(path, askFor);
+  const { data, error, mutate } = useSWR<{ links: ClientLinkLine[] }, unknown>(path, askFor);
   const [label, setLabel] = useState('');
   const [made, setMade] = useState<NewClientLink | null>(null);
   const [fault, setFault] = useState<string | null>(null);

@@ -28,7 +28,7 @@ interface PeopleDialogProps {
 /** Who may open this notebook, and as what. */
 export function PeopleDialog({ notebookId, mayChange, onClose }: PeopleDialogProps) {
   const path = `/api/notebooks/${notebookId}/people`;
-  const { data, error, mutate } = useSWR<{ people: NotebookPerson[] }>(path, askFor);
+  const { data, error, mutate } = useSWR<{ people: NotebookPerson[] }, unknown>(path, askFor);
   const [fault, setFault] = useState<string | null>(null);
 
   const change = async (work: () => Promise<unknown>) => {

@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
 import { headers } from 'next/headers';
 import { cache } from 'react';
-import { answersFor } from '@/components/sheet/answers';
+import { answersFor, isHurried } from '@/components/sheet/answers';
 import { Sheet } from '@/components/sheet/sheet';
 import { orNotFound } from '@/components/site/or-not-found';
 import { can } from '@/lib/access';
@@ -26,6 +26,7 @@ export default async function NotebookPage({ params }: PageProps) {
   const { person, notebook, content } = await open((await params).id);
   const actor = { kind: 'person', id: person.id } as const;
   const guarded = { id: notebook.id, roles: new Map([[person.id, notebook.role]]) };
+  const answers = await answersFor(content);
   const inUse = notebook.archivedAt === null;
   return (
     <div className="mx-auto max-w-sheet">
@@ -33,7 +34,7 @@ export default async function NotebookPage({ params }: PageProps) {
         key={`${notebook.id}-${notebook.version}`}
         notebook={notebook}
         content={content}
-        answers={await answersFor(content)}
+        answers={answers === null || isHurried(answers) ? null : answers}
         personName={person.name}
         mayWrite={inUse && can(actor, 'versions.save', guarded)}
         mayShare={can(actor, 'people.change', guarded)}
