@@ -1,7 +1,9 @@
-import { randomBytes } from 'node:crypto';
+import { randomBytes, randomUUID } from 'node:crypto';
 import { NextResponse, type NextRequest } from 'next/server';
 import { getToken } from 'next-auth/jwt';
+import { Failure } from '@/lib/access';
 import { env } from '@/lib/env';
+import { problemResponse } from '@/lib/http/problem';
 
 /** Pages that make sense only with a person; the services behind them ask again and decide. */
 const NEEDS_PERSON = /^\/(notebooks|settings)(\/|$)/;
@@ -12,6 +14,8 @@ const NEEDS_PERSON = /^\/(notebooks|settings)(\/|$)/;
  */
 export async function proxy(request: NextRequest): Promise<NextResponse> {
   const { pathname, search } = request.nextUrl;
+  if (!isDecodable(pathname)) return withHeaders(unreadableAddress());
+  if (pathname.startsWith('/api/')) return NextResponse.next();
   if (NEEDS_PERSON.test(pathname) && !(await hasSession(request))) {
     const next = encodeURIComponent(pathname + search);
     // Next sends an address of its own host as a path, so the person stays on the host they know.
@@ -30,9 +34,29 @@ export async function proxy(request: NextRequest): Promise<NextResponse> {
 }
 
 export const config = {
-  // Not for the API, which sets headers of its own, nor for files that a build names by their hash.
-  matcher: ['/((?!api/|_next/static/|_next/image).*)'],
+  // Not for files that a build names by their hash, nor for the API, which sets headers of its own:
+  // of its addresses only those with a percent sign are looked at.
+  matcher: ['/((?!api/|_next/static/|_next/image).*)', '/api/(.*%.*)'],
 };
+
+/** Next has no answer of its own to `%` without two digits after it, or to bytes that are not UTF-8. */
+function isDecodable(pathname: string): boolean {
+  try {
+    decodeURIComponent(pathname);
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+function unreadableAddress(): NextResponse {
+  const failure = new Failure(
+    'unreadable',
+    'The address has a percent sign that stands for no character; copy the whole address again.',
+  );
+  const { status, headers, body } = problemResponse(failure, randomUUID());
+  return new NextResponse(body, { status, headers });
+}
 
 async function hasSession(request: NextRequest): Promise<boolean> {
   const cookies = Object.fromEntries(

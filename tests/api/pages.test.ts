@@ -74,6 +74,21 @@ describe('every page', () => {
   });
 });
 
+describe('an address that cannot be read', () => {
+  it.each(['/api/notebooks/%E0%A4%A', '/client/%', '/notebooks/%FF', '/api/client/%ZZ/export'])(
+    '%s is said to be one, in a sentence',
+    async (path) => {
+      const answer = await new Visitor().get(path);
+      expect([answer.status, answer.json.code]).toEqual([400, 'unreadable']);
+    },
+  );
+
+  it('is not every one with a percent sign', async () => {
+    const answer = await new Visitor().get('/api/notebooks/%41');
+    expect([answer.status, answer.json.code]).toEqual([401, 'sign-in-needed']);
+  });
+});
+
 describe('a client’s page', () => {
   it('is kept out of search engines, and not found for an unknown link', async () => {
     const answer = await new Visitor().get(`/client/${'A'.repeat(43)}`);
