@@ -10,6 +10,7 @@ import * as Z from './int';
 import type { Int } from './int';
 import { splitSquare } from './integers';
 import { finishSparse, mulEl, toSparse } from './element';
+import { conjugatePair } from './conjugate-pair';
 import { signEl } from './enclosure';
 import { keyOf } from './real-root';
 import type { El, Gen, Tower } from './tower';
@@ -57,21 +58,27 @@ export function splitDeepest(x: El): { low: El; parts: El[] } {
   return { low, parts: keys.map((k) => finishSparse(t, groups.get(k) as Map<bigint, Int>, x.den)) };
 }
 
+/**
+ * How a root over a quadratic field Q(√m) is written: as one root, or by a root √(r(m + b√m)) and its conjugate where
+ * m = b² + c² allows.
+ */
+export type Manner = 'single' | 'conjugates';
+
 /** The expression of a real element. */
-export function formOf(x: El): Sum {
+export function formOf(x: El, manner: Manner = 'single'): Sum {
   const f = x.t.field;
-  let cache = f.caches.get('forms') as Map<string, Sum> | undefined;
-  if (cache === undefined) f.caches.set('forms', (cache = new Map()));
+  let cache = f.caches.get(`forms/${manner}`) as Map<string, Sum> | undefined;
+  if (cache === undefined) f.caches.set(`forms/${manner}`, (cache = new Map()));
   const key = keyOf(x);
   let out = cache.get(key);
   if (out === undefined) {
-    out = makeForm(x);
+    out = makeForm(x, manner);
     cache.set(key, out);
   }
   return out;
 }
 
-function makeForm(x: El): Sum {
+function makeForm(x: El, manner: Manner): Sum {
   const t = x.t;
   if (t.k === 0) {
     const s = integerSum(BigInt(x.c[0] as Int));
@@ -86,7 +93,7 @@ function makeForm(x: El): Sum {
     return arrange(terms, BigInt(x.den));
   }
   const { low, parts } = splitDeepest(x);
-  return addSums([formOf(low), ...parts.map(formOfPart)]);
+  return addSums([formOf(low, manner), ...parts.map((y) => formOfPart(y, manner))]);
 }
 
 function radicandOfMask(t: Tower, m: bigint): bigint {
@@ -98,12 +105,41 @@ function radicandOfMask(t: Tower, m: bigint): bigint {
 }
 
 /** ±√(y²) with integers pulled out. */
-function formOfPart(y: El): Sum {
-  const { coef, den, radicand } = rootOfPart(y);
+function formOfPart(y: El, manner: Manner): Sum {
+  if (manner === 'conjugates' && y.t.depth === 2) {
+    const pair = conjugatePair(y);
+    if (pair !== null) return addSums(pair.parts.map((p) => scaledRoot(p.factor, p.radicand)));
+  }
+  return singleRoot(y, manner);
+}
+
+/** √s = scale·√inner: a square that divides every coefficient as written, though not every coordinate. */
+function pullOutOfSum(s: Sum): { scale: bigint; inner: Sum } {
+  let g = 0n;
+  for (const t of s.terms) g = gcd(g, t.coef < 0n ? -t.coef : t.coef);
+  if (g < 4n || s.den !== 1n) return { scale: 1n, inner: s };
+  const scale = splitSquare(g, 2000).square;
+  const terms = s.terms.map((t) => ({ ...t, coef: t.coef / (scale * scale) }));
+  return { scale, inner: { ...s, terms } };
+}
+
+/** factor·√radicand for a rational factor. */
+function scaledRoot(factor: El, radicand: El): Sum {
   const inner = formOf(radicand);
   return {
-    terms: [{ coef, roots: [inner], imaginary: false }],
-    den,
+    terms: [{ coef: BigInt(factor.c[0] as Int), roots: [inner], imaginary: false }],
+    den: BigInt(factor.den),
+    depth: inner.depth + 1,
+  };
+}
+
+function singleRoot(y: El, manner: Manner): Sum {
+  const { coef, den, radicand } = rootOfPart(y);
+  const { scale, inner } = pullOutOfSum(formOf(radicand, manner));
+  const common = gcd(den, scale);
+  return {
+    terms: [{ coef: (coef * scale) / common, roots: [inner], imaginary: false }],
+    den: den / common,
     depth: inner.depth + 1,
   };
 }
@@ -128,6 +164,30 @@ export function rootOfPart(y: El): { coef: bigint; den: bigint; radicand: El } {
 
 function gcd(a: bigint, b: bigint): bigint {
   return BigInt(Z.gcd(Z.small(a), Z.small(b)));
+}
+
+/** Number of digits of all integers in an expression. */
+export function digitsOf(s: Sum): number {
+  let n = s.den === 1n ? 0 : s.den.toString().length;
+  for (const t of s.terms) {
+    n += t.coef.toString().replace('-', '').length;
+    for (const r of t.roots) n += digitsOf(r);
+  }
+  return n;
+}
+
+/** The largest integer in an expression. */
+export function largestOf(s: Sum): bigint {
+  let n = s.den;
+  for (const t of s.terms) {
+    const size = t.coef < 0n ? -t.coef : t.coef;
+    if (size > n) n = size;
+    for (const r of t.roots) {
+      const inner = largestOf(r);
+      if (inner > n) n = inner;
+    }
+  }
+  return n;
 }
 
 /** Sum of sums over one denominator. */
@@ -181,7 +241,7 @@ export function compareSums(a: Sum, b: Sum): number {
     if (s.coef !== t.coef) {
       const u = s.coef < 0n ? -s.coef : s.coef;
       const v = t.coef < 0n ? -t.coef : t.coef;
-      return u !== v ? (u < v ? -1 : 1) : s.coef > t.coef ? -1 : 1;
+      return u !== v ? (u < v ? -1 : 1) : s.coef < t.coef ? -1 : 1;
     }
     for (let j = 0; j < s.roots.length; j++) {
       const c = compareSums(s.roots[j] as Sum, t.roots[j] as Sum);

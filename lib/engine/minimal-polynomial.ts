@@ -123,10 +123,10 @@ function makeCharacteristic(x: Cx): Characteristic {
   const t = shown.t;
   f.budget.within('degree', 2 ** (t.k + (imaginary ? 1 : 0)));
   const re = toDense(shown.re);
-  const im = toDense(shown.im);
+  const im = imaginary ? toDense(shown.im) : shown.im;
   const den = imaginary ? Z.mul(Z.quotient(re.den, Z.gcd(re.den, im.den)), im.den) : re.den;
   const a = scaleList(re.c, Z.quotient(den, re.den));
-  const b = scaleList(im.c, Z.quotient(den, im.den));
+  const b = imaginary ? scaleList(im.c, Z.quotient(den, im.den)) : [];
   // X − x, or its norm to the real field: (X − a)² + b².
   let poly: Int[][] = [negList(a)];
   if (imaginary) poly = [addList(squareList(t, a), squareList(t, b)), scaleList(a, -2)];

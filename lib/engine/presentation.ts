@@ -13,7 +13,7 @@ import { isqrt } from './integers';
 import { addEl, finishSparse, integerEl, isZeroEl, mulEl, place, scaleEl, toSparse } from './element';
 import { formOf, type Sum } from './form';
 import { join } from './join';
-import type { Cx } from './minimal-polynomial';
+import { degreeOf, type Cx } from './minimal-polynomial';
 import { sqrtReal } from './real-root';
 import { Field, type El, type Gen, type Tower } from './tower';
 
@@ -24,10 +24,14 @@ export interface Presented {
   im: El;
 }
 
-/** Both parts in the coordinates of their common tower (not trimmed). */
+/** Both parts in the coordinates of their common tower (not trimmed); an imaginary part 0 stays a rational. */
 export function together(x: Cx): Presented {
   const j = join(x.re.t, x.im.t);
-  return { t: j.t, re: place(x.re, j.t, j.left), im: place(x.im, j.t, j.right) };
+  return {
+    t: j.t,
+    re: place(x.re, j.t, j.left),
+    im: isZeroEl(x.im) ? x.im : place(x.im, j.t, j.right),
+  };
 }
 
 /** The same value with as few roots of integers as its coordinates allow. The new tower belongs to a field of its own, good for arithmetic only. */
@@ -57,7 +61,7 @@ export function rebase(x: Presented): Presented {
       reduced.sort((a, b) => (a.v > b.v ? -1 : 1));
     }
   }
-  if (basis.length === flat) return x;
+  if (basis.length === flat && basis.every((b, i) => b.m === 1n << BigInt(i))) return x;
   const field = new Field(t.field.budget, Z.mul);
   let tower = field.base;
   for (const b of basis) tower = tower.child(field.addGen(1, Z.small(b.n), integerEl(field, Z.small(b.n))));
@@ -86,7 +90,7 @@ export function rebase(x: Presented): Presented {
     if (trimmed.den !== 1) return x;
     tower = tower.child(field.addGen((t.gens[flat + i] as Gen).depth, 0, trimmed));
   }
-  return { t: tower, re: move(x.re, tower), im: move(x.im, tower) };
+  return { t: tower, re: move(x.re, tower), im: isZeroEl(x.im) ? integerEl(field, 0) : move(x.im, tower) };
 }
 
 function spreadOut(t: Tower, table: Map<bigint, Int>, den: Int): El {
@@ -120,8 +124,17 @@ function express(mask: bigint, reduced: readonly { v: bigint; set: bigint }[]): 
   return { v, set };
 }
 
+/** The smallest tower found for x. Degree is asked first; only where the tower is larger is the value evaluated again. */
+export function present(x: Cx): Presented {
+  const own = rebase(together(x));
+  const imaginary = isZeroEl(x.im) ? 1 : 2;
+  if (own.t.nested === 0 || own.t.k > 5 || degreeOf(x) === imaginary * 2 ** own.t.k) return own;
+  const again = rebase(together(evaluateAgain(x)));
+  return again.t.k < own.t.k ? again : own;
+}
+
 /** Evaluates the value's own expression in a fresh field, where only the roots that it names exist. */
-export function evaluateAgain(x: Cx): Cx {
+function evaluateAgain(x: Cx): Cx {
   const field = new Field(x.re.t.field.budget, Z.mul);
   return { re: evaluateForm(field, formOf(x.re)), im: evaluateForm(field, formOf(x.im)) };
 }
