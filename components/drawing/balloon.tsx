@@ -21,6 +21,12 @@ export function Mark({ mark }: { mark: string }) {
   );
 }
 
+/** Long marks are lettered smaller, so that the balloon keeps to the margin. */
+function letterSize(sign: string): string {
+  if (sign.length <= 3) return 'text-figure';
+  return sign.length <= 6 ? 'text-base' : 'text-small';
+}
+
 /** The mark in its balloon in the margin, with the leader that ends in a dot at the value. */
 export function Balloon({ sign, faulty = false }: BalloonProps) {
   const edge = faulty ? 'border-ruddle text-ruddle' : 'border-ink';
@@ -30,7 +36,7 @@ export function Balloon({ sign, faulty = false }: BalloonProps) {
         <span className={`ml-3 size-3 rounded-full border ${edge}`} />
       ) : (
         <span
-          className={`flex h-balloon min-w-balloon max-w-40 shrink-0 items-center justify-center overflow-hidden rounded-full border bg-sheet px-1.5 text-figure leading-none ${edge}`}
+          className={`flex h-balloon min-w-balloon max-w-[4.75rem] shrink-0 items-center justify-center overflow-hidden rounded-full border bg-sheet px-1.5 leading-none ${letterSize(sign)} ${edge}`}
           title={sign}
         >
           <span className="truncate px-0.5 pb-0.5">
@@ -38,7 +44,7 @@ export function Balloon({ sign, faulty = false }: BalloonProps) {
           </span>
         </span>
       )}
-      <span className={`h-px min-w-3 grow border-t ${edge}`} />
+      <span className={`h-px min-w-1 grow border-t ${edge}`} />
       <span className={`size-1.5 shrink-0 rounded-full ${faulty ? 'bg-ruddle' : 'bg-ink'}`} />
     </div>
   );

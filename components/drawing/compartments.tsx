@@ -46,7 +46,7 @@ export function Compartments({ items }: { items: readonly Compartment[] }) {
       {items.map(({ label, value, tone = 'plain', figures }) => (
         <div
           key={label}
-          className={`-ml-px -mt-px min-w-0 max-w-full shrink-0 border border-hairline px-2.5 pb-1 pt-0.5 ${TONES[tone]}`}
+          className={`-ml-px -mt-px min-w-0 max-w-[calc(100%+1px)] shrink-0 border border-hairline px-2.5 pb-1 pt-0.5 ${TONES[tone]}`}
         >
           <dt className="text-tag font-normal text-soft">{label}</dt>
           <dd className={`break-words ${figures ? 'font-mono [overflow-wrap:anywhere]' : ''}`}>

@@ -66,7 +66,7 @@ export function SheetFrame({ children, foot, zones = 40 }: SheetFrameProps) {
         <Centring className="-bottom-2.5 left-1/2 h-2.5 w-0.5 -translate-x-1/2" />
         <Centring className="-left-2.5 top-1/2 h-0.5 w-2.5 max-sm:hidden" />
         <Centring className="-right-2.5 top-1/2 h-0.5 w-2.5 max-sm:hidden" />
-        <div className="grow">{children}</div>
+        <div className="flex grow flex-col">{children}</div>
         {foot}
       </div>
       <div aria-hidden="true" className="h-zone" />

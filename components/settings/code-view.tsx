@@ -7,11 +7,10 @@ import { CopyButton } from '@/components/ui/copy-button';
 interface CodeViewProps {
   text: string;
   label: string;
-  nonce: string | undefined;
 }
 
 /** A stretch of JavaScript with its parts coloured; plain text until the editor has been loaded. */
-export function CodeView({ text, label, nonce }: CodeViewProps) {
+export function CodeView({ text, label }: CodeViewProps) {
   const parent = useRef<HTMLDivElement>(null);
   const [ready, setReady] = useState(false);
 
@@ -20,14 +19,14 @@ export function CodeView({ text, label, nonce }: CodeViewProps) {
     let gone = false;
     void import('./make-view').then(({ makeView }) => {
       if (gone || !parent.current) return;
-      view = makeView(parent.current, text, label, nonce);
+      view = makeView(parent.current, text, label);
       setReady(true);
     });
     return () => {
       gone = true;
       view?.destroy();
     };
-  }, [text, label, nonce]);
+  }, [text, label]);
 
   return (
     <div className="space-y-2">

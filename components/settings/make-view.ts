@@ -3,6 +3,7 @@ import { HighlightStyle, syntaxHighlighting } from '@codemirror/language';
 import { EditorState } from '@codemirror/state';
 import { EditorView } from '@codemirror/view';
 import { tags } from '@lezer/highlight';
+import { documentNonce } from '@/components/ui/nonce';
 
 const highlighting = HighlightStyle.define([
   { tag: [tags.keyword, tags.operatorKeyword], color: 'var(--ruddle)' },
@@ -23,12 +24,8 @@ const theme = EditorView.theme({
 });
 
 /** Source to be read and copied, not changed. */
-export function makeView(
-  parent: HTMLElement,
-  text: string,
-  label: string,
-  nonce: string | undefined,
-) {
+export function makeView(parent: HTMLElement, text: string, label: string) {
+  const nonce = documentNonce();
   return new EditorView({
     parent,
     state: EditorState.create({

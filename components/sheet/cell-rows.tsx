@@ -21,17 +21,10 @@ export function CellRows(props: CellRowsProps) {
   return (
     <div className="space-y-6">
       {linesOf(source).map((text, index) => {
-        const line = byLine.get(index + 1);
+        const line = byLine.get(index + 1) ?? null;
         const standing = <SourceLine text={text} error={errorOf(line?.result)} />;
         const shown = renderSource ? renderSource(index, standing) : <div>{standing}</div>;
-        if (!line) {
-          const blank = text.trim() === '' && !renderSource;
-          return blank ? null : (
-            <div key={index} className="sm:ml-[6.125rem]">
-              {shown}
-            </div>
-          );
-        }
+        if (!line && text.trim() === '' && !renderSource) return null;
         return (
           <EntryLine
             key={index}
@@ -39,7 +32,7 @@ export function CellRows(props: CellRowsProps) {
             greyed={greyed}
             full={inHand === index}
             source={shown}
-            actions={renderActions?.(line)}
+            actions={line && renderActions?.(line)}
           />
         );
       })}

@@ -22,13 +22,12 @@ interface DimensionCellProps {
   greyed: boolean;
   lazy: boolean;
   readOnly: boolean;
-  nonce: string | undefined;
   actions: SheetActions;
 }
 
 /** A dimension cell: its lines with their values, and the source of the line in hand opened in place. */
 export const DimensionCell = memo(function DimensionCell(props: DimensionCellProps) {
-  const { cell, lines, place, hand, greyed, lazy, readOnly, nonce, actions } = props;
+  const { cell, lines, place, hand, greyed, lazy, readOnly, actions } = props;
   const { id, source } = cell;
   const names = lines.map(({ result }) => result.mark).filter((mark) => mark !== null);
   const label = `Dimension cell ${place}${names.length > 0 ? `, ${names.join(', ')}` : ''}`;
@@ -51,7 +50,6 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
           kind="dimension"
           column={hand.column}
           label={`Line ${index + 1} of ${label}`}
-          nonce={nonce}
           results={results}
           meanwhile={standing}
           marks={actions.marks}

@@ -14,7 +14,6 @@ interface EntriesProps {
   evaluation: Evaluation;
   hand: Hand | null;
   mayWrite: boolean;
-  nonce: string | undefined;
   actions: SheetActions;
 }
 
@@ -24,7 +23,7 @@ const LAZY_FROM = 30;
 
 /** The entries of the sheet, one under another, and the place where the next one is begun. */
 export function Entries(props: EntriesProps) {
-  const { content, evaluation, hand, mayWrite, nonce, actions } = props;
+  const { content, evaluation, hand, mayWrite, actions } = props;
   const { cells } = content;
   const lazy = cells.length >= LAZY_FROM;
   const late = evaluation.state === 'slow' || evaluation.state === 'failed';
@@ -41,7 +40,6 @@ export function Entries(props: EntriesProps) {
             hand: hand?.id === cell.id ? hand : null,
             lazy,
             readOnly: !mayWrite,
-            nonce,
             actions,
           };
           return (

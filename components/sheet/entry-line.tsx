@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { Balloon } from '@/components/drawing/balloon';
 import { Compartments } from '@/components/drawing/compartments';
 import { DimensionLine } from '@/components/drawing/dimension-line';
+import { Sentence } from '@/components/ui/sentence';
 import { Tex } from '@/components/ui/tex';
 import type { Result } from './result';
 import type { ShownLine } from './state/shown';
@@ -9,7 +10,8 @@ import { stepTex, valueTex } from './value-tex';
 import { compartmentsOf, sayDimension } from './wording';
 
 interface EntryLineProps {
-  line: ShownLine;
+  /** Null for a line without a result: blank, a remark, or not worked out yet. */
+  line: ShownLine | null;
   /** An older answer is being shown while a newer one is awaited or cannot be had. */
   greyed?: boolean;
   /** In hand: every figure is shown. */
@@ -29,9 +31,14 @@ function Value({ result }: { result: Result }) {
   return <Tex tex={tex} display />;
 }
 
+const lengthOf = (result: Result) =>
+  'exact' in result ? result.exact.text.length : result.source.length;
+
+const mayScroll = (result: Result) => lengthOf(result) > 24;
+
 /** Long values are set smaller, so that most are seen whole beside their drawn dimension. */
 function sizeOf(result: Result): string {
-  const length = 'exact' in result ? result.exact.text.length : 0;
+  const length = lengthOf(result);
   if (length < 48) return 'text-value';
   return length < 90 ? 'text-figure' : 'text-base';
 }
@@ -52,9 +59,10 @@ function Steps({ result }: { result: Result }) {
 
 /** One line of a dimension cell on the sheet: balloon, exact value, drawn dimension, compartments. */
 export function EntryLine({ line, greyed = false, full = false, source, actions }: EntryLineProps) {
-  const { result, before } = line;
-  const faulty = result.kind === 'error';
-  const value = faulty ? before : result;
+  const result = line?.result ?? null;
+  const fault = result?.kind === 'error' ? result.error : null;
+  const faulty = fault !== null;
+  const value = faulty ? (line?.before ?? null) : result;
   const dimension = value && sayDimension(value);
   const dim = greyed || faulty;
 
@@ -64,13 +72,14 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
       className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 max-sm:grid-cols-1 lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem] [break-inside:avoid]"
     >
       <div className="max-sm:w-24">
-        <Balloon sign={signOf(result)} faulty={faulty} />
+        {result && <Balloon sign={signOf(result)} faulty={faulty} />}
       </div>
       <div className="min-w-0 space-y-1.5">
         {value && (
           <div
             className={`-ml-1 min-h-balloon scroll-hint overflow-x-auto overflow-y-hidden py-1 pl-1 ${sizeOf(value)} ${dim ? 'opacity-55' : ''}`}
-            tabIndex={0}
+            // Only what may be wider than its row has to be reached by keyboard to be scrolled.
+            tabIndex={mayScroll(value) ? 0 : undefined}
             role="group"
             aria-label={faulty ? 'Last good value' : 'Exact value'}
           >
@@ -79,22 +88,23 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
           </div>
         )}
         {source}
-        {faulty && (
+        {fault && (
           <p data-fault className="text-base text-ruddle">
-            {result.error.message}
+            <Sentence text={fault.message} />
           </p>
         )}
         {full &&
+          result &&
           'notices' in result &&
           result.notices.map((notice) => (
             <p key={notice.from} className="text-small text-ochre">
               <span className="font-semibold">Read so: </span>
-              {notice.message}
+              <Sentence text={notice.message} />
             </p>
           ))}
         <div className="flex flex-wrap items-end gap-x-3 gap-y-1.5">
           <div className={`min-w-0 max-w-full ${greyed ? 'opacity-55' : ''}`}>
-            {!faulty && <Compartments items={compartmentsOf(result, full)} />}
+            {result && <Compartments items={compartmentsOf(result, full)} />}
           </div>
           {actions}
         </div>

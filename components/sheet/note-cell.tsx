@@ -14,7 +14,6 @@ interface NoteCellProps {
   hand: Hand | null;
   lazy: boolean;
   readOnly: boolean;
-  nonce: string | undefined;
   actions: SheetActions;
 }
 
@@ -22,7 +21,7 @@ const NO_RESULTS = [] as const;
 
 /** A note: set in the text serif; its Markdown opens beneath it when it is taken in hand. */
 export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
-  const { cell, place, hand, lazy, readOnly, nonce, actions } = props;
+  const { cell, place, hand, lazy, readOnly, actions } = props;
   const { id } = cell;
   const open = hand !== null;
   const label = `Note ${place}`;
@@ -63,7 +62,6 @@ export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
               kind="note"
               column={hand.column}
               label={`Source of ${label}`}
-              nonce={nonce}
               results={NO_RESULTS}
               onWrite={(source) => actions.dispatch({ kind: 'write', id, source })}
               onLeave={leave}

@@ -12,7 +12,7 @@ interface SheetLayoutProps {
 export function SheetLayout({ index, children, foot, zones }: SheetLayoutProps) {
   return (
     <SheetFrame foot={foot} zones={zones}>
-      <div className="grid h-full lg:grid-cols-[15rem_minmax(0,1fr)]">
+      <div className="grid grow max-lg:content-start lg:grid-cols-[15rem_minmax(0,1fr)]">
         <nav
           aria-label="Index of the sheet"
           className="border-rule max-lg:hidden lg:border-r print:hidden"

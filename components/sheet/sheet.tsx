@@ -31,7 +31,6 @@ export interface SheetProps {
   personName: string;
   mayWrite: boolean;
   mayShare: boolean;
-  nonce: string | undefined;
 }
 
 /** Answers kept in the browser: enough for undo to be at once. */
@@ -47,7 +46,7 @@ export function Sheet(props: SheetProps) {
 }
 
 function SheetOnScreen(props: SheetProps) {
-  const { notebook, content: first, answers, personName, mayWrite, nonce } = props;
+  const { notebook, content: first, answers, personName, mayWrite } = props;
   const [kept] = useState({
     number: notebook.version,
     content: first,
@@ -132,7 +131,6 @@ function SheetOnScreen(props: SheetProps) {
           evaluation={evaluation}
           hand={mayWrite ? hand : null}
           mayWrite={mayWrite}
-          nonce={nonce}
           actions={actions}
         />
       </SheetLayout>

@@ -80,10 +80,16 @@ function decimalCompartment(
   unit: string | null,
   full: boolean,
 ): Compartment[] {
-  const same = [decimal.re, `${decimal.re} ${unit ?? ''}`].includes(exact.text);
+  const same = [decimal.re, `${decimal.re} deg`].includes(exact.text);
   if (decimal.terminates && same) return [];
   const text = sayDecimal({ decimal }, full);
-  return [{ label: 'Decimal', value: unit ? `${text} ${unit}` : text, figures: true }];
+  return [
+    {
+      label: 'Decimal',
+      value: unit === null ? text : unit === '°' ? `${text}°` : `${text} ${unit}`,
+      figures: true,
+    },
+  ];
 }
 
 function numberCompartments(result: NumberResult, full: boolean): Compartment[] {

@@ -1,5 +1,4 @@
 import type { Metadata } from 'next';
-import { headers } from 'next/headers';
 import { CodeView } from '@/components/settings/code-view';
 import { Keys } from '@/components/settings/keys';
 import { SignOut } from '@/components/settings/sign-out';
@@ -37,11 +36,7 @@ export default async function SettingsPage() {
             A script or a machine asks this server for exact figures with a key. This runs as it
             stands in Node 20 or later; put the key into the environment, not into the file.
           </p>
-          <CodeView
-            text={snippetFor(server)}
-            label="Example of a call, in JavaScript"
-            nonce={(await headers()).get('x-nonce') ?? undefined}
-          />
+          <CodeView text={snippetFor(server)} label="Example of a call, in JavaScript" />
         </section>
       </div>
     </div>

@@ -11,6 +11,7 @@ import { setDiagnostics, type Diagnostic } from '@codemirror/lint';
 import { Annotation, EditorState, Prec } from '@codemirror/state';
 import { EditorView, keymap, placeholder } from '@codemirror/view';
 import { tags } from '@lezer/highlight';
+import { documentNonce } from '@/components/ui/nonce';
 import { completeFrom, type KnownMark } from './completion';
 import { parser } from '@/lib/language/parser/cell.parser';
 
@@ -20,7 +21,6 @@ export interface EditorOptions {
   source: string;
   kind: 'dimension' | 'note';
   label: string;
-  nonce: string | undefined;
   /** Where the cursor begins. */
   column: number;
   /** What was written and where the cursor stands; a line broken in two comes with its line break. */
@@ -127,7 +127,8 @@ const dimensionExtensions = (marks: EditorOptions['marks']) => [
 
 /** Opens a source in place. Loaded only when the first line is taken in hand. */
 export function makeEditor(options: EditorOptions): EditorHandle {
-  const { kind, label, nonce, onWrite, onLeave, onJoin } = options;
+  const { kind, label, onWrite, onLeave, onJoin } = options;
+  const nonce = documentNonce();
   const atEdge = (view: EditorView, edge: 'before' | 'after') => {
     const { main } = view.state.selection;
     // A long line wraps: the arrow leaves it only from its first or last row.

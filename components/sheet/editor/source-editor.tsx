@@ -1,6 +1,7 @@
 'use client';
 
 import { useEffect, useLayoutEffect, useRef, useState, type ReactNode } from 'react';
+import { flushSync } from 'react-dom';
 import type { Result } from '../result';
 import type { EditorHandle, EditorOptions, PlacedFault } from './make-editor';
 
@@ -8,7 +9,7 @@ type Loaded = typeof import('./make-editor');
 
 interface SourceEditorProps extends Pick<
   EditorOptions,
-  'source' | 'kind' | 'label' | 'nonce' | 'column' | 'marks' | 'onWrite' | 'onLeave' | 'onJoin'
+  'source' | 'kind' | 'label' | 'column' | 'marks' | 'onWrite' | 'onLeave' | 'onJoin'
 > {
   results: readonly Result[];
   /** What stands here until the editor has been loaded. */
@@ -60,7 +61,8 @@ export function SourceEditor({ results, meanwhile, ...options }: SourceEditorPro
         parent: parent.current,
         onWrite: (text, cursor) => {
           typed.current.push(text);
-          latest.current.onWrite(text, cursor);
+          // At once: the next keystroke, or an answer that redraws the sheet, must find this one.
+          flushSync(() => latest.current.onWrite(text, cursor));
         },
         onLeave: (to, at) => latest.current.onLeave(to, at),
         onJoin: (side) => latest.current.onJoin?.(side) ?? false,

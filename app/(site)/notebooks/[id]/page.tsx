@@ -1,5 +1,4 @@
 import type { Metadata } from 'next';
-import { headers } from 'next/headers';
 import { cache } from 'react';
 import { answersFor, isHurried } from '@/components/sheet/answers';
 import { Sheet } from '@/components/sheet/sheet';
@@ -38,7 +37,6 @@ export default async function NotebookPage({ params }: PageProps) {
         personName={person.name}
         mayWrite={inUse && can(actor, 'versions.save', guarded)}
         mayShare={can(actor, 'people.change', guarded)}
-        nonce={(await headers()).get('x-nonce') ?? undefined}
       />
     </div>
   );
