@@ -58,8 +58,9 @@ function rootsOf(f: Field, t: Tower): CertificateRoot[] {
 }
 
 function witness(below: Tower, g: Gen): { prime: number; roots: number[] } | null {
+  const effort = { left: 200_000 };
   for (let j = 0; ; j++) {
-    const h = homOf(below, j);
+    const h = homOf(below, j, effort);
     if (h === null) return null;
     if (character(g.rad, below, h) < 0) return { prime: h.p, roots: [...h.roots] };
   }

@@ -145,19 +145,23 @@ function mulFlat(t: Tower, a: readonly Int[], b: readonly Int[]): Int[] {
   const n = a.length;
   const out = zeros(n);
   let work = 0;
+  let wa = 1;
+  let wb = 1;
   for (let i = 0; i < n; i++) {
     const x = a[i] as Int;
     if (x === 0) continue;
+    if (typeof x === 'bigint') wa = Math.max(wa, words(x));
     for (let j = 0; j < n; j++) {
       const y = b[j] as Int;
       if (y === 0) continue;
+      if (wb === 1 && typeof y === 'bigint') wb = words(y);
       let z = mul(x, y);
       if (i & j) z = mul(z, t.product(i & j));
       out[i ^ j] = add(out[i ^ j] as Int, z);
       work++;
     }
   }
-  t.field.budget.charge(work * (words(a[0] as Int) + words(b[0] as Int)));
+  t.field.budget.charge(n + work * (1 + (wa * wb) / 16));
   return out;
 }
 

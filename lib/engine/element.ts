@@ -65,7 +65,7 @@ export function finish(t: Tower, c: Int[], den: Int): El {
     count++;
     if (typeof x === 'bigint') big = Math.max(big, Z.words(x));
   }
-  t.field.budget.charge(c.length * (1 + big));
+  t.field.budget.charge(10 + 2 * c.length * (1 + big));
   checkSize(t.field, c, big, den, count);
   let tower = t;
   let list = c;
@@ -109,7 +109,7 @@ export function finishSparse(t: Tower, table: Map<bigint, Int>, den: Int): El {
     if (typeof x === 'bigint') big = Math.max(big, Z.words(x));
   }
   const f = t.field;
-  f.budget.charge(masks.length * (2 + big));
+  f.budget.charge(20 + masks.length * (10 + big));
   masks.sort((x, y) => (x < y ? -1 : 1));
   const values = masks.map((mask) => table.get(mask) as Int);
   checkSize(f, values, big, den, masks.length);
@@ -273,7 +273,7 @@ function mulSparse(t: Tower, a: El, b: El): Map<bigint, Int> {
   const bm = b.m as readonly bigint[];
   t.field.budget.within('terms', Math.max(am.length, bm.length));
   for (let i = 0; i < am.length; i++) {
-    t.field.budget.charge(bm.length * (1 + Z.words(a.c[i] as Int)));
+    t.field.budget.charge(bm.length * (5 + Z.words(a.c[i] as Int)));
     for (let j = 0; j < bm.length; j++) {
       const both = (am[i] as bigint) & (bm[j] as bigint);
       const rest = (am[i] as bigint) ^ (bm[j] as bigint);

@@ -15,6 +15,11 @@ export interface Enclosure {
   high: bigint;
 }
 
+/** Steps of one product of P bits, as Karatsuba's method takes them. */
+function cost(P: number): number {
+  return Math.ceil((P / 64) ** 1.58 / 8);
+}
+
 /** ⌈n/2^P⌉. */
 function shiftUp(n: bigint, P: bigint): bigint {
   return -(-n >> P);
@@ -43,7 +48,7 @@ export function encloseRoot(f: Field, g: Gen, P: number): Enclosure {
   if (byPrecision === undefined) cache.set(g.id, (byPrecision = new Map()));
   let e = byPrecision.get(P);
   if (e === undefined) {
-    f.budget.charge(20 + (P >> 5));
+    f.budget.charge(20 + cost(P));
     const p = BigInt(P);
     if (g.int !== 0) {
       const low = isqrt(BigInt(g.int) << (2n * p));
@@ -63,7 +68,7 @@ export function enclose(x: El, P: number): Enclosure {
   const p = BigInt(P);
   const f = x.t.field;
   const k = x.t.k;
-  f.budget.charge(x.c.length * (1 + (P >> 6)));
+  f.budget.charge(x.c.length * (2 + cost(P)));
   let low: bigint;
   let high: bigint;
   if (k === 0) {

@@ -83,7 +83,7 @@ export interface SquareSplit {
  * of steps; a cofactor that resists is kept whole when it is not a perfect square, and refined by gcd when it
  * meets another number. Cost: bounded by `rhoSteps` multiplications of the cofactor's size.
  */
-export function splitSquare(n: bigint, rhoSteps = 60_000): SquareSplit {
+export function splitSquare(n: bigint, rhoSteps = 12_000): SquareSplit {
   const exponents = new Map<bigint, number>();
   let rest = n;
   if (rest <= BigInt(Number.MAX_SAFE_INTEGER)) {
@@ -95,16 +95,22 @@ export function splitSquare(n: bigint, rhoSteps = 60_000): SquareSplit {
         w /= p;
       }
     }
+    w = stripToCubeRoot(w, exponents);
     rest = BigInt(w);
-    if (w > 1 && w < 4096 * 4096) {
-      exponents.set(rest, (exponents.get(rest) ?? 0) + 1);
-      rest = 1n;
-    }
   } else {
     rest = stripSmall(rest, exponents);
   }
   let complete = true;
-  const todo = rest > 1n ? [rest] : [];
+  const todo: bigint[] = [];
+  if (rest > 1n && rest <= BigInt(Number.MAX_SAFE_INTEGER)) {
+    // No prime up to the cube root divides: rest is a prime, the square of one, or the product of two different ones.
+    const r = exactRoot(rest);
+    if (r !== null) exponents.set(r, 2);
+    else {
+      exponents.set(rest, 1);
+      complete = rest < 16777216n || isProbablePrime(rest);
+    }
+  } else if (rest > 1n) todo.push(rest);
   let steps = rhoSteps;
   while (todo.length > 0) {
     const m = todo.pop() as bigint;
@@ -135,6 +141,18 @@ export function splitSquare(n: bigint, rhoSteps = 60_000): SquareSplit {
   }
   factors.sort((a, b) => (a < b ? -1 : 1));
   return { square, factors, complete };
+}
+
+/** Goes on dividing from 4097 up to the cube root of what is left. */
+function stripToCubeRoot(n: number, exponents: Map<bigint, number>): number {
+  let w = n;
+  for (let p = 4097, step = 4; p * p * p <= w; p += step, step = 6 - step) {
+    while (w % p === 0) {
+      exponents.set(BigInt(p), (exponents.get(BigInt(p)) ?? 0) + 1);
+      w /= p;
+    }
+  }
+  return w;
 }
 
 /** Divides out the small primes, many at a time, so that a number of thousands of digits is read a few dozen times only. */

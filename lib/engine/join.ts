@@ -7,7 +7,7 @@
  */
 
 import { OverLimit } from './limits';
-import { characterOfInteger, character, homOf } from './residues';
+import { characterOfInteger, character, homOf, PATIENCE } from './residues';
 import { integerEl, inverseEl, isRationalEl, mulEl, numerator, scaleEl, splitTop, subEl, substitute } from './element';
 import { generatorEl, rootInField } from './root-in-field';
 import { splitSquare } from './integers';
@@ -146,9 +146,10 @@ function dependence(t: Tower, g: Gen): El | null {
   const rows: { bits: number; odd: boolean }[] = [];
   let next = 0;
   for (let attempt = 0; attempt < 4; attempt++) {
+    const effort = { left: PATIENCE };
     const until = next + primes.length + 12;
     for (; next < until; next++) {
-      const h = homOf(k, next);
+      const h = homOf(k, next, effort);
       if (h === null) break;
       const c = character(g.rad, k, h);
       if (c === 0) continue;

@@ -10,7 +10,7 @@ export const DEFAULT_LIMITS: Readonly<Limits> = Object.freeze({
   terms: 20_000,
   degree: 256,
   digits: 10_000,
-  steps: 60_000_000,
+  steps: 6_000_000,
 });
 
 type OutsideCode = 'division-by-zero' | 'domain' | 'not-exact';
@@ -29,13 +29,15 @@ export class OutsideDomain extends Error {
 /** A named limit was met. */
 export class OverLimit extends Error {
   readonly code: LimitCode;
+  readonly met: number;
   constructor(
     readonly limit: keyof Limits,
     readonly allowed: number,
-    readonly met: number,
+    met: number,
   ) {
-    super(describe(limit, allowed, met));
+    super(describe(limit, allowed, Math.ceil(met)));
     this.code = CODES[limit];
+    this.met = Math.ceil(met);
   }
 }
 

@@ -77,29 +77,34 @@ interface Pool {
   tried: number;
 }
 
-/** How many homomorphisms of the parent are tried for one of the child before giving up. */
-const PATIENCE = 3000;
+/** How many radicands are tried, over all levels, for one request before giving up: the descent may be cheaper. */
+export const PATIENCE = 1500;
 
 function poolOf(t: Tower): Pool {
   t.homs ??= { list: [], tried: 0 } satisfies Pool;
   return t.homs as Pool;
 }
 
-/** The j-th homomorphism of a tower, or null when none is found with reasonable effort. */
-export function homOf(t: Tower, j: number): Hom | null {
+/** Trials left of the request at hand. */
+export interface Effort {
+  left: number;
+}
+
+/** The j-th homomorphism of a tower, or null when none is found within the effort. */
+export function homOf(t: Tower, j: number, effort: Effort): Hom | null {
   const pool = poolOf(t);
-  const start = pool.tried;
   while (pool.list.length <= j) {
     if (t.parent === null) {
       const p = wordPrime(pool.tried++);
       if (p % 4 === 3) pool.list.push({ p, inv: 1 / p, big: BigInt(p), roots: [] });
       continue;
     }
-    if (pool.tried - start > PATIENCE) return null;
-    const h = homOf(t.parent, pool.tried);
+    if (effort.left <= 0) return null;
+    const h = homOf(t.parent, pool.tried, effort);
     if (h === null) return null;
     pool.tried++;
-    t.field.budget.charge(30);
+    effort.left--;
+    t.field.budget.charge(5);
     const g = t.top as Gen;
     const d = g.int !== 0 ? residue(g.int, h.p, h.big) : imageOf(g.rad, t.parent, h);
     if (d === null || d === 0) continue;
@@ -162,10 +167,11 @@ export function characterOfInteger(n: bigint, h: Hom): number {
 
 /** False proves that x is not a square in t; true says nothing. */
 export function maybeSquare(x: El, t: Tower, tries: number): boolean {
+  const effort = { left: PATIENCE };
   for (let j = 0; j < tries; j++) {
-    const h = homOf(t, j);
+    const h = homOf(t, j, effort);
     if (h === null) return true;
-    t.field.budget.charge(x.c.length + 30);
+    t.field.budget.charge(x.c.length + 5);
     if (character(x, t, h) < 0) return false;
   }
   return true;
@@ -175,8 +181,10 @@ export function maybeSquare(x: El, t: Tower, tries: number): boolean {
 export function characters(x: El, t: Tower, n: number): { bits: number; known: number } {
   let bits = 0;
   let known = 0;
+  const effort = { left: PATIENCE };
+  t.field.budget.charge(n * (x.c.length + 5));
   for (let j = 0; j < n; j++) {
-    const h = homOf(t, j);
+    const h = homOf(t, j, effort);
     if (h === null) break;
     const c = character(x, t, h);
     if (c !== 0) known |= 1 << j;

@@ -23,7 +23,7 @@ export interface Limits {
   degree: number;
   /** Most significant digits of a decimal. */
   digits: number;
-  /** Work of one `attempt`, in multiplications of machine words, roughly. */
+  /** Work of one `attempt`, in units of about a tenth of a microsecond of a machine of 2020. */
   steps: number;
 }
 
