@@ -27,6 +27,8 @@ export class EvaluationChild {
   private stopped = false;
   private listener: ((report: Report) => void) | null = null;
   readonly ended: Promise<Ending>;
+  /** Settles when the program has been loaded, or the child has ended before that. */
+  readonly ready: Promise<void>;
   private over = false;
 
   constructor(program: string) {
@@ -45,11 +47,15 @@ export class EvaluationChild {
       // Not `exit`: what the child wrote last must have been read when its end is told.
       this.child.once('close', (code, signal) => this.finish(resolve, this.endingOf(code, signal)));
     });
-    if (this.child.stdout !== null) {
-      createInterface({ input: this.child.stdout }).on('line', (line) =>
-        this.listener?.(JSON.parse(line) as Report),
-      );
-    }
+    this.ready = new Promise((resolve) => {
+      void this.ended.then(() => resolve());
+      if (this.child.stdout === null) return;
+      createInterface({ input: this.child.stdout }).on('line', (line) => {
+        const report = JSON.parse(line) as Report;
+        if (report.kind === 'ready') resolve();
+        else this.listener?.(report);
+      });
+    });
     // A send that meets a dying child is reported here as well; `ended` already says so.
     this.child.on('error', () => undefined);
     this.hold(false);
@@ -57,6 +63,12 @@ export class EvaluationChild {
 
   get alive(): boolean {
     return !this.over;
+  }
+
+  /** Waits until the child can work, and keeps the parent alive meanwhile. */
+  async prepare(): Promise<void> {
+    this.hold(true);
+    await this.ready;
   }
 
   /** Sends a job; reports go to the listener until another job is sent. */
@@ -86,8 +98,10 @@ export class EvaluationChild {
     }
   }
 
+  /** Ends the child; the parent lives at least until that is done. */
   kill(): void {
     this.stopped = true;
+    if (this.alive) this.hold(true);
     this.child.kill('SIGKILL');
   }
 

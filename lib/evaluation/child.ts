@@ -57,4 +57,5 @@ function refusalOf(error: unknown): Refusal {
 }
 
 process.on('message', (job) => run(job as Job));
+report({ kind: 'ready', job: 0 });
 process.on('disconnect', () => process.exit(0));

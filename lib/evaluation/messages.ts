@@ -20,6 +20,7 @@ export interface Refusal {
 
 /** What a child reports, one JSON line each, written before it goes on. */
 export type Report =
+  | { readonly kind: 'ready'; readonly job: 0 }
   | {
       readonly kind: 'started' | 'valued';
       readonly job: number;

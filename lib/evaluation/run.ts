@@ -66,10 +66,17 @@ export async function runWork(
   work: Work,
   limits: EvaluationLimits = EVALUATION_LIMITS,
 ): Promise<Finished> {
-  const end = performance.now() + limits.requestTime;
+  let end = performance.now() + limits.requestTime;
   const progress = new Progress();
   for (;;) {
-    const attempt = await tryOnce(pool, work, progress, end, limits);
+    const child = pool.take();
+    // A child is warm as a rule; the time of one that still starts is not the request's.
+    const before = performance.now();
+    await child.prepare();
+    end += performance.now() - before;
+    const attempt = await tryOnce(child, work, progress, end, limits);
+    if (attempt.kind === 'done') pool.give(child);
+    else pool.discard(child);
     if (attempt.kind === 'done') return progress.finished(attempt.expression, true);
     if (!progress.learn(attempt) || performance.now() >= end) return progress.finished(null, false);
   }
@@ -77,14 +84,13 @@ export async function runWork(
 
 let jobs = 0;
 
-async function tryOnce(
-  pool: Pool,
+function tryOnce(
+  child: EvaluationChild,
   work: Work,
   progress: Progress,
   end: number,
   limits: EvaluationLimits,
 ): Promise<Attempt> {
-  const child = pool.take();
   const watch = new Watch(child, end, limits);
   jobs += 1;
   const job = {
@@ -94,7 +100,7 @@ async function tryOnce(
     refused: [...progress.refused],
     brief: [...progress.brief],
   };
-  const attempt = await new Promise<Attempt>((resolve) => {
+  return new Promise<Attempt>((resolve) => {
     const settle = (outcome: Attempt): void => {
       watch.stop();
       resolve(outcome);
@@ -108,9 +114,6 @@ async function tryOnce(
       if (report.kind === 'fault') refuse(report.refusal, report.detail);
     });
   });
-  if (attempt.kind === 'done') pool.give(child);
-  else pool.discard(child);
-  return attempt;
 }
 
 function take(report: Report, watch: Watch, results: Map<string, Result>): void {

@@ -13,7 +13,7 @@ export function resultTex(result: Result): string {
     case 'number': {
       const unit = result.unit === null ? '' : unitTex(result.unit);
       const value =
-        unit !== '' && /.[+-]/.test(result.exact.text)
+        unit !== '' && isSum(result.exact.text)
           ? `\\left(${result.exact.tex}\\right)${unit}`
           : result.exact.tex + unit;
       return result.exact.staged
@@ -31,8 +31,16 @@ export function resultTex(result: Result): string {
   }
 }
 
+/** The line as typed and its value; the value only once where it was typed as it is. */
 function formula(typed: string, value: string): string {
-  return displayed(typed === value ? typed : `${typed}=${value}`);
+  return displayed(typed === value || typed.endsWith(`=${value}`) ? typed : `${typed}=${value}`);
+}
+
+/** Whether a written value has terms outside all brackets, so that a unit after it needs brackets. */
+function isSum(text: string): boolean {
+  let [before, outside] = ['', text];
+  while (before !== outside) [before, outside] = [outside, outside.replace(/\([^()]*\)/g, '')];
+  return /.[+-]/.test(outside);
 }
 
 /** A staged value is a display of several lines by itself and stands below what was typed. */
@@ -61,7 +69,7 @@ export function compartments(result: Result): { name: string; tex: string }[] {
   const imaginary =
     decimal.im === null
       ? ''
-      : `${decimal.im.startsWith('-') ? '' : '+'}${decimalTex(decimal.im)}\\,\\mathrm{i}`;
+      : `${decimal.im.startsWith('-') ? '' : '+'}${decimalTex(decimal.im)}\\,i`;
   const whole =
     imaginary === ''
       ? decimalTex(decimal.re)

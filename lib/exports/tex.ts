@@ -64,7 +64,7 @@ function titleBlock(notebook: ExportedNotebook): string {
     ['Workshop', notebook.workshop],
     ['Notebook', notebook.id],
     ['Version', String(version.number)],
-    ['Saved', `${version.savedAt} (UTC)`],
+    ['Saved', `${version.savedAt.slice(0, 16).replace('T', ' ')} UTC`],
     ['Author', version.author],
     ['Unit', settings.unit],
     [

@@ -1,5 +1,5 @@
 import type { Engine } from '../engine/index';
-import { decimalOfSum, inUnit, unitName, writeSum } from './give-value';
+import { decimalOfSum, inUnit, isSum, unitName, writeSum } from './give-value';
 import { attemptOrFail } from './attempt';
 import type { Evaluator } from './evaluator';
 import { fromNum } from './pi-sum';
@@ -72,17 +72,15 @@ function explain(engine: Engine, left: Value, right: Value, settings: Settings):
   const difference = differenceForDecision(engine, left, right);
   if (isZeroValue(engine, difference)) {
     const { text, approximate } = inWords(engine, left, settings);
-    return approximate
-      ? `Both sides are the same value, about ${text}.`
-      : `Both sides are ${text}.`;
+    return approximate ? `Both sides are the same value, ${text}.` : `Both sides are ${text}.`;
   }
   if (!isRealValue(engine, difference))
-    return `The sides differ by about ${about(engine, difference, settings)}.`;
+    return `The sides differ by ${about(engine, difference, settings)}.`;
   const [word, gap] =
     signOf(engine, difference) > 0
       ? ['greater', difference]
       : ['less', differenceForDecision(engine, right, left)];
-  return `The left side is ${word} by about ${about(engine, gap, settings)}.`;
+  return `The left side is ${word} by ${about(engine, gap, settings)}.`;
 }
 
 function inWords(
@@ -102,19 +100,22 @@ function inWords(
 
 const DIGITS_IN_A_REASON = 4;
 
+/** A few digits, with the word `about` unless they are the value itself. */
 function about(engine: Engine, value: Value, settings: Settings): string {
   const sum =
     value.kind === 'angle'
       ? fromNum(engine, engine.mul(value.turns, engine.integer(360n)))
       : inUnit(engine, value, settings.unit);
-  const { re, im } = decimalOfSum(engine, sum, DIGITS_IN_A_REASON);
+  const { re, im, terminates } = decimalOfSum(engine, sum, DIGITS_IN_A_REASON);
+  const word = terminates ? '' : 'about ';
   const unit = value.kind === 'angle' ? 'deg' : unitName(settings.unit, value.length);
-  if (im === null) return withUnit(re, unit);
+  if (im === null) return word + withUnit(re, unit);
   const imaginary = im.startsWith('-') ? `- ${im.slice(1)}` : `+ ${im}`;
-  return unit === null ? `${re} ${imaginary} i` : `(${re} ${imaginary} i) ${unit}`;
+  const whole = `${re} ${imaginary} i`;
+  return word + (unit === null ? whole : `(${whole}) ${unit}`);
 }
 
 function withUnit(text: string, unit: string | null): string {
   if (unit === null) return text;
-  return /.[+-]/.test(text) ? `(${text}) ${unit}` : `${text} ${unit}`;
+  return isSum(text) ? `(${text}) ${unit}` : `${text} ${unit}`;
 }

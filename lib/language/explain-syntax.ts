@@ -1,5 +1,6 @@
 import type { Problem, Span } from './failure';
 import { findFunction } from './names';
+import { findNearest } from './words';
 
 /**
  * Says in words why a line does not parse: what stands there, what was expected and, where one is likely, the mend.
@@ -9,12 +10,16 @@ import { findFunction } from './names';
  */
 export function explainSyntax(source: string, refused: Span): Problem {
   const found = new Explainer(tokenize(source)).run();
-  const { message, span } = found ?? {
+  const {
+    message,
+    span,
+    code = 'syntax',
+  } = found ?? {
     message: 'This part of the line cannot be read; an expression was expected.',
     span: refused,
   };
   const to = Math.max(span.to, Math.min(span.from + 1, source.length));
-  return { code: 'syntax', message, from: Math.min(span.from, to), to };
+  return { code, message, from: Math.min(span.from, to), to };
 }
 
 type TokenKind =
@@ -115,6 +120,7 @@ const MENDS: Readonly<Record<string, string>> = {
 interface Finding {
   readonly message: string;
   readonly span: Span;
+  readonly code?: 'unknown-name';
 }
 
 class Explainer {
@@ -265,14 +271,7 @@ class Explainer {
             }
           : 'value';
       case 'comma':
-        if (this.open.at(-1)?.call === true) return 'value';
-        return {
-          message:
-            this.previous()?.kind === 'number' && this.tokens[this.index + 1]?.kind === 'number'
-              ? `A decimal is written with a point: \`${this.previous()?.text ?? ''}.${this.tokens[this.index + 1]?.text ?? ''}\`.`
-              : 'A comma only separates the arguments of a function; an operator was expected.',
-          span: token,
-        };
+        return this.open.at(-1)?.call === true ? 'value' : this.comma(token);
       case 'equals':
         return {
           message: this.defines
@@ -297,6 +296,28 @@ class Explainer {
       case 'other':
         return this.foreign(token, 'an operator');
     }
+  }
+
+  private comma(token: Token): Finding {
+    const before = this.previous();
+    const after = this.tokens[this.index + 1];
+    const opened = this.open.at(-1);
+    const called =
+      opened === undefined ? undefined : this.tokens[this.tokens.indexOf(opened.token) - 1];
+    if (called?.kind === 'name') {
+      const nearest = findNearest(called.text, []);
+      const hint = nearest === null ? '.' : `; did you mean \`${nearest}\`?`;
+      return {
+        code: 'unknown-name',
+        message: `There is no function \`${called.text}\`${hint}`,
+        span: called,
+      };
+    }
+    const message =
+      before?.kind === 'number' && after?.kind === 'number'
+        ? `A decimal is written with a point: \`${before.text}.${after.text}\`.`
+        : 'A comma only separates the arguments of a function; an operator was expected.';
+    return { message, span: token };
   }
 
   private unclosed(end: Token): Finding | null {

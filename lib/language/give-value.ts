@@ -178,7 +178,7 @@ function writeTerm(engine: Engine, exponent: number, coefficient: Num): Exact {
     const sign = rational.n < 0n ? '-' : '';
     return { text: sign + powerText, tex: sign + powerTex, staged: false };
   }
-  const compound = rational === null && /.[+-]/.test(written.text);
+  const compound = isSum(written.text);
   return {
     text: compound ? `(${written.text})*${powerText}` : `${written.text}*${powerText}`,
     tex: compound ? `\\left(${written.tex}\\right)${powerTex}` : `${written.tex}\\,${powerTex}`,
@@ -213,4 +213,11 @@ function decimalOfReal(engine: Engine, sum: PiSum, digits: number): DecimalResul
     const below = engine.decimal(low, digits);
     return below.re === engine.decimal(high, digits).re ? { ...below, terminates: false } : null;
   });
+}
+
+/** Whether a written value has terms outside all brackets, so that a factor or unit beside it needs brackets. */
+export function isSum(text: string): boolean {
+  let [before, outside] = ['', text];
+  while (before !== outside) [before, outside] = [outside, outside.replace(/\([^()]*\)/g, '')];
+  return /.[+-]/.test(outside);
 }

@@ -167,7 +167,7 @@ function typeset(node: Expression): string {
     case 'mark':
       return typesetMark(node.name);
     case 'constant':
-      return node.name === 'i' ? '\\mathrm{i}' : '\\pi';
+      return node.name === 'i' ? 'i' : '\\pi';
     case 'unit':
       return node.degreeSign ? '^{\\circ}' : `\\mathrm{${node.name}}`;
     case 'quantity':
@@ -229,7 +229,11 @@ function typesetQuantity(node: QuantityNode): string {
 /** Read left to right, as it is evaluated: each `/` puts all that stands before it over what follows. */
 function typesetProduct(node: ProductNode): string {
   return node.factors.reduce((before, factor, index) => {
-    if (index === 0) return typeset(factor.value);
+    // What a fraction bar groups by itself needs no brackets over it either.
+    if (index === 0) {
+      const alone = node.factors[1]?.operator === '/';
+      return typeset(alone ? unwrap(factor.value) : factor.value);
+    }
     if (factor.operator === '/') return `\\frac{${before}}{${typeset(unwrap(factor.value))}}`;
     const next = typeset(factor.value);
     if (factor.operator === 'implied') {

@@ -131,7 +131,7 @@ function scale(
       'an angle is multiplied or divided only by a plain number',
       left,
       right,
-      ' (the length of an arc is `2 pi R angle / turn`)',
+      ' (the length of an arc is `2 pi R (angle / turn)`)',
     );
   }
   const algebraic = asAlgebraic(engine, factor.sum);

@@ -59,4 +59,5 @@ process.on('message', ({ job, cells, known, refused, brief }) => {
     report({ kind: 'fault', job, refusal: { code, message: 'stopped' }, detail: error.message });
   }
 });
+report({ kind: 'ready', job: 0 });
 process.on('disconnect', () => process.exit(0));

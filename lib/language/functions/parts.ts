@@ -50,7 +50,7 @@ export function extreme(engine: Engine, values: readonly Value[], sought: -1 | 1
   if (first === undefined) throw new RangeError('At least one value is needed.');
   compareValues(engine, first, first);
   return others.reduce(
-    (best, value) => (compareValues(engine, value, best) === sought ? value : best),
+    (best, value) => (compareValues(engine, best, value) === -sought ? value : best),
     first,
   );
 }
