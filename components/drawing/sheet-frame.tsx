@@ -18,6 +18,8 @@ interface SheetFrameProps {
   foot?: ReactNode;
   /** About how many rows of zones the sheet may be tall; too many costs nothing. */
   zones?: number;
+  /** As tall as what is on it, instead of filling the screen. */
+  short?: boolean;
 }
 
 function Centring({ className }: { className: string }) {
@@ -28,7 +30,7 @@ function Centring({ className }: { className: string }) {
  * The sheet itself: trimmed edge, zone letters and figures, ruled border with centring marks, and
  * the title block in its lower right corner.
  */
-export function SheetFrame({ children, foot, zones = 40 }: SheetFrameProps) {
+export function SheetFrame({ children, foot, zones = 40, short = false }: SheetFrameProps) {
   return (
     <div className="relative border border-rule bg-sheet sm:px-zone print:border-0 print:p-0">
       <div
@@ -61,7 +63,9 @@ export function SheetFrame({ children, foot, zones = 40 }: SheetFrameProps) {
           ))}
         </div>
       ))}
-      <div className="relative flex min-h-[60vh] flex-col border-2 border-ink max-sm:border-x-0">
+      <div
+        className={`relative flex flex-col border-2 border-ink max-sm:border-x-0 ${short ? '' : 'min-h-[60vh]'}`}
+      >
         <Centring className="-top-2.5 left-1/2 h-2.5 w-0.5 -translate-x-1/2" />
         <Centring className="-bottom-2.5 left-1/2 h-2.5 w-0.5 -translate-x-1/2" />
         <Centring className="-left-2.5 top-1/2 h-0.5 w-2.5 max-sm:hidden" />

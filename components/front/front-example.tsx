@@ -13,7 +13,7 @@ const EXAMPLE: NotebookContent = {
     { id: 'r', kind: 'dimension', source: 'R = 1200 mm' },
     { id: 's', kind: 'dimension', source: 's = 2 R sin(turn/10)' },
     { id: 'p', kind: 'dimension', source: 's^2 == R^2 (5 - sqrt(5))/2' },
-    { id: 'g', kind: 'dimension', source: 'cos(turn/7)' },
+    { id: 'g', kind: 'dimension', source: 'a = turn/7' },
   ],
 };
 
@@ -26,6 +26,7 @@ export async function FrontExample() {
     <section aria-label="An example sheet" className="min-w-0">
       <SheetFrame
         zones={8}
+        short
         foot={
           <TitleBlock
             fields={[

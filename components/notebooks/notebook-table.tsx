@@ -9,7 +9,7 @@ interface NotebookTableProps {
 }
 
 const CELL = 'px-3 py-2.5 align-top max-md:block max-md:py-0.5';
-const HEAD = 'px-3 py-2 text-left text-small font-semibold';
+const HEAD = 'px-3 py-2 text-left text-small font-semibold whitespace-nowrap';
 
 /** Every notebook the person may read, last changed first; on a narrow screen each row is a card. */
 export function NotebookTable({ notebooks, archived }: NotebookTableProps) {
@@ -67,7 +67,9 @@ export function NotebookTable({ notebooks, archived }: NotebookTableProps) {
                   {notebook.title}
                 </Link>
               </th>
-              <td className={`${CELL} [overflow-wrap:anywhere]`}>{notebook.workshop.name}</td>
+              <td className={`${CELL} md:min-w-36 [overflow-wrap:anywhere]`}>
+                {notebook.workshop.name}
+              </td>
               <td className={CELL}>{notebook.role}</td>
               <td className={`${CELL} font-mono tabular-nums md:text-right`}>
                 <span className="font-sans md:hidden">version </span>

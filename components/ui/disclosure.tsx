@@ -59,7 +59,7 @@ export function Disclosure({ label, name, children, className = '' }: Disclosure
             setOpen(false);
             button.current?.focus();
           }}
-          className="absolute right-0 z-20 mt-1 min-w-48 border border-ink bg-sheet py-1 text-small shadow-[3px_3px_0_var(--hairline)]"
+          className="absolute right-0 z-20 mt-1 min-w-64 border max-sm:fixed max-sm:inset-x-3 border-ink bg-sheet py-1 text-small shadow-[3px_3px_0_var(--hairline)]"
         >
           {children}
         </div>

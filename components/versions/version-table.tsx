@@ -11,7 +11,7 @@ interface VersionTableProps {
 }
 
 const CELL = 'px-3 py-2.5 align-top max-md:block max-md:py-0.5';
-const HEAD = 'px-3 py-2 text-left text-small font-semibold';
+const HEAD = 'px-3 py-2 text-left text-small font-semibold whitespace-nowrap';
 
 export function sayNote({ note, restoredFrom }: VersionLine): string {
   const restored = restoredFrom === null ? '' : `version ${restoredFrom} kept again`;
