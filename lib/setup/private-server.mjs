@@ -163,7 +163,8 @@ export class PrivateServer {
 
   async #choosePort() {
     const port = this.wantedPort ?? readState(this.state).databasePort;
-    if (port !== undefined && (await portIsFree(port))) return port;
+    // A server that was killed a moment ago may not have let go of its port yet.
+    if (port !== undefined && (await waitUntil(() => portIsFree(port), 5))) return port;
     if (this.wantedPort === undefined) return findFreePort();
     throw new SetupError(
       `port ${port} for the database is taken; set DATABASE_PORT to another one.`,
