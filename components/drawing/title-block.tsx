@@ -11,7 +11,7 @@ export interface TitleField {
 const SPANS = {
   2: 'sm:col-span-2 col-span-3',
   3: 'sm:col-span-3 col-span-6',
-  4: 'sm:col-span-4 col-span-6',
+  4: 'sm:col-span-4 col-span-12',
   5: 'sm:col-span-5 col-span-12',
   6: 'sm:col-span-6 col-span-12',
   8: 'sm:col-span-8 col-span-12',

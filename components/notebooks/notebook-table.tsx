@@ -8,7 +8,9 @@ interface NotebookTableProps {
   archived: boolean;
 }
 
-const CELL = 'px-3 py-2.5 align-top max-md:block max-md:py-0.5';
+const CELL = 'px-3 py-2.5 align-top max-md:block max-md:px-0 max-md:py-0.5';
+/** On a narrow screen, short facts stand beside one another. */
+const BESIDE = 'max-md:mr-3 max-md:inline-block';
 const HEAD = 'px-3 py-2 text-left text-small font-semibold whitespace-nowrap';
 
 /** Every notebook the person may read, last changed first; on a narrow screen each row is a card. */
@@ -57,7 +59,7 @@ export function NotebookTable({ notebooks, archived }: NotebookTableProps) {
           {notebooks.map((notebook) => (
             <tr
               key={notebook.id}
-              className="border-b border-hairline last:border-b-0 hover:bg-hand max-md:block max-md:py-2.5"
+              className="border-b border-hairline last:border-b-0 hover:bg-hand max-md:block max-md:px-3 max-md:py-2.5"
             >
               <th scope="row" className={`${CELL} text-left font-normal`}>
                 <Link
@@ -67,11 +69,11 @@ export function NotebookTable({ notebooks, archived }: NotebookTableProps) {
                   {notebook.title}
                 </Link>
               </th>
-              <td className={`${CELL} md:min-w-36 [overflow-wrap:anywhere]`}>
+              <td className={`${CELL} ${BESIDE} md:min-w-36 [overflow-wrap:anywhere]`}>
                 {notebook.workshop.name}
               </td>
-              <td className={CELL}>{notebook.role}</td>
-              <td className={`${CELL} font-mono tabular-nums md:text-right`}>
+              <td className={`${CELL} ${BESIDE}`}>{notebook.role}</td>
+              <td className={`${CELL} ${BESIDE} font-mono tabular-nums md:text-right`}>
                 <span className="font-sans md:hidden">version </span>
                 {notebook.version}
               </td>

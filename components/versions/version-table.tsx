@@ -10,7 +10,7 @@ interface VersionTableProps {
   versions: readonly VersionLine[];
 }
 
-const CELL = 'px-3 py-2.5 align-top max-md:block max-md:py-0.5';
+const CELL = 'px-3 py-2.5 align-top max-md:block max-md:px-0 max-md:py-0.5';
 const HEAD = 'px-3 py-2 text-left text-small font-semibold whitespace-nowrap';
 
 export function sayNote({ note, restoredFrom }: VersionLine): string {
@@ -44,7 +44,7 @@ export function VersionTable({ notebookId, head, mayRestore, versions }: Version
           {versions.map((version) => (
             <tr
               key={version.number}
-              className="border-b border-hairline last:border-b-0 hover:bg-hand max-md:block max-md:py-2.5"
+              className="border-b border-hairline last:border-b-0 hover:bg-hand max-md:block max-md:px-3 max-md:py-2.5"
             >
               <th scope="row" className={`${CELL} text-left font-normal`}>
                 <Link

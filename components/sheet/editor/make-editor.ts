@@ -1,5 +1,5 @@
 import { autocompletion } from '@codemirror/autocomplete';
-import { standardKeymap } from '@codemirror/commands';
+import { insertNewline, standardKeymap } from '@codemirror/commands';
 import {
   bracketMatching,
   HighlightStyle,
@@ -160,7 +160,8 @@ export function makeEditor(options: EditorOptions): EditorHandle {
           ]),
         ),
         // No history here: the notebook has one of its own, across all cells.
-        keymap.of(standardKeymap),
+        // A line of a sheet begins at its margin, whatever bracket the one before left open.
+        keymap.of([{ key: 'Enter', run: insertNewline }, ...standardKeymap]),
         kind === 'dimension' ? dimensionExtensions(options.marks) : [],
         theme,
         placeholder(PLACEHOLDERS[kind]),
