@@ -15,11 +15,11 @@ import * as Z from './int';
 import { bitLength } from './integers';
 
 export function real(re: Cx['re']): Cx {
-  return { re, im: integerEl(re.t.field, 0) };
+  return { re, im: re.t.field.zero };
 }
 
 export function isRealCx(a: Cx): boolean {
-  return isZeroEl(a.im);
+  return a.im === a.re.t.field.zero || isZeroEl(a.im);
 }
 
 export function isZeroCx(a: Cx): boolean {
@@ -27,14 +27,17 @@ export function isZeroCx(a: Cx): boolean {
 }
 
 export function addCx(a: Cx, b: Cx): Cx {
+  if (isRealCx(a) && isRealCx(b)) return real(addEl(a.re, b.re));
   return { re: addEl(a.re, b.re), im: addEl(a.im, b.im) };
 }
 
 export function negCx(a: Cx): Cx {
+  if (isRealCx(a)) return real(negEl(a.re));
   return { re: negEl(a.re), im: negEl(a.im) };
 }
 
 export function subCx(a: Cx, b: Cx): Cx {
+  if (isRealCx(a) && isRealCx(b)) return real(subEl(a.re, b.re));
   return { re: subEl(a.re, b.re), im: subEl(a.im, b.im) };
 }
 
@@ -60,7 +63,7 @@ export function conjCx(a: Cx): Cx {
 /** The principal root. */
 export function sqrtCx(a: Cx): Cx {
   const f = a.re.t.field;
-  const zero = integerEl(f, 0);
+  const zero = f.zero;
   if (isRealCx(a)) {
     return signEl(a.re) < 0 ? { re: zero, im: sqrtReal(negEl(a.re)) } : real(sqrtReal(a.re));
   }

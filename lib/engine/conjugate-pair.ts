@@ -9,9 +9,9 @@
 
 import * as Z from './int';
 import { exactRoot, splitSquare } from './integers';
-import { inverseEl, integerEl, isRationalEl, mulEl, numerator, scaleEl, subEl, addEl, splitTop } from './element';
+import { inverseEl, integerEl, isRationalEl, mulEl, numerator, rootOfTop, scaleEl, subEl, addEl, splitTop } from './element';
 import { signEl } from './enclosure';
-import { generatorEl, rootInField } from './root-in-field';
+import { rootInField } from './root-in-field';
 import type { El, Gen, Tower } from './tower';
 
 /** y as rational multiples of two conjugate roots. */
@@ -49,7 +49,7 @@ function rationalRootOf(x: El): El | null {
 
 function splitBy(y: El, square: El, t: Tower, m: bigint, b: bigint, c: bigint): ConjugatePair | null {
   const f = t.field;
-  const root = generatorEl(t);
+  const root = rootOfTop(t);
   const base = addEl(integerEl(f, Z.small(m)), scaleEl(root, Z.small(b)));
   // square·base is a rational r times a square: r from the norm, as in denesting.
   const z = mulEl(square, base);

@@ -7,7 +7,6 @@
 
 import * as Z from './int';
 import type { Int } from './int';
-import { small } from './int';
 import { bitLength } from './integers';
 import {
   addList,
@@ -18,7 +17,7 @@ import {
   scaleList,
   zeros,
 } from './dense';
-import { DENSE_ALWAYS, DENSE_MAX, type El, type Field, type Placing, type Tower } from './tower';
+import { DENSE_ALWAYS, DENSE_MAX, type El, type Field, type Gen, type Placing, type Tower } from './tower';
 import { join } from './join';
 import { OutsideDomain } from './limits';
 
@@ -28,6 +27,7 @@ export function integerEl(f: Field, n: Int): El {
 
 /** n/d in lowest terms; d not zero. */
 export function rationalEl(f: Field, n: Int, d: Int): El {
+  if (d === 1) return { t: f.base, c: [n], m: null, den: 1 };
   const g = Z.gcd(n, d);
   const s = d < 0 ? Z.neg(g) : g;
   return { t: f.base, c: [Z.quotient(n, s)], m: null, den: Z.quotient(d, s) };
@@ -46,13 +46,6 @@ export function numerator(a: El): Int {
   return a.c[0] as Int;
 }
 
-/** The generator itself as an element. */
-export function rootEl(t: Tower): El {
-  const c = zeros(1 << t.k);
-  c[1 << (t.k - 1)] = 1;
-  return finish(t, c, 1);
-}
-
 /** Checks sizes, reduces, trims. `c` is dense in t. */
 export function finish(t: Tower, c: Int[], den: Int): El {
   let used = 0;
@@ -66,13 +59,14 @@ export function finish(t: Tower, c: Int[], den: Int): El {
     if (typeof x === 'bigint') big = Math.max(big, Z.words(x));
   }
   t.field.budget.charge(10 + 2 * c.length * (1 + big));
-  checkSize(t.field, c, big, den, count);
+  if (big > 600 || typeof den === 'bigint' || count > 1000) checkSize(t.field, c, big, den, count);
   let tower = t;
   let list = c;
-  if (t.k > 0 && used !== (1 << t.k) - 1) {
-    const mask = t.closure(BigInt(used));
-    if (mask !== (1n << BigInt(t.k)) - 1n) {
-      const s = t.subset(mask);
+  const full = (1 << t.k) - 1;
+  if (used !== full) {
+    const mask = t.smallClosure(used);
+    if (mask !== full) {
+      const s = t.smallSubset(mask);
       const index = s.t.spread(t, s.kept);
       list = new Array<Int>(index.length);
       for (let i = 0; i < index.length; i++) list[i] = c[index[i] as number] as Int;
@@ -244,15 +238,22 @@ export function subEl(a: El, b: El): El {
 
 /** a·n/d for integers, d > 0. */
 export function scaleEl(a: El, n: Int, d: Int = 1): El {
-  if (n === 0) return integerEl(a.t.field, 0);
-  const g = Z.gcd(n, a.den);
-  const num = Z.quotient(n, g);
-  const r = reduceList(scaleList(a.c, num), Z.mul(Z.quotient(a.den, g), d));
-  checkSize(a.t.field, r.c, 601, r.den, r.c.length);
+  if (n === 0) return a.t.field.zero;
+  if (n === 1 && d === 1) return a;
+  const g = a.den === 1 ? 1 : Z.gcd(n, a.den);
+  const num = g === 1 ? n : Z.quotient(n, g);
+  const r = reduceList(scaleList(a.c, num), Z.mul(g === 1 ? a.den : Z.quotient(a.den, g), d));
+  if (typeof r.c[r.c.length - 1] === 'bigint' || typeof r.den === 'bigint') {
+    checkSize(a.t.field, r.c, 601, r.den, r.c.length);
+  }
   return { t: a.t, c: r.c, m: a.m, den: r.den };
 }
 
 export function mulEl(a: El, b: El): El {
+  if (a.t.k === 0 && b.t.k === 0 && a.den === 1 && b.den === 1) {
+    const c = Z.mul(numerator(a), numerator(b));
+    if (typeof c === 'number') return { t: a.t, c: [c], m: null, den: 1 };
+  }
   if (a.t.k === 0) return scaleEl(b, numerator(a), a.den);
   if (b.t.k === 0) return scaleEl(a, numerator(b), b.den);
   const [x, y] = together(a, b);
@@ -341,13 +342,22 @@ export function inverseEl(a: El): El {
   }
   const { low, high } = splitTop(a);
   const top = rootOfTop(a.t);
-  const norm = subEl(mulEl(low, low), mulEl(mulEl(high, high), (a.t.top as { rad: El }).rad));
+  const norm = subEl(mulEl(low, low), mulEl(mulEl(high, high), (a.t.top as Gen).rad));
   return mulEl(subEl(low, mulEl(high, top)), inverseEl(norm));
 }
 
-/** The top generator of a tower as an element. */
+/** The top generator of a tower, as an element of the smallest tower that has it. */
 export function rootOfTop(t: Tower): El {
-  return finishSparse(t, new Map([[1n << BigInt(t.k - 1), 1 as Int]]), 1);
+  return rootOf(t.top as Gen);
+}
+
+/** A generator as an element of the tower that it needs. */
+export function rootOf(g: Gen): El {
+  if (g.el === null) {
+    const t = g.int !== 0 ? g.rad.t.field.base.child(g) : g.rad.t.child(g);
+    g.el = finishSparse(t, new Map([[1n << BigInt(t.k - 1), 1 as Int]]), 1);
+  }
+  return g.el;
 }
 
 export function equalEl(a: El, b: El): boolean {
@@ -361,9 +371,3 @@ export function equalEl(a: El, b: El): boolean {
   }
   return isZeroEl(subEl(a, b));
 }
-
-export function bigintOf(n: Int): bigint {
-  return BigInt(n);
-}
-
-export { small };

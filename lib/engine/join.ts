@@ -8,10 +8,10 @@
 
 import { OverLimit } from './limits';
 import { characterOfInteger, character, homOf, PATIENCE } from './residues';
-import { integerEl, inverseEl, isRationalEl, mulEl, numerator, scaleEl, splitTop, subEl, substitute } from './element';
-import { generatorEl, rootInField } from './root-in-field';
+import { integerEl, inverseEl, isRationalEl, mulEl, numerator, rootOf, scaleEl, substitute } from './element';
+import { rootInField } from './root-in-field';
 import { splitSquare } from './integers';
-import { rootOfInteger, sqrtReal } from './real-root';
+import { normOf, rootOfInteger, sqrtReal } from './real-root';
 import { before, type El, type Field, type Gen, type Placing, type Tower } from './tower';
 import { signEl } from './enclosure';
 
@@ -56,13 +56,8 @@ function placing(t: Tower, built: Built): Placing {
   if (positions !== null) return { positions, images: null };
   return {
     positions: null,
-    images: t.gens.map((g) => built.images.get(g.id) ?? ownRoot(g)),
+    images: t.gens.map((g) => built.images.get(g.id) ?? rootOf(g)),
   };
-}
-
-/** A generator as an element of the tower that it needs. */
-export function ownRoot(g: Gen): El {
-  return generatorEl(g.rad.t.child(g));
 }
 
 function merge(a: readonly Gen[], b: readonly Gen[]): Gen[] {
@@ -125,7 +120,7 @@ function build(f: Field, wanted: readonly Gen[]): Built {
 }
 
 function resolve(x: El, images: Map<number, El>): El {
-  return substitute(x, x.t.gens.map((g) => images.get(g.id) ?? ownRoot(g)));
+  return substitute(x, x.t.gens.map((g) => images.get(g.id) ?? rootOf(g)));
 }
 
 /**
@@ -240,8 +235,7 @@ function normPrimes(g: Gen): bigint[] | null {
       let n: El = g.rad;
       for (let t: Tower | null = g.rad.t; t !== null && t.k > 0; t = t.parent) {
         if (n.t.position(t.top as Gen) < 0) continue;
-        const { low, high } = splitTop(n);
-        n = subEl(mulEl(low, low), mulEl(mulEl(high, high), (t.top as Gen).rad));
+        n = normOf(n);
       }
       const value = BigInt(numerator(isRationalEl(n) ? n : integerEl(f, 1)));
       const split = splitSquare(value < 0n ? -value : value);

@@ -12,7 +12,7 @@ import * as Z from './int';
 import { type Int } from './int';
 import { bigGcd } from './integers';
 import { isRationalEl, isZeroEl, numerator, toDense, toSparse } from './element';
-import { rebase, together } from './presentation';
+import { compact, together } from './presentation';
 import { keyOf } from './real-root';
 import { addList, isZeroList, mulList, mulTop, negList, scaleList, squareList, subList, zeros } from './dense';
 import { powerRoot, squarefreeModulo } from './polynomial';
@@ -41,7 +41,7 @@ export function minimalPolynomialOf(x: Cx): bigint[] {
   const f = x.re.t.field;
   if (rank !== null) f.budget.within('degree', rank);
   const c = characteristic(x);
-  return clear(c.minimal, c.den);
+  return c.den === 1n ? c.minimal.slice() : clear(c.minimal, c.den);
 }
 
 /** From the monic polynomial of den·x to the primitive one of x. */
@@ -119,7 +119,7 @@ function cacheOf(f: Field): Map<string, Characteristic> {
 function makeCharacteristic(x: Cx): Characteristic {
   const f = x.re.t.field;
   const imaginary = !isZeroEl(x.im);
-  const shown = rebase(together(x));
+  const shown = compact(together(x));
   const t = shown.t;
   f.budget.within('degree', 2 ** (t.k + (imaginary ? 1 : 0)));
   const re = toDense(shown.re);
@@ -130,8 +130,10 @@ function makeCharacteristic(x: Cx): Characteristic {
   // X − x, or its norm to the real field: (X − a)² + b².
   let poly: Int[][] = [negList(a)];
   if (imaginary) poly = [addList(squareList(t, a), squareList(t, b)), scaleList(a, -2)];
-  for (let u: Tower = t; u.parent !== null; u = u.parent) poly = normOfPolynomial(u, poly);
-  const monic = [1n, ...poly.reverse().map((c) => BigInt(c[0] as Int))];
+  let u: Tower = t;
+  for (; u.k > 1; u = u.parent as Tower) poly = normOfPolynomial(u, poly);
+  const plain = u.k === 1 ? normOverRationals(u, poly) : poly.map((c) => c[0] as Int);
+  const monic = [1n, ...plain.reverse().map(BigInt)];
   return { minimal: reduce(monic, f), den: BigInt(den) };
 }
 
@@ -167,6 +169,36 @@ function normOfPolynomial(t: Tower, poly: readonly Int[][]): Int[][] {
   }
   out.length = 2 * m;
   return out;
+}
+
+/** The last step, from a quadratic field to the rationals, on plain integers. */
+function normOverRationals(t: Tower, poly: readonly Int[][]): Int[] {
+  const m = poly.length;
+  const d = (t.top as Gen).int;
+  const low = poly.map((c) => c[0] as Int);
+  low.push(1);
+  const high = poly.map((c) => c[1] as Int);
+  t.field.budget.charge(m * m * (1 + Z.words(low[0] as Int)));
+  const out: Int[] = [];
+  for (let k = 0; k < 2 * m; k++) {
+    const a = squareCoefficient(low, k);
+    const b = squareCoefficient(high, k);
+    out.push(b === 0 ? a : Z.sub(a, Z.mul(b, d)));
+  }
+  return out;
+}
+
+/** Coefficient k of the square of a polynomial. */
+function squareCoefficient(a: readonly Int[], k: number): Int {
+  let sum: Int = 0;
+  for (let i = Math.max(0, k - a.length + 1); 2 * i < k; i++) {
+    const x = a[i] as Int;
+    const y = a[k - i] as Int;
+    if (x !== 0 && y !== 0) sum = Z.add(sum, Z.mul(x, y));
+  }
+  if (sum !== 0) sum = Z.mul(sum, 2);
+  const middle = k % 2 === 0 && k / 2 < a.length ? (a[k / 2] as Int) : 0;
+  return middle === 0 ? sum : Z.add(sum, Z.mul(middle, middle));
 }
 
 function squarePolynomial(t: Tower, a: readonly Int[][]): Int[][] {

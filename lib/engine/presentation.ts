@@ -34,6 +34,25 @@ export function together(x: Cx): Presented {
   };
 }
 
+/** Whether each root of an integer stands alone in some coordinate, so that no smaller set of roots will do. */
+function needsAll(x: Presented, flat: number): boolean {
+  for (let i = 0; i < flat; i++) {
+    const alone = (e: El): boolean => {
+      const at = e.t === x.t ? i : e.t.position(x.t.gens[i] as Gen);
+      if (at < 0) return false;
+      return e.m === null ? e.c[1 << at] !== 0 : e.m.includes(1n << BigInt(at));
+    };
+    if (!alone(x.re) && !alone(x.im) && !x.t.gens.some((g) => g.int === 0 && alone(g.rad))) return false;
+  }
+  return true;
+}
+
+/** As `rebase` where only the degree counts: the order of the roots is left as it is when all are needed. */
+export function compact(x: Presented): Presented {
+  const flat = x.t.k - x.t.nested;
+  return needsAll(x, flat) ? x : rebase(x);
+}
+
 /** The same value with as few roots of integers as its coordinates allow. The new tower belongs to a field of its own, good for arithmetic only. */
 export function rebase(x: Presented): Presented {
   const t = x.t;

@@ -19,18 +19,20 @@ import {
   negEl,
   numerator,
   rationalEl,
+  rootOf,
+  rootOfTop,
   scaleEl,
   splitTop,
   subEl,
 } from './element';
 import { signEl } from './enclosure';
 import { characters } from './residues';
-import { generatorEl, rootInField } from './root-in-field';
+import { rootInField } from './root-in-field';
 import type { El, Field, Gen, Tower } from './tower';
 
 /** √n for a positive integer: the roots of its squarefree factors, each a generator. */
-export function rootOfInteger(f: Field, n: bigint): El {
-  const split = splitSquare(n);
+export function rootOfInteger(f: Field, n: Int): El {
+  const split = splitSquare(BigInt(n));
   let scale = split.square;
   let out = integerEl(f, 1);
   const careful = !split.complete || f.unsplit.length > 0;
@@ -39,7 +41,7 @@ export function rootOfInteger(f: Field, n: bigint): El {
     : new Map(split.factors.map((p): [bigint, number] => [p, 1]));
   for (const [p, e] of exponents) {
     if (e > 1) scale *= p ** BigInt(e >> 1);
-    if (e & 1) out = mulEl(out, generatorEl(f.base.child(integerGen(f, p, split.complete))));
+    if (e & 1) out = mulEl(out, rootOf(integerGen(f, p, split.complete)));
   }
   return scaleEl(out, Z.small(scale));
 }
@@ -92,9 +94,8 @@ function refine(f: Field, factors: readonly bigint[]): Map<bigint, number> {
 export function sqrtReal(x: El): El {
   const f = x.t.field;
   if (isZeroEl(x)) return x;
-  let cache = f.caches.get('sqrt') as Map<string, El> | undefined;
-  if (cache === undefined) f.caches.set('sqrt', (cache = new Map()));
-  const key = keyOf(x);
+  const cache = f.rootCache;
+  const key = x.t.k === 0 && x.den === 1 ? numerator(x) : keyOf(x);
   let r = cache.get(key);
   if (r === undefined) {
     r = positive(findRoot(x));
@@ -127,7 +128,7 @@ function findRoot(x: El): El {
   const f = x.t.field;
   f.budget.charge(100);
   if (isRationalEl(x)) {
-    const n = BigInt(Z.mul(numerator(x), x.den));
+    const n = Z.mul(numerator(x), x.den);
     return scaleEl(rootOfInteger(f, n), 1, x.den);
   }
   const { scale, y } = pullOut(x);
@@ -150,8 +151,7 @@ function rootOfIntegral(y: El): El {
  */
 function denest(y: El, depth: number): El | null {
   const { low, high } = splitTop(y);
-  const top = y.t.top as Gen;
-  const norm = subEl(mulEl(low, low), mulEl(mulEl(high, high), top.rad));
+  const norm = normOf(y);
   if (signEl(norm) <= 0) return null;
   const n = shallowRoot(norm, y.t.parent as Tower, depth - 1);
   if (n === null) return null;
@@ -159,10 +159,16 @@ function denest(y: El, depth: number): El | null {
     if (signEl(half) <= 0) continue;
     const h = shallowRoot(half, half.t, depth);
     if (h === null) continue;
-    const s = generatorEl(y.t);
+    const s = rootOfTop(y.t);
     return addEl(h, mulEl(scaleEl(mulEl(high, s), 1, 2), inverseEl(h)));
   }
   return null;
+}
+
+/** a² − d·b² for y = a + b·s with the top generator s. */
+export function normOf(y: El): El {
+  const { low, high } = splitTop(y);
+  return subEl(mulEl(low, low), mulEl(mulEl(high, high), (y.t.top as Gen).rad));
 }
 
 /** A root of x > 0 that lies in the field of t, or whose nesting is at most `depth`; or null. */
@@ -178,11 +184,11 @@ function shallowRoot(x: El, t: Tower, depth: number): El | null {
 
 /** √(√m · z²·r) = ⁴√m · z·√r: the fourth-root form of Borodin, Fagin, Hopcroft and Tompa, over at most three roots of integers. */
 function byFourthRoot(y: El): El | null {
-  if (!y.t.flat || y.t.k > 3) return null;
-  const f = y.t.field;
+  if (!y.t.flat || y.t.k > 3 || isMonomial(y)) return null;
+  // Over one root √m the norm of y·√m is −m times that of y: it must not be negative.
+  if (y.t.k === 1 && signEl(normOf(y)) > 0) return null;
   for (let mask = 1; mask < 1 << y.t.k; mask++) {
-    const root = mulEl(integerEl(f, 1), monomial(y.t, mask));
-    if (isMonomial(y)) return null;
+    const root = monomial(y.t, mask);
     const other = mulEl(y, root);
     const r = rootInField(other, other.t) ?? denest(other, 1);
     if (r !== null) return mulEl(r, inverseEl(sqrtReal(root)));
@@ -197,19 +203,19 @@ function isMonomial(y: El): boolean {
 function monomial(t: Tower, mask: number): El {
   let out = integerEl(t.field, 1);
   for (let i = 0; i < t.k; i++) {
-    if ((mask >> i) & 1) out = mulEl(out, generatorEl(t.field.base.child(t.gens[i] as Gen)));
+    if ((mask >> i) & 1) out = mulEl(out, rootOf(t.gens[i] as Gen));
   }
   return out;
 }
 
 interface ClassEntry {
   gen: Gen;
-  bits: number;
-  known: number;
+  /** Its characters; worked out when the first comparison asks. */
+  seen: { bits: number; known: number } | null;
 }
 
 /** How many characters are kept with each nested generator to recognise its square class. */
-const CLASS_CHARACTERS = 24;
+const CLASS_CHARACTERS = 14;
 
 /** √y from a generator of the same square class over the same tower, or as a new generator. */
 function classRoot(y: El): El {
@@ -217,15 +223,17 @@ function classRoot(y: El): El {
   const f = t.field;
   let classes = f.caches.get(`classes/${t.id}`) as ClassEntry[] | undefined;
   if (classes === undefined) f.caches.set(`classes/${t.id}`, (classes = []));
-  const mine = characters(y, t, CLASS_CHARACTERS);
+  const mine = classes.length === 0 ? null : characters(y, t, CLASS_CHARACTERS);
   for (const e of classes) {
-    if ((e.bits ^ mine.bits) & e.known & mine.known) continue;
+    e.seen ??= characters(e.gen.rad, t, CLASS_CHARACTERS);
+    if (mine === null) break;
+    if ((e.seen.bits ^ mine.bits) & e.seen.known & mine.known) continue;
     const r = rootInField(mulEl(y, e.gen.rad), t);
-    if (r !== null) return mulEl(mulEl(r, inverseEl(e.gen.rad)), generatorEl(t.child(e.gen)));
+    if (r !== null) return mulEl(mulEl(r, inverseEl(e.gen.rad)), rootOf(e.gen));
   }
   f.budget.within('nesting', t.depth + 1);
   f.budget.within('towerHeight', t.nested + 1);
   const gen = f.addGen(t.depth + 1, 0, y);
-  classes.push({ gen, ...mine });
-  return generatorEl(t.child(gen));
+  classes.push({ gen, seen: mine });
+  return rootOf(gen);
 }

@@ -19,6 +19,7 @@ import {
   mulEl,
   numerator,
   rationalEl,
+  rootOf,
   rootOfTop,
   scaleEl,
   splitTop,
@@ -43,7 +44,7 @@ export function rootInField(x: El, t: Tower): El | null {
     const r = rootInField(x, below);
     if (r !== null) return r;
     const q = rootInField(mulEl(x, top.rad), below);
-    return q === null ? null : mulEl(mulEl(q, inverseEl(top.rad)), generatorEl(t));
+    return q === null ? null : mulEl(mulEl(q, inverseEl(top.rad)), rootOfTop(t));
   }
   const { low, high } = splitTop(x);
   const norm = subEl(mulEl(low, low), mulEl(mulEl(high, high), top.rad));
@@ -53,14 +54,9 @@ export function rootInField(x: El, t: Tower): El | null {
     const u = rootInField(half, below);
     if (u === null || isZeroEl(u)) continue;
     const v = mulEl(scaleEl(high, 1, 2), inverseEl(u));
-    return addEl(u, mulEl(v, generatorEl(t)));
+    return addEl(u, mulEl(v, rootOfTop(t)));
   }
   return null;
-}
-
-/** The top generator of t as an element of the smallest tower that has it. */
-export function generatorEl(t: Tower): El {
-  return rootOfTop(t);
 }
 
 /** Root of a rational in the multiquadratic part of t: strip the radicands that divide it an odd number of times, then an integer root decides. */
@@ -81,7 +77,7 @@ function rationalRoot(x: El, t: Tower): El | null {
       if (!odd) scale *= q;
     }
     if (!odd) continue;
-    const e = generatorEl(t.field.base.child(g));
+    const e = rootOf(g);
     root = root === null ? e : mulEl(root, e);
   }
   const r = exactRoot(v);

@@ -33,12 +33,20 @@ export interface Gen {
   readonly rad: El;
   /** Set when a later gcd has split the integer: the root is the product of the roots of these. */
   parts: bigint[] | null;
+  /** The root as an element of the tower that it needs; made on first use. */
+  el: El | null;
 }
 
 /** How elements of one tower are written in another: by moving positions, or (rarely) by replacing generators. */
 export interface Placing {
   positions: readonly number[] | null;
   images: readonly El[] | null;
+}
+
+/** A part of a tower, and the positions of its generators in the whole. */
+export interface Subset {
+  t: Tower;
+  kept: number[];
 }
 
 /** Largest number of generators for which all coordinates may be listed. */
@@ -56,7 +64,9 @@ export class Tower {
   readonly children = new Map<number, Tower>();
   private positionOf: Map<number, number> | null = null;
   private supports: bigint[] | null = null;
-  private subsets: Map<bigint, { t: Tower; kept: number[] }> | null = null;
+  private smallSupports: number[] | null = null;
+  private subsets: Map<bigint, Subset> | null = null;
+  private smallSubsets: Map<number, Subset> | null = null;
   private products: Int[] | null = null;
   private spreads: Map<number, Int32Array> | null = null;
   /** Filled in by the modules that own them. */
@@ -120,8 +130,28 @@ export class Tower {
     return out;
   }
 
+  /** `closure` for dense coordinates (at most 30 generators). */
+  smallClosure(mask: number): number {
+    if (this.flat) return mask;
+    this.smallSupports ??= this.gens.map((g, i) => (g.int === 0 ? Number(this.support(i)) : 0));
+    let out = mask;
+    for (let i = this.k - 1; i >= 0; i--) if ((out >> i) & 1) out |= this.smallSupports[i] as number;
+    return out;
+  }
+
+  /** `subset` for dense coordinates. */
+  smallSubset(mask: number): Subset {
+    this.smallSubsets ??= new Map();
+    let s = this.smallSubsets.get(mask);
+    if (s === undefined) {
+      s = this.subset(BigInt(mask));
+      this.smallSubsets.set(mask, s);
+    }
+    return s;
+  }
+
   /** The tower of the generators in a closed mask, and their positions here. */
-  subset(mask: bigint): { t: Tower; kept: number[] } {
+  subset(mask: bigint): Subset {
     this.subsets ??= new Map();
     let s = this.subsets.get(mask);
     if (s === undefined) {
@@ -181,6 +211,7 @@ export class Tower {
 export class Field {
   nextTower = 1;
   readonly base: Tower;
+  readonly zero: El;
   readonly gens: Gen[] = [];
   /** Roots of integers by their radicand. */
   readonly integerRoots = new Map<bigint, Gen>();
@@ -188,6 +219,8 @@ export class Field {
   readonly unsplit: Gen[] = [];
   /** Nested roots by tower and radicand. */
   readonly nestedRoots = new Map<string, Gen>();
+  /** Roots found, by radicand. */
+  readonly rootCache = new Map<string | Int, El>();
   readonly caches = new Map<string, unknown>();
 
   constructor(
@@ -195,10 +228,11 @@ export class Field {
     readonly times: (a: Int, b: Int) => Int,
   ) {
     this.base = new Tower(this, null, null, 0);
+    this.zero = { t: this.base, c: [0], m: null, den: 1 };
   }
 
   addGen(depth: number, int: Int, rad: El): Gen {
-    const g: Gen = { id: this.gens.length, depth, int, rad, parts: null };
+    const g: Gen = { id: this.gens.length, depth, int, rad, parts: null, el: null };
     this.gens.push(g);
     return g;
   }
