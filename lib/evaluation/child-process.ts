@@ -12,6 +12,8 @@ export function bundlePath(): string {
 }
 
 const PAGE = 4096;
+/** Milliseconds of a clock tick in which Linux counts processor time. */
+const TICK = 10;
 
 /** How a child ended: by us, by running out of heap, by the system's limit on processor time, or otherwise. */
 export type Ending = 'stopped' | 'memory' | 'processor-time' | 'crash';
@@ -93,6 +95,18 @@ export class EvaluationChild {
     try {
       const [, pages = ''] = readFileSync(`/proc/${this.child.pid ?? 0}/statm`, 'utf8').split(' ');
       return (Number(pages) * PAGE) / 2 ** 20;
+    } catch {
+      return null;
+    }
+  }
+
+  /** Milliseconds of processor time that the child has had; null where the system does not tell. */
+  processorMilliseconds(): number | null {
+    try {
+      const stat = readFileSync(`/proc/${this.child.pid ?? 0}/stat`, 'utf8');
+      // The name of the program, in brackets, may hold spaces; user and system time are fields 14 and 15.
+      const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ');
+      return (Number(fields[11]) + Number(fields[12])) * TICK;
     } catch {
       return null;
     }

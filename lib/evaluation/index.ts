@@ -1,7 +1,15 @@
 import { createHash } from 'node:crypto';
 import { readFile } from 'node:fs/promises';
 import { ENGINE_VERSION } from '@/lib/engine/index';
-import { type CellResults, type Result, DEFAULT_SETTINGS, keyOf } from '@/lib/language/index';
+import {
+  type CellResults,
+  type LinePlace,
+  type Result,
+  DEFAULT_SETTINGS,
+  keyOf,
+  markOfLine,
+} from '@/lib/language/index';
+import type { Refusal } from './messages';
 import { type AnswerStore, MemoryStore, keyOfAnswer, layered } from './cache';
 import { bundlePath } from './child-process';
 import { EVALUATION_LIMITS } from './limits';
@@ -95,34 +103,40 @@ function programIdentity(): Promise<string> {
 }
 
 function resultOf(source: string, finished: Finished): Result {
-  return (
-    finished.expression ?? finished.results.get(keyOf({ cell: 0, line: 1 })) ?? outOfTime(1, source)
-  );
+  return finished.expression ?? lineResult(finished, { cell: 0, line: 1 }, source);
 }
 
 /** Results of each cell in order of its lines; a line that was not come to is answered all the same. */
 function assemble(cells: NonNullable<EvaluateRequest['cells']>, finished: Finished): CellResults[] {
   return cells.map(({ id, source }, cell) => ({
     id,
-    results: source.split(/\r\n|\n|\r/).flatMap((text, index) => {
-      const line = index + 1;
-      const result = finished.results.get(keyOf({ cell, line }));
-      if (result !== undefined) return [result];
-      return isBlank(text) ? [] : [outOfTime(line, text)];
-    }),
+    results: source
+      .split(/\r\n|\n|\r/)
+      .flatMap((text, index) =>
+        isBlank(text) ? [] : [lineResult(finished, { cell, line: index + 1 }, text)],
+      ),
   }));
 }
 
 const isBlank = (line: string): boolean => /^[ \t\u00a0\u2009\u202f]*(#|$)/.test(line);
 
-function outOfTime(line: number, source: string): Result {
-  const message = `The time of the whole request, ${EVALUATION_LIMITS.requestTime} milliseconds, was used up before this line had an answer.`;
+function lineResult(finished: Finished, place: LinePlace, source: string): Result {
+  const key = keyOf(place);
+  const result = finished.results.get(key);
+  if (result !== undefined) return result;
+  const { code, message } = finished.refused.get(key) ?? OUT_OF_TIME;
+  const error = { code, message, from: 0, to: source.length };
   return {
-    line,
+    line: place.line,
     source,
-    mark: null,
+    mark: markOfLine(source),
     kind: 'error',
     typeset: null,
-    error: { code: 'limit-time', message, from: 0, to: source.length },
+    error,
   };
 }
+
+const OUT_OF_TIME: Refusal = {
+  code: 'limit-time',
+  message: `The time of the whole request, ${EVALUATION_LIMITS.requestTime} milliseconds, was used up before this line had an answer.`,
+};

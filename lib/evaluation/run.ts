@@ -10,6 +10,8 @@ export type Work = Pick<Job, 'expression' | 'cells' | 'settings'>;
 export interface Finished {
   /** Results by `keyOf` their place. */
   readonly results: ReadonlyMap<string, Result>;
+  /** Why lines were stopped, by `keyOf` their place; those with a result have it from there. */
+  readonly refused: ReadonlyMap<string, Refusal>;
   /** The result of an expression. */
   readonly expression: Result | null;
   /** Whether time or memory stopped a line; such answers may come out otherwise another time. */
@@ -51,7 +53,8 @@ class Progress {
 
   finished(expression: Result | null, complete: boolean): Finished {
     const stopped = !complete || this.refused.size > 0 || this.brief.size > 0;
-    return { results: this.results, expression, stopped, faults: this.faults };
+    const { results, refused, faults } = this;
+    return { results, refused, expression, stopped, faults };
   }
 }
 
@@ -125,6 +128,9 @@ function take(report: Report, watch: Watch, results: Map<string, Result>): void 
   }
 }
 
+/** With fewer milliseconds left of the request, no line waits for a processor any longer. */
+const LEAST_WAIT = 400;
+
 /** Watches the clock and the child while a job runs, and knows which line is in hand. */
 class Watch {
   line: string | null = null;
@@ -133,6 +139,7 @@ class Watch {
   private memoryTimer: NodeJS.Timeout | undefined;
   private refuse: ((refusal: Refusal) => void) | null = null;
   private allowed = 0;
+  private spentBefore: number | null = null;
 
   constructor(
     private readonly child: EvaluationChild,
@@ -154,10 +161,33 @@ class Watch {
   begin(line: string | null, valued = false): void {
     this.line = line;
     this.valued = valued;
-    clearTimeout(this.timer);
-    const left = Math.max(0, this.end - performance.now());
+    const left = this.left();
     this.allowed = Math.ceil(line === null ? left : Math.min(this.limits.lineTime, left / 2));
-    this.timer = setTimeout(() => this.refuse?.(this.refusal('stopped')), this.allowed);
+    this.spentBefore = this.child.processorMilliseconds();
+    this.wait(this.allowed);
+  }
+
+  private left(): number {
+    return Math.max(0, this.end - performance.now());
+  }
+
+  private wait(milliseconds: number): void {
+    clearTimeout(this.timer);
+    this.timer = setTimeout(() => {
+      const missing = this.missingTime();
+      if (missing > 0) this.wait(missing);
+      else this.refuse?.(this.refusal('stopped'));
+    }, milliseconds);
+  }
+
+  /** On a busy machine a line may wait for a processor: what it has not had yet it gets, while the request lasts. */
+  private missingTime(): number {
+    const spent = this.child.processorMilliseconds();
+    if (spent === null || this.spentBefore === null) return 0;
+    const missing = this.allowed - (spent - this.spentBefore);
+    return missing < this.allowed / 4 || this.left() < LEAST_WAIT
+      ? 0
+      : Math.min(missing, this.left() / 2);
   }
 
   private refusal(ending: Ending): Refusal {

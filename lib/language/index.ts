@@ -20,5 +20,6 @@ export type {
 } from './result';
 export { DEFAULT_SETTINGS, LENGTH_UNITS, MOST_DIGITS, ROUNDINGS, readStep } from './settings';
 export type { LengthUnit, Settings } from './settings';
+export { markOfLine } from './lines';
 export type { CellSource } from './lines';
 export { typesetMark } from './typeset';

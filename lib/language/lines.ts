@@ -57,7 +57,7 @@ function readCell(source: string, cell: number): SourceLine[] {
         return [
           {
             ...common,
-            mark: markOfBrokenLine(text),
+            mark: markOfLine(text),
             statement: null,
             problem: reading.problem,
             reads: [],
@@ -72,8 +72,8 @@ function readCell(source: string, cell: number): SourceLine[] {
   });
 }
 
-/** The mark that a line means to define although it does not parse, so that its readers are told of the right thing. */
-function markOfBrokenLine(text: string): string | null {
+/** The mark that a line means to define, told without parsing it: also for one that does not parse. */
+export function markOfLine(text: string): string | null {
   const name = /^\s*(\p{L}[\p{L}\d_]*)\s*=(?!=)/u.exec(text.slice(0, 200))?.[1];
   return name === undefined || classOfWord(name) !== null ? null : name;
 }
