@@ -81,7 +81,8 @@ function contentPolicy(nonce: string): string {
     "default-src 'none'",
     // React's development build rebuilds server stacks with eval; the production build has none.
     `script-src 'self' 'nonce-${nonce}' 'strict-dynamic'${development ? " 'unsafe-eval'" : ''}`,
-    `style-src 'self' 'nonce-${nonce}'`,
+    // The development overlay writes style elements without a nonce.
+    `style-src 'self' ${development ? "'unsafe-inline'" : `'nonce-${nonce}'`}`,
     "style-src-attr 'unsafe-inline'",
     "img-src 'self' data:",
     "font-src 'self'",
