@@ -69,12 +69,10 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
   return (
     <div
       data-row
-      className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 max-sm:grid-cols-1 lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem] [break-inside:avoid]"
+      className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem] [break-inside:avoid]"
     >
-      <div className="max-sm:w-24">
-        {result && <Balloon sign={signOf(result)} faulty={faulty} />}
-      </div>
-      <div className="min-w-0 space-y-1.5">
+      <div>{result && <Balloon sign={signOf(result)} faulty={faulty} />}</div>
+      <div className="min-w-0 space-y-1.5 max-sm:col-span-2">
         {value && (
           <div
             className={`-ml-1 min-h-balloon scroll-hint overflow-x-auto overflow-y-hidden py-1 pl-1 ${sizeOf(value)} ${dim ? 'opacity-55' : ''}`}
@@ -110,7 +108,7 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
         </div>
       </div>
       {dimension && (
-        <div className="w-44 max-sm:mt-1 sm:col-start-2 lg:col-start-3 lg:row-start-1 lg:w-full">
+        <div className="w-44 max-sm:col-start-2 max-sm:row-start-1 max-sm:justify-self-end sm:col-start-2 lg:col-start-3 lg:row-start-1 lg:w-full">
           <DimensionLine {...dimension} greyed={dim} />
         </div>
       )}

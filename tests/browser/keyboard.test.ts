@@ -24,7 +24,7 @@ describe('the keyboard alone', () => {
     await page.keyboard.type('A note');
     await press('Escape');
     expect(await page.evaluate(() => document.activeElement?.textContent)).toContain('Write');
-    await page.getByText('A note').waitFor();
+    await page.getByText('A note', { exact: true }).waitFor();
 
     // Back up to the second dimension cell, before the first with it, and away; then undo twice.
     await press('ArrowUp');

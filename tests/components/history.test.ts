@@ -70,6 +70,12 @@ describe('the history of a notebook', () => {
     expect(play([write('R'), write('R=')], 5000).past).toHaveLength(2);
   });
 
+  it('takes a joined or broken line back by itself, however fast it was typed', () => {
+    const write = (source: string): Change => ({ kind: 'write', id: 'a', source });
+    const typed = play([write('R'), write('R = 1'), write('R = 1\n'), write('R = 1\ns')], 10);
+    expect(typed.past.map(({ cells }) => cells[0]?.source)).toEqual(['R = 1200 mm', 'R = 1']);
+  });
+
   it('does not join typing in two cells', () => {
     const changes: Change[] = [
       { kind: 'write', id: 'a', source: '1' },

@@ -1,4 +1,4 @@
-import { autocompletion } from '@codemirror/autocomplete';
+import { autocompletion, completionStatus } from '@codemirror/autocomplete';
 import { insertNewline, standardKeymap } from '@codemirror/commands';
 import {
   bracketMatching,
@@ -125,6 +125,9 @@ const dimensionExtensions = (marks: EditorOptions['marks']) => [
   }),
 ];
 
+/** Whether names to choose from are on the screen; then the arrows and Escape are for them. */
+const isChoosing = (view: EditorView) => completionStatus(view.state) === 'active';
+
 /** Opens a source in place. Loaded only when the first line is taken in hand. */
 export function makeEditor(options: EditorOptions): EditorHandle {
   const { kind, label, onWrite, onLeave, onJoin } = options;
@@ -150,11 +153,11 @@ export function makeEditor(options: EditorOptions): EditorHandle {
       selection: { anchor: Math.min(options.column, options.source.length) },
       extensions: [
         nonce ? EditorView.cspNonce.of(nonce) : [],
-        Prec.high(
+        Prec.highest(
           keymap.of([
-            { key: 'Escape', run: () => onLeave('here', 0) },
-            { key: 'ArrowUp', run: (view) => atEdge(view, 'before') },
-            { key: 'ArrowDown', run: (view) => atEdge(view, 'after') },
+            { key: 'Escape', run: (view) => !isChoosing(view) && onLeave('here', 0) },
+            { key: 'ArrowUp', run: (view) => !isChoosing(view) && atEdge(view, 'before') },
+            { key: 'ArrowDown', run: (view) => !isChoosing(view) && atEdge(view, 'after') },
             { key: 'Backspace', run: (view) => join(view, 'before') },
             { key: 'Delete', run: (view) => join(view, 'after') },
           ]),

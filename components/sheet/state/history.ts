@@ -49,12 +49,20 @@ export function historyReducer(history: History, action: HistoryAction): History
   }
 }
 
+/** A line broken or joined begins a new step, however fast it was typed. */
+function linesOf({ cells }: NotebookContent, id: string): number {
+  return cells.find((cell) => cell.id === id)?.source.split('\n').length ?? 0;
+}
+
 function change(history: History, made: Change, at: number): History {
   const present = applyChange(history.present, made);
   if (present === history.present) return history;
   const typing = made.kind === 'write' ? { id: made.id, at } : null;
   const goesOn =
-    typing !== null && history.typing?.id === typing.id && at - history.typing.at < PAUSE;
+    typing !== null &&
+    history.typing?.id === typing.id &&
+    at - history.typing.at < PAUSE &&
+    linesOf(history.present, typing.id) === linesOf(present, typing.id);
   const past = goesOn ? history.past : [...history.past, history.present].slice(-DEPTH);
   return { past, present, future: [], typing };
 }

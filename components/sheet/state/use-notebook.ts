@@ -106,6 +106,8 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
           { body: { base, content, ...(note.trim() ? { note: note.trim() } : {}) } },
         );
         setKept({ number: saved.number, content, savedAt: saved.savedAt, savedBy: keptBy });
+        // At once, for who leaves the page now: this text is no draft any more.
+        if (sameContent(latest.current.present, content)) dropDraft(localStorage, id);
         setKeepState({ kind: 'idle' });
         setConflict(null);
         setFound(null);
