@@ -37,11 +37,13 @@ export async function serve(root, { host, port, env, dev = false, output = 'inhe
     if (!(await waitUntil(() => !running, 10))) signalGroup(child.pid, 'SIGKILL');
     await ended;
   };
-  const answered = await waitUntil(async () => !running || (await answers(host, port)), 60);
+  // The development server compiles the first page before it answers.
+  const seconds = dev ? 600 : 120;
+  const answered = await waitUntil(async () => !running || (await answers(host, port)), seconds);
   if (!running) throw new SetupError('the application ended before it answered.');
   if (!answered) {
     await stop();
-    throw new SetupError('the application did not answer within a minute.');
+    throw new SetupError(`the application did not answer within ${seconds} s.`);
   }
   return { pid: child.pid, stop, ended };
 }
@@ -64,7 +66,7 @@ function signalGroup(pid, signal) {
 function answers(host, port) {
   const reachable = host === '0.0.0.0' || host === '::' ? '127.0.0.1' : host;
   return new Promise((resolve) => {
-    const request = get({ host: reachable, port, path: '/', timeout: 20_000 }, (response) => {
+    const request = get({ host: reachable, port, path: '/', timeout: 600_000 }, (response) => {
       response.resume();
       resolve(true);
     });
