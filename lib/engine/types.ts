@@ -87,14 +87,25 @@ export interface CertificateElement {
   terms: [number[], string][];
 }
 
-/** One root of the certificate's tower with what fixes it. */
+/** An interval low/2^bits … high/2^bits. */
+export interface CertificateEnclosure {
+  low: string;
+  high: string;
+  bits: number;
+}
+
+/**
+ * Why a radicand is no square in the field below: the prime factors of an integer radicand, or a prime and residues of
+ * the lower roots under which a nested radicand becomes a quadratic non-residue.
+ */
+export type CertificateWitness = { factors: string[] } | { prime: number; residues: number[] };
+
+/** One root of the certificate's tower, lowest first: the positive root of its radicand. */
 export interface CertificateRoot {
   name: string;
   radicand: CertificateElement;
-  /** The root lies between `low` and `high` divided by 2^`bits`; both are positive. */
-  enclosure: { low: string; high: string; bits: number };
-  /** Null for the root of a squarefree integer; otherwise a prime and the residues of the lower roots for which the radicand is not a square. */
-  witness: { prime: number; roots: number[] } | null;
+  enclosure: CertificateEnclosure;
+  witness: CertificateWitness;
 }
 
 /** See lib/engine/README.md for the format and for what its verifier checks. */
@@ -103,12 +114,10 @@ export interface Certificate {
   version: 1;
   roots: CertificateRoot[];
   value: { re: CertificateElement; im: CertificateElement };
-  minimalPolynomial: string[] | null;
   degree: number;
-  enclosure: {
-    re: { low: string; high: string; bits: number };
-    im: { low: string; high: string; bits: number };
-  };
+  /** Highest power first, primitive, leading one positive. */
+  minimalPolynomial: string[];
+  enclosure: { re: CertificateEnclosure; im: CertificateEnclosure };
 }
 
 /**
