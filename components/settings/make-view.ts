@@ -37,7 +37,7 @@ export function makeView(parent: HTMLElement, text: string, label: string) {
         theme,
         EditorState.readOnly.of(true),
         EditorView.editable.of(false),
-        EditorView.contentAttributes.of({ 'aria-label': label, role: 'document', tabindex: '0' }),
+        EditorView.contentAttributes.of({ 'aria-label': label, tabindex: '0' }),
       ],
     }),
   });

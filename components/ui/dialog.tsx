@@ -20,6 +20,8 @@ export function Dialog({ title, onClose, children, wide = false }: DialogProps) 
     const dialog = box.current;
     const before = document.activeElement;
     if (dialog && !dialog.open) dialog.showModal();
+    // Of itself the browser would choose the first button, which closes.
+    dialog?.querySelector<HTMLElement>('input, select, textarea')?.focus();
     return () => {
       if (before instanceof HTMLElement && before.isConnected) before.focus();
     };

@@ -70,7 +70,7 @@ describe('bad input on the sheet', () => {
 describe('wrong ways in', () => {
   it('a wrong password is one sentence that does not say which part was wrong', async () => {
     const nobody = await newVisitor();
-    await nobody.page.goto('/sign-in');
+    await nobody.open('/sign-in');
     for (const email of [IDA, 'nobody@ferrowick.example']) {
       await nobody.page.getByLabel('E-mail address').fill(email);
       await nobody.page.getByLabel('Password').fill('not the password');
@@ -97,7 +97,7 @@ describe('wrong ways in', () => {
 
   it('who is not signed in comes back, after signing in, to where they wanted to go', async () => {
     const ida = await newVisitor();
-    await ida.page.goto('/settings');
+    await ida.open('/settings');
     await ida.page.getByLabel('E-mail address').fill(IDA);
     await ida.page.getByLabel('Password').fill('limestone-and-lime');
     await ida.page.getByRole('button', { name: 'Sign in' }).click();
@@ -114,7 +114,7 @@ describe('nothing typed is lost', () => {
     await ida.beginNotebook('Torn off');
     await ida.write('dimension', 'R = 77 mm');
     ida.page.on('dialog', (dialog) => void dialog.accept());
-    await ida.page.reload();
+    await ida.page.reload({ waitUntil: 'networkidle' });
     await ida.page.getByText('R = 77 mm', { exact: true }).waitFor();
     await ida.page.getByText('it is on the sheet again').waitFor();
     await ida.page.getByRole('button', { name: 'Put it aside' }).click();
@@ -141,7 +141,7 @@ describe('nothing typed is lost', () => {
 
     const tam = await newVisitor();
     await tam.signIn(TAM);
-    await tam.page.goto(address);
+    await tam.open(address);
     await tam.page.getByText('R = 1 mm', { exact: true }).click();
     await tam.page.keyboard.press('End');
     await tam.page.keyboard.type(' + 20 mm');
@@ -165,7 +165,8 @@ describe('nothing typed is lost', () => {
   it('a viewer reads, and is offered nothing that writes', async () => {
     const wren = await newVisitor();
     await wren.signIn(WREN);
-    await wren.page.getByRole('table').getByRole('link').first().click();
+    await wren.page.getByRole('link', { name: 'Seventeen-light window' }).click();
+    await wren.page.waitForLoadState('networkidle');
     await wren.page.getByRole('group', { name: 'Exact value' }).first().waitFor();
     for (const name of ['Add a dimension', 'Undo', /^Keep version/]) {
       expect(await wren.page.getByRole('button', { name }).count()).toBe(0);

@@ -12,7 +12,9 @@ let paths: Record<string, string>;
 beforeAll(async () => {
   ida = await newVisitor();
   await ida.signIn(IDA);
-  const first = await ida.page.getByRole('table').getByRole('link').first().getAttribute('href');
+  const first = await ida.page
+    .getByRole('link', { name: 'Seventeen-light window' })
+    .getAttribute('href');
   const made = await ida.context.request.post(`/api${first}/links`, {
     data: { label: 'For looking at every page' },
     headers: { origin: new URL(ida.page.url()).origin },
@@ -78,7 +80,7 @@ describe.each(['light', 'dark'] as const)('in %s', (colorScheme) => {
   it('a sheet in hand and its dialogs have none either', async () => {
     const { page } = ida;
     await page.emulateMedia({ colorScheme });
-    await page.goto(String(paths.sheet));
+    await ida.open(String(paths.sheet));
     await page.locator('[data-entry]').nth(1).click();
     await ida.editor().waitFor();
     expect(await faultsOf(ida)).toEqual([]);
@@ -117,12 +119,12 @@ describe('light and dark', () => {
     const visitor = await newVisitor({ colorScheme: 'dark' });
     const { page } = visitor;
     const paper = () => page.evaluate(() => getComputedStyle(document.body).backgroundColor);
-    await page.goto('/help');
+    await visitor.open('/help');
     const dark = await paper();
     await page.getByRole('button', { name: /Light or dark/ }).click();
     const light = await paper();
     expect(light).not.toBe(dark);
-    await page.reload();
+    await page.reload({ waitUntil: 'networkidle' });
     expect(await page.locator('html').getAttribute('data-theme')).toBe('light');
     expect(await paper()).toBe(light);
     await page.getByRole('button', { name: /Light or dark/ }).click();

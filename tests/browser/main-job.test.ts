@@ -22,7 +22,7 @@ describe('the main job', () => {
   it('goes from an empty sheet to figures in the hands of a client', async () => {
     const ida = await newVisitor();
     await ida.signIn(IDA);
-    await ida.beginNotebook('Eight-light oculus');
+    const sheet = await ida.beginNotebook('Eight-light oculus');
 
     await ida.write('dimension', 'R = 1200 mm');
     await ida.page.keyboard.press('Enter');
@@ -83,7 +83,7 @@ describe('the main job', () => {
     expect(tex).toMatch(/^\\documentclass/m);
     expect(tex).toContain('\\sqrt{2}+\\sqrt{3}');
 
-    await ida.page.goto('/settings');
+    await ida.open('/settings');
     await ida.page.getByLabel('What for').fill('Saw in bay 2');
     await ida.page.getByRole('button', { name: 'Make a key' }).click();
     const key = await ida.page.getByText(/^swk_/).innerText();
@@ -101,7 +101,7 @@ describe('the main job', () => {
       `${baseUrl()}/api/evaluate`,
     );
 
-    await ida.page.goBack();
+    await ida.open(sheet);
     await ida.page.getByRole('button', { name: 'Hand over' }).click();
     await ida.page.getByRole('button', { name: 'Client links' }).click();
     await ida.page.getByRole('button', { name: 'Revoke the link The architect' }).click();
@@ -124,10 +124,11 @@ describe('the main job', () => {
     await ida.keep('wider');
     await ida.page.getByText('Version 3, kept').waitFor();
 
-    await ida.page.goto(`${address}/versions`);
+    await ida.open(`${address}/versions`);
     expect(await ida.page.getByRole('row').count()).toBe(4);
     await ida.page.getByRole('link', { name: '2', exact: true }).click();
     await ida.page.getByText('Superseded').waitFor();
+    await ida.page.waitForLoadState('networkidle');
     expect(await ida.page.getByText('R = 100 mm', { exact: true }).count()).toBe(1);
     await ida.page.getByRole('button', { name: 'Keep version 2 again' }).click();
     await ida.page.getByRole('dialog').getByRole('button', { name: 'Keep as version 4' }).click();

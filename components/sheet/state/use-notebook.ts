@@ -92,9 +92,11 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
     return () => {
       window.removeEventListener('beforeunload', leave);
       window.removeEventListener('pagehide', hide);
-      hide();
     };
   }, [dirty, writeDraft]);
+
+  // Going to another page of ours takes the sheet off the screen without the browser leaving.
+  useEffect(() => (readOnly ? undefined : writeDraft), [readOnly, writeDraft]);
 
   /** Asks the server to keep `content` on top of version `base`; a moved head becomes a conflict. */
   const keep = useCallback(

@@ -66,17 +66,23 @@ export class Visitor {
 
   async signIn(email: string, password = DEMO_PASSWORD): Promise<void> {
     const { page } = this;
-    await page.goto('/sign-in');
+    await this.open('/sign-in');
     await page.getByLabel('E-mail address').fill(email);
     await page.getByLabel('Password').fill(password);
     await page.getByRole('button', { name: 'Sign in' }).click();
     await page.waitForURL('**/notebooks');
   }
 
+  /** Goes to a page and waits until it can be used, not only seen. */
+  async open(path: string): Promise<void> {
+    await this.page.goto(path);
+    await this.page.waitForLoadState('networkidle');
+  }
+
   /** Begins a notebook by the page and leaves its empty sheet on the screen; gives its address. */
   async beginNotebook(title: string): Promise<string> {
     const { page } = this;
-    await page.goto('/notebooks');
+    await this.open('/notebooks');
     await page.getByRole('button', { name: 'New notebook' }).click();
     await page.getByRole('dialog').getByLabel('Title').fill(title);
     await page.getByRole('dialog').getByRole('button', { name: 'Begin' }).click();
