@@ -96,7 +96,11 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
   }, [dirty, writeDraft]);
 
   // Going to another page of ours takes the sheet off the screen without the browser leaving.
-  useEffect(() => (readOnly ? undefined : writeDraft), [readOnly, writeDraft]);
+  // Only what is unkept is written then: a draft not read yet must not be dropped.
+  const leaveSheet = useCallback(() => {
+    if (latest.current.dirty) writeDraft();
+  }, [writeDraft]);
+  useEffect(() => leaveSheet, [leaveSheet]);
 
   /** Asks the server to keep `content` on top of version `base`; a moved head becomes a conflict. */
   const keep = useCallback(
