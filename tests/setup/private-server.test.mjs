@@ -19,7 +19,11 @@ beforeAll(() => {
   folder = join(base, 'd'.repeat(90));
   makeDataFolder(folder);
 });
-afterAll(() => rmSync(base, { recursive: true, force: true }));
+afterAll(async () => {
+  // Also what a failed test left running.
+  await new PrivateServer(folder).stop();
+  rmSync(base, { recursive: true, force: true });
+});
 
 const pidOf = (server) => Number(readFileSync(server.pidFile, 'utf8'));
 
