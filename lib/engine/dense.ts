@@ -161,7 +161,9 @@ function mulFlat(t: Tower, a: readonly Int[], b: readonly Int[]): Int[] {
       work++;
     }
   }
-  t.field.budget.charge(n + work * (1 + (wa * wb) / 16));
+  // Products of long integers cost about w^1.58 (Karatsuba) word products, a sixteenth of a step each.
+  const w = Math.sqrt(wa * wb);
+  t.field.budget.charge(n + work * (1 + (w > 2 ? w ** 1.58 / 16 : 0)));
   return out;
 }
 

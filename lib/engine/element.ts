@@ -152,7 +152,7 @@ export function place(a: El, target: Tower, how: Placing): El {
     return place(b, target, { positions, images: null });
   }
   const positions = how.positions as readonly number[];
-  if (a.m === null && target.k <= DENSE_MAX) {
+  if (a.m === null && (target.k <= DENSE_ALWAYS || (target.k <= DENSE_MAX && a.c.length * 8 >= 1 << target.k))) {
     const s = a.t.spread(target, positions);
     const c = zeros(1 << target.k);
     for (let i = 0; i < s.length; i++) c[s[i] as number] = a.c[i] as Int;
@@ -355,7 +355,7 @@ export function rootOfTop(t: Tower): El {
 export function rootOf(g: Gen): El {
   if (g.el === null) {
     const t = g.int !== 0 ? g.rad.t.field.base.child(g) : g.rad.t.child(g);
-    g.el = finishSparse(t, new Map([[1n << BigInt(t.k - 1), 1 as Int]]), 1);
+    g.el = finishSparse(t, new Map([[1n << BigInt(t.k - 1), 1]]), 1);
   }
   return g.el;
 }

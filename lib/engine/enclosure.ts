@@ -45,7 +45,7 @@ function cacheOf(f: Field): Map<number, Map<number, Enclosure>> {
 export function encloseRoot(f: Field, g: Gen, P: number): Enclosure {
   const cache = cacheOf(f);
   let byPrecision = cache.get(g.id);
-  if (byPrecision === undefined) cache.set(g.id, (byPrecision = new Map()));
+  if (byPrecision === undefined) cache.set(g.id, (byPrecision = new Map<number, Enclosure>()));
   let e = byPrecision.get(P);
   if (e === undefined) {
     f.budget.charge(20 + cost(P));

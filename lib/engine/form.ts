@@ -50,7 +50,7 @@ export function splitDeepest(x: El): { low: El; parts: El[] } {
   (s.m as readonly bigint[]).forEach((m, j) => {
     const key = m & mask;
     let group = groups.get(key);
-    if (group === undefined) groups.set(key, (group = new Map()));
+    if (group === undefined) groups.set(key, (group = new Map<bigint, Int>()));
     group.set(m, s.c[j] as Int);
   });
   const low = finishSparse(t, groups.get(0n) ?? new Map<bigint, Int>(), x.den);

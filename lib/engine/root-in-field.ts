@@ -82,6 +82,6 @@ function rationalRoot(x: El, t: Tower): El | null {
   }
   const r = exactRoot(v);
   if (r === null) return null;
-  const size = rationalEl(t.field, Z.small(r * scale), x.den as Int);
+  const size = rationalEl(t.field, Z.small(r * scale), x.den);
   return root === null ? size : mulEl(size, root);
 }

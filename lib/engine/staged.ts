@@ -1,14 +1,47 @@
 /** Chains of named quadratics: each root of the tower gets a name, and the rest is written with the names. */
 
 import { isZeroEl, toSparse } from './element';
-import { formOf } from './form';
+import { formOf, type Sum } from './form';
 import type { Presented } from './presentation';
-import { texOf, textOf } from './text';
+import { namedTex, namedText, texName, texOf, textOf } from './text';
 import type { El, Gen, Tower } from './tower';
 import type { TowerStep, Written } from './types';
 
 /** Radicands up to this many characters are written out in full. */
 const SHORT = 120;
+
+/**
+ * An expression with each different root named, inner ones first. Like the expression itself it does not depend on how the value
+ * came about.
+ */
+export function stagedExpression(s: Sum): Written {
+  const names = new Map<string, string>();
+  const lines: string[] = [];
+  const texLines: string[] = [];
+  const visit = (u: Sum): void => {
+    for (const t of u.terms) {
+      for (const r of t.roots) {
+        const key = textOf(r);
+        if (names.has(key)) continue;
+        visit(r);
+        const name = `r${names.size + 1}`;
+        lines.push(`${name} = sqrt(${namedText(r, names)})`);
+        texLines.push(`${texName(name)}=\\sqrt{${namedTex(r, names)}}`);
+        names.set(key, name);
+      }
+    }
+  };
+  visit(s);
+  return {
+    text: [...lines, namedText(s, names)].join('; '),
+    tex: gathered([...texLines, namedTex(s, names)]),
+    staged: true,
+  };
+}
+
+function gathered(lines: readonly string[]): string {
+  return `\\begin{gathered}${lines.join('\\\\')}\\end{gathered}`;
+}
 
 /** `r1 = sqrt(…); r2 = sqrt(…); …; value`, which parses back as definitions followed by an expression. */
 export function stagedValue(x: Presented): Written {
@@ -24,10 +57,10 @@ export function stagedValue(x: Presented): Written {
   const valueTex = isZeroEl(x.im) ? reTex : isZeroEl(x.re) ? `i\\left(${imTex}\\right)` : `${reTex}+i\\left(${imTex}\\right)`;
   return {
     text: [...steps.slice(first).map((s) => `${s.name} = sqrt(${s.radicand})`), value].join('; '),
-    tex: `\\begin{gathered}${[
+    tex: gathered([
       ...steps.slice(first).map((s) => `${texName(s.name)}=\\sqrt{${s.tex}}`),
       valueTex,
-    ].join('\\\\')}\\end{gathered}`,
+    ]),
     staged: true,
   };
 }
@@ -55,10 +88,6 @@ function shortForm(g: Gen): { text: string; tex: string } | null {
   return text.length <= SHORT ? { text, tex: texOf(s) } : null;
 }
 
-function texName(name: string): string {
-  return `r_{${name.slice(1)}}`;
-}
-
 /** An element as a polynomial in the names of the generators. */
 function polynomial(e: El, t: Tower, names: readonly string[], tex = false): string {
   if (isZeroEl(e)) return '0';
@@ -72,7 +101,7 @@ function polynomial(e: El, t: Tower, names: readonly string[], tex = false): str
     for (let i = 0, rest = m; rest !== 0n; i++, rest >>= 1n) {
       if (!(rest & 1n)) continue;
       const name = names[t.position(s.t.gens[i] as Gen)] as string;
-      factors.push(tex ? texName(name) : name);
+      factors.push(tex ? (texName(name) as string) : name);
     }
     const size = c < 0n ? -c : c;
     const parts = size === 1n && factors.length > 0 ? factors : [size.toString(), ...factors];

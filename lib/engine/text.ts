@@ -32,23 +32,39 @@ export function texOf(s: Sum): string {
   return render(s, TEX);
 }
 
-function render(s: Sum, style: Style): string {
+/** As `textOf` and `texOf`, with a name for each root: names are found by the text of the radicand. */
+export function namedText(s: Sum, names: ReadonlyMap<string, string>): string {
+  return render(s, TEXT, (r) => names.get(textOf(r)));
+}
+
+export function namedTex(s: Sum, names: ReadonlyMap<string, string>): string {
+  return render(s, TEX, (r) => texName(names.get(textOf(r))));
+}
+
+/** r12 as r with a lower index. */
+export function texName(name: string | undefined): string | undefined {
+  return name === undefined ? undefined : `r_{${name.slice(1)}}`;
+}
+
+type Naming = (radicand: Sum) => string | undefined;
+
+function render(s: Sum, style: Style, name?: Naming): string {
   if (s.terms.length === 0) return '0';
-  if (s.den === 1n) return renderTerms(s.terms, style);
+  if (s.den === 1n) return renderTerms(s.terms, style, name);
   const negative = s.terms.every((t) => t.coef < 0n);
   const terms = negative ? s.terms.map((t) => ({ ...t, coef: -t.coef })) : s.terms;
-  const body = style.quotient(renderTerms(terms, style), s.den.toString(), terms.length > 1);
+  const body = style.quotient(renderTerms(terms, style, name), s.den.toString(), terms.length > 1);
   return negative ? `-${body}` : body;
 }
 
-function renderTerms(terms: readonly Term[], style: Style): string {
+function renderTerms(terms: readonly Term[], style: Style, name?: Naming): string {
   let out = '';
   for (const t of terms) {
     const negative = t.coef < 0n;
     const size = negative ? -t.coef : t.coef;
     const factors = [
       ...(t.imaginary ? [style.i] : []),
-      ...t.roots.map((r) => style.root(render(r, style))),
+      ...t.roots.map((r) => name?.(r) ?? style.root(render(r, style, name))),
     ];
     const coef = factors.length > 0 && size === 1n ? null : size.toString();
     const body = style.product(coef, factors);

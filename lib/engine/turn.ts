@@ -118,7 +118,7 @@ class Periods {
       const first = this.value(l, j % half) > this.value(l, (j % half) + half);
       this.known.set(`${l}/${j % half}`, first ? larger : subEl(parent, larger));
       this.known.set(`${l}/${(j % half) + half}`, first ? subEl(parent, larger) : larger);
-      e = this.known.get(key) as El;
+      e = this.known.get(key);
     }
     return e;
   }

@@ -6,13 +6,14 @@
  * `r1 = sqrt(17); r2 = sqrt(34-2*r1); …`, and the value is written with the names.
  */
 
-import { isZeroEl } from './element';
+import { countTerms, isZeroEl } from './element';
+import { words } from './int';
 import { signEl } from './enclosure';
 import { addSums, digitsOf, formOf, largestOf, timesI, type Manner, type Sum } from './form';
 import type { Cx } from './minimal-polynomial';
 import { mulCx } from './complex';
 import { present } from './presentation';
-import { stagedSteps, stagedValue } from './staged';
+import { stagedExpression, stagedSteps, stagedValue } from './staged';
 import { texOf, textOf } from './text';
 import type { TowerStep, Written } from './types';
 
@@ -21,11 +22,10 @@ const TOO_WIDE = 600;
 
 export function writeValue(x: Cx): Written {
   const s = expressionOf(x);
-  const text = s === null ? null : textOf(s);
-  if (text !== null && s !== null && (text.length <= TOO_WIDE || s.depth < 2)) {
-    return { text, tex: texOf(s), staged: false };
-  }
-  return stagedValue(present(x));
+  if (s === null) return stagedValue(present(x));
+  const text = textOf(s);
+  if (text.length <= TOO_WIDE || s.depth < 2) return { text, tex: texOf(s), staged: false };
+  return stagedExpression(s);
 }
 
 /** The expression chosen for x, or null when none is worth making. */
@@ -56,9 +56,13 @@ function bothParts(x: Cx, manner: Manner): Sum {
     : addSums([formOf(x.re, manner), timesI(formOf(x.im, manner))]);
 }
 
-/** Coordinates beyond which squares of parts are not worth working out for reading. */
+/** Towers and coordinates beyond which squares of parts are not worth working out for reading: then the tower itself is shown. */
 function tooLarge(x: Cx): boolean {
-  return [x.re, x.im].some((e) => e.t.depth > 1 && (e.t.k > 6 || e.c.some((c) => (c < 0 ? -c : c) > 1e60)));
+  return [x.re, x.im].some(
+    (e) =>
+      e.t.depth > 1 &&
+      (e.t.k > 10 || countTerms(e) > 48 || e.c.some((c) => typeof c === 'bigint' && words(c) > 10)),
+  );
 }
 
 function costlier(a: Sum, b: Sum): boolean {

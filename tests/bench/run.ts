@@ -72,11 +72,11 @@ function figure(ms: number | null): string {
 
 function row(cells: readonly string[]): void {
   const widths = [5, 42, 9, 12, 12, 12, 12, 8];
-  console.log(cells.map((c, i) => (i < 2 ? c.padEnd(widths[i] as number) : c.padStart(widths[i] as number))).join(' '));
+  process.stdout.write(cells.map((c, i) => (i < 2 ? c.padEnd(widths[i] as number) : c.padStart(widths[i] as number))).join(' ') + '\n');
 }
 
 function growth(): void {
-  console.log('\nCost by degree: x = √2 + √(2+√2) + …, warm median in ms');
+  process.stdout.write('\nCost by degree: x = √2 + √(2+√2) + …, warm median in ms\n');
   row(['deg', '', 'multiply', 'invert', 'sqrt(x²)', 'polynomial', 'certificate']);
   for (let k = 1; k <= 8; k++) {
     const e = createEngine({ steps: Number.MAX_SAFE_INTEGER });

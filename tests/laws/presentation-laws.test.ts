@@ -94,13 +94,13 @@ describe('order and decimals', () => {
         const y = approximate(t);
         fc.pre(x !== null && y !== null);
         law([s, t], (e, a, b) => {
-          const d = (x as Decimal).sub(y as Decimal);
+          const d = (x).sub(y);
           if (d.abs().gt('1e-150')) expect(e.compare(a, b)).toBe(d.isNegative() ? -1 : 1);
           else expect(e.compare(a, b)).toBe(0);
-          if ((x as Decimal).abs().gt('1e-100')) {
+          if ((x).abs().gt('1e-100')) {
             const digits = e.decimal(a, 40).re;
-            expect(new Decimal(digits).eq((x as Decimal).toSignificantDigits(40, Decimal.ROUND_HALF_EVEN))).toBe(true);
-            expect(e.floor(a)).toBe(BigInt((x as Decimal).floor().toFixed(0)));
+            expect(new Decimal(digits).eq((x).toSignificantDigits(40, Decimal.ROUND_HALF_EVEN))).toBe(true);
+            expect(e.floor(a)).toBe(BigInt((x).floor().toFixed(0)));
           }
         });
       }),
