@@ -9,7 +9,6 @@
  */
 
 import { readFileSync } from 'node:fs';
-import { argv, exit, stdout } from 'node:process';
 import { pathToFileURL } from 'node:url';
 
 class Refused extends Error {}
@@ -270,6 +269,7 @@ function check(c) {
   checkPolynomial(c.minimalPolynomial.map((s) => integer(s, 'a coefficient')), matrixOf(roots, re, im));
 }
 
+const { argv, stdout } = process;
 if (argv[1] && import.meta.url === pathToFileURL(argv[1]).href) {
   let reason;
   try {
@@ -278,5 +278,5 @@ if (argv[1] && import.meta.url === pathToFileURL(argv[1]).href) {
     reason = `there is no JSON to read (${error.message})`;
   }
   stdout.write(reason === null ? 'accepted\n' : `refused: ${reason}\n`);
-  exit(reason === null ? 0 : 1);
+  process.exitCode = reason === null ? 0 : 1;
 }

@@ -284,7 +284,7 @@ function mulSparse(t: Tower, a: El, b: El): Map<bigint, Int> {
         if (bits & 1n) v = Z.mul(v, (t.gens[s] as { int: Int }).int);
       }
       let table = byShared.get(shared);
-      if (table === undefined) byShared.set(shared, (table = new Map()));
+      if (table === undefined) byShared.set(shared, (table = new Map<bigint, Int>()));
       table.set(rest, Z.add(table.get(rest) ?? 0, v));
     }
   }

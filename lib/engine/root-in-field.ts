@@ -10,7 +10,6 @@
  */
 
 import * as Z from './int';
-import type { Int } from './int';
 import { exactRoot } from './integers';
 import {
   addEl,

@@ -119,6 +119,7 @@ class Periods {
       this.known.set(`${l}/${j % half}`, first ? larger : subEl(parent, larger));
       this.known.set(`${l}/${(j % half) + half}`, first ? subEl(parent, larger) : larger);
       e = this.known.get(key);
+      if (e === undefined) throw new Error('a period was not made');
     }
     return e;
   }
