@@ -11,6 +11,7 @@ const SERVICES = ['lib/accounts', 'lib/notebooks', 'lib/exports'];
 const MAY_IMPORT: Record<string, string[]> = {
   'lib/engine': [],
   'lib/certificate-check': [],
+  'lib/divisions': ['lib/engine'],
   'lib/language': ['lib/engine'],
   'lib/env': [],
   'lib/access': [],
@@ -20,8 +21,17 @@ const MAY_IMPORT: Record<string, string[]> = {
   'lib/notebooks': ['lib/access', 'lib/env', 'db', 'lib/evaluation', 'lib/accounts'],
   'lib/exports': ['lib/access', 'lib/env', 'db', 'lib/evaluation', 'lib/accounts', 'lib/notebooks'],
   'lib/http': ['lib/access', 'lib/env', 'lib/evaluation', ...SERVICES],
-  components: ['lib/engine', 'lib/language', 'lib/access', 'lib/notebooks'],
-  app: ['lib/access', 'lib/env', 'lib/evaluation', 'lib/http', 'components', 'fonts', ...SERVICES],
+  components: ['lib/engine', 'lib/divisions', 'lib/language', 'lib/access', 'lib/notebooks'],
+  app: [
+    'lib/access',
+    'lib/env',
+    'lib/divisions',
+    'lib/evaluation',
+    'lib/http',
+    'components',
+    'fonts',
+    ...SERVICES,
+  ],
   proxy: ['lib/access', 'lib/env', 'lib/http', ...SERVICES],
   // Run by the set-up, outside the application: it fills the database through what lies above it.
   'db/seeds': ['db', 'lib/access', 'lib/env', ...SERVICES],
