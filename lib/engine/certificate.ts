@@ -3,7 +3,8 @@
 import { isZeroEl, toSparse } from './element';
 import { isqrt, splitSquare } from './integers';
 import { OverLimit } from './limits';
-import { minimalPolynomialOf, type Cx } from './minimal-polynomial';
+import type { Cx } from './complex';
+import { minimalPolynomialOf } from './minimal-polynomial';
 import { present } from './presentation';
 import { character, homOf } from './residues';
 import type { El, Gen, Tower } from './tower';

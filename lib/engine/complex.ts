@@ -7,19 +7,24 @@
 
 import { addEl, equalEl, integerEl, inverseEl, isRationalEl, isZeroEl, mulEl, negEl, scaleEl, subEl } from './element';
 import { signEl } from './enclosure';
-import type { Cx } from './minimal-polynomial';
 import { OutsideDomain } from './limits';
 import { sqrtReal } from './real-root';
-import type { Field } from './tower';
+import type { El, Field } from './tower';
 import * as Z from './int';
 import { bitLength } from './integers';
 
-export function real(re: Cx['re']): Cx {
+/** A complex number by its real and imaginary parts. */
+export interface Cx {
+  readonly re: El;
+  readonly im: El;
+}
+
+export function real(re: El): Cx {
   return { re, im: re.t.field.zero };
 }
 
 export function isRealCx(a: Cx): boolean {
-  return a.im === a.re.t.field.zero || isZeroEl(a.im);
+  return isZeroEl(a.im);
 }
 
 export function isZeroCx(a: Cx): boolean {
@@ -76,7 +81,7 @@ export function sqrtCx(a: Cx): Cx {
   return { re, im: mulEl(scaleEl(a.im, 1, 2), inverseEl(re)) };
 }
 
-export function absCx(a: Cx): Cx['re'] {
+export function absCx(a: Cx): El {
   if (isRealCx(a)) return signEl(a.re) < 0 ? negEl(a.re) : a.re;
   if (isZeroEl(a.re)) return signEl(a.im) < 0 ? negEl(a.im) : a.im;
   return sqrtReal(addEl(mulEl(a.re, a.re), mulEl(a.im, a.im)));

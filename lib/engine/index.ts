@@ -1,17 +1,17 @@
 /** The exact engine: one object for one request. See README.md in this folder. */
 
-import { addCx, absCx, conjCx, equalCx, inverseCx, isRealCx, isZeroCx, mulCx, negCx, powCx, real, sqrtCx, subCx } from './complex';
+import { addCx, absCx, conjCx, equalCx, inverseCx, isRealCx, isZeroCx, mulCx, negCx, powCx, real, sqrtCx, subCx, type Cx } from './complex';
 import { decimalOf } from './decimal';
 import { integerEl, isRationalEl, numerator, rationalEl, scaleEl, subEl } from './element';
 import { floorEl, signEl } from './enclosure';
 import * as Z from './int';
 import { bitLength } from './integers';
 import { Budget, DEFAULT_LIMITS, OutsideDomain, OverLimit } from './limits';
-import { degreeOf, minimalPolynomialOf, type Cx } from './minimal-polynomial';
+import { degreeOf, minimalPolynomialOf } from './minimal-polynomial';
 import { certificateOf } from './certificate';
 import { roundTo } from './rounding';
 import { Field, type El } from './tower';
-import { cosineOf, sineOf } from './turn';
+import { Cosine, cosineOf, sineOf } from './turn';
 import type { Certificate, Decimal, Engine, Limits, Multiple, Num, Outcome, Rounding, TowerStep, Written } from './types';
 import { towerOf, writeValue } from './write';
 
@@ -152,10 +152,11 @@ class ExactEngine implements Engine {
   }
 
   cosTurn(k: bigint, n: bigint): Num {
-    return this.seal(real(cosineOf(this.field, ...this.turn(k, n))));
+    return this.seal(new Cosine(this.field, ...this.turn(k, n)));
   }
   sinTurn(k: bigint, n: bigint): Num {
-    return this.seal(real(sineOf(this.field, ...this.turn(k, n))));
+    const [u, d] = this.turn(k, n);
+    return this.seal(new Cosine(this.field, 4n * u - d, 4n * d));
   }
   rootOfUnity(k: bigint, n: bigint): Num {
     const [u, d] = this.turn(k, n);
@@ -211,7 +212,7 @@ class ExactEngine implements Engine {
 
   private open(a: Num): Cx {
     const x = a as unknown as Cx;
-    if (x?.re?.t?.field !== this.field) throw new TypeError('A number of another engine was used.');
+    if (x?.im?.t?.field !== this.field) throw new TypeError('A number of another engine was used.');
     return x;
   }
 }

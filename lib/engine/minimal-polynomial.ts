@@ -16,17 +16,15 @@ import { compact, together } from './presentation';
 import { keyOf } from './real-root';
 import { addList, isZeroList, mulList, mulTop, negList, scaleList, squareList, subList, zeros } from './dense';
 import { powerRoot, squarefreeModulo } from './polynomial';
-import type { Field } from './tower';
-import type { El, Gen, Tower } from './tower';
-
-/** A complex number by its real and imaginary parts. */
-export interface Cx {
-  re: El;
-  im: El;
-}
+import { cosinePolynomial, totient } from './cosine-polynomial';
+import type { Cx } from './complex';
+import { Cosine } from './turn';
+import type { El, Field, Gen, Tower } from './tower';
 
 /** Degree over the rationals. `degree` where a nested value lies in a field above the limit. */
 export function degreeOf(x: Cx): number {
+  const parts = x instanceof Cosine ? x.parts : 0n;
+  if (parts > 2n) return Number(totient(parts) / 2n);
   const flat = rankDegree(x);
   if (flat !== null) return flat;
   return characteristic(x).minimal.length - 1;
@@ -34,6 +32,12 @@ export function degreeOf(x: Cx): number {
 
 /** Coefficients from the highest power down, primitive, leading one positive. */
 export function minimalPolynomialOf(x: Cx): bigint[] {
+  if (x instanceof Cosine && x.parts > 2n) {
+    const degree = Number(totient(x.parts) / 2n);
+    x.im.t.field.budget.within('degree', degree);
+    x.im.t.field.budget.charge(degree * degree);
+    return cosinePolynomial(x.parts);
+  }
   if (isRationalEl(x.re) && isZeroEl(x.im)) {
     return [BigInt(x.re.den), -BigInt(numerator(x.re))];
   }

@@ -13,7 +13,8 @@ import { isqrt } from './integers';
 import { addEl, finishSparse, integerEl, isZeroEl, mulEl, place, scaleEl, toSparse } from './element';
 import { formOf, type Sum } from './form';
 import { join } from './join';
-import { degreeOf, type Cx } from './minimal-polynomial';
+import type { Cx } from './complex';
+import { degreeOf } from './minimal-polynomial';
 import { sqrtReal } from './real-root';
 import { Field, type El, type Gen, type Tower } from './tower';
 

@@ -11,6 +11,7 @@
 import { addEl, integerEl, mulEl, negEl, scaleEl, subEl } from './element';
 import { sqrtReal } from './real-root';
 import { OutsideDomain } from './limits';
+import type { Cx } from './complex';
 import type { El, Field } from './tower';
 
 const FERMAT = [3n, 5n, 17n, 257n];
@@ -35,6 +36,35 @@ export function cosineOf(f: Field, k: bigint, n: bigint): El {
 /** sin(2πk/n) = cos of the complement. */
 export function sineOf(f: Field, k: bigint, n: bigint): El {
   return cosineOf(f, 4n * k - n, 4n * n);
+}
+
+/** cos(2πk/n) as a number that builds its tower only when it is asked for more than its degree and polynomial. */
+export class Cosine implements Cx {
+  private made: El | null = null;
+  readonly im: El;
+
+  /** Fails with `not-exact` at once where square roots do not reach. */
+  constructor(
+    private readonly f: Field,
+    private readonly k: bigint,
+    private readonly n: bigint,
+  ) {
+    this.im = f.zero;
+    let odd = this.parts;
+    while (odd % 2n === 0n) odd /= 2n;
+    for (const p of FERMAT) if (odd % p === 0n) odd /= p;
+    if (odd !== 1n) throw notExact(this.parts);
+  }
+
+  /** n in lowest terms. */
+  get parts(): bigint {
+    return this.n / gcd(this.k < 0n ? -this.k : this.k, this.n);
+  }
+
+  get re(): El {
+    this.made ??= cosineOf(this.f, this.k, this.n);
+    return this.made;
+  }
 }
 
 /** 0 ≤ k ≤ n/2, lowest terms. */

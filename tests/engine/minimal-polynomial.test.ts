@@ -48,6 +48,18 @@ describe('minimal polynomials', () => {
     expect(outcome).toEqual({ kind: 'value', value: { degree: 256, constant: 257n } });
   });
 
+  it.each([3, 5, 8, 12, 15, 16, 17, 20, 24, 30, 34, 51, 60, 64, 85, 96, 257])(
+    'of cos(2π/%i) is the same by cyclotomic polynomials as by norms',
+    (n) => {
+      const e = createEngine({ steps: 100_000_000 });
+      const c = e.cosTurn(1n, BigInt(n));
+      const direct = e.minimalPolynomial(c);
+      const byNorms = e.minimalPolynomial(e.sub(e.add(c, e.integer(1)), e.integer(1)));
+      expect(direct.join()).toBe(byNorms.join());
+      expect(e.degree(c)).toBe(direct.length - 1);
+    },
+  );
+
   it('take roots of powers only of powers', () => {
     expect(powerRoot([1n, 2n, 1n], 2)).toEqual([1n, 1n]);
     expect(powerRoot([1n, 2n, 2n], 2)).toBeNull();
