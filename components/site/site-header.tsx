@@ -24,6 +24,9 @@ export function SiteHeader({ who }: SiteHeaderProps) {
                 Notebooks
               </Link>
             )}
+            <Link className={LINK} href="/divide">
+              Divide a circle
+            </Link>
             <Link className={LINK} href="/help">
               How to write cells
             </Link>

@@ -1,0 +1,41 @@
+import type { ReactNode } from 'react';
+
+interface ScrollTableProps {
+  caption: string;
+  heads: readonly string[];
+  children: ReactNode;
+}
+
+/** A table that scrolls sideways in its own frame, by keyboard too, so that the page never has to. */
+export function ScrollTable({ caption, heads, children }: ScrollTableProps) {
+  return (
+    <div
+      role="region"
+      aria-label={caption}
+      tabIndex={0}
+      className="scroll-hint overflow-x-auto border border-rule"
+    >
+      <table className="w-full border-collapse text-small">
+        <caption className="sr-only">{caption}</caption>
+        <thead className="border-b-2 border-ink">
+          <tr>
+            {heads.map((head) => (
+              <th
+                key={head}
+                scope="col"
+                className="whitespace-nowrap px-3 py-1.5 text-left font-semibold"
+              >
+                {head}
+              </th>
+            ))}
+          </tr>
+        </thead>
+        <tbody>{children}</tbody>
+      </table>
+    </div>
+  );
+}
+
+export const ROW = 'border-b border-hairline last:border-b-0';
+export const CELL = 'whitespace-nowrap px-3 py-1.5 text-left align-top font-normal';
+export const FIGURES = `${CELL} font-mono tabular-nums`;
