@@ -115,6 +115,7 @@ describe('nothing typed is lost', () => {
     await ida.write('dimension', 'R = 77 mm');
     ida.page.on('dialog', (dialog) => void dialog.accept());
     await ida.page.reload({ waitUntil: 'networkidle' });
+    await ida.awaken();
     await ida.page.getByText('R = 77 mm', { exact: true }).waitFor();
     await ida.page.getByText('it is on the sheet again').waitFor();
     await ida.page.getByRole('button', { name: 'Put it aside' }).click();
@@ -167,6 +168,7 @@ describe('nothing typed is lost', () => {
     await wren.signIn(WREN);
     await wren.page.getByRole('link', { name: 'Seventeen-light window' }).click();
     await wren.page.waitForLoadState('networkidle');
+    await wren.awaken();
     await wren.page.getByRole('group', { name: 'Exact value' }).first().waitFor();
     for (const name of ['Add a dimension', 'Undo', /^Keep version/]) {
       expect(await wren.page.getByRole('button', { name }).count()).toBe(0);

@@ -125,6 +125,7 @@ describe('light and dark', () => {
     const light = await paper();
     expect(light).not.toBe(dark);
     await page.reload({ waitUntil: 'networkidle' });
+    await visitor.awaken();
     expect(await page.locator('html').getAttribute('data-theme')).toBe('light');
     expect(await paper()).toBe(light);
     await page.getByRole('button', { name: /Light or dark/ }).click();

@@ -129,6 +129,7 @@ describe('the main job', () => {
     await ida.page.getByRole('link', { name: '2', exact: true }).click();
     await ida.page.getByText('Superseded').waitFor();
     await ida.page.waitForLoadState('networkidle');
+    await ida.awaken();
     expect(await ida.page.getByText('R = 100 mm', { exact: true }).count()).toBe(1);
     await ida.page.getByRole('button', { name: 'Keep version 2 again' }).click();
     await ida.page.getByRole('dialog').getByRole('button', { name: 'Keep as version 4' }).click();

@@ -77,6 +77,15 @@ export class Visitor {
   async open(path: string): Promise<void> {
     await this.page.goto(path);
     await this.page.waitForLoadState('networkidle');
+    await this.awaken();
+  }
+
+  /** React marks an element once it listens to it; the switch at the foot is on every page. */
+  async awaken(): Promise<void> {
+    await this.page.waitForFunction(() => {
+      const switches = [...document.querySelectorAll('footer button')];
+      return switches.some((one) => Object.keys(one).some((key) => key.startsWith('__reactProps')));
+    });
   }
 
   /** Begins a notebook by the page and leaves its empty sheet on the screen; gives its address. */
