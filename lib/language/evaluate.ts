@@ -3,6 +3,7 @@ import type { Engine, Limits } from '../engine/index';
 import { attemptOrFail } from './attempt';
 import { decide } from './decide';
 import { Evaluator } from './evaluator';
+import { giveStandIn } from './functions/stand-in';
 import { type ErrorCode, Failure, type Problem, type Span, fail } from './failure';
 import { type GivenSettings, giveValue } from './give-value';
 import { LANGUAGE_LIMITS } from './limits';
@@ -209,8 +210,11 @@ class Evaluation {
       started: () => this.options.valued?.(line),
       refused: this.options.brief?.get(keyOf(line)) ?? null,
     });
+    const standIn = attemptOrFail(this.engine, () =>
+      giveStandIn(this.engine, value, this.settings),
+    );
     this.values.set(index, value);
-    return given;
+    return { ...given, ...standIn };
   }
 
   /** What is wrong with a line because of where it stands among the others. */

@@ -74,6 +74,12 @@ export const FUNCTIONS: readonly FunctionWord[] = [
   ),
   word('sagitta(R, angle)', 'From the middle of that chord to the arc: R (1 - cos(angle/2)).', 2),
   word('versine(angle)', '1 - cos(angle).'),
+  word(
+    'standin(x, tolerance, R, n)',
+    'The constructible value with the fewest strikes within the tolerance of x; R is the radius to start from (else the unit), n the parts it is stepped round.',
+    2,
+    4,
+  ),
 ];
 
 export interface UnitWord {

@@ -66,6 +66,60 @@ export interface NumberResult extends Parsed {
   reach: Reach;
   /** Parts left out because they went over a limit; the value itself is exact all the same. */
   omitted?: Omission[];
+  /** Only for a value that `standin` gave: what it stands for and how well. */
+  standIn?: StandInResult;
+}
+
+/** One constructible stand-in. Lengths are decimal strings in the unit of the result, for angles in degrees. */
+export interface StandInOffer {
+  /** In the cell language; parses back to the same value. */
+  text: string;
+  family: 'fraction' | 'root' | 'hypotenuse' | 'surd' | 'bisection' | 'classical';
+  /** How it is struck, in one sentence. */
+  how: string;
+  /** Author of a rule of the trade. */
+  source: string | null;
+  /** Size of the error, rounded up, and on which side of the value the stand-in lies; `level` when that is not told apart. */
+  error: { bound: string; direction: 'above' | 'below' | 'level' | 'exact' };
+  /** Counts after Lemoine, and their sum. */
+  strikes: { total: number; counts: string };
+  stepped: SteppedResult | null;
+}
+
+/** Bounds that enclose a quantity: decimal strings rounded outwards. */
+export interface Bounds {
+  low: string;
+  high: string;
+}
+
+/** What becomes of the stand-in when it is stepped round; `inside` when all lengths keep to the tolerance as well. */
+export type SteppedResult = { parts: number; inside: boolean } & (
+  | {
+      kind: 'ring';
+      /** Degrees that all steps together lack to a full turn. */
+      gap: Bounds;
+      miss: Bounds;
+      /** The last division less the true one. */
+      last: Bounds;
+      worst: Bounds;
+    }
+  | { kind: 'run'; run: Bounds }
+);
+
+export interface StandInResult extends StandInOffer {
+  /** The value it stands for, and the tolerance, in the cell language. */
+  of: string;
+  tolerance: string;
+  /** What the search looked at. */
+  covered: {
+    family: StandInOffer['family'];
+    ranges: string;
+    examined: number;
+    inside: number;
+    complete: boolean;
+  }[];
+  /** Dearer ones, each closer than all before it. */
+  others: StandInOffer[];
 }
 
 export interface Omission {
@@ -80,6 +134,7 @@ export interface AngleResult extends Parsed {
   /** The angle in degrees. */
   decimal: DecimalResult;
   reach: Reach;
+  standIn?: StandInResult;
 }
 
 export interface TruthResult extends Parsed {

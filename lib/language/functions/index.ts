@@ -4,6 +4,7 @@ import { squareRoot } from '../values';
 import { arcCosine, arcSine, arcTangent, cosine, sine, tangent } from './circular';
 import { absolute, conjugate, extreme, imaginaryPart, realPart, toWhole } from './parts';
 import { cubeRoot } from './roots';
+import { standIn } from './stand-in';
 import { chord, sagitta, versine } from './trade';
 
 type Action = (engine: Engine, args: readonly Value[]) => Value;
@@ -42,4 +43,5 @@ export const ACTIONS: ReadonlyMap<string, Action> = new Map<string, Action>([
   ['chord', two(chord)],
   ['sagitta', two(sagitta)],
   ['versine', one(versine)],
+  ['standin', standIn],
 ]);
