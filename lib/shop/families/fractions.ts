@@ -3,6 +3,9 @@ import { fraction } from '../form';
 import { type Fraction, type Interval, type IntervalArithmetic, floorDiv } from '../interval';
 import { cheapest, meanProportional, ratio, rootOfWhole, surd } from '../strikes';
 
+/** How many fractions between two convergents are looked at. */
+const BETWEEN = 8;
+
 /**
  * Best approximations to a positive real number from below and above: the convergents of its continued fraction and the
  * fractions between them, that is the path to it in the Stern-Brocot tree, denominators rising.
@@ -15,7 +18,7 @@ export function* bestFractions(
   target: Interval,
   greatest: number,
 ): Generator<Fraction> {
-  const between = 8n;
+  const between = BigInt(BETWEEN);
   const most = BigInt(greatest);
   let [before, last]: [Fraction, Fraction] = [
     { n: 0n, d: 1n },
@@ -45,6 +48,8 @@ export function* bestFractions(
   }
 }
 
+const PATH = `convergents and up to ${BETWEEN} fractions before each`;
+
 /** p/q of the base. */
 export function fractionSearch(wanted: Wanted): Search {
   const { arithmetic, ratio: target, limits, base } = wanted;
@@ -65,7 +70,7 @@ export function fractionSearch(wanted: Wanted): Search {
   return {
     family: 'fraction',
     candidates: candidates(),
-    ranges: `best fractions p/q of the ${base} with q up to ${limits.denominator}`,
+    ranges: `best fractions p/q of the ${base}, ${PATH}, with q up to ${limits.denominator}`,
   };
 }
 
@@ -91,7 +96,7 @@ export function rootSearch(wanted: Wanted): Search {
   return {
     family: 'root',
     candidates: candidates(),
-    ranges: `roots of best fractions p/q with q up to ${limits.denominator}`,
+    ranges: `roots of best fractions p/q, ${PATH}, with q up to ${limits.denominator}`,
   };
 }
 
