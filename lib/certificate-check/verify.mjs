@@ -18,7 +18,10 @@ function must(condition, reason) {
 }
 
 const integer = (s, what) => {
-  must(typeof s === 'string' && /^-?\d+$/.test(s) && s.length < 200_000, `${what} is not an integer`);
+  must(
+    typeof s === 'string' && /^-?\d+$/.test(s) && s.length < 200_000,
+    `${what} is not an integer`,
+  );
   return BigInt(s);
 };
 
@@ -31,7 +34,10 @@ function readElement(e, count, what) {
   for (const [set, c] of e.terms) {
     let mask = 0;
     for (const i of set) {
-      must(Number.isInteger(i) && i >= 0 && i < count && !(mask & (1 << i)), `${what} names a root out of place`);
+      must(
+        Number.isInteger(i) && i >= 0 && i < count && !(mask & (1 << i)),
+        `${what} names a root out of place`,
+      );
       mask |= 1 << i;
     }
     must(!terms.has(mask), `${what} has a term twice`);
@@ -89,7 +95,10 @@ function checkIntegerRoots(roots) {
       product *= p;
     }
     const value = radicand.terms.get(0);
-    must(radicand.den === 1n && radicand.terms.size === 1 && value === product, `the factors of ${name} do not multiply to its radicand`);
+    must(
+      radicand.den === 1n && radicand.terms.size === 1 && value === product,
+      `the factors of ${name} do not multiply to its radicand`,
+    );
     for (const r of rows) if ((row ^ r) < row) row ^= r;
     must(row !== 0n, `${name} depends on the roots before it`);
     rows.push(row);
@@ -101,7 +110,10 @@ function checkResidues(roots, index) {
   const { witness, radicand, name } = roots[index];
   const p = BigInt(witness.prime);
   must(p > 2n && p < 2n ** 40n && isPrime(p), `the witness prime of ${name} is not a prime`);
-  must(Array.isArray(witness.residues) && witness.residues.length === index, `${name} has a witness of the wrong length`);
+  must(
+    Array.isArray(witness.residues) && witness.residues.length === index,
+    `${name} has a witness of the wrong length`,
+  );
   const residues = witness.residues.map(BigInt);
   const image = (e) => {
     let sum = 0n;
@@ -114,9 +126,15 @@ function checkResidues(roots, index) {
     return (mod(sum, p) * power(e.den, p - 2n, p)) % p;
   };
   residues.forEach((r, i) => {
-    must(mod(r, p) !== 0n && (r * r) % p === image(roots[i].radicand), `a residue in the witness of ${name} is no root`);
+    must(
+      mod(r, p) !== 0n && (r * r) % p === image(roots[i].radicand),
+      `a residue in the witness of ${name} is no root`,
+    );
   });
-  must(power(image(radicand), (p - 1n) / 2n, p) === p - 1n, `the radicand of ${name} is not a non-residue`);
+  must(
+    power(image(radicand), (p - 1n) / 2n, p) === p - 1n,
+    `the radicand of ${name} is not a non-residue`,
+  );
 }
 
 const floorDiv = (n, d) => {
@@ -144,7 +162,10 @@ function interval(e, enclosures, bits) {
 }
 
 function readEnclosure(e, what) {
-  must(e && Number.isInteger(e.bits) && e.bits > 0 && e.bits <= 200_000, `the enclosure of ${what} has no precision`);
+  must(
+    e && Number.isInteger(e.bits) && e.bits > 0 && e.bits <= 200_000,
+    `the enclosure of ${what} has no precision`,
+  );
   return { low: integer(e.low, what), high: integer(e.high, what), bits: BigInt(e.bits) };
 }
 
@@ -152,7 +173,8 @@ function readEnclosure(e, what) {
 function matrixOf(roots, re, im) {
   const k = roots.length;
   const den = re.den * im.den;
-  const list = (e, size) => Array.from({ length: size }, (_, m) => (e.terms.get(m) ?? 0n) * (den / e.den));
+  const list = (e, size) =>
+    Array.from({ length: size }, (_, m) => (e.terms.get(m) ?? 0n) * (den / e.den));
   const build = (c, level) => {
     if (level === 0) return [c];
     const half = c.length / 2;
@@ -168,10 +190,16 @@ function matrixOf(roots, re, im) {
     return [...a.map((row, i) => [...row, ...top[i]]), ...b.map((row, i) => [...row, ...a[i]])];
   };
   const unit = (n, v) => ({ den: 1n, c: Array.from({ length: n }, (_, i) => (i === 0 ? v : 0n)) });
-  const vector = (e, n) => ({ den: e.den, c: Array.from({ length: n }, (_, m) => e.terms.get(m) ?? 0n) });
+  const vector = (e, n) => ({
+    den: e.den,
+    c: Array.from({ length: n }, (_, m) => e.terms.get(m) ?? 0n),
+  });
   const size = 2 ** k;
   const real = im.terms.size === 0;
-  return { den, matrix: real ? build(list(re, size), k) : build([...list(re, size), ...list(im, size)], k + 1) };
+  return {
+    den,
+    matrix: real ? build(list(re, size), k) : build([...list(re, size), ...list(im, size)], k + 1),
+  };
 }
 
 function multiply(matrix, v) {
@@ -186,8 +214,11 @@ function checkPolynomial(poly, { den, matrix }) {
   const n = poly.length - 1;
   const size = matrix.length;
   let gcd = 0n;
-  for (const c of poly) for (let a = c < 0n ? -c : c; a !== 0n; ) [gcd, a] = [a, gcd % a];
-  must(poly[0] > 0n && (gcd === 1n || gcd === -1n), 'the polynomial is not primitive with a positive leading coefficient');
+  for (const c of poly) for (let a = c < 0n ? -c : c; a !== 0n;) [gcd, a] = [a, gcd % a];
+  must(
+    poly[0] > 0n && (gcd === 1n || gcd === -1n),
+    'the polynomial is not primitive with a positive leading coefficient',
+  );
   // Horner's rule for den^n·f(x), with y = den·x an integer matrix.
   let v = new Array(size).fill(0n);
   let scale = 1n;
@@ -196,9 +227,15 @@ function checkPolynomial(poly, { den, matrix }) {
     v[0] += c * scale;
     scale *= den;
   }
-  must(v.every((c) => c === 0n), 'the polynomial does not vanish at the value');
+  must(
+    v.every((c) => c === 0n),
+    'the polynomial does not vanish at the value',
+  );
   // 1, y, …, y^(n−1) are independent modulo a prime, so no polynomial of lower degree vanishes.
-  must([2147483647n, 2147483629n, 2147483587n].some((p) => independent(matrix, n, p)), 'a polynomial of lower degree may vanish');
+  must(
+    [2147483647n, 2147483629n, 2147483587n].some((p) => independent(matrix, n, p)),
+    'a polynomial of lower degree may vanish',
+  );
 }
 
 function independent(matrix, n, p) {
@@ -209,7 +246,8 @@ function independent(matrix, n, p) {
     const r = v.slice();
     for (const { at, row } of pivots) {
       const f = r[at];
-      if (f !== 0n) for (let i = 0; i < r.length; i++) if (row[i] !== 0n) r[i] = mod(r[i] - f * row[i], p);
+      if (f !== 0n)
+        for (let i = 0; i < r.length; i++) if (row[i] !== 0n) r[i] = mod(r[i] - f * row[i], p);
     }
     const at = r.findIndex((c) => c !== 0n);
     if (at < 0) return false;
@@ -232,7 +270,10 @@ export function refusal(certificate) {
 }
 
 function check(c) {
-  must(c && c.format === 'surdwork-certificate' && c.version === 1, 'this is not a certificate of version 1');
+  must(
+    c && c.format === 'surdwork-certificate' && c.version === 1,
+    'this is not a certificate of version 1',
+  );
   must(Array.isArray(c.roots) && c.roots.length <= 16, 'there is no list of at most 16 roots');
   const roots = c.roots.map((r, i) => ({
     name: r.name,
@@ -240,7 +281,10 @@ function check(c) {
     radicand: readElement(r.radicand, i, `the radicand of ${r.name}`),
   }));
   const plain = roots.filter((r) => r.witness?.factors);
-  must(plain.every((r, i) => roots[i] === r), 'roots of integers do not come first');
+  must(
+    plain.every((r, i) => roots[i] === r),
+    'roots of integers do not come first',
+  );
   checkIntegerRoots(plain);
   roots.forEach((r, i) => {
     if (!r.witness?.factors) checkResidues(roots, i);
@@ -251,22 +295,40 @@ function check(c) {
     must(i === 0 || e.bits === enclosures[0].bits, 'the enclosures differ in precision');
     const d = interval(roots[i].radicand, enclosures, e.bits);
     must(d.low > 0n, `the radicand of ${r.name} is not seen to be positive`);
-    must(e.low > 0n && e.low * e.low <= d.low << e.bits && d.high << e.bits <= e.high * e.high, `the enclosure of ${r.name} does not hold its root`);
+    must(
+      e.low > 0n && e.low * e.low <= d.low << e.bits && d.high << e.bits <= e.high * e.high,
+      `the enclosure of ${r.name} does not hold its root`,
+    );
     enclosures.push(e);
   });
   const re = readElement(c.value?.re, roots.length, 'the real part');
   const im = readElement(c.value?.im, roots.length, 'the imaginary part');
-  for (const [part, e] of [['re', re], ['im', im]]) {
+  for (const [part, e] of [
+    ['re', re],
+    ['im', im],
+  ]) {
     const claimed = readEnclosure(c.enclosure?.[part], part);
-    must(enclosures.length === 0 || claimed.bits === enclosures[0].bits, 'the enclosures differ in precision');
+    must(
+      enclosures.length === 0 || claimed.bits === enclosures[0].bits,
+      'the enclosures differ in precision',
+    );
     const found = interval(e, enclosures, claimed.bits);
-    must(claimed.low <= found.low && found.high <= claimed.high, `the enclosure of the ${part} part does not hold it`);
+    must(
+      claimed.low <= found.low && found.high <= claimed.high,
+      `the enclosure of the ${part} part does not hold it`,
+    );
     const straddles = claimed.low < 0n && claimed.high > 0n;
     must(!straddles, `the enclosure of the ${part} part does not fix its sign`);
   }
-  must(Array.isArray(c.minimalPolynomial) && c.minimalPolynomial.length === c.degree + 1, 'degree and polynomial do not agree');
+  must(
+    Array.isArray(c.minimalPolynomial) && c.minimalPolynomial.length === c.degree + 1,
+    'degree and polynomial do not agree',
+  );
   must(c.degree >= 1 && c.degree <= 1024, 'the degree is out of range');
-  checkPolynomial(c.minimalPolynomial.map((s) => integer(s, 'a coefficient')), matrixOf(roots, re, im));
+  checkPolynomial(
+    c.minimalPolynomial.map((s) => integer(s, 'a coefficient')),
+    matrixOf(roots, re, im),
+  );
 }
 
 const { argv, stdout } = process;

@@ -38,7 +38,11 @@ export function certificateOf(x: Cx): Certificate {
       witness: witnesses[i] as CertificateWitness,
     }));
     const enclosure = { re: range(re, enclosures, bits), im: range(im, enclosures, bits) };
-    if ([enclosure.re, enclosure.im].some((e) => e.low.startsWith('-') && !e.high.startsWith('-') && e.high !== '0')) {
+    if (
+      [enclosure.re, enclosure.im].some(
+        (e) => e.low.startsWith('-') && !e.high.startsWith('-') && e.high !== '0',
+      )
+    ) {
       continue;
     }
     return {
@@ -68,7 +72,10 @@ function elementOf(e: El, t: Tower): CertificateElement {
 }
 
 /** Enclosures of all roots, or null when a radicand is not seen to be positive at this precision. */
-function encloseRoots(radicands: readonly CertificateElement[], bits: number): CertificateEnclosure[] | null {
+function encloseRoots(
+  radicands: readonly CertificateElement[],
+  bits: number,
+): CertificateEnclosure[] | null {
   const out: CertificateEnclosure[] = [];
   const shift = BigInt(bits);
   for (const r of radicands) {
@@ -84,7 +91,11 @@ function encloseRoots(radicands: readonly CertificateElement[], bits: number): C
 }
 
 /** Interval of an element: each term's product of enclosures, rounded outwards once, then the sum. */
-function range(e: CertificateElement, roots: readonly CertificateEnclosure[], bits: number): CertificateEnclosure {
+function range(
+  e: CertificateElement,
+  roots: readonly CertificateEnclosure[],
+  bits: number,
+): CertificateEnclosure {
   let low = 0n;
   let high = 0n;
   const shift = BigInt(bits);

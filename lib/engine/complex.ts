@@ -5,7 +5,18 @@
  * a + bi is √((m + a)/2) ± i·√((m − a)/2) with m = √(a² + b²).
  */
 
-import { addEl, equalEl, integerEl, inverseEl, isRationalEl, isZeroEl, mulEl, negEl, scaleEl, subEl } from './element';
+import {
+  addEl,
+  equalEl,
+  integerEl,
+  inverseEl,
+  isRationalEl,
+  isZeroEl,
+  mulEl,
+  negEl,
+  scaleEl,
+  subEl,
+} from './element';
 import { signEl } from './enclosure';
 import { OutsideDomain } from './limits';
 import { sqrtReal } from './real-root';
@@ -47,7 +58,8 @@ export function subCx(a: Cx, b: Cx): Cx {
 }
 
 export function mulCx(a: Cx, b: Cx): Cx {
-  if (isRealCx(a)) return isRealCx(b) ? real(mulEl(a.re, b.re)) : { re: mulEl(a.re, b.re), im: mulEl(a.re, b.im) };
+  if (isRealCx(a))
+    return isRealCx(b) ? real(mulEl(a.re, b.re)) : { re: mulEl(a.re, b.re), im: mulEl(a.re, b.im) };
   if (isRealCx(b)) return { re: mulEl(a.re, b.re), im: mulEl(a.im, b.re) };
   return {
     re: subEl(mulEl(a.re, b.re), mulEl(a.im, b.im)),

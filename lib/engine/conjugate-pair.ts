@@ -9,7 +9,18 @@
 
 import * as Z from './int';
 import { exactRoot, splitSquare } from './integers';
-import { inverseEl, integerEl, isRationalEl, mulEl, numerator, rootOfTop, scaleEl, subEl, addEl, splitTop } from './element';
+import {
+  inverseEl,
+  integerEl,
+  isRationalEl,
+  mulEl,
+  numerator,
+  rootOfTop,
+  scaleEl,
+  subEl,
+  addEl,
+  splitTop,
+} from './element';
 import { signEl } from './enclosure';
 import { rootInField } from './root-in-field';
 import type { El, Gen, Tower } from './tower';
@@ -47,7 +58,14 @@ function rationalRootOf(x: El): El | null {
   return isRationalEl(x) ? rootInField(x, x.t.field.base) : null;
 }
 
-function splitBy(y: El, square: El, t: Tower, m: bigint, b: bigint, c: bigint): ConjugatePair | null {
+function splitBy(
+  y: El,
+  square: El,
+  t: Tower,
+  m: bigint,
+  b: bigint,
+  c: bigint,
+): ConjugatePair | null {
   const f = t.field;
   const root = rootOfTop(t);
   const base = addEl(integerEl(f, Z.small(m)), scaleEl(root, Z.small(b)));
@@ -74,7 +92,10 @@ function splitBy(y: El, square: El, t: Tower, m: bigint, b: bigint, c: bigint): 
     const { low: u, high: v } = isRationalEl(signed)
       ? { low: signed, high: integerEl(f, 0) }
       : splitTop(signed);
-    const conjugate = scaleEl(subEl(integerEl(f, Z.small(m)), scaleEl(root, Z.small(b))), Z.small(r));
+    const conjugate = scaleEl(
+      subEl(integerEl(f, Z.small(m)), scaleEl(root, Z.small(b))),
+      Z.small(r),
+    );
     return {
       parts: [
         { factor: addEl(u, scaleEl(v, Z.small(b))), radicand: delta },

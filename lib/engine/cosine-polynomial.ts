@@ -30,12 +30,16 @@ function primesOf(n: bigint): bigint[] {
 /** Minimal polynomial of cos(2πu/d) for u prime to d: highest power first, primitive. d > 2. */
 export function cosinePolynomial(d: bigint): bigint[] {
   const primes = primesOf(d);
-  const psi = primes.length === 1 && primes[0] === d ? primePolynomial(d) : fromCyclotomic(cyclotomic(d, primes));
+  const psi =
+    primes.length === 1 && primes[0] === d
+      ? primePolynomial(d)
+      : fromCyclotomic(cyclotomic(d, primes));
   // X = 2c: multiply through by powers of 2, then make the polynomial primitive.
   const n = psi.length - 1;
   const out = psi.map((c, i) => c << BigInt(n - i));
   let g = 0n;
-  for (let i = n; i >= 0 && g !== 1n; i--) g = bigGcd(g, (out[i] as bigint) < 0n ? -(out[i] as bigint) : (out[i] as bigint));
+  for (let i = n; i >= 0 && g !== 1n; i--)
+    g = bigGcd(g, (out[i] as bigint) < 0n ? -(out[i] as bigint) : (out[i] as bigint));
   return g === 1n ? out : out.map((c) => c / g);
 }
 

@@ -125,7 +125,9 @@ export function squareList(t: Tower, a: readonly Int[]): Int[] {
   if (isZeroList(a1)) return squareList(below, a0).concat(zeros(half));
   if (isZeroList(a0)) return mulTop(t, squareList(below, a1)).concat(zeros(half));
   const cross = mulList(below, a0, a1);
-  return addList(squareList(below, a0), mulTop(t, squareList(below, a1))).concat(addList(cross, cross));
+  return addList(squareList(below, a0), mulTop(t, squareList(below, a1))).concat(
+    addList(cross, cross),
+  );
 }
 
 /** a² − d·b² for a + b·s, in the tower below t. */
@@ -182,10 +184,7 @@ export function invertList(t: Tower, a: readonly Int[]): { c: Int[]; den: Int } 
     return { c: inv.c.concat(zeros(half)), den: inv.den };
   }
   const inv = invertList(below, normList(t, a0, a1));
-  return reduceList(
-    mulList(below, a0, inv.c).concat(negList(mulList(below, a1, inv.c))),
-    inv.den,
-  );
+  return reduceList(mulList(below, a0, inv.c).concat(negList(mulList(below, a1, inv.c))), inv.den);
 }
 
 /** Lowest terms: divides out the common factor of all coordinates and the denominator. */

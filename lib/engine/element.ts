@@ -8,16 +8,16 @@
 import * as Z from './int';
 import type { Int } from './int';
 import { bitLength } from './integers';
+import { addList, invertList, moveMask, mulList, reduceList, scaleList, zeros } from './dense';
 import {
-  addList,
-  invertList,
-  moveMask,
-  mulList,
-  reduceList,
-  scaleList,
-  zeros,
-} from './dense';
-import { DENSE_ALWAYS, DENSE_MAX, type El, type Field, type Gen, type Placing, type Tower } from './tower';
+  DENSE_ALWAYS,
+  DENSE_MAX,
+  type El,
+  type Field,
+  type Gen,
+  type Placing,
+  type Tower,
+} from './tower';
 import { join } from './join';
 import { OutsideDomain } from './limits';
 
@@ -85,9 +85,11 @@ function listsAll(t: Tower, count: number): boolean {
 
 function checkSize(f: Field, c: readonly Int[], big: number, den: Int, count: number): void {
   f.budget.within('terms', count);
-  if (typeof den === 'bigint') f.budget.within('integerBits', Z.words(den) > 600 ? bitLength(den) : 0);
+  if (typeof den === 'bigint')
+    f.budget.within('integerBits', Z.words(den) > 600 ? bitLength(den) : 0);
   if (big > 600) {
-    for (const x of c) if (typeof x === 'bigint' && Z.words(x) > 600) f.budget.within('integerBits', bitLength(x));
+    for (const x of c)
+      if (typeof x === 'bigint' && Z.words(x) > 600) f.budget.within('integerBits', bitLength(x));
   }
 }
 
@@ -152,7 +154,10 @@ export function place(a: El, target: Tower, how: Placing): El {
     return place(b, target, { positions, images: null });
   }
   const positions = how.positions as readonly number[];
-  if (a.m === null && (target.k <= DENSE_ALWAYS || (target.k <= DENSE_MAX && a.c.length * 8 >= 1 << target.k))) {
+  if (
+    a.m === null &&
+    (target.k <= DENSE_ALWAYS || (target.k <= DENSE_MAX && a.c.length * 8 >= 1 << target.k))
+  ) {
     const s = a.t.spread(target, positions);
     const c = zeros(1 << target.k);
     for (let i = 0; i < s.length; i++) c[s[i] as number] = a.c[i] as Int;
@@ -296,7 +301,9 @@ function mulSparse(t: Tower, a: El, b: El): Map<bigint, Int> {
       if (bits & 1n) part = mulEl(part, (t.gens[s] as { rad: El }).rad);
     }
     const back = toSparse(place(part, t, { positions: part.t.positionsIn(t), images: null }));
-    (back.m as bigint[]).forEach((mask, j) => out.set(mask, Z.add(out.get(mask) ?? 0, back.c[j] as Int)));
+    (back.m as bigint[]).forEach((mask, j) =>
+      out.set(mask, Z.add(out.get(mask) ?? 0, back.c[j] as Int)),
+    );
   }
   return out;
 }
@@ -315,7 +322,10 @@ export function splitTop(a: El): { low: El; high: El } {
   const below = a.t.parent as Tower;
   const half = 1 << (a.t.k - 1);
   if (a.m === null) {
-    return { low: finish(below, a.c.slice(0, half), a.den), high: finish(below, a.c.slice(half), a.den) };
+    return {
+      low: finish(below, a.c.slice(0, half), a.den),
+      high: finish(below, a.c.slice(half), a.den),
+    };
   }
   const bit = 1n << BigInt(a.t.k - 1);
   const low = new Map<bigint, Int>();

@@ -31,7 +31,6 @@ export interface Sum {
   depth: number;
 }
 
-
 /** An integer as a sum. */
 export function integerSum(n: bigint): Sum {
   return { terms: n === 0n ? [] : [{ coef: n, roots: [], imaginary: false }], den: 1n, depth: 0 };
@@ -88,7 +87,11 @@ function makeForm(x: El, manner: Manner): Sum {
     const s = toSparse(x);
     const terms = (s.m as readonly bigint[]).map((m, j): Term => {
       const r = radicandOfMask(t, m);
-      return { coef: BigInt(s.c[j] as Int), roots: r === 1n ? [] : [integerSum(r)], imaginary: false };
+      return {
+        coef: BigInt(s.c[j] as Int),
+        roots: r === 1n ? [] : [integerSum(r)],
+        imaginary: false,
+      };
     });
     return arrange(terms, BigInt(x.den));
   }
@@ -114,7 +117,7 @@ function formOfPart(y: El, manner: Manner): Sum {
 }
 
 /** √s = scale·√inner: a square that divides every coefficient as written, though not every coordinate. */
-function pullOutOfSum(s: Sum): { scale: bigint; inner: Sum } {
+export function pullOutOfSum(s: Sum): { scale: bigint; inner: Sum } {
   let g = 0n;
   for (const t of s.terms) g = gcd(g, t.coef < 0n ? -t.coef : t.coef);
   if (g < 4n || s.den !== 1n) return { scale: 1n, inner: s };
@@ -250,4 +253,3 @@ export function compareSums(a: Sum, b: Sum): number {
   }
   return 0;
 }
-

@@ -1,6 +1,21 @@
 /** The exact engine: one object for one request. See README.md in this folder. */
 
-import { addCx, absCx, conjCx, equalCx, inverseCx, isRealCx, isZeroCx, mulCx, negCx, powCx, real, sqrtCx, subCx, type Cx } from './complex';
+import {
+  addCx,
+  absCx,
+  conjCx,
+  equalCx,
+  inverseCx,
+  isRealCx,
+  isZeroCx,
+  mulCx,
+  negCx,
+  powCx,
+  real,
+  sqrtCx,
+  subCx,
+  type Cx,
+} from './complex';
 import { decimalOf } from './decimal';
 import { integerEl, isRationalEl, numerator, rationalEl, scaleEl, subEl } from './element';
 import { floorEl, signEl } from './enclosure';
@@ -12,7 +27,18 @@ import { certificateOf } from './certificate';
 import { roundTo } from './rounding';
 import { Field, type El } from './tower';
 import { Cosine, cosineOf, sineOf } from './turn';
-import type { Certificate, Decimal, Engine, Limits, Multiple, Num, Outcome, Rounding, TowerStep, Written } from './types';
+import type {
+  Certificate,
+  Decimal,
+  Engine,
+  Limits,
+  Multiple,
+  Num,
+  Outcome,
+  Rounding,
+  TowerStep,
+  Written,
+} from './types';
 import { towerOf, writeValue } from './write';
 
 export { DEFAULT_LIMITS } from './limits';
@@ -64,7 +90,8 @@ class ExactEngine implements Engine {
   }
 
   integer(n: bigint | number): Num {
-    if (typeof n === 'number' && !Number.isSafeInteger(n)) throw new TypeError('integer() takes a safe integer.');
+    if (typeof n === 'number' && !Number.isSafeInteger(n))
+      throw new TypeError('integer() takes a safe integer.');
     if (typeof n === 'bigint') this.checkSize(n);
     return this.seal(real(integerEl(this.field, typeof n === 'bigint' ? Z.small(n) : n + 0)));
   }
@@ -175,7 +202,8 @@ class ExactEngine implements Engine {
   }
 
   decimal(a: Num, digits: number): Decimal {
-    if (!Number.isSafeInteger(digits) || digits < 1) throw new RangeError('decimal() takes a positive number of digits.');
+    if (!Number.isSafeInteger(digits) || digits < 1)
+      throw new RangeError('decimal() takes a positive number of digits.');
     this.budget.within('digits', digits);
     const x = this.open(a);
     const re = decimalOf(x.re, digits);
@@ -202,7 +230,8 @@ class ExactEngine implements Engine {
 
   private realPart(a: Num, what: string): El {
     const x = this.open(a);
-    if (!isRealCx(x)) throw new OutsideDomain('domain', `A number with an imaginary part has no ${what}.`);
+    if (!isRealCx(x))
+      throw new OutsideDomain('domain', `A number with an imaginary part has no ${what}.`);
     return x.re;
   }
 

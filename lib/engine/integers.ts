@@ -38,7 +38,13 @@ export function exactRoot(n: bigint): bigint | null {
   if (n < 0n) return null;
   if (!SQUARE_MOD_64[Number(n & 63n)]) return null;
   const m = Number(n % 45045n);
-  if (!isResidue(m, 9) || !isResidue(m, 5) || !isResidue(m, 7) || !isResidue(m, 11) || !isResidue(m, 13)) {
+  if (
+    !isResidue(m, 9) ||
+    !isResidue(m, 5) ||
+    !isResidue(m, 7) ||
+    !isResidue(m, 11) ||
+    !isResidue(m, 13)
+  ) {
     return null;
   }
   const r = isqrt(n);

@@ -8,7 +8,16 @@
 
 import { OverLimit } from './limits';
 import { characterOfInteger, character, homOf, PATIENCE } from './residues';
-import { integerEl, inverseEl, isRationalEl, mulEl, numerator, rootOf, scaleEl, substitute } from './element';
+import {
+  integerEl,
+  inverseEl,
+  isRationalEl,
+  mulEl,
+  numerator,
+  rootOf,
+  scaleEl,
+  substitute,
+} from './element';
 import { rootInField } from './root-in-field';
 import { splitSquare } from './integers';
 import { normOf, rootOfInteger, sqrtReal } from './real-root';
@@ -35,11 +44,19 @@ export function join(a: Tower, b: Tower): Joined {
 function makeJoin(a: Tower, b: Tower): Joined {
   const inB = a.positionsIn(b);
   if (inB !== null) {
-    return { t: b, left: { positions: inB, images: null }, right: { positions: null, images: null } };
+    return {
+      t: b,
+      left: { positions: inB, images: null },
+      right: { positions: null, images: null },
+    };
   }
   const inA = b.positionsIn(a);
   if (inA !== null) {
-    return { t: a, left: { positions: null, images: null }, right: { positions: inA, images: null } };
+    return {
+      t: a,
+      left: { positions: null, images: null },
+      right: { positions: inA, images: null },
+    };
   }
   const all = merge(a.gens, b.gens);
   const built = build(a.field, all);
@@ -112,7 +129,8 @@ function build(f: Field, wanted: readonly Gen[]): Built {
         if (e.t.positionsIn(t) === null) forced.set(id, resolve(e, images));
       }
       if (extra === null) extra = [];
-      for (const e of forced.values()) for (const h of e.t.gens) if (!gens.includes(h)) extra.push(h);
+      for (const e of forced.values())
+        for (const h of e.t.gens) if (!gens.includes(h)) extra.push(h);
     }
     gens = merge(gens, [...new Set(extra)]);
   }
@@ -120,7 +138,10 @@ function build(f: Field, wanted: readonly Gen[]): Built {
 }
 
 function resolve(x: El, images: Map<number, El>): El {
-  return substitute(x, x.t.gens.map((g) => images.get(g.id) ?? rootOf(g)));
+  return substitute(
+    x,
+    x.t.gens.map((g) => images.get(g.id) ?? rootOf(g)),
+  );
 }
 
 /**
@@ -216,7 +237,8 @@ function relevantPart(t: Tower, g: Gen): { t: Tower; outside: bigint[] } {
   for (const s of sets) for (const q of s as bigint[]) primes.add(q);
   let mask = 0n;
   t.gens.forEach((h, i) => {
-    if (h.int === 0 || g.rad.t.position(h) >= 0 || primes.has(BigInt(h.int))) mask |= 1n << BigInt(i);
+    if (h.int === 0 || g.rad.t.position(h) >= 0 || primes.has(BigInt(h.int)))
+      mask |= 1n << BigInt(i);
   });
   const inside = new Set(t.gens.map((h) => BigInt(h.int)));
   const outside = [...primes].filter((q) => !inside.has(q)).sort((x, y) => (x < y ? -1 : 1));
@@ -240,7 +262,7 @@ function normPrimes(g: Gen): bigint[] | null {
       const value = BigInt(numerator(isRationalEl(n) ? n : integerEl(f, 1)));
       const split = splitSquare(value < 0n ? -value : value);
       const primes = new Set(split.factors);
-      for (let s = split.square; s > 1n; ) {
+      for (let s = split.square; s > 1n;) {
         const inner = splitSquare(s);
         inner.factors.forEach((q) => primes.add(q));
         s = inner.square;
@@ -251,4 +273,3 @@ function normPrimes(g: Gen): bigint[] | null {
   }
   return out;
 }
-

@@ -11,10 +11,21 @@
 import * as Z from './int';
 import { type Int } from './int';
 import { bigGcd } from './integers';
-import { isRationalEl, isZeroEl, numerator, toDense, toSparse } from './element';
+import { isRationalEl, isZeroEl, numerator, scaleEl, toDense, toSparse } from './element';
+import { relationOf } from './power-relation';
 import { compact, together } from './presentation';
 import { keyOf } from './real-root';
-import { addList, isZeroList, mulList, mulTop, negList, scaleList, squareList, subList, zeros } from './dense';
+import {
+  addList,
+  isZeroList,
+  mulList,
+  mulTop,
+  negList,
+  scaleList,
+  squareList,
+  subList,
+  zeros,
+} from './dense';
 import { powerRoot, squarefreeModulo } from './polynomial';
 import { cosinePolynomial, totient } from './cosine-polynomial';
 import type { Cx } from './complex';
@@ -125,7 +136,7 @@ function makeCharacteristic(x: Cx): Characteristic {
   const imaginary = !isZeroEl(x.im);
   const shown = compact(together(x));
   const t = shown.t;
-  f.budget.within('degree', 2 ** (t.k + (imaginary ? 1 : 0)));
+  if (2 ** (t.k + (imaginary ? 1 : 0)) > f.budget.limits.degree) return inLargeTower(x);
   const re = toDense(shown.re);
   const im = imaginary ? toDense(shown.im) : shown.im;
   const den = imaginary ? Z.mul(Z.quotient(re.den, Z.gcd(re.den, im.den)), im.den) : re.den;
@@ -139,6 +150,20 @@ function makeCharacteristic(x: Cx): Characteristic {
   const plain = u.k === 1 ? normOverRationals(u, poly) : poly.map((c) => c[0] as Int);
   const monic = [1n, ...plain.reverse().map(BigInt)];
   return { minimal: reduce(monic, f), den: BigInt(den) };
+}
+
+/** Largest number of roots in a tower in which powers are still worked out. */
+const LARGE = 12;
+
+/** The tower is above the limit, but the value may not be. */
+function inLargeTower(x: Cx): Characteristic {
+  const f = x.re.t.field;
+  const k = together(x).t.k + (isZeroEl(x.im) ? 0 : 1);
+  // Real values rarely have less than the degree of their tower; nests of complex roots often do.
+  if (k > LARGE || isZeroEl(x.im)) f.budget.within('degree', 2 ** k);
+  const den = Z.mul(Z.quotient(x.re.den, Z.gcd(x.re.den, x.im.den)), x.im.den);
+  const y = { re: scaleEl(x.re, den), im: scaleEl(x.im, den) };
+  return { minimal: relationOf(y), den: BigInt(den) };
 }
 
 /** The minimal polynomial, of which χ is a power. */

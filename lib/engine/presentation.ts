@@ -10,7 +10,16 @@
 import * as Z from './int';
 import type { Int } from './int';
 import { isqrt } from './integers';
-import { addEl, finishSparse, integerEl, isZeroEl, mulEl, place, scaleEl, toSparse } from './element';
+import {
+  addEl,
+  finishSparse,
+  integerEl,
+  isZeroEl,
+  mulEl,
+  place,
+  scaleEl,
+  toSparse,
+} from './element';
 import { formOf, type Sum } from './form';
 import { join } from './join';
 import type { Cx } from './complex';
@@ -43,7 +52,8 @@ function needsAll(x: Presented, flat: number): boolean {
       if (at < 0) return false;
       return e.m === null ? e.c[1 << at] !== 0 : e.m.includes(1n << BigInt(at));
     };
-    if (!alone(x.re) && !alone(x.im) && !x.t.gens.some((g) => g.int === 0 && alone(g.rad))) return false;
+    if (!alone(x.re) && !alone(x.im) && !x.t.gens.some((g) => g.int === 0 && alone(g.rad)))
+      return false;
   }
   return true;
 }
@@ -84,7 +94,8 @@ export function rebase(x: Presented): Presented {
   if (basis.length === flat && basis.every((b, i) => b.m === 1n << BigInt(i))) return x;
   const field = new Field(t.field.budget, Z.mul);
   let tower = field.base;
-  for (const b of basis) tower = tower.child(field.addGen(1, Z.small(b.n), integerEl(field, Z.small(b.n))));
+  for (const b of basis)
+    tower = tower.child(field.addGen(1, Z.small(b.n), integerEl(field, Z.small(b.n))));
   const size = BigInt(basis.length);
   const move = (e: El, target: Tower): El => {
     const table = new Map<bigint, Int>();
@@ -106,17 +117,30 @@ export function rebase(x: Presented): Presented {
   };
   for (const [i, r] of radicands.entries()) {
     const moved = move(r, tower);
-    const trimmed = finishSparse(tower, new Map((toSparse(moved).m as bigint[]).map((m, j) => [m, toSparse(moved).c[j] as Int])), moved.den);
+    const trimmed = finishSparse(
+      tower,
+      new Map((toSparse(moved).m as bigint[]).map((m, j) => [m, toSparse(moved).c[j] as Int])),
+      moved.den,
+    );
     if (trimmed.den !== 1) return x;
     tower = tower.child(field.addGen((t.gens[flat + i] as Gen).depth, 0, trimmed));
   }
-  return { t: tower, re: move(x.re, tower), im: isZeroEl(x.im) ? integerEl(field, 0) : move(x.im, tower) };
+  return {
+    t: tower,
+    re: move(x.re, tower),
+    im: isZeroEl(x.im) ? integerEl(field, 0) : move(x.im, tower),
+  };
 }
 
 function spreadOut(t: Tower, table: Map<bigint, Int>, den: Int): El {
   const masks = [...table.keys()].sort((a, b) => (a < b ? -1 : 1));
   const g = masks.reduce<Int>((a, m) => Z.gcd(a, table.get(m) as Int), den);
-  return { t, m: masks, c: masks.map((m) => Z.quotient(table.get(m) as Int, g)), den: Z.quotient(den, g) };
+  return {
+    t,
+    m: masks,
+    c: masks.map((m) => Z.quotient(table.get(m) as Int, g)),
+    den: Z.quotient(den, g),
+  };
 }
 
 function inTower(e: El, t: Tower): El {
@@ -132,7 +156,10 @@ function product(t: Tower, mask: bigint): bigint {
 }
 
 /** Reduces a mask by a list whose leading bits descend; `set` says which basis members were used. */
-function express(mask: bigint, reduced: readonly { v: bigint; set: bigint }[]): { v: bigint; set: bigint } {
+function express(
+  mask: bigint,
+  reduced: readonly { v: bigint; set: bigint }[],
+): { v: bigint; set: bigint } {
   let v = mask;
   let set = 0n;
   for (const r of reduced) {

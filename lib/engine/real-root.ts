@@ -121,7 +121,10 @@ function pullOut(x: El): { scale: El; y: El } {
   const split = splitSquare(BigInt(Z.mul(g, x.den)), 2000);
   const rest = split.factors.reduce((a, b) => a * b, 1n);
   const scale = rationalEl(f, Z.small(split.square), x.den);
-  return { scale, y: { t: x.t, c: x.c.map((c) => Z.mul(Z.quotient(c, g), Z.small(rest))), m: x.m, den: 1 } };
+  return {
+    scale,
+    y: { t: x.t, c: x.c.map((c) => Z.mul(Z.quotient(c, g), Z.small(rest))), m: x.m, den: 1 },
+  };
 }
 
 function findRoot(x: El): El {

@@ -27,4 +27,3 @@ function compareWithHalf(x: El, below: bigint): number {
   const half: El = { t: x.t.field.base, c: [Z.small(2n * below + 1n)], m: null, den: 2 };
   return signEl(subEl(x, half));
 }
-

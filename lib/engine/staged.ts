@@ -54,7 +54,11 @@ export function stagedValue(x: Presented): Written {
   const im = polynomial(x.im, x.t, own);
   const imTex = polynomial(x.im, x.t, own, true);
   const value = isZeroEl(x.im) ? re : isZeroEl(x.re) ? `i*(${im})` : `${re}+i*(${im})`;
-  const valueTex = isZeroEl(x.im) ? reTex : isZeroEl(x.re) ? `i\\left(${imTex}\\right)` : `${reTex}+i\\left(${imTex}\\right)`;
+  const valueTex = isZeroEl(x.im)
+    ? reTex
+    : isZeroEl(x.re)
+      ? `i\\left(${imTex}\\right)`
+      : `${reTex}+i\\left(${imTex}\\right)`;
   return {
     text: [...steps.slice(first).map((s) => `${s.name} = sqrt(${s.radicand})`), value].join('; '),
     tex: gathered([

@@ -113,7 +113,8 @@ export class Tower {
       this.supports = this.gens.map(() => 0n);
       for (let j = 0; j < this.k; j++) {
         let mask = 1n << BigInt(j);
-        for (const g of (this.gens[j] as Gen).rad.t.gens) mask |= this.supports[this.position(g)] as bigint;
+        for (const g of (this.gens[j] as Gen).rad.t.gens)
+          mask |= this.supports[this.position(g)] as bigint;
         this.supports[j] = mask;
       }
     }
@@ -135,7 +136,8 @@ export class Tower {
     if (this.flat) return mask;
     this.smallSupports ??= this.gens.map((g, i) => (g.int === 0 ? Number(this.support(i)) : 0));
     let out = mask;
-    for (let i = this.k - 1; i >= 0; i--) if ((out >> i) & 1) out |= this.smallSupports[i] as number;
+    for (let i = this.k - 1; i >= 0; i--)
+      if ((out >> i) & 1) out |= this.smallSupports[i] as number;
     return out;
   }
 
@@ -188,7 +190,8 @@ export class Tower {
     if (s === undefined) {
       s = new Int32Array(1 << this.k);
       for (let i = 0; i < this.k; i++) {
-        for (let j = 0; j < 1 << i; j++) s[j | (1 << i)] = (s[j] as number) | (1 << (positions[i] as number));
+        for (let j = 0; j < 1 << i; j++)
+          s[j | (1 << i)] = (s[j] as number) | (1 << (positions[i] as number));
       }
       this.spreads.set(target.id, s);
     }

@@ -162,7 +162,8 @@ class Periods {
     const b: number[] = [];
     for (let i = j; i < this.p - 1; i += step) a.push(this.powers[i] as number);
     for (let i = j + step / 2; i < this.p - 1; i += step) b.push(this.powers[i] as number);
-    for (const x of a) for (const y of b) counts[(x + y) % this.p] = (counts[(x + y) % this.p] as number) + 1;
+    for (const x of a)
+      for (const y of b) counts[(x + y) % this.p] = (counts[(x + y) % this.p] as number) + 1;
     let coefs: number[] = [];
     for (let i = 0; i < 1 << l; i++) coefs.push(counts[this.powers[i] as number] as number);
     let sum = integerEl(this.f, counts[0] as number);
@@ -191,7 +192,8 @@ class Periods {
   /** The period as a fixed-point integer, to tell two siblings apart. */
   private value(l: number, j: number): bigint {
     let s = 0n;
-    for (let i = j; i < this.p - 1; i += 1 << l) s += this.cosines[this.powers[i] as number] as bigint;
+    for (let i = j; i < this.p - 1; i += 1 << l)
+      s += this.cosines[this.powers[i] as number] as bigint;
     return s;
   }
 }

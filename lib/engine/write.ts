@@ -8,9 +8,9 @@
 
 import { countTerms, isZeroEl } from './element';
 import { words } from './int';
-import { signEl } from './enclosure';
 import { addSums, digitsOf, formOf, largestOf, timesI, type Manner, type Sum } from './form';
-import { mulCx, type Cx } from './complex';
+import type { Cx } from './complex';
+import { complexForm } from './complex-form';
 import { present } from './presentation';
 import { stagedExpression, stagedSteps, stagedValue } from './staged';
 import { texOf, textOf } from './text';
@@ -31,19 +31,7 @@ export function writeValue(x: Cx): Written {
 export function expressionOf(x: Cx): Sum | null {
   if (tooLarge(x)) return null;
   const variants = MANNERS.map((m) => bothParts(x, m));
-  if (!isZeroEl(x.im) && !isZeroEl(x.re)) {
-    const square = mulCx(x, x);
-    const inner = bothParts(square, 'single');
-    const principal = signEl(x.re) > 0;
-    const whole = inner.terms.map((t) => t.coef).reduce((a, b) => (a < 0n ? -a : a) + (b < 0n ? -b : b), 0n);
-    if (inner.den === 1n && whole > 0n) {
-      variants.push({
-        terms: [{ coef: principal ? 1n : -1n, roots: [inner], imaginary: false }],
-        den: 1n,
-        depth: inner.depth + 1,
-      });
-    }
-  }
+  if (!isZeroEl(x.im) && !isZeroEl(x.re)) variants.push(complexForm(x));
   return variants.reduce((best, s) => (costlier(best, s) ? s : best));
 }
 

@@ -18,7 +18,12 @@ const leaf: fc.Arbitrary<Tree> = fc
   .map((n): Tree => ({ op: 'integer', n }));
 
 function grow(depth: number, complex: boolean): fc.Arbitrary<Tree> {
-  const atoms = complex ? fc.oneof({ weight: 5, arbitrary: leaf }, { weight: 1, arbitrary: fc.constant<Tree>({ op: 'i' }) }) : leaf;
+  const atoms = complex
+    ? fc.oneof(
+        { weight: 5, arbitrary: leaf },
+        { weight: 1, arbitrary: fc.constant<Tree>({ op: 'i' }) },
+      )
+    : leaf;
   if (depth === 0) return atoms;
   const lower = grow(depth - 1, complex);
   const root = lower.map((a): Tree => ({ op: 'sqrt', a }));
@@ -26,13 +31,20 @@ function grow(depth: number, complex: boolean): fc.Arbitrary<Tree> {
   const pair = fc
     .tuple(fc.constantFrom('+' as const, '-' as const, '*' as const, '/' as const), small, small)
     .map(([op, a, b]): Tree => ({ op, a, b }));
-  return fc.oneof({ weight: 1, arbitrary: lower }, { weight: 2, arbitrary: root }, { weight: 3, arbitrary: pair });
+  return fc.oneof(
+    { weight: 1, arbitrary: lower },
+    { weight: 2, arbitrary: root },
+    { weight: 3, arbitrary: pair },
+  );
 }
 
 /** Trees with roots nested up to `depth`; the square of a tree and products that hide squares come up by themselves and below. */
 export function trees(depth: number, complex = false): fc.Arbitrary<Tree> {
   const t = grow(depth, complex);
-  const hidden = grow(Math.max(0, depth - 1), complex).map((a): Tree => ({ op: 'sqrt', a: { op: '*', a, b: a } }));
+  const hidden = grow(Math.max(0, depth - 1), complex).map((a): Tree => ({
+    op: 'sqrt',
+    a: { op: '*', a, b: a },
+  }));
   return fc.oneof({ weight: 5, arbitrary: t }, { weight: 1, arbitrary: hidden });
 }
 

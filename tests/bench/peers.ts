@@ -30,10 +30,12 @@ export function peersAvailable(): PeerName[] {
   mkdirSync(build, { recursive: true });
   for (const name of ['qqbar', 'ca'] as const) {
     const libraries = ['-lcalcium', '-lantic', '-lflint-arb', '-lflint', '-lgmp', '-lmpfr'];
-    if (works('gcc', ['-O2', '-o', `${build}peer-${name}`, `${sources}${name}.c`, ...libraries])) out.push(name);
+    if (works('gcc', ['-O2', '-o', `${build}peer-${name}`, `${sources}${name}.c`, ...libraries]))
+      out.push(name);
   }
   if (works('gp', ['--version-short'])) out.push('pari');
-  if (existsSync('/usr/bin/python3') && works('/usr/bin/python3', ['-c', 'import sympy'])) out.push('sympy');
+  if (existsSync('/usr/bin/python3') && works('/usr/bin/python3', ['-c', 'import sympy']))
+    out.push('sympy');
   return out;
 }
 
@@ -42,7 +44,12 @@ interface Run {
   answers: string;
 }
 
-function command(peer: PeerName, task: string, folder: string, times: number): { file: string; args: string[]; input: string } {
+function command(
+  peer: PeerName,
+  task: string,
+  folder: string,
+  times: number,
+): { file: string; args: string[]; input: string } {
   const path = `${folder}${task}.slp`;
   if (peer === 'pari') {
     return {
@@ -52,12 +59,22 @@ function command(peer: PeerName, task: string, folder: string, times: number): {
     };
   }
   if (peer === 'sympy') {
-    return { file: '/usr/bin/python3', args: [`${sources}sympy-peer.py`, path, String(times)], input: '' };
+    return {
+      file: '/usr/bin/python3',
+      args: [`${sources}sympy-peer.py`, path, String(times)],
+      input: '',
+    };
   }
   return { file: `${build}peer-${peer}`, args: [path, String(times)], input: '' };
 }
 
-function runOnce(peer: PeerName, task: string, folder: string, times: number, seconds: number): Run[] | null {
+function runOnce(
+  peer: PeerName,
+  task: string,
+  folder: string,
+  times: number,
+  seconds: number,
+): Run[] | null {
   const { file, args, input } = command(peer, task, folder, times);
   try {
     const out = execFileSync(file, args, {
@@ -87,6 +104,7 @@ export function runPeer(peer: PeerName, task: string, folder: string): Measured 
   const sorted = runs.map((r) => r.seconds * 1000).sort((a, b) => a - b);
   const ms = sorted[Math.floor(sorted.length / 2)] as number;
   // PARI's way with near-ties is numeric, with a bound that proves the sign: told, but not counted as an exact peer.
-  if (peer === 'pari' && task.startsWith('T7')) return { ms, note: `${ms.toFixed(3)} num`, exact: false };
+  if (peer === 'pari' && task.startsWith('T7'))
+    return { ms, note: `${ms.toFixed(3)} num`, exact: false };
   return { ms, note: exact ? null : 'undecided', exact };
 }

@@ -72,7 +72,11 @@ function figure(ms: number | null): string {
 
 function row(cells: readonly string[]): void {
   const widths = [5, 42, 9, 12, 12, 12, 12, 8];
-  process.stdout.write(cells.map((c, i) => (i < 2 ? c.padEnd(widths[i] as number) : c.padStart(widths[i] as number))).join(' ') + '\n');
+  process.stdout.write(
+    cells
+      .map((c, i) => (i < 2 ? c.padEnd(widths[i] as number) : c.padStart(widths[i] as number)))
+      .join(' ') + '\n',
+  );
 }
 
 function growth(): void {
@@ -124,7 +128,13 @@ function main(): void {
     const theirs = peers.map((p) => runPeer(p, task, folder));
     const best = theirs.filter((t) => t.exact && t.ms !== null).map((t) => t.ms as number);
     const ratio = best.length === 0 ? '' : `×${(Math.min(...best) / ours).toFixed(1)}`;
-    row([task, what, figure(ours), ...theirs.map((t) => t.note ?? figure(t.ms)), ...(peers.length > 0 ? [ratio] : [])]);
+    row([
+      task,
+      what,
+      figure(ours),
+      ...theirs.map((t) => t.note ?? figure(t.ms)),
+      ...(peers.length > 0 ? [ratio] : []),
+    ]);
   }
   if (wanted.length === 0) growth();
 }

@@ -19,7 +19,8 @@ export function parseProgram(source: string): Line[] {
     const line = body.trim();
     if (line === '') continue;
     const at = line.indexOf(' = ');
-    if (at > 0) out.push({ kind: 'value', name: line.slice(0, at), tokens: line.slice(at + 3).split(' ') });
+    if (at > 0)
+      out.push({ kind: 'value', name: line.slice(0, at), tokens: line.slice(at + 3).split(' ') });
     else {
       const [query, ...names] = line.split(' ') as [string, ...string[]];
       out.push({ kind: 'query', query, names, expected: remark?.trim() ?? null });
@@ -37,9 +38,15 @@ export function runProgram(program: readonly Line[]): string[] {
     const outcome = e.attempt(() => {
       if (line.kind === 'value') values.set(line.name, evaluate(e, line.tokens, values));
       else {
-        const answer = ask(e, line.query, line.names.map((n) => values.get(n) as Num));
+        const answer = ask(
+          e,
+          line.query,
+          line.names.map((n) => values.get(n) as Num),
+        );
         if (line.expected !== null && line.expected !== answer) {
-          throw new Error(`${line.query} ${line.names.join(' ')}: ${answer}, expected ${line.expected}`);
+          throw new Error(
+            `${line.query} ${line.names.join(' ')}: ${answer}, expected ${line.expected}`,
+          );
         }
         answers.push(answer);
       }
@@ -56,7 +63,9 @@ function evaluate(e: Engine, tokens: readonly string[], values: Map<string, Num>
     if (t === '+' || t === '-' || t === '*' || t === '/') {
       const b = pop();
       const a = pop();
-      stack.push(t === '+' ? e.add(a, b) : t === '-' ? e.sub(a, b) : t === '*' ? e.mul(a, b) : e.div(a, b));
+      stack.push(
+        t === '+' ? e.add(a, b) : t === '-' ? e.sub(a, b) : t === '*' ? e.mul(a, b) : e.div(a, b),
+      );
     } else if (t === '~') stack.push(e.neg(pop()));
     else if (t === 'S') stack.push(e.sqrt(pop()));
     else if (t === 'I') stack.push(e.i);

@@ -39,35 +39,61 @@ describe('certificates', () => {
   it('names the roots that the value needs and no more', () => {
     expect(certify('sqrt(6)').roots.map((r) => r.radicand.terms)).toEqual([[[[], '6']]]);
     expect(certify('sqrt(2)+sqrt(3)+sqrt(6)').roots).toHaveLength(2);
-    expect(certify('sqrt(11+2*sqrt(29))+sqrt(16-2*sqrt(29)+2*sqrt(55-10*sqrt(29)))').roots).toHaveLength(2);
+    expect(
+      certify('sqrt(11+2*sqrt(29))+sqrt(16-2*sqrt(29)+2*sqrt(55-10*sqrt(29)))').roots,
+    ).toHaveLength(2);
   });
 
   const damage: [string, (c: Certificate) => void][] = [
     ['a changed coefficient of the polynomial', (c) => (c.minimalPolynomial[1] = '1')],
-    ['a polynomial of too high a degree', (c) => {
-      c.minimalPolynomial.push('0');
-      c.degree++;
-    }],
-    ['a polynomial that is not primitive', (c) => (c.minimalPolynomial = c.minimalPolynomial.map((s) => `${2n * BigInt(s)}`))],
+    [
+      'a polynomial of too high a degree',
+      (c) => {
+        c.minimalPolynomial.push('0');
+        c.degree++;
+      },
+    ],
+    [
+      'a polynomial that is not primitive',
+      (c) => (c.minimalPolynomial = c.minimalPolynomial.map((s) => `${2n * BigInt(s)}`)),
+    ],
     ['a changed coordinate', (c) => ((c.value.re.terms[0] as [number[], string])[1] = '-2')],
-    ['a radicand that is a square', (c) => {
-      const first = c.roots[0] as Certificate['roots'][0];
-      first.radicand.terms = [[[], '4']];
-      first.witness = { factors: ['2', '2'] };
-    }],
-    ['a factor that is no prime', (c) => ((c.roots[0] as Certificate['roots'][0]).witness = { factors: ['1'] })],
-    ['a witness that is a residue', (c) => {
-      const last = c.roots[1] as Certificate['roots'][0];
-      const w = last.witness as { prime: number; residues: number[] };
-      last.witness = { prime: w.prime, residues: w.residues.map((r) => r + 1) };
-    }],
-    ['an enclosure beside the root', (c) => {
-      const e = (c.roots[1] as Certificate['roots'][0]).enclosure;
-      e.low = e.high;
-    }],
-    ['an enclosure of the wrong sign', (c) => {
-      [c.enclosure.re.low, c.enclosure.re.high] = [`-${c.enclosure.re.high}`, `-${c.enclosure.re.low}`];
-    }],
+    [
+      'a radicand that is a square',
+      (c) => {
+        const first = c.roots[0] as Certificate['roots'][0];
+        first.radicand.terms = [[[], '4']];
+        first.witness = { factors: ['2', '2'] };
+      },
+    ],
+    [
+      'a factor that is no prime',
+      (c) => ((c.roots[0] as Certificate['roots'][0]).witness = { factors: ['1'] }),
+    ],
+    [
+      'a witness that is a residue',
+      (c) => {
+        const last = c.roots[1] as Certificate['roots'][0];
+        const w = last.witness as { prime: number; residues: number[] };
+        last.witness = { prime: w.prime, residues: w.residues.map((r) => r + 1) };
+      },
+    ],
+    [
+      'an enclosure beside the root',
+      (c) => {
+        const e = (c.roots[1] as Certificate['roots'][0]).enclosure;
+        e.low = e.high;
+      },
+    ],
+    [
+      'an enclosure of the wrong sign',
+      (c) => {
+        [c.enclosure.re.low, c.enclosure.re.high] = [
+          `-${c.enclosure.re.high}`,
+          `-${c.enclosure.re.low}`,
+        ];
+      },
+    ],
     ['another format', (c) => ((c as { version: number }).version = 2)],
   ];
 
@@ -80,7 +106,9 @@ describe('certificates', () => {
 
   it('are read by the command from standard input, with the verdict as its exit code', () => {
     const good = JSON.stringify(certify('sqrt(2)+sqrt(3)'));
-    expect(execFileSync(process.execPath, [program], { input: good, encoding: 'utf8' })).toBe('accepted\n');
+    expect(execFileSync(process.execPath, [program], { input: good, encoding: 'utf8' })).toBe(
+      'accepted\n',
+    );
     const bad = spawnSync(process.execPath, [program], { input: '{}', encoding: 'utf8' });
     expect(bad.status).toBe(1);
     expect(bad.stdout).toMatch(/^refused: /);

@@ -4,15 +4,41 @@ import { createEngine } from '../../lib/engine/index';
 import { evaluateWith } from './expression';
 
 const e = createEngine();
-const decimal = (source: string, digits: number): string => e.decimal(evaluateWith(e, source), digits).re;
+const decimal = (source: string, digits: number): string =>
+  e.decimal(evaluateWith(e, source), digits).re;
 
 describe('decimals', () => {
   it('of a rational are the value itself where it ends, without trailing zeros', () => {
-    expect(e.decimal(evaluateWith(e, '500'), 30)).toEqual({ re: '500', im: null, digits: 30, terminates: true });
-    expect(e.decimal(evaluateWith(e, '3/4'), 30)).toEqual({ re: '0.75', im: null, digits: 30, terminates: true });
-    expect(e.decimal(evaluateWith(e, '-1/8'), 3)).toEqual({ re: '-0.125', im: null, digits: 3, terminates: true });
-    expect(e.decimal(evaluateWith(e, '1/3'), 4)).toEqual({ re: '0.3333', im: null, digits: 4, terminates: false });
-    expect(e.decimal(evaluateWith(e, '0'), 4)).toEqual({ re: '0', im: null, digits: 4, terminates: true });
+    expect(e.decimal(evaluateWith(e, '500'), 30)).toEqual({
+      re: '500',
+      im: null,
+      digits: 30,
+      terminates: true,
+    });
+    expect(e.decimal(evaluateWith(e, '3/4'), 30)).toEqual({
+      re: '0.75',
+      im: null,
+      digits: 30,
+      terminates: true,
+    });
+    expect(e.decimal(evaluateWith(e, '-1/8'), 3)).toEqual({
+      re: '-0.125',
+      im: null,
+      digits: 3,
+      terminates: true,
+    });
+    expect(e.decimal(evaluateWith(e, '1/3'), 4)).toEqual({
+      re: '0.3333',
+      im: null,
+      digits: 4,
+      terminates: false,
+    });
+    expect(e.decimal(evaluateWith(e, '0'), 4)).toEqual({
+      re: '0',
+      im: null,
+      digits: 4,
+      terminates: true,
+    });
     expect(e.decimal(evaluateWith(e, '10^40'), 30)).toMatchObject({ re: '1e40', terminates: true });
   });
 
@@ -43,7 +69,9 @@ describe('decimals', () => {
       ['-sqrt(10^21+1)', new D('1e21').add(1).sqrt().neg()],
     ];
     for (const [source, d] of expected) {
-      expect(new D(decimal(source, digits)).eq(d.toSignificantDigits(digits, Decimal.ROUND_HALF_EVEN))).toBe(true);
+      expect(
+        new D(decimal(source, digits)).eq(d.toSignificantDigits(digits, Decimal.ROUND_HALF_EVEN)),
+      ).toBe(true);
     }
   });
 
@@ -56,11 +84,23 @@ describe('decimals', () => {
   it('see a value that nine digits of a tie hide', () => {
     // √(10⁴⁰+1) − 10²⁰ = 5·10⁻²¹ − 1.25·10⁻⁶¹ + …
     expect(decimal('sqrt(10^40+1)-10^20', 12)).toBe('5.00000000000e-21');
-    expect(decimal('sqrt(10^40+1)-10^20', 45)).toBe('4.99999999999999999999999999999999999999987500e-21');
+    expect(decimal('sqrt(10^40+1)-10^20', 45)).toBe(
+      '4.99999999999999999999999999999999999999987500e-21',
+    );
   });
 
   it('of complex numbers give both parts', () => {
-    expect(e.decimal(evaluateWith(e, 'sqrt(-2)+1/2'), 6)).toEqual({ re: '0.5', im: '1.41421', digits: 6, terminates: false });
-    expect(e.decimal(evaluateWith(e, '1/2-i/4'), 6)).toEqual({ re: '0.5', im: '-0.25', digits: 6, terminates: true });
+    expect(e.decimal(evaluateWith(e, 'sqrt(-2)+1/2'), 6)).toEqual({
+      re: '0.5',
+      im: '1.41421',
+      digits: 6,
+      terminates: false,
+    });
+    expect(e.decimal(evaluateWith(e, '1/2-i/4'), 6)).toEqual({
+      re: '0.5',
+      im: '-0.25',
+      digits: 6,
+      terminates: true,
+    });
   });
 });

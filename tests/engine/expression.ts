@@ -54,7 +54,9 @@ class Reader {
   }
 
   private negate(v: Value): Value {
-    return v.num ? { num: this.e.neg(v.num) } : { pi: { n: -(v.pi as { n: bigint }).n, d: (v.pi as { d: bigint }).d } };
+    return v.num
+      ? { num: this.e.neg(v.num) }
+      : { pi: { n: -(v.pi as { n: bigint }).n, d: (v.pi as { d: bigint }).d } };
   }
 
   private product(): Value {

@@ -15,7 +15,9 @@ describe('the interface', () => {
   });
 
   it('keeps the three ends apart: a value, outside the domain, over a limit', () => {
-    expect(e.attempt(() => e.div(e.integer(1), value('sqrt(2)+sqrt(3)-sqrt(5+2*sqrt(6))')))).toEqual({
+    expect(
+      e.attempt(() => e.div(e.integer(1), value('sqrt(2)+sqrt(3)-sqrt(5+2*sqrt(6))'))),
+    ).toEqual({
       kind: 'outside-domain',
       code: 'division-by-zero',
       message: 'The divisor is exactly 0.',
@@ -65,17 +67,30 @@ describe('the interface', () => {
     ];
     for (const [source, rational, integer, real] of rows) {
       const v = value(source);
-      expect([source, e.isRational(v), e.isInteger(v), e.isReal(v)]).toEqual([source, rational, integer, real]);
+      expect([source, e.isRational(v), e.isInteger(v), e.isReal(v)]).toEqual([
+        source,
+        rational,
+        integer,
+        real,
+      ]);
     }
     expect(e.asRational(value('sqrt(50)/sqrt(8)'))).toEqual({ n: 5n, d: 2n });
     expect(e.asRational(value('sqrt(2)'))).toBeNull();
   });
 
   it('floors and rounds exactly, ties to even', () => {
-    expect(['7/2', '5/2', '-5/2', '-7/2', '-1/2', '1/2', 'sqrt(2)', '-sqrt(2)'].map((s) => e.round(value(s)))).toEqual(
-      [4n, 2n, -2n, -4n, 0n, 0n, 1n, -1n],
-    );
-    expect(['7/2', '-7/2', 'sqrt(2)', '-sqrt(2)', '3'].map((s) => e.floor(value(s)))).toEqual([3n, -4n, 1n, -2n, 3n]);
+    expect(
+      ['7/2', '5/2', '-5/2', '-7/2', '-1/2', '1/2', 'sqrt(2)', '-sqrt(2)'].map((s) =>
+        e.round(value(s)),
+      ),
+    ).toEqual([4n, 2n, -2n, -4n, 0n, 0n, 1n, -1n]);
+    expect(['7/2', '-7/2', 'sqrt(2)', '-sqrt(2)', '3'].map((s) => e.floor(value(s)))).toEqual([
+      3n,
+      -4n,
+      1n,
+      -2n,
+      3n,
+    ]);
     expect(e.floor(value('sqrt(10^40+1)'))).toBe(10n ** 20n);
     expect(e.floor(value('sqrt(10^40-1)'))).toBe(10n ** 20n - 1n);
   });
@@ -87,11 +102,26 @@ describe('the interface', () => {
     expect(e.roundToMultiple(v, half, 'half-even')).toEqual({ multiple: 1837n, direction: 'up' });
     expect(e.roundToMultiple(v, half, 'down')).toEqual({ multiple: 1836n, direction: 'down' });
     expect(e.roundToMultiple(v, half, 'up')).toEqual({ multiple: 1837n, direction: 'up' });
-    expect(e.roundToMultiple(value('3/4'), half, 'half-even')).toEqual({ multiple: 2n, direction: 'up' });
-    expect(e.roundToMultiple(value('1/4'), half, 'half-even')).toEqual({ multiple: 0n, direction: 'down' });
-    expect(e.roundToMultiple(value('1/4'), half, 'half-up')).toEqual({ multiple: 1n, direction: 'up' });
-    expect(e.roundToMultiple(value('-1/4'), half, 'half-up')).toEqual({ multiple: 0n, direction: 'up' });
-    expect(e.roundToMultiple(value('5/2'), half, 'up')).toEqual({ multiple: 5n, direction: 'exact' });
+    expect(e.roundToMultiple(value('3/4'), half, 'half-even')).toEqual({
+      multiple: 2n,
+      direction: 'up',
+    });
+    expect(e.roundToMultiple(value('1/4'), half, 'half-even')).toEqual({
+      multiple: 0n,
+      direction: 'down',
+    });
+    expect(e.roundToMultiple(value('1/4'), half, 'half-up')).toEqual({
+      multiple: 1n,
+      direction: 'up',
+    });
+    expect(e.roundToMultiple(value('-1/4'), half, 'half-up')).toEqual({
+      multiple: 0n,
+      direction: 'up',
+    });
+    expect(e.roundToMultiple(value('5/2'), half, 'up')).toEqual({
+      multiple: 5n,
+      direction: 'exact',
+    });
   });
 
   it('parts, conjugates and absolute values of complex numbers', () => {

@@ -8,8 +8,18 @@ function sum(e: Engine, terms: Num[]): Num {
 describe('limits', () => {
   const over: [string, keyof typeof DEFAULT_LIMITS, string, (e: Engine) => unknown][] = [
     ['2^(10^9)', 'integerBits', 'limit-size', (e) => e.pow(e.integer(2), 10n ** 9n)],
-    ['(1/3)^(−10^12)', 'integerBits', 'limit-size', (e) => e.pow(e.rational(1n, 3n), -(10n ** 12n))],
-    ['(1+√2)^(10^9)', 'integerBits', 'limit-size', (e) => e.pow(e.add(e.integer(1), e.sqrt(e.integer(2))), 10n ** 9n)],
+    [
+      '(1/3)^(−10^12)',
+      'integerBits',
+      'limit-size',
+      (e) => e.pow(e.rational(1n, 3n), -(10n ** 12n)),
+    ],
+    [
+      '(1+√2)^(10^9)',
+      'integerBits',
+      'limit-size',
+      (e) => e.pow(e.add(e.integer(1), e.sqrt(e.integer(2))), 10n ** 9n),
+    ],
     ['an integer of 400 000 bits', 'integerBits', 'limit-size', (e) => e.integer(1n << 400_000n)],
     [
       'roots nested 60 deep',
@@ -39,7 +49,12 @@ describe('limits', () => {
     const outcome = e.attempt(() => {
       work(e);
     });
-    expect(outcome).toMatchObject({ kind: 'over-limit', code, limit, allowed: DEFAULT_LIMITS[limit] });
+    expect(outcome).toMatchObject({
+      kind: 'over-limit',
+      code,
+      limit,
+      allowed: DEFAULT_LIMITS[limit],
+    });
     if (outcome.kind === 'over-limit') {
       expect(outcome.met).toBeGreaterThan(outcome.allowed);
       expect(outcome.message).toContain(String(outcome.allowed));
@@ -49,7 +64,12 @@ describe('limits', () => {
   it('the inverse of a sum of 40 independent roots would have 2^40 terms and is refused', () => {
     const e = createEngine({ steps: 400_000 });
     const outcome = e.attempt(() => {
-      e.inverse(sum(e, Array.from({ length: 60 }, (_, i) => e.sqrt(e.integer(i + 2)))));
+      e.inverse(
+        sum(
+          e,
+          Array.from({ length: 60 }, (_, i) => e.sqrt(e.integer(i + 2))),
+        ),
+      );
     });
     expect(outcome.kind).toBe('over-limit');
   });
@@ -57,7 +77,10 @@ describe('limits', () => {
   it('a sum of 200 roots costs what its terms cost', () => {
     const e = createEngine();
     const outcome = e.attempt(() => {
-      const v = sum(e, Array.from({ length: 200 }, (_, i) => e.sqrt(e.integer(i + 2))));
+      const v = sum(
+        e,
+        Array.from({ length: 200 }, (_, i) => e.sqrt(e.integer(i + 2))),
+      );
       return [e.sign(v), e.decimal(v, 20).re, e.degree(v)];
     });
     // 46 primes lie below 202; the decimal by decimal.js.

@@ -7,11 +7,26 @@ import { evaluateWith } from './expression';
 const PARI: [string, number[]][] = [
   ['1/(1+sqrt(2)+sqrt(3))', [8, -16, 4, 4, -1]],
   ['sqrt(2+sqrt(3+sqrt(5)))', [1, 0, -8, 0, 18, 0, -8, 0, -4]],
-  ['sqrt(1+sqrt(2))+sqrt(1+sqrt(3))', [1, 0, -16, 0, 76, 0, -176, 0, -90, 0, 1040, 0, -2228, 0, -80, 0, 1]],
+  [
+    'sqrt(1+sqrt(2))+sqrt(1+sqrt(3))',
+    [1, 0, -16, 0, 76, 0, -176, 0, -90, 0, 1040, 0, -2228, 0, -80, 0, 1],
+  ],
   ['cos(2*pi/17)', [256, 128, -448, -192, 240, 80, -40, -8, 1]],
-  ['sin(2*pi/17)', [65536, 0, -278528, 0, 487424, 0, -452608, 0, 239360, 0, -71808, 0, 11424, 0, -816, 0, 17]],
-  ['cos(2*pi/51)', [65536, -32768, -262144, 131072, 421888, -210944, -347136, 173568, 152576, -76288, -33664, 16832, 3008, -1504, -64, 32, 1]],
-  ['sqrt(2)+sqrt(3)+sqrt(5)+sqrt(7)', [1, 0, -136, 0, 6476, 0, -141912, 0, 1513334, 0, -7453176, 0, 13950764, 0, -5596840, 0, 46225]],
+  [
+    'sin(2*pi/17)',
+    [65536, 0, -278528, 0, 487424, 0, -452608, 0, 239360, 0, -71808, 0, 11424, 0, -816, 0, 17],
+  ],
+  [
+    'cos(2*pi/51)',
+    [
+      65536, -32768, -262144, 131072, 421888, -210944, -347136, 173568, 152576, -76288, -33664,
+      16832, 3008, -1504, -64, 32, 1,
+    ],
+  ],
+  [
+    'sqrt(2)+sqrt(3)+sqrt(5)+sqrt(7)',
+    [1, 0, -136, 0, 6476, 0, -141912, 0, 1513334, 0, -7453176, 0, 13950764, 0, -5596840, 0, 46225],
+  ],
   ['sqrt(10+2*sqrt(5))/4+i*(sqrt(5)-1)/4', [1, 0, -1, 0, 1, 0, -1, 0, 1]],
   ['sqrt(2+i*sqrt(3))', [1, 0, -4, 0, 7]],
 ];
@@ -59,6 +74,19 @@ describe('minimal polynomials', () => {
       expect(e.degree(c)).toBe(direct.length - 1);
     },
   );
+
+  it('of a nest of complex roots is found although its tower of real roots is far larger', () => {
+    const e = createEngine();
+    // ((x² − 1)² − 1)² − 1 = i
+    const outcome = e.attempt(() => {
+      const x = evaluateWith(e, 'sqrt(1+sqrt(1+sqrt(1+i)))');
+      const p = e.minimalPolynomial(x);
+      let v = x;
+      for (let j = 0; j < 3; j++) v = e.sub(e.mul(v, v), e.integer(1));
+      return [e.degree(x), p.length, e.equal(v, e.i)];
+    });
+    expect(outcome).toEqual({ kind: 'value', value: [16, 17, true] });
+  });
 
   it('take roots of powers only of powers', () => {
     expect(powerRoot([1n, 2n, 1n], 2)).toEqual([1n, 1n]);

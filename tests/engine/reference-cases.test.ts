@@ -32,7 +32,8 @@ function inside(check: (e: Engine) => void): void {
 
 /** The reference gives 60 digits padded with zeros. */
 function sameDecimal(ours: string, theirs: string): void {
-  const strip = (s: string): string => (s.includes('.') && !s.includes('e') ? s.replace(/\.?0+$/, '') : s);
+  const strip = (s: string): string =>
+    s.includes('.') && !s.includes('e') ? s.replace(/\.?0+$/, '') : s;
   const [m, x] = theirs.split('e') as [string, string | undefined];
   const [n, y] = ours.split('e') as [string, string | undefined];
   expect(strip(n)).toBe(strip(m));
@@ -47,7 +48,8 @@ describe('values computed by other programs', () => {
       if (c.sign !== undefined && e.isReal(v)) expect(e.sign(v)).toBe(c.sign);
       if (c.zero !== undefined) expect(e.isZero(v)).toBe(c.zero);
       if (c.degree !== undefined) expect(e.degree(v)).toBe(c.degree);
-      if (c.minimalPolynomial) expect(e.minimalPolynomial(v).join()).toBe(c.minimalPolynomial.join());
+      if (c.minimalPolynomial)
+        expect(e.minimalPolynomial(v).join()).toBe(c.minimalPolynomial.join());
       const text = e.write(v).text;
       expect(e.equal(evaluateWith(e, text), v)).toBe(true);
       if (c.rhs !== undefined) {

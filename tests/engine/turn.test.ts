@@ -73,12 +73,16 @@ describe('parts of a turn', () => {
 
   it('the order of the cosines falls from 0 to half a turn', () => {
     const e = createEngine();
-    for (let k = 0n; k < 8n; k++) expect(e.compare(e.cosTurn(k, 17n), e.cosTurn(k + 1n, 17n))).toBe(1);
+    for (let k = 0n; k < 8n; k++)
+      expect(e.compare(e.cosTurn(k, 17n), e.cosTurn(k + 1n, 17n))).toBe(1);
   });
 
   it.each([7n, 9n, 11n, 13n, 14n, 25n, 49n, 289n, 65537n])('a turn over %i is not exact', (n) => {
     const e = createEngine();
-    expect(e.attempt(() => e.cosTurn(1n, n))).toMatchObject({ kind: 'outside-domain', code: 'not-exact' });
+    expect(e.attempt(() => e.cosTurn(1n, n))).toMatchObject({
+      kind: 'outside-domain',
+      code: 'not-exact',
+    });
   });
 
   it('negative counts and counts beyond a turn are taken modulo a turn', () => {

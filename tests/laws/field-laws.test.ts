@@ -12,7 +12,11 @@ function law(names: Tree[], check: (e: Engine, ...values: Num[]) => void): void 
     check(e, ...names.map((t) => valueOf(e, t)));
   });
   if (outcome.kind === 'outside-domain') fc.pre(outcome.code !== 'division-by-zero');
-  expect(outcome.kind === 'value' ? 'value' : `${outcome.kind}: ${outcome.message} (${names.map(show).join(', ')})`).toBe('value');
+  expect(
+    outcome.kind === 'value'
+      ? 'value'
+      : `${outcome.kind}: ${outcome.message} (${names.map(show).join(', ')})`,
+  ).toBe('value');
 }
 
 const RUNS = { numRuns: 60 };

@@ -12,7 +12,11 @@ function law(names: Tree[], check: (e: Engine, ...values: Num[]) => void): void 
     check(e, ...names.map((t) => valueOf(e, t)));
   });
   if (outcome.kind === 'outside-domain') fc.pre(outcome.code !== 'division-by-zero');
-  expect(outcome.kind === 'value' ? 'value' : `${outcome.kind}: ${outcome.message} (${names.map(show).join(', ')})`).toBe('value');
+  expect(
+    outcome.kind === 'value'
+      ? 'value'
+      : `${outcome.kind}: ${outcome.message} (${names.map(show).join(', ')})`,
+  ).toBe('value');
 }
 
 const RUNS = { numRuns: 50 };
@@ -86,6 +90,24 @@ describe.each(KINDS)('values in writing, %s', (_, arbitrary) => {
   });
 });
 
+describe('the order in which roots arrive', () => {
+  it.each(KINDS)('changes nothing in what is written, %s', (_, arbitrary) => {
+    fc.assert(
+      fc.property(arbitrary, arbitrary, arbitrary, (s, t, u) => {
+        let first = '';
+        law([s, t], (e, a, b) => {
+          first = e.write(e.add(a, b)).text;
+        });
+        law([u, t, s], (e, c, b, a) => {
+          e.mul(c, b);
+          expect(e.write(e.add(b, a)).text).toBe(first);
+        });
+      }),
+      RUNS,
+    );
+  });
+});
+
 describe('order and decimals', () => {
   it('agree with 200-digit arithmetic where that can tell', () => {
     fc.assert(
@@ -94,13 +116,15 @@ describe('order and decimals', () => {
         const y = approximate(t);
         fc.pre(x !== null && y !== null);
         law([s, t], (e, a, b) => {
-          const d = (x).sub(y);
+          const d = x.sub(y);
           if (d.abs().gt('1e-150')) expect(e.compare(a, b)).toBe(d.isNegative() ? -1 : 1);
           else expect(e.compare(a, b)).toBe(0);
-          if ((x).abs().gt('1e-100')) {
+          if (x.abs().gt('1e-100')) {
             const digits = e.decimal(a, 40).re;
-            expect(new Decimal(digits).eq((x).toSignificantDigits(40, Decimal.ROUND_HALF_EVEN))).toBe(true);
-            expect(e.floor(a)).toBe(BigInt((x).floor().toFixed(0)));
+            expect(new Decimal(digits).eq(x.toSignificantDigits(40, Decimal.ROUND_HALF_EVEN))).toBe(
+              true,
+            );
+            expect(e.floor(a)).toBe(BigInt(x.floor().toFixed(0)));
           }
         });
       }),

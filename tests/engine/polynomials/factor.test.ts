@@ -16,11 +16,14 @@ const poly = (minDegree: number, maxDegree: number): fc.Arbitrary<IntegerPoly> =
     .chain((low) => fc.bigInt({ min: 1n, max: 9n }).map((lead) => trim([...low, lead])));
 
 const productOf = (factors: readonly { poly: IntegerPoly; multiplicity: number }[]): IntegerPoly =>
-  factors.reduce<IntegerPoly>((product, factor) => {
-    let power = product;
-    for (let k = 0; k < factor.multiplicity; k++) power = multiplyPoly(power, factor.poly);
-    return power;
-  }, [1n]);
+  factors.reduce<IntegerPoly>(
+    (product, factor) => {
+      let power = product;
+      for (let k = 0; k < factor.multiplicity; k++) power = multiplyPoly(power, factor.poly);
+      return power;
+    },
+    [1n],
+  );
 
 /** f(x+√p)·f(x−√p): one step of Swinnerton-Dyer's polynomials, the minimal polynomials of √2+√3+√5+…. */
 function adjoinRoot(f: IntegerPoly, p: bigint): IntegerPoly {
