@@ -1,6 +1,6 @@
 /** Correctly rounded decimals, half to even. A tie can only come from a rational, and those are rounded by exact division. */
 
-import { enclose, floorDiv, signEl } from './enclosure';
+import { enclose, floorDiv, signEl, type Enclosure } from './enclosure';
 import { isRationalEl, isZeroEl, numerator } from './element';
 import { bitLength } from './integers';
 import type { El } from './tower';
@@ -14,10 +14,21 @@ export interface Part {
 /** `digits` significant digits of a real element. Cost: one enclosure of 3.4 bits for each digit, rarely a second. */
 export function decimalOf(x: El, digits: number): Part {
   if (isZeroEl(x)) return { text: '0', exact: true };
-  const negative = signEl(x) < 0;
-  const r = isRationalEl(x) ? rationalDigits(x, digits) : irrationalDigits(x, digits, negative);
+  if (!isRationalEl(x)) return irrationalDecimal((P) => enclose(x, P), digits, signEl(x) < 0);
+  const r = rationalDigits(x, digits);
   const body = layOut(r.figures, r.exponent, digits, r.exact);
-  return { text: negative ? `-${body}` : body, exact: r.exact };
+  return { text: signEl(x) < 0 ? `-${body}` : body, exact: r.exact };
+}
+
+/** `digits` significant digits of an irrational number that is given by enclosures and its sign. */
+export function irrationalDecimal(
+  encloseAt: (P: number) => Enclosure,
+  digits: number,
+  negative: boolean,
+): Part {
+  const r = irrationalDigits(encloseAt, digits, negative);
+  const body = layOut(r.figures, r.exponent, digits, false);
+  return { text: negative ? `-${body}` : body, exact: false };
 }
 
 interface Figures {
@@ -59,18 +70,22 @@ function compareWithPower(n: bigint, d: bigint, e: number): number {
   return l < r ? -1 : l > r ? 1 : 0;
 }
 
-function irrationalDigits(x: El, digits: number, negative: boolean): Figures {
+function irrationalDigits(
+  encloseAt: (P: number) => Enclosure,
+  digits: number,
+  negative: boolean,
+): Figures {
   let low: bigint;
   let P = 64;
   for (; ; P *= 2) {
-    const e = enclose(x, P);
+    const e = encloseAt(P);
     low = negative ? -e.high : e.low;
     if (low > 0n) break;
   }
   let exponent = Math.floor((bitLength(low) - P - 1) * 0.30103);
   P = Math.max(64, Math.ceil((digits - exponent) * 3.3219281) + 48);
   for (;;) {
-    const e = enclose(x, P);
+    const e = encloseAt(P);
     const s = digits - 1 - exponent;
     const a = nearest(negative ? -e.high : e.low, s, P);
     const b = nearest(negative ? -e.low : e.high, s, P);

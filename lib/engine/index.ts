@@ -14,19 +14,29 @@ import {
   real,
   sqrtCx,
   subCx,
-  type Cx,
 } from './complex';
-import { decimalOf } from './decimal';
+import { decimalOf, type Part } from './decimal';
 import { integerEl, isRationalEl, numerator, rationalEl, scaleEl, subEl } from './element';
-import { floorEl, signEl } from './enclosure';
+import { enclose, floorEl, signEl } from './enclosure';
 import * as Z from './int';
 import { bitLength } from './integers';
+import type { Algebraic } from './algebraic/algebraic';
+import { Beyond, isAlgebraic, type Value } from './algebraic/beyond';
+import { algebraicCosine } from './algebraic/cosine';
+import { nearestRoot } from './algebraic/near';
+import { trisectorReaches } from './algebraic/trisector';
+import {
+  decimalOfAlgebraic,
+  floorOfIrrational,
+  roundIrrational,
+  writeAlgebraic,
+} from './algebraic/writing';
 import { Budget, DEFAULT_LIMITS, OutsideDomain, OverLimit } from './limits';
 import { degreeOf, minimalPolynomialOf } from './minimal-polynomial';
 import { certificateOf } from './certificate';
 import { roundTo } from './rounding';
 import { Field, type El } from './tower';
-import { Cosine, cosineOf, sineOf } from './turn';
+import { Cosine, isConstructibleDivision } from './turn';
 import type {
   Certificate,
   Decimal,
@@ -35,6 +45,7 @@ import type {
   Multiple,
   Num,
   Outcome,
+  Reach,
   Rounding,
   TowerStep,
   Written,
@@ -54,6 +65,9 @@ export function createEngine(limits: Partial<Limits> = {}): Engine {
 class ExactEngine implements Engine {
   private readonly budget: Budget;
   private readonly field: Field;
+  private readonly beyond: Beyond;
+  /** The numbers beyond square roots that this engine has handed out. */
+  private readonly algebraic = new WeakSet<Algebraic>();
   private depth = 0;
   readonly i: Num;
 
@@ -67,6 +81,7 @@ class ExactEngine implements Engine {
     }
     this.budget = new Budget(all);
     this.field = new Field(this.budget, Z.mul);
+    this.beyond = new Beyond(this.field, this.budget);
     this.i = this.seal({ re: integerEl(this.field, 0), im: integerEl(this.field, 1) });
   }
 
@@ -108,86 +123,131 @@ class ExactEngine implements Engine {
   }
 
   add(a: Num, b: Num): Num {
-    return this.seal(addCx(this.open(a), this.open(b)));
+    const [x, y] = [this.open(a), this.open(b)];
+    return this.seal(isAlgebraic(x) || isAlgebraic(y) ? this.beyond.add(x, y) : addCx(x, y));
   }
   sub(a: Num, b: Num): Num {
-    return this.seal(subCx(this.open(a), this.open(b)));
+    const [x, y] = [this.open(a), this.open(b)];
+    if (isAlgebraic(x) || isAlgebraic(y)) return this.add(a, this.neg(b));
+    return this.seal(subCx(x, y));
   }
   mul(a: Num, b: Num): Num {
-    return this.seal(mulCx(this.open(a), this.open(b)));
+    const [x, y] = [this.open(a), this.open(b)];
+    return this.seal(isAlgebraic(x) || isAlgebraic(y) ? this.beyond.multiply(x, y) : mulCx(x, y));
   }
   div(a: Num, b: Num): Num {
-    return this.seal(mulCx(this.open(a), inverseCx(this.open(b))));
+    return this.mul(a, this.inverse(b));
   }
   neg(a: Num): Num {
-    return this.seal(negCx(this.open(a)));
+    const x = this.open(a);
+    return this.seal(isAlgebraic(x) ? this.beyond.negate(x) : negCx(x));
   }
   inverse(a: Num): Num {
-    return this.seal(inverseCx(this.open(a)));
+    const x = this.open(a);
+    return this.seal(isAlgebraic(x) ? this.beyond.invert(x) : inverseCx(x));
   }
   pow(a: Num, n: bigint): Num {
-    return this.seal(powCx(this.field, this.open(a), n));
+    const x = this.open(a);
+    return this.seal(isAlgebraic(x) ? this.beyond.power(x, n) : powCx(this.field, x, n));
   }
   sqrt(a: Num): Num {
-    return this.seal(sqrtCx(this.open(a)));
+    const x = this.open(a);
+    return this.seal(isAlgebraic(x) ? this.beyond.squareRoot(x) : sqrtCx(x));
+  }
+  realRoot(a: Num, index: number): Num {
+    if (!Number.isSafeInteger(index) || index < 1)
+      throw new RangeError('The index of a root is a positive integer.');
+    return this.seal(this.beyond.realRoot(this.open(a), index));
+  }
+  nearestRoot(polynomial: readonly bigint[], near: Num): Num {
+    const f = [...polynomial].reverse();
+    while (f.length > 0 && f[f.length - 1] === 0n) f.pop();
+    if (f.length < 2) throw new RangeError('nearestRoot() takes a polynomial of positive degree.');
+    this.budget.within('degree', f.length - 1);
+    const place = this.open(near);
+    const root = nearestRoot(
+      f,
+      (P) =>
+        isAlgebraic(place) ? place.box(P) : { re: enclose(place.re, P), im: enclose(place.im, P) },
+      this.budget,
+    );
+    return this.seal(this.beyond.settle(root));
   }
   re(a: Num): Num {
-    return this.seal(real(this.open(a).re));
+    const x = this.open(a);
+    return this.seal(isAlgebraic(x) ? this.beyond.re(x) : real(x.re));
   }
   im(a: Num): Num {
-    return this.seal(real(this.open(a).im));
+    const x = this.open(a);
+    return this.seal(isAlgebraic(x) ? this.beyond.im(x) : real(x.im));
   }
   conj(a: Num): Num {
-    return this.seal(conjCx(this.open(a)));
+    const x = this.open(a);
+    return this.seal(isAlgebraic(x) ? this.beyond.conjugate(x) : conjCx(x));
   }
   abs(a: Num): Num {
-    return this.seal(real(absCx(this.open(a))));
+    const x = this.open(a);
+    return this.seal(isAlgebraic(x) ? this.beyond.abs(x) : real(absCx(x)));
   }
 
   isZero(a: Num): boolean {
-    return isZeroCx(this.open(a));
+    const x = this.open(a);
+    return !isAlgebraic(x) && isZeroCx(x);
   }
   isReal(a: Num): boolean {
-    return isRealCx(this.open(a));
+    const x = this.open(a);
+    return isAlgebraic(x) ? x.isReal : isRealCx(x);
   }
   isRational(a: Num): boolean {
     const x = this.open(a);
-    return isRealCx(x) && isRationalEl(x.re);
+    return !isAlgebraic(x) && isRealCx(x) && isRationalEl(x.re);
   }
   isInteger(a: Num): boolean {
-    return this.isRational(a) && this.open(a).re.den === 1;
+    const x = this.open(a);
+    return !isAlgebraic(x) && isRealCx(x) && isRationalEl(x.re) && x.re.den === 1;
   }
   equal(a: Num, b: Num): boolean {
-    return equalCx(this.open(a), this.open(b));
+    const [x, y] = [this.open(a), this.open(b)];
+    return isAlgebraic(x) || isAlgebraic(y) ? this.beyond.equal(x, y) : equalCx(x, y);
   }
   sign(a: Num): -1 | 0 | 1 {
-    return signEl(this.realPart(a, 'sign'));
+    const x = this.realValue(a, 'sign');
+    return isAlgebraic(x) ? this.beyond.signOf(x) : signEl(x);
   }
   compare(a: Num, b: Num): -1 | 0 | 1 {
-    return signEl(subEl(this.realPart(a, 'order'), this.realPart(b, 'order')));
+    const [x, y] = [this.realValue(a, 'order'), this.realValue(b, 'order')];
+    if (!isAlgebraic(x) && !isAlgebraic(y)) return signEl(subEl(x, y));
+    return this.beyond.compare(this.open(a), this.open(b));
   }
   asRational(a: Num): { n: bigint; d: bigint } | null {
     const x = this.open(a);
-    if (!isRealCx(x) || !isRationalEl(x.re)) return null;
+    if (isAlgebraic(x) || !isRealCx(x) || !isRationalEl(x.re)) return null;
     return { n: BigInt(numerator(x.re)), d: BigInt(x.re.den) };
   }
   floor(a: Num): bigint {
-    return floorEl(this.realPart(a, 'floor'));
+    const x = this.realValue(a, 'floor');
+    return isAlgebraic(x) ? floorOfIrrational((P) => x.box(P).re) : floorEl(x);
   }
   round(a: Num): bigint {
-    return roundTo(this.realPart(a, 'nearest integer'), 'half-even').multiple;
+    return this.roundToMultiple(a, { n: 1n, d: 1n }, 'half-even').multiple;
   }
 
   cosTurn(k: bigint, n: bigint): Num {
-    return this.seal(new Cosine(this.field, ...this.turn(k, n)));
+    const [u, d] = this.turn(k, n);
+    if (isConstructibleDivision(d / gcd(u, d))) return this.seal(new Cosine(this.field, u, d));
+    const g = gcd(u, d);
+    const [division, part] = [d / g, (((u / g) % (d / g)) + d / g) % (d / g)];
+    // The largest degree that a division below 10⁴ can have is half of it; a cosine itself needs no arithmetic.
+    if (division > COSINE_DIVISION) this.budget.within('degree', Number(division));
+    return this.seal(
+      algebraicCosine(2n * part > division ? division - part : part, division, this.budget),
+    );
   }
   sinTurn(k: bigint, n: bigint): Num {
-    const [u, d] = this.turn(k, n);
-    return this.seal(new Cosine(this.field, 4n * u - d, 4n * d));
+    return this.cosTurn(4n * k - n, 4n * n);
   }
   rootOfUnity(k: bigint, n: bigint): Num {
-    const [u, d] = this.turn(k, n);
-    return this.seal({ re: cosineOf(this.field, u, d), im: sineOf(this.field, u, d) });
+    return this.add(this.cosTurn(k, n), this.mul(this.i, this.sinTurn(k, n)));
   }
   private turn(k: bigint, n: bigint): [bigint, bigint] {
     if (n === 0n) throw new OutsideDomain('division-by-zero', 'A turn is divided by 0.');
@@ -195,53 +255,95 @@ class ExactEngine implements Engine {
   }
 
   degree(a: Num): number {
-    return degreeOf(this.open(a));
+    const x = this.open(a);
+    return isAlgebraic(x) ? x.degree : degreeOf(x);
   }
   minimalPolynomial(a: Num): bigint[] {
-    return minimalPolynomialOf(this.open(a));
+    const x = this.open(a);
+    return isAlgebraic(x) ? [...x.poly].reverse() : minimalPolynomialOf(x);
+  }
+  reach(a: Num): Reach {
+    const x = this.open(a);
+    if (!isAlgebraic(x)) return { kind: 'constructible' };
+    const verdict = this.beyond.verdictOf(x);
+    const trisector = trisectorReaches(x, this.budget);
+    return { ...verdict, trisector, division: x.origin.division ?? null };
   }
 
   decimal(a: Num, digits: number): Decimal {
     if (!Number.isSafeInteger(digits) || digits < 1)
       throw new RangeError('decimal() takes a positive number of digits.');
     this.budget.within('digits', digits);
-    const x = this.open(a);
-    const re = decimalOf(x.re, digits);
-    if (isRealCx(x)) return { re: re.text, im: null, digits, terminates: re.exact };
-    const im = decimalOf(x.im, digits);
+    if (this.isReal(a)) {
+      const { text, exact } = this.part(a, digits);
+      return { re: text, im: null, digits, terminates: exact };
+    }
+    const re = this.part(this.re(a), digits);
+    const im = this.part(this.im(a), digits);
     return { re: re.text, im: im.text, digits, terminates: re.exact && im.exact };
+  }
+  private part(a: Num, digits: number): Part {
+    const x = this.open(a);
+    return isAlgebraic(x)
+      ? decimalOfAlgebraic(x, digits, this.beyond.signOf(x) < 0)
+      : decimalOf(x.re, digits);
   }
 
   roundToMultiple(a: Num, step: { n: bigint; d: bigint }, rounding: Rounding): Multiple {
     if (step.n <= 0n || step.d <= 0n) throw new RangeError('A step must be positive.');
-    const x = this.realPart(a, 'nearest multiple');
+    const x = this.realValue(a, 'nearest multiple');
+    if (isAlgebraic(x)) return roundIrrational((P) => x.box(P).re, step.d, step.n, rounding);
     return roundTo(scaleEl(x, Z.small(step.d), Z.small(step.n)), rounding);
   }
 
   write(a: Num): Written {
-    return writeValue(this.open(a));
+    const x = this.open(a);
+    return isAlgebraic(x) ? writeAlgebraic(x, this.budget) : writeValue(x);
   }
-  tower(a: Num): TowerStep[] {
-    return towerOf(this.open(a));
+  tower(a: Num): TowerStep[] | null {
+    const x = this.open(a);
+    return isAlgebraic(x) ? null : towerOf(x);
   }
   certificate(a: Num): Certificate {
-    return certificateOf(this.open(a));
-  }
-
-  private realPart(a: Num, what: string): El {
     const x = this.open(a);
-    if (!isRealCx(x))
-      throw new OutsideDomain('domain', `A number with an imaginary part has no ${what}.`);
-    return x.re;
+    if (isAlgebraic(x)) {
+      throw new OutsideDomain(
+        'not-exact',
+        'A certificate lists square roots, and square roots do not reach this number.',
+      );
+    }
+    return certificateOf(x);
   }
 
-  private seal(x: Cx): Num {
+  private realValue(a: Num, what: string): El | Algebraic {
+    const x = this.open(a);
+    if (isAlgebraic(x) ? !x.isReal : !isRealCx(x)) {
+      throw new OutsideDomain('domain', `A number with an imaginary part has no ${what}.`);
+    }
+    return isAlgebraic(x) ? x : x.re;
+  }
+
+  private seal(x: Value): Num {
+    if (isAlgebraic(x)) this.algebraic.add(x);
     return x as unknown as Num;
   }
 
-  private open(a: Num): Cx {
-    const x = a as unknown as Cx;
+  private open(a: Num): Value {
+    const x = a as unknown as Value;
+    if (isAlgebraic(x)) {
+      if (!this.algebraic.has(x)) throw new TypeError('A number of another engine was used.');
+      return x;
+    }
     if (x?.im?.t?.field !== this.field) throw new TypeError('A number of another engine was used.');
     return x;
   }
 }
+
+/** Cosines of divisions up to this one are made from their closed form; it takes some tens of milliseconds at the most. */
+const COSINE_DIVISION = 2000n;
+
+const gcd = (a: bigint, b: bigint): bigint => {
+  let [x, y] = [a < 0n ? -a : a, b];
+  while (y !== 0n) [x, y] = [y, x % y];
+  return x;
+};

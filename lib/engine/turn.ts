@@ -10,7 +10,6 @@
 
 import { addEl, integerEl, mulEl, negEl, scaleEl, subEl } from './element';
 import { sqrtReal } from './real-root';
-import { OutsideDomain } from './limits';
 import type { Cx } from './complex';
 import type { El, Field } from './tower';
 
@@ -34,8 +33,16 @@ export function cosineOf(f: Field, k: bigint, n: bigint): El {
 }
 
 /** sin(2πk/n) = cos of the complement. */
-export function sineOf(f: Field, k: bigint, n: bigint): El {
+function sineOf(f: Field, k: bigint, n: bigint): El {
   return cosineOf(f, 4n * k - n, 4n * n);
+}
+
+/** Whether n is a power of two times distinct Fermat primes up to 257, so that `cosineOf` covers it. */
+export function isConstructibleDivision(n: bigint): boolean {
+  let rest = n;
+  while (rest % 2n === 0n) rest /= 2n;
+  for (const p of FERMAT) if (rest % p === 0n) rest /= p;
+  return rest === 1n;
 }
 
 /** cos(2πk/n) as a number that builds its tower only when it is asked for more than its degree and polynomial. */
@@ -43,17 +50,13 @@ export class Cosine implements Cx {
   private made: El | null = null;
   readonly im: El;
 
-  /** Fails with `not-exact` at once where square roots do not reach. */
+  /** n in lowest terms is a constructible division. */
   constructor(
     private readonly f: Field,
     private readonly k: bigint,
     private readonly n: bigint,
   ) {
     this.im = f.zero;
-    let odd = this.parts;
-    while (odd % 2n === 0n) odd /= 2n;
-    for (const p of FERMAT) if (odd % p === 0n) odd /= p;
-    if (odd !== 1n) throw notExact(this.parts);
   }
 
   /** n in lowest terms. */
@@ -81,7 +84,8 @@ function makeCosine(f: Field, k: bigint, n: bigint): El {
   }
   const p = FERMAT.find((q) => n % q === 0n);
   const rest = p === undefined ? n : n / p;
-  if (p === undefined || rest % p === 0n) throw notExact(n);
+  if (p === undefined || rest % p === 0n)
+    throw new RangeError('The division is not constructible.');
   if (rest === 1n) return scaleEl(new Periods(f, Number(p)).twiceCosine(Number(k)), 1, 2);
   // k/n = a/p + b/rest.
   const a = mod(k * inverse(rest, p), p);
@@ -89,13 +93,6 @@ function makeCosine(f: Field, k: bigint, n: bigint): El {
   return subEl(
     mulEl(cosineOf(f, a, p), cosineOf(f, b, rest)),
     mulEl(sineOf(f, a, p), sineOf(f, b, rest)),
-  );
-}
-
-function notExact(n: bigint): OutsideDomain {
-  return new OutsideDomain(
-    'not-exact',
-    `A turn divided by ${n} has no exact cosine here; exact ones are had for a power of 2 times distinct primes out of 3, 5, 17 and 257.`,
   );
 }
 

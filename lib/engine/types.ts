@@ -121,6 +121,30 @@ export interface Certificate {
 }
 
 /**
+ * Which tools reach a number. The kinds other than `constructible` say why square roots do not reach it: its degree is
+ * no power of two; or its polynomial splits modulo a prime into factors whose degrees show an element of the Galois
+ * group of an order that is no power of two (Dedekind); or a field on the way down to the rationals has no quadratic
+ * step below it; or the question went over a limit. `division` is n for values that go with the division of a turn into n parts.
+ */
+export type Reach =
+  | { kind: 'constructible' }
+  | ((
+      | { kind: 'degree'; degree: number }
+      | {
+          kind: 'splitting';
+          degree: number;
+          splitting: { prime: number; degrees: readonly number[] };
+        }
+      | { kind: 'stuck'; degree: number }
+      | { kind: 'undecided'; degree: number }
+    ) & {
+      /** Whether an angle trisector helps, and what tells: the division, an order in the Galois group, a cubic's real roots. */
+      trisector:
+        { reaches: boolean; by: 'division' | 'order' | 'cubic' } | { reaches: null; by: 'open' };
+      division: bigint | null;
+    });
+
+/**
  * One engine serves one request: it holds the towers and caches of that request and nothing outside it.
  * The same calls in the same order give the same answers on every machine.
  *
@@ -150,6 +174,11 @@ export interface Engine {
   /** The principal square root: real part ≥ 0, and imaginary part ≥ 0 where the real part is 0. Denested where it can be. */
   sqrt(a: Num): Num;
 
+  /** The real root of this index of a real number, in square roots where they reach it; `domain` for an even root of a negative number. */
+  realRoot(a: Num, index: number): Num;
+  /** The root nearest to `near` of a polynomial of positive degree, highest power first; `domain` when two are equally near. */
+  nearestRoot(polynomial: readonly bigint[], near: Num): Num;
+
   re(a: Num): Num;
   im(a: Num): Num;
   conj(a: Num): Num;
@@ -172,7 +201,7 @@ export interface Engine {
   /** Nearest integer, ties to the even one; `domain` for a non-real number. */
   round(a: Num): bigint;
 
-  /** cos of k/n of a turn; `not-exact` where n parts cannot be had by square roots. */
+  /** cos of k/n of a turn, in square roots where they reach it; other divisions up to 2000. */
   cosTurn(k: bigint, n: bigint): Num;
   /** sin of k/n of a turn; as `cosTurn`. */
   sinTurn(k: bigint, n: bigint): Num;
@@ -191,8 +220,10 @@ export interface Engine {
 
   /** Text that parses back to the same value, and TeX. Equal values are written alike within one engine. */
   write(a: Num): Written;
-  /** The square roots that the value needs, lowest first. */
-  tower(a: Num): TowerStep[];
+  /** The square roots that the value needs, lowest first; null when square roots do not reach it. */
+  tower(a: Num): TowerStep[] | null;
+  /** Which tools reach the value, and why not. */
+  reach(a: Num): Reach;
   /** A certificate that an independent program can check. */
   certificate(a: Num): Certificate;
 }

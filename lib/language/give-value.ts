@@ -4,7 +4,7 @@ import { type ErrorCode, fail } from './failure';
 import { findUnit } from './names';
 import { type PiSum, asAlgebraic, decideByEnclosures, mapSum } from './pi-sum';
 import type { DecimalResult, Exact, NumberResult, Omission } from './result';
-import { TRANSCENDENTAL_REACH, reachOfAngle, reachOfConstructible } from './reach';
+import { OPEN_REACH, TRANSCENDENTAL_REACH, reachOfAngle, reachOfValue } from './reach';
 import { cutSize } from './cut';
 import { MOST_DIGITS, type Settings, type Step } from './settings';
 import { type AngleValue, type NumberValue, type Value, isRealValue } from './values';
@@ -99,7 +99,8 @@ function giveStructure(
     engine.minimalPolynomial(value).map(String),
   );
   const tower = attempt('tower', () => engine.tower(value));
-  const reach = reachOfConstructible(engine.isRational(value), tower?.length ?? null);
+  const verdict = engine.attempt(() => reachOfValue(engine, value, tower?.length ?? null));
+  const reach = verdict.kind === 'value' ? verdict.value : { ...OPEN_REACH };
   return {
     degree,
     minimalPolynomial: polynomial,
@@ -168,11 +169,17 @@ export function writeSum(engine: Engine, sum: PiSum): Exact {
   };
 }
 
+function writePowerOfPi(exponent: number): [text: string, tex: string] {
+  if (exponent === 1) return ['pi', '\\pi'];
+  if (exponent === 0.5) return ['sqrt(pi)', '\\sqrt{\\pi}'];
+  if (Number.isInteger(exponent)) return [`pi^${exponent}`, `\\pi^{${exponent}}`];
+  return [`pi^(${2 * exponent}/2)`, `\\pi^{${2 * exponent}/2}`];
+}
+
 function writeTerm(engine: Engine, exponent: number, coefficient: Num): Exact {
   const written = engine.write(coefficient);
   if (exponent === 0) return written;
-  const powerText = exponent === 1 ? 'pi' : `pi^${exponent}`;
-  const powerTex = exponent === 1 ? '\\pi' : `\\pi^{${exponent}}`;
+  const [powerText, powerTex] = writePowerOfPi(exponent);
   const rational = engine.asRational(coefficient);
   if (rational?.d === 1n && (rational.n === 1n || rational.n === -1n)) {
     const sign = rational.n < 0n ? '-' : '';

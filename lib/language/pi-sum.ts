@@ -2,8 +2,8 @@ import type { Engine, Num } from '../engine/index';
 import { fail } from './failure';
 
 /**
- * A finite sum of c·π^k with algebraic coefficients c and whole exponents k, negative ones included.
- * Since π is transcendental (Lindemann 1882) the powers of π are independent over the algebraic numbers: two sums are
+ * A finite sum of c·π^k with algebraic coefficients c and exponents k that are halves of integers, negative ones
+ * included. Since π and with it √π is transcendental (Lindemann 1882) these powers are independent over the algebraic numbers: two sums are
  * equal exactly when all their coefficients are, and a sum is algebraic exactly when only k = 0 occurs. Zero
  * coefficients are never kept, so the empty map is 0. Immutable.
  */
@@ -82,14 +82,14 @@ export function divideSums(engine: Engine, a: PiSum, b: PiSum): PiSum {
   return quotient;
 }
 
-/** √ of c·π^(2k), the principal root; of other sums with π in them there is no value of this form. */
+/** √ of c·π^k with a whole k, the principal root; of other sums with π in them there is no value of this form. */
 export function sqrtSum(engine: Engine, a: PiSum): PiSum {
   if (a.size === 0) return a;
   const [term] = a;
-  if (a.size > 1 || term === undefined || term[0] % 2 !== 0) {
+  if (a.size > 1 || term === undefined || !Number.isInteger(term[0])) {
     fail(
       'not-exact',
-      'The square root of this value with π in it is not a multiple of a whole power of π, so it has no exact form here.',
+      'The square root of this value with π in it is not a multiple of a power of π with a whole or half exponent, so it has no exact form here.',
     );
   }
   return new Map([[term[0] / 2, engine.sqrt(term[1])]]);
@@ -159,11 +159,25 @@ function boundsOfPower(exponent: number, bits: number): { low: bigint; high: big
   const one = 1n << shift;
   const base = boundsOfPi(bits);
   let [low, high] = [one, one];
-  for (let step = 0; step < Math.abs(exponent); step += 1) {
+  for (let step = 0; step < Math.floor(Math.abs(exponent)); step += 1) {
     low = (low * base.low) >> shift;
     high = ((high * base.high) >> shift) + 1n;
   }
+  if (!Number.isInteger(exponent)) {
+    low = (low * rootBelow(base.low << shift)) >> shift;
+    high = ((high * (rootBelow(base.high << shift) + 1n)) >> shift) + 1n;
+  }
   return exponent >= 0 ? { low, high } : { low: (one * one) / high, high: (one * one) / low + 1n };
+}
+
+/** The largest whole number whose square is at most n > 0, by Newton's iteration from above. */
+function rootBelow(n: bigint): bigint {
+  let root = 1n << BigInt((n.toString(2).length >> 1) + 1);
+  for (;;) {
+    const next = (root + n / root) >> 1n;
+    if (next >= root) return root;
+    root = next;
+  }
 }
 
 const MOST_BITS = 1 << 17;

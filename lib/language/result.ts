@@ -39,7 +39,8 @@ export interface DecimalResult {
 }
 
 export interface Reach {
-  straightedgeAndCompass: boolean;
+  /** null only where deciding went over a limit; the reason then says so. */
+  straightedgeAndCompass: boolean | null;
   withTrisector: boolean | null;
   reason: string;
 }

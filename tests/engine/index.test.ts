@@ -28,7 +28,7 @@ describe('the interface', () => {
     expect(code(e.attempt(() => e.compare(e.sqrt(e.integer(2)), e.i)))).toBe('domain');
     expect(code(e.attempt(() => e.sign(e.i)))).toBe('domain');
     expect(code(e.attempt(() => e.floor(e.i)))).toBe('domain');
-    expect(code(e.attempt(() => e.cosTurn(1n, 7n)))).toBe('not-exact');
+    expect(code(e.attempt(() => e.certificate(e.cosTurn(1n, 7n))))).toBe('not-exact');
   });
 
   it('throws for mistakes of the program', () => {

@@ -77,11 +77,22 @@ describe('parts of a turn', () => {
       expect(e.compare(e.cosTurn(k, 17n), e.cosTurn(k + 1n, 17n))).toBe(1);
   });
 
-  it.each([7n, 9n, 11n, 13n, 14n, 25n, 49n, 289n, 65537n])('a turn over %i is not exact', (n) => {
+  it.each([7n, 9n, 11n, 13n, 14n, 25n, 49n, 289n])(
+    'a turn over %i has no tower and keeps its exact value',
+    (n) => {
+      const e = createEngine();
+      const cosine = e.cosTurn(1n, n);
+      expect(e.tower(cosine)).toBeNull();
+      expect(e.reach(cosine)).toMatchObject({ kind: 'degree', division: n });
+      expect(e.equal(cosine, e.cosTurn(n - 1n, n))).toBe(true);
+    },
+  );
+
+  it('a division beyond the closed forms is a named limit', () => {
     const e = createEngine();
-    expect(e.attempt(() => e.cosTurn(1n, n))).toMatchObject({
-      kind: 'outside-domain',
-      code: 'not-exact',
+    expect(e.attempt(() => e.cosTurn(1n, 65537n))).toMatchObject({
+      kind: 'over-limit',
+      limit: 'degree',
     });
   });
 

@@ -76,7 +76,7 @@ describe('values in writing', () => {
   it('lists the roots of the tower, lowest first and no more than the degree asks', () => {
     const e = createEngine();
     const tower = (s: string): string[] =>
-      e.tower(evaluateWith(e, s)).map((t) => `${t.name} ${t.radicand}`);
+      (e.tower(evaluateWith(e, s)) ?? []).map((t) => `${t.name} ${t.radicand}`);
     expect(tower('3/4')).toEqual([]);
     expect(tower('sqrt(6)')).toEqual(['r1 6']);
     expect(tower('sqrt(2)+sqrt(3)+sqrt(6)')).toEqual(['r1 2', 'r2 3']);

@@ -143,6 +143,44 @@ describe('decisions', () => {
   });
 });
 
+describe('values that straightedge and compass do not reach', () => {
+  it.each([
+    ['cos(2*pi/7)', 'cos(2*pi/7)', 3, false, true],
+    ['cbrt(2)', 'cbrt(2)', 3, false, false],
+    ['cos(20 deg)', 'cos(pi/9)', 3, false, true],
+    ['2^(1/5)', '2^(1/5)', 5, false, false],
+    ['root(x^4 - x - 1, 1.2)', 'root(x^4-x-1, 1.22)', 4, false, false],
+    ['sqrt(pi)', 'sqrt(pi)', null, false, false],
+  ])('%s', (source, text, degree, compass, trisector) => {
+    const result = evaluateExpression(source);
+    expect(result).toMatchObject({
+      kind: 'number',
+      exact: { text },
+      degree,
+      tower: null,
+      reach: { straightedgeAndCompass: compass, withTrisector: trisector },
+    });
+    expect(evaluateExpression(`(${source}) == ${text}`)).toMatchObject({ truth: { value: true } });
+  });
+
+  it('keep the polynomial of the result schema', () => {
+    expect(evaluateExpression('cos(2*pi/7)')).toMatchObject({
+      minimalPolynomial: ['8', '4', '-4', '-1'],
+    });
+  });
+
+  it('give square roots back where an expression comes out in them', () => {
+    for (const [source, text] of [
+      ['cbrt(2+sqrt(5)) + cbrt(2-sqrt(5))', '1'],
+      ['cos(2*pi/7)*cos(4*pi/7)*cos(6*pi/7)', '1/8'],
+      ['root(x^4 - 10 x^2 + 1, 3)', 'sqrt(2)+sqrt(3)'],
+      ['sqrt(pi)^2/pi', '1'],
+    ] as const) {
+      expect(evaluateExpression(source)).toMatchObject({ kind: 'number', exact: { text } });
+    }
+  });
+});
+
 describe('errors of a line, at their place', () => {
   it.each([
     ['1/0', 'division-by-zero', '0'],
@@ -170,12 +208,11 @@ describe('errors of a line, at their place', () => {
     ['sin(2 mm)', 'unit-mismatch', 'sin(2 mm)'],
     ['(2 mm) (3 deg)', 'unit-mismatch', '(2 mm) (3 deg)'],
     ['round(2.5 mm)', 'unit-mismatch', 'round(2.5 mm)'],
-    ['cos(2*pi/7)', 'not-exact', 'cos(2*pi/7)'],
     ['1 + sin(1)', 'not-exact', 'sin(1)'],
-    ['cbrt(2)', 'not-exact', 'cbrt(2)'],
+    ['root(x^2 - 2, 0)', 'domain', 'root(x^2 - 2, 0)'],
     ['2^sqrt(2)', 'not-exact', '2^sqrt(2)'],
     ['1/(1 + pi)', 'not-exact', '(1 + pi)'],
-    ['sqrt(pi)', 'not-exact', 'sqrt(pi)'],
+    ['sqrt(1 + pi)', 'not-exact', 'sqrt(1 + pi)'],
     ['1 + sqtr', 'unknown-name', 'sqtr'],
     ['9^9^9', 'limit-size', '9^9^9'],
     ['2^(10^30)', 'limit-size', '2^(10^30)'],

@@ -1,7 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { terminatingDecimal } from '@/lib/language/decimals';
 import { decideDivision } from '@/lib/language/divisions';
-import { wholeRoot, wholeRootsOfCubic } from '@/lib/language/functions/whole-roots';
 import { orderByDependence } from '@/lib/language/graph';
 import { ACTIONS } from '@/lib/language/functions/index';
 import { FUNCTIONS } from '@/lib/language/names';
@@ -42,28 +41,6 @@ describe('divisions of the circle', () => {
   it('leaves open what trial division does not settle', () => {
     const large = 1_000_003n * 1_000_033n;
     expect(decideDivision(large)).toMatchObject({ compass: false, trisector: null });
-  });
-});
-
-describe('whole roots', () => {
-  it('are found for powers and for nothing between them', () => {
-    for (const n of range(-30, 30).map(BigInt)) expect(wholeRoot(n ** 3n, 3)).toBe(n);
-    for (const n of range(0, 30).map(BigInt)) expect(wholeRoot(n ** 4n, 4)).toBe(n);
-    expect(wholeRoot(2n, 2)).toBeNull();
-    expect(wholeRoot(-4n, 2)).toBeNull();
-    expect(wholeRoot(10n ** 300n + 1n, 3)).toBeNull();
-  });
-
-  it('of cubics are all found', () => {
-    for (const a of range(-6, 6)) {
-      for (const b of range(-6, 6)) {
-        // t³ + p t + q with the roots a, b and -(a + b).
-        const p = BigInt(a * b - (a + b) ** 2);
-        const q = BigInt(a * b * (a + b));
-        expect(new Set(wholeRootsOfCubic(p, q))).toEqual(new Set([a, b, -(a + b)].map(BigInt)));
-      }
-    }
-    expect(wholeRootsOfCubic(1n, 1n)).toEqual([]);
   });
 });
 

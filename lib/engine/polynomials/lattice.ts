@@ -17,76 +17,120 @@ function nearest(a: bigint, b: bigint): bigint {
   return twice < 0n && q * 2n * b !== twice ? q - 1n : q;
 }
 
+/** Integral Gram–Schmidt data of growing rows: λ and the Gram determinants d, kept up to date by the steps. */
+class GramSchmidt {
+  readonly d: bigint[] = [1n];
+  private readonly lambda: bigint[][] = [];
+
+  constructor(private readonly rows: Row[]) {}
+
+  get known(): number {
+    return this.lambda.length;
+  }
+
+  determinant(k: number): bigint {
+    return this.d[k] as bigint;
+  }
+
+  coefficient(i: number, j: number): bigint {
+    return (this.lambda[i] as bigint[])[j] as bigint;
+  }
+
+  /** Takes the next row in. */
+  extend(): void {
+    const k = this.known;
+    const own: bigint[] = [];
+    this.lambda.push(own);
+    for (let j = 0; j <= k; j++) {
+      let u = dot(this.rows[k] as Row, this.rows[j] as Row);
+      for (let i = 0; i < j; i++) {
+        u =
+          (this.determinant(i + 1) * u - (own[i] as bigint) * this.coefficient(j, i)) /
+          this.determinant(i);
+      }
+      // The last entry stands for d[k+1] and is not used as a coefficient.
+      own.push(u);
+      if (j === k) this.d[k + 1] = u;
+    }
+    if (this.d[k + 1] === 0n) throw new RangeError('the rows are linearly dependent');
+  }
+
+  /** Subtracts the nearest multiple of row l from row k > l. */
+  sizeReduce(k: number, l: number): void {
+    const doubled = 2n * this.coefficient(k, l);
+    if ((doubled < 0n ? -doubled : doubled) <= this.determinant(l + 1)) return;
+    const q = nearest(this.coefficient(k, l), this.determinant(l + 1));
+    const target = this.rows[k] as Row;
+    const source = this.rows[l] as Row;
+    for (let c = 0; c < target.length; c++) {
+      target[c] = (target[c] as bigint) - q * (source[c] as bigint);
+    }
+    const own = this.lambda[k] as bigint[];
+    own[l] = this.coefficient(k, l) - q * this.determinant(l + 1);
+    for (let i = 0; i < l; i++) own[i] = this.coefficient(k, i) - q * this.coefficient(l, i);
+  }
+
+  /** Exchanges rows k−1 and k. */
+  swap(k: number): void {
+    const { rows, d } = this;
+    [rows[k], rows[k - 1]] = [rows[k - 1] as Row, rows[k] as Row];
+    const own = this.lambda[k] as bigint[];
+    const previous = this.lambda[k - 1] as bigint[];
+    for (let j = 0; j < k - 1; j++) {
+      [own[j], previous[j]] = [previous[j] as bigint, own[j] as bigint];
+    }
+    const l = this.coefficient(k, k - 1);
+    const [before, at, after] = [
+      this.determinant(k - 1),
+      this.determinant(k),
+      this.determinant(k + 1),
+    ];
+    const b = (before * after + l * l) / at;
+    for (let i = k + 1; i < this.known; i++) {
+      const row = this.lambda[i] as bigint[];
+      const t = this.coefficient(i, k);
+      row[k] = (after * this.coefficient(i, k - 1) - l * t) / at;
+      row[k - 1] = (b * t + l * (row[k])) / after;
+    }
+    d[k] = b;
+  }
+}
+
 /**
  * Reduces linearly independent rows in place (δ = 3/4) and returns the Gram determinants d₀ = 1, d₁, …, d_n:
  * the squared length of the k-th Gram–Schmidt vector (k from 1) is d_k / d_{k−1}.
  * Cost: O(n⁴ log B) operations on integers of O(n log B) bits for rows of length up to B.
  */
 export function reduceLattice(rows: Row[]): bigint[] {
-  const n = rows.length;
-  const d: bigint[] = new Array<bigint>(n + 1).fill(0n);
-  d[0] = 1n;
-  const lambda: bigint[][] = rows.map(() => new Array<bigint>(n).fill(0n));
-  const L = (i: number, j: number): bigint => (lambda[i] as bigint[])[j] as bigint;
-  const D = (k: number): bigint => d[k] as bigint;
-
-  const orthogonalise = (k: number): void => {
-    for (let j = 0; j <= k; j++) {
-      let u = dot(rows[k] as Row, rows[j] as Row);
-      for (let i = 0; i < j; i++) u = (D(i + 1) * u - L(k, i) * L(j, i)) / D(i);
-      if (j < k) (lambda[k] as bigint[])[j] = u;
-      else d[k + 1] = u;
-    }
-    if (d[k + 1] === 0n) throw new RangeError('the rows are linearly dependent');
-  };
-
-  const sizeReduce = (k: number, l: number): void => {
-    const doubled = 2n * L(k, l);
-    if ((doubled < 0n ? -doubled : doubled) <= D(l + 1)) return;
-    const q = nearest(L(k, l), D(l + 1));
-    const target = rows[k] as Row;
-    const source = rows[l] as Row;
-    for (let c = 0; c < target.length; c++) {
-      target[c] = (target[c] as bigint) - q * (source[c] as bigint);
-    }
-    const lk = lambda[k] as bigint[];
-    lk[l] = L(k, l) - q * D(l + 1);
-    for (let i = 0; i < l; i++) lk[i] = L(k, i) - q * L(l, i);
-  };
-
-  const swap = (k: number, known: number): void => {
-    [rows[k], rows[k - 1]] = [rows[k - 1] as Row, rows[k] as Row];
-    const lk = lambda[k] as bigint[];
-    const lp = lambda[k - 1] as bigint[];
-    for (let j = 0; j < k - 1; j++) [lk[j], lp[j]] = [lp[j] as bigint, lk[j] as bigint];
-    const l = L(k, k - 1);
-    const b = (D(k - 1) * D(k + 1) + l * l) / D(k);
-    for (let i = k + 1; i <= known; i++) {
-      const li = lambda[i] as bigint[];
-      const t = L(i, k);
-      li[k] = (D(k + 1) * L(i, k - 1) - l * t) / D(k);
-      li[k - 1] = (b * t + l * (li[k] as bigint)) / D(k + 1);
-    }
-    d[k] = b;
-  };
-
-  let known = 0;
-  if (n > 0) orthogonalise(0);
+  const data = new GramSchmidt(rows);
+  if (rows.length > 0) data.extend();
   let k = 1;
-  while (k < n) {
-    if (k > known) {
-      known = k;
-      orthogonalise(k);
-    }
-    sizeReduce(k, k - 1);
-    const l = L(k, k - 1);
-    if (4n * D(k + 1) * D(k - 1) < 3n * D(k) * D(k) - 4n * l * l) {
-      swap(k, known);
+  while (k < rows.length) {
+    if (k >= data.known) data.extend();
+    data.sizeReduce(k, k - 1);
+    const l = data.coefficient(k, k - 1);
+    const d = data.determinant(k);
+    if (4n * data.determinant(k + 1) * data.determinant(k - 1) < 3n * d * d - 4n * l * l) {
+      data.swap(k);
       k = Math.max(1, k - 1);
     } else {
-      for (let j = k - 2; j >= 0; j--) sizeReduce(k, j);
+      for (let j = k - 2; j >= 0; j--) data.sizeReduce(k, j);
       k++;
     }
   }
-  return d;
+  return data.d;
+}
+
+/**
+ * The target minus a lattice vector near to it (Babai 1986, nearest plane) for a full-rank reduced basis: the
+ * only vector of its class whose components along the Gram–Schmidt vectors are at most half their length.
+ */
+export function reduceAgainst(basis: readonly Row[], target: Row): Row {
+  // One more coordinate keeps the target independent of a basis of the whole space.
+  const rows: Row[] = [...basis.map((row) => [...row, 0n]), [...target, 1n]];
+  const data = new GramSchmidt(rows);
+  for (let k = 0; k < rows.length; k++) data.extend();
+  const last = rows.length - 1;
+  for (let l = last - 1; l >= 0; l--) data.sizeReduce(last, l);
+  return (rows[last] as Row).slice(0, -1);
 }

@@ -1,5 +1,4 @@
 import type { Engine, Num } from '../../engine/index';
-import { decideDivision } from '../divisions';
 import { fail } from '../failure';
 import { asAlgebraic } from '../pi-sum';
 import { type NumberValue, type Value, angle, describe, needAlgebraic, number } from '../values';
@@ -41,22 +40,15 @@ export function turnsOf(engine: Engine, value: Value): Num {
 }
 
 /**
- * The angle as k/n of a turn whose division can be struck; `not-exact`, naming the division, otherwise.
- * An irrational algebraic part of a turn has transcendental sine and cosine (Gelfond 1934, Schneider 1934).
+ * The angle as k/n of a turn.
+ * An irrational algebraic part of a turn has transcendental sine and cosine (Gelfond 1934, Schneider 1934): `not-exact`.
  */
-function strikablePart(engine: Engine, value: Value): TurnPart {
+function partOfTurn(engine: Engine, value: Value): TurnPart {
   const part = engine.asRational(turnsOf(engine, value));
   if (part === null) {
     return fail(
       'not-exact',
       'The angle is an irrational part of a turn, so its sine and cosine are transcendental (Gelfond and Schneider) and have no exact form.',
-    );
-  }
-  const reach = decideDivision(part.d);
-  if (!reach.compass) {
-    fail(
-      'not-exact',
-      `This needs the division of a turn into ${part.d} equal parts, which straightedge and compass cannot make because ${reach.why} (Gauss and Wantzel), so there is no exact form in square roots.`,
     );
   }
   return { k: part.n, n: part.d };
@@ -65,17 +57,17 @@ function strikablePart(engine: Engine, value: Value): TurnPart {
 const plain = (engine: Engine, value: Num): NumberValue => number(fromNum(engine, value));
 
 export function cosine(engine: Engine, value: Value): NumberValue {
-  const { k, n } = strikablePart(engine, value);
+  const { k, n } = partOfTurn(engine, value);
   return plain(engine, engine.cosTurn(k, n));
 }
 
 export function sine(engine: Engine, value: Value): NumberValue {
-  const { k, n } = strikablePart(engine, value);
+  const { k, n } = partOfTurn(engine, value);
   return plain(engine, engine.sinTurn(k, n));
 }
 
 export function tangent(engine: Engine, value: Value): NumberValue {
-  const { k, n } = strikablePart(engine, value);
+  const { k, n } = partOfTurn(engine, value);
   const below = engine.cosTurn(k, n);
   if (engine.isZero(below))
     fail(
@@ -146,11 +138,39 @@ function turnsWithCosine(engine: Engine, value: Num, name: string): Num {
   );
 }
 
-/** All n with a division that can be struck whose cosine has this degree. */
+/**
+ * All n whose cosine has this degree, φ(n) = 2·degree; degree 1 leaves 4 and 6 apart from the whole turns' own ±1.
+ * With φ(n) ≥ √(n/2) only n ≤ 8·degree² come into question; beyond the divisions that the engine knows, only
+ * those that can be struck are looked at.
+ */
 function divisionsOfDegree(degree: bigint): bigint[] {
   if (degree === 1n) return [4n, 6n];
-  const found: bigint[] = [];
   const totient = 2n * degree;
+  const limit = 8n * degree * degree;
+  const found: bigint[] = [];
+  for (let n = 3n; n <= limit && n <= LARGEST_PLAIN_DIVISION; n += 1n) {
+    if (totientOf(n) === totient) found.push(n);
+  }
+  return [...found, ...strikableDivisions(totient).filter((n) => n > LARGEST_PLAIN_DIVISION)];
+}
+
+/** The engine has the cosines of every division up to this one. */
+const LARGEST_PLAIN_DIVISION = 2000n;
+
+function totientOf(n: bigint): bigint {
+  let rest = n;
+  let totient = n;
+  for (let p = 2n; p * p <= rest; p += 1n) {
+    if (rest % p !== 0n) continue;
+    totient -= totient / p;
+    while (rest % p === 0n) rest /= p;
+  }
+  return rest > 1n ? totient - totient / rest : totient;
+}
+
+/** All n of this totient with a division that can be struck. */
+function strikableDivisions(totient: bigint): bigint[] {
+  const found: bigint[] = [];
   const primes = [3n, 5n, 17n, 257n, 65537n];
   for (let choice = 0; choice < 1 << primes.length; choice += 1) {
     const chosen = primes.filter((_, index) => (choice >> index) & 1);

@@ -3,14 +3,18 @@ import { fail } from '../failure';
 import type { Polynomial } from '../polynomial';
 
 /**
- * The real root of a polynomial that lies nearest to a real place.
- * Covered: polynomials that linear and quadratic equations solve, that is of degree 1 and 2 and those in x^(2^k) of
- * such a degree, times powers of x. Others: `not-exact`. Two roots equally near: `domain`. The root returned has been
- * put back into the polynomial.
+ * The root of a polynomial that lies nearest to a place. With rational coefficients every root counts, real or not,
+ * and the answer is exact whatever the degree up to the limit. With other real coefficients the real roots that linear
+ * and quadratic equations give are covered, also in x^(2^k). Two roots equally near: `domain`.
  */
 export function nearestRoot(engine: Engine, polynomial: Polynomial, near: Num): Num {
+  const rational = integerCoefficients(engine, polynomial);
+  if (rational !== null && polynomial.length > 1) return engine.nearestRoot(rational, near);
   if (!engine.isReal(near) || !polynomial.every((coefficient) => engine.isReal(coefficient))) {
-    fail('domain', 'root needs real coefficients and a real place near the root.');
+    fail(
+      'domain',
+      'root needs rational coefficients, or real ones and a real place near the root.',
+    );
   }
   if (polynomial.length < 2)
     fail('domain', 'root needs a polynomial in which x occurs, as in `root(x^2 - 2, 1)`.');
@@ -33,6 +37,18 @@ export function nearestRoot(engine: Engine, polynomial: Polynomial, near: Num): 
   if (!engine.isZero(evaluate(engine, polynomial, best)))
     throw new Error('A root that was found does not satisfy its polynomial.');
   return best;
+}
+
+/** Whole coefficients of a multiple of the polynomial, highest power first, or null when one is irrational. */
+function integerCoefficients(engine: Engine, polynomial: Polynomial): bigint[] | null {
+  const fractions = polynomial.map((coefficient) => engine.asRational(coefficient));
+  const common = fractions.reduce((product, fraction) => product * (fraction?.d ?? 1n), 1n);
+  const whole: bigint[] = [];
+  for (const fraction of fractions) {
+    if (fraction === null) return null;
+    whole.push((fraction.n * common) / fraction.d);
+  }
+  return whole.reverse();
 }
 
 function realRoots(engine: Engine, polynomial: Polynomial): Num[] {

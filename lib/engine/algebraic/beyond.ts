@@ -1,0 +1,218 @@
+/**
+ * Numbers of both kinds together: elements of the tower, and algebraic numbers that no square roots reach.
+ *
+ * Whatever an operation gives is settled: a rational or constructible outcome goes back into the tower as nested
+ * square roots, everything else stays an irreducible polynomial with one of its roots enclosed.
+ */
+import { isRealCx, real } from '../complex';
+import { isRationalEl, integerEl, numerator, rationalEl } from '../element';
+import { enclose } from '../enclosure';
+import * as Z from '../int';
+import type { Budget } from '../limits';
+import type { Cx } from '../complex';
+import { minimalPolynomialOf } from '../minimal-polynomial';
+import type { Field } from '../tower';
+import { Algebraic, isFraction, refining, type Fraction, type Root } from './algebraic';
+import { isolate } from './newton';
+import * as operations from './operations';
+import { nameRoot, principalSquareRoot, realRoot } from './principal';
+import { quadraticChain, type Chain } from './quadratic-chain';
+import { toTower } from './square-roots';
+
+export type Value = Cx | Algebraic;
+
+export const isAlgebraic = (x: unknown): x is Algebraic => x instanceof Algebraic;
+
+/** The chain of subfields is worked out up to this degree; above it the verdict is left open. */
+const CHAIN_DEGREE = 16;
+/** Work that one verdict may take, in the units of the step budget. */
+const CHAIN_WORK = 3_000_000;
+
+/** What is known about square roots reaching a number: a chain's refusal, or a limit that was met. */
+export type Verdict =
+  Exclude<Chain, { kind: 'chain' }> | { readonly kind: 'undecided'; readonly degree: number };
+
+class TooLong extends Error {}
+
+export class Beyond {
+  private readonly roots = new WeakMap<Cx, Root>();
+  private readonly verdicts = new WeakMap<Algebraic, Verdict>();
+
+  constructor(
+    private readonly field: Field,
+    private readonly budget: Budget,
+  ) {}
+
+  /** A value of the tower as an algebraic number, by its minimal polynomial and its enclosures. */
+  private rootOf(x: Value): Root {
+    if (isAlgebraic(x)) return x;
+    const known = this.roots.get(x);
+    if (known !== undefined) return known;
+    const made = this.makeRoot(x);
+    this.roots.set(x, made);
+    return made;
+  }
+
+  private makeRoot(x: Cx): Root {
+    if (isRealCx(x) && isRationalEl(x.re)) {
+      return { n: BigInt(numerator(x.re)), d: BigInt(x.re.den) };
+    }
+    const poly = [...minimalPolynomialOf(x)].reverse();
+    for (let P = 64; ; P *= 2) {
+      const box = isolate(poly, { re: enclose(x.re, P), im: enclose(x.im, P) }, P);
+      if (box === null) continue;
+      return new Algebraic(poly, isRealCx(x), refining(poly, box, P, this.budget));
+    }
+  }
+
+  private rational({ n, d }: Fraction): Cx {
+    return real(rationalEl(this.field, Z.small(n), Z.small(d)));
+  }
+
+  /** Brings an outcome back into the tower where it belongs there. */
+  settle(root: Root): Value {
+    if (isFraction(root)) return this.rational(root);
+    const chain = this.chainOf(root);
+    if (chain.kind === 'chain') return toTower(this.field, root, chain);
+    this.verdicts.set(root, chain);
+    return root;
+  }
+
+  private chainOf(a: Algebraic): Chain | Verdict {
+    if (a.origin.division !== undefined) return { kind: 'degree', degree: a.degree };
+    let spent = 0;
+    const charge = (work: number): void => {
+      spent += work;
+      if (spent > CHAIN_WORK) throw new TooLong();
+      this.budget.charge(work);
+    };
+    const undecided: Verdict = { kind: 'undecided', degree: a.degree };
+    const isPowerOfTwo = (a.degree & (a.degree - 1)) === 0;
+    if (isPowerOfTwo && a.degree > CHAIN_DEGREE) return undecided;
+    try {
+      return quadraticChain(a.poly, charge);
+    } catch (error) {
+      if (error instanceof TooLong) return undecided;
+      throw error;
+    }
+  }
+
+  /** Why square roots do not reach a settled number. */
+  verdictOf(a: Algebraic): Verdict {
+    const verdict = this.verdicts.get(a);
+    if (verdict !== undefined) return verdict;
+    const chain = this.chainOf(a);
+    if (chain.kind === 'chain') throw new RangeError('a constructible number was not settled');
+    this.verdicts.set(a, chain);
+    return chain;
+  }
+
+  add(a: Value, b: Value): Value {
+    return this.settleSimple(a, b, operations.add(this.rootOf(a), this.rootOf(b), this.budget));
+  }
+
+  multiply(a: Value, b: Value): Value {
+    return this.settleSimple(
+      a,
+      b,
+      operations.multiply(this.rootOf(a), this.rootOf(b), this.budget),
+    );
+  }
+
+  /** A sum or product with a rational needs no new verdict: reach does not change. */
+  private settleSimple(a: Value, b: Value, outcome: Root): Value {
+    for (const [x, y] of [
+      [a, b],
+      [b, a],
+    ] as const) {
+      if (isFraction(outcome) || !isAlgebraic(x) || isAlgebraic(y)) continue;
+      const verdict = this.verdicts.get(x);
+      if (verdict !== undefined && isFraction(this.rootOf(y))) {
+        this.verdicts.set(outcome, verdict);
+        return outcome;
+      }
+    }
+    return this.settle(outcome);
+  }
+
+  negate(a: Algebraic): Value {
+    return this.keep(a, operations.negate(a));
+  }
+
+  invert(a: Algebraic): Value {
+    return this.keep(a, operations.invert(a));
+  }
+
+  conjugate(a: Algebraic): Value {
+    return this.keep(a, operations.conjugate(a));
+  }
+
+  private keep(a: Algebraic, outcome: Root): Value {
+    if (!isFraction(outcome)) this.verdicts.set(outcome, this.verdictOf(a));
+    return isFraction(outcome) ? this.rational(outcome) : outcome;
+  }
+
+  power(a: Algebraic, n: bigint): Value {
+    if (n === 0n) return real(integerEl(this.field, 1));
+    const base = n < 0n ? operations.invert(a) : a;
+    const size = n < 0n ? -n : n;
+    if (size > 1000n) this.budget.within('degree', Number(size) * a.degree);
+    return this.settle(operations.power(base, Number(size), this.budget));
+  }
+
+  squareRoot(a: Algebraic): Value {
+    return this.settle(principalSquareRoot(a, this.budget));
+  }
+
+  /** The real e-th root of a real number, which is not negative where e is even. */
+  realRoot(a: Value, e: number): Value {
+    const radicand = this.rootOf(a);
+    const root = realRoot(radicand, e, this.budget);
+    return this.settle(
+      isFraction(radicand) && !isFraction(root) ? nameRoot(root, radicand, e) : root,
+    );
+  }
+
+  re(a: Algebraic): Value {
+    if (a.isReal) return a;
+    const sum = operations.add(a, operations.conjugate(a), this.budget);
+    return this.settle(operations.multiply(sum, { n: 1n, d: 2n }, this.budget));
+  }
+
+  im(a: Algebraic): Value {
+    if (a.isReal) return real(integerEl(this.field, 0));
+    const difference = operations.add(a, operations.negate(operations.conjugate(a)), this.budget);
+    // a − ā = 2i·im, and 1/(2i) = −i/2 is a root of 4x² + 1.
+    const minusHalfI = this.rootOf({
+      re: integerEl(this.field, 0),
+      im: rationalEl(this.field, -1, 2),
+    });
+    return this.settle(operations.multiply(difference, minusHalfI, this.budget));
+  }
+
+  abs(a: Algebraic): Value {
+    if (a.isReal) return this.signOf(a) < 0 ? this.negate(a) : a;
+    const square = operations.multiply(a, operations.conjugate(a), this.budget);
+    return this.settle(
+      isFraction(square)
+        ? realRoot(square, 2, this.budget)
+        : principalSquareRoot(square, this.budget),
+    );
+  }
+
+  equal(a: Value, b: Value): boolean {
+    return operations.equal(this.rootOf(a), this.rootOf(b), this.budget);
+  }
+
+  compare(a: Value, b: Value): -1 | 0 | 1 {
+    return operations.compare(this.rootOf(a), this.rootOf(b), this.budget);
+  }
+
+  signOf(a: Algebraic): -1 | 1 {
+    for (let P = 64; ; P *= 2) {
+      const { low, high } = a.box(P).re;
+      if (low > 0n) return 1;
+      if (high < 0n) return -1;
+    }
+  }
+}

@@ -1,0 +1,118 @@
+/** Principal square roots and real roots of algebraic numbers: the enclosures that pick one root of f(x^e). */
+import { isqrt } from '../integers';
+import { OutsideDomain, type Budget } from '../limits';
+import { bitLength } from '../polynomials/integer-poly';
+import { isFraction, type Algebraic, type Fraction, type Root } from './algebraic';
+import { multiplyBox, realBox, type Box } from './box';
+import { changeNamed, plainName } from './name';
+import { boxOf, negate, rootOf } from './operations';
+
+const rootDown = (n: bigint): bigint => (n <= 0n ? 0n : isqrt(n));
+const rootUp = (n: bigint): bigint => (n <= 0n ? 0n : isqrt(n) + 1n);
+
+/** The principal root of every number in the box, or null where the box meets the negative axis or zero. */
+function squareRootBox(a: Box, P: number): Box | null {
+  const p = BigInt(P);
+  const flat = a.im.low === 0n && a.im.high === 0n;
+  if (flat) {
+    if (a.re.low >= 0n) {
+      return realBox({ low: rootDown(a.re.low << p), high: rootUp(a.re.high << p) });
+    }
+    if (a.re.high <= 0n) {
+      return {
+        re: { low: 0n, high: 0n },
+        im: { low: rootDown(-a.re.high << p), high: rootUp(-a.re.low << p) },
+      };
+    }
+    return null;
+  }
+  if (a.im.low <= 0n && a.im.high >= 0n) return null;
+  // |z| between roots of squares, then √((|z| + x)/2) for the real part and y/(2·re) for the other.
+  const square = (low: bigint, high: bigint): { low: bigint; high: bigint } => {
+    const [l, h] = [low * low, high * high];
+    if (low <= 0n && high >= 0n) return { low: 0n, high: l > h ? l : h };
+    return l < h ? { low: l, high: h } : { low: h, high: l };
+  };
+  const x2 = square(a.re.low, a.re.high);
+  const y2 = square(a.im.low, a.im.high);
+  const size = { low: rootDown(x2.low + y2.low), high: rootUp(x2.high + y2.high) };
+  const twice = { low: size.low + a.re.low, high: size.high + a.re.high };
+  if (twice.low <= 0n) return null;
+  const re = { low: rootDown((twice.low << p) >> 1n), high: rootUp((twice.high << p) >> 1n) + 1n };
+  if (re.low <= 0n) return null;
+  const inverse = {
+    low: (1n << (2n * p)) / (2n * re.high),
+    high: (1n << (2n * p)) / (2n * re.low) + 1n,
+  };
+  return { re, im: multiplyBox(realBox(a.im), realBox(inverse), P).re };
+}
+
+export function principalSquareRoot(a: Algebraic, budget: Budget): Root {
+  return rootOf(a, 2, (P) => squareRootBox(a.box(P), P), budget);
+}
+
+/** Largest r with r^e ≤ n for n ≥ 0, by bisection on its bits. */
+function wholeRootDown(n: bigint, e: number): bigint {
+  let root = 0n;
+  for (let bit = BigInt(Math.floor(bitLength(n) / e)); bit >= 0n; bit--) {
+    const tried = root | (1n << bit);
+    if (tried ** BigInt(e) <= n) root = tried;
+  }
+  return root;
+}
+
+/** The real e-th root of a real number; an even e needs a number that is not negative. */
+export function realRoot(a: Root, e: number, budget: Budget): Root {
+  if (!isFraction(a) && !a.isReal) {
+    throw new OutsideDomain('domain', 'A real number was expected under this root.');
+  }
+  let negative = isFraction(a) ? a.n < 0n : false;
+  for (let P = 64; !isFraction(a); P *= 2) {
+    const { low, high } = a.box(P).re;
+    if (low <= 0n && high >= 0n) continue;
+    negative = high < 0n;
+    break;
+  }
+  if (negative) {
+    if (e % 2 === 0) {
+      throw new OutsideDomain('domain', 'A negative number has no real root of an even index.');
+    }
+    return negate(realRoot(negate(a), e, budget));
+  }
+  return rootOf(
+    a,
+    e,
+    (P) => {
+      // r·2^P with r^e = x: the e-th root of x·2^(eP).
+      const { low, high } = boxOf(a, P).re;
+      const shift = BigInt((e - 1) * P);
+      budget.charge(P * e);
+      return realBox({
+        low: wholeRootDown((low < 0n ? 0n : low) << shift, e),
+        high: wholeRootDown(high << shift, e) + 1n,
+      });
+    },
+    budget,
+  );
+}
+
+/** Primes whose e-th powers are taken out from under a written root. */
+const PULLED = [2n, 3n, 5n, 7n, 11n, 13n, 17n, 19n, 23n, 29n, 31n, 37n];
+
+/** The same number with a name: the e-th root of n/d written as s·(r)^(1/e)/d, small e-th powers pulled out. */
+export function nameRoot(root: Algebraic, { n, d }: Fraction, e: number): Algebraic {
+  const power = BigInt(e);
+  let r = (n < 0n ? -n : n) * d ** (power - 1n);
+  let s = n < 0n ? -1n : 1n;
+  for (const p of PULLED) {
+    while (r % p ** power === 0n) {
+      r /= p ** power;
+      s *= p;
+    }
+  }
+  const name =
+    e === 3
+      ? plainName(`cbrt(${r})`, `\\sqrt[3]{${r}}`)
+      : plainName(`${r}^(1/${e})`, `\\sqrt[${e}]{${r}}`);
+  return root.renamed(changeNamed(name, s, d, 0n, 1n));
+}
