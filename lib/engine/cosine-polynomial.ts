@@ -64,6 +64,9 @@ function step(a: number, j: number, c: bigint): bigint {
   return (c * BigInt(a - j) * BigInt(a - j - 1)) / (BigInt(a) * BigInt(j + 1));
 }
 
+/** Φ_d, highest power first. */
+export const cyclotomicPolynomial = (d: bigint): bigint[] => cyclotomic(d, primesOf(d));
+
 /** Φ_d by Φ_{pm}(x) = Φ_m(x^p)/Φ_m(x) for a prime p that does not divide m, and Φ_{pm}(x) = Φ_m(x^p) for one that does. */
 function cyclotomic(d: bigint, primes: readonly bigint[]): bigint[] {
   let f = [1n, -1n];

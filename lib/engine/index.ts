@@ -22,7 +22,6 @@ import * as Z from './int';
 import { bitLength } from './integers';
 import type { Algebraic } from './algebraic/algebraic';
 import { Beyond, isAlgebraic, type Value } from './algebraic/beyond';
-import { algebraicCosine } from './algebraic/cosine';
 import { nearestRoot } from './algebraic/near';
 import { trisectorReaches } from './algebraic/trisector';
 import {
@@ -239,9 +238,7 @@ class ExactEngine implements Engine {
     const [division, part] = [d / g, (((u / g) % (d / g)) + d / g) % (d / g)];
     // The largest degree that a division below 10⁴ can have is half of it; a cosine itself needs no arithmetic.
     if (division > COSINE_DIVISION) this.budget.within('degree', Number(division));
-    return this.seal(
-      algebraicCosine(2n * part > division ? division - part : part, division, this.budget),
-    );
+    return this.seal(this.beyond.cosine(2n * part > division ? division - part : part, division));
   }
   sinTurn(k: bigint, n: bigint): Num {
     return this.cosTurn(4n * k - n, 4n * n);

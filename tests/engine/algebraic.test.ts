@@ -54,6 +54,17 @@ describe('cosines of divisions that square roots do not reach', () => {
     expect(textOf((e) => e.mul(e.mul(tan(e, 1n), tan(e, 2n)), tan(e, 4n)))).toBe('sqrt(3)');
   });
 
+  it('give √11 out of a tangent and a sine of the elevenths (a classical identity, from memory)', () => {
+    expect(
+      textOf((e) =>
+        e.add(
+          e.div(e.sinTurn(3n, 22n), e.cosTurn(3n, 22n)),
+          e.mul(e.integer(4), e.sinTurn(1n, 11n)),
+        ),
+      ),
+    ).toBe('sqrt(11)');
+  });
+
   it('have the digits that the recurrence of the cosine gives', () => {
     // 20 digits of cos(2π/7): computed to 60 digits outside the engine.
     const engine = createEngine();

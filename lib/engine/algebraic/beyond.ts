@@ -12,7 +12,10 @@ import type { Budget } from '../limits';
 import type { Cx } from '../complex';
 import { minimalPolynomialOf } from '../minimal-polynomial';
 import type { Field } from '../tower';
-import { Algebraic, isFraction, refining, type Fraction, type Root } from './algebraic';
+import { Algebraic, identify, isFraction, refining, type Fraction, type Root } from './algebraic';
+import { addBox, multiplyBox, type Box } from './box';
+import { algebraicCosine } from './cosine';
+import { CyclotomicFields, type Cyclotomic } from './cyclotomic';
 import { isolate } from './newton';
 import * as operations from './operations';
 import { nameRoot, principalSquareRoot, realRoot } from './principal';
@@ -37,6 +40,8 @@ class TooLong extends Error {}
 export class Beyond {
   private readonly roots = new WeakMap<Cx, Root>();
   private readonly verdicts = new WeakMap<Algebraic, Verdict>();
+  private readonly cyclotomics = new WeakMap<Value, Cyclotomic>();
+  private readonly fields = new CyclotomicFields();
 
   constructor(
     private readonly field: Field,
@@ -107,16 +112,72 @@ export class Beyond {
     return chain;
   }
 
+  /** cos(2πk/n) of a division that square roots do not reach, 0 < k/n < 1/2 in lowest terms. */
+  cosine(k: bigint, n: bigint): Algebraic {
+    const cosine = algebraicCosine(k, n, this.budget);
+    const element = this.fields.cosine(Number(k), Number(n));
+    if (element !== null) this.cyclotomics.set(cosine, element);
+    return cosine;
+  }
+
+  /** The value as an element of a cyclotomic field, where it is known to be one. */
+  private cyclotomicOf(x: Value): Cyclotomic | null {
+    const known = this.cyclotomics.get(x);
+    if (known !== undefined) return known;
+    if (isAlgebraic(x) || !isRationalEl(x.re) || !isRationalEl(x.im)) return null;
+    const [re, im] = [x.re, x.im].map((part) =>
+      this.fields.rational(BigInt(numerator(part)), BigInt(part.den)),
+    ) as [Cyclotomic, Cyclotomic];
+    const imaginary = this.fields.multiply(im, this.fields.i);
+    return imaginary && this.fields.add(re, imaginary);
+  }
+
   add(a: Value, b: Value): Value {
-    return this.settleSimple(a, b, operations.add(this.rootOf(a), this.rootOf(b), this.budget));
+    return this.combine(
+      a,
+      b,
+      (x, y) => this.fields.add(x, y),
+      (x, y) => operations.add(x, y, this.budget),
+      (x, y) => addBox(x, y),
+    );
   }
 
   multiply(a: Value, b: Value): Value {
-    return this.settleSimple(
+    return this.combine(
       a,
       b,
-      operations.multiply(this.rootOf(a), this.rootOf(b), this.budget),
+      (x, y) => this.fields.multiply(x, y),
+      (x, y) => operations.multiply(x, y, this.budget),
+      (x, y, P) => multiplyBox(x, y, P),
     );
+  }
+
+  /** Inside a cyclotomic field where both values lie in one; a rational operand keeps the other's name either way. */
+  private combine(
+    a: Value,
+    b: Value,
+    inField: (x: Cyclotomic, y: Cyclotomic) => Cyclotomic | null,
+    inGeneral: (x: Root, y: Root) => Root,
+    box: (x: Box, y: Box, P: number) => Box,
+  ): Value {
+    const [x, y] = [this.cyclotomicOf(a), this.cyclotomicOf(b)];
+    const element = x && y && inField(x, y);
+    const [p, q] = [this.rootOf(a), this.rootOf(b)];
+    const outcome =
+      element === null || isFraction(p) || isFraction(q)
+        ? inGeneral(p, q)
+        : this.fromField(element, (P) => box(p.box(P), q.box(P), P));
+    return this.mark(this.settleSimple(a, b, outcome), element);
+  }
+
+  private fromField(element: Cyclotomic, box: (P: number) => Box): Root {
+    this.budget.charge(element.order * element.order);
+    return identify([this.fields.minimalPolynomial(element)], box, this.budget);
+  }
+
+  private mark(value: Value, element: Cyclotomic | null): Value {
+    if (element !== null) this.cyclotomics.set(value, element);
+    return value;
   }
 
   /** A sum or product with a rational needs no new verdict: reach does not change. */
@@ -136,11 +197,17 @@ export class Beyond {
   }
 
   negate(a: Algebraic): Value {
-    return this.keep(a, operations.negate(a));
+    const x = this.cyclotomics.get(a);
+    const element = x && this.fields.multiply(x, this.fields.rational(-1n, 1n));
+    return this.mark(this.keep(a, operations.negate(a)), element ?? null);
   }
 
   invert(a: Algebraic): Value {
-    return this.keep(a, operations.invert(a));
+    const x = this.cyclotomics.get(a);
+    return this.mark(
+      this.keep(a, operations.invert(a)),
+      x === undefined ? null : this.fields.invert(x),
+    );
   }
 
   conjugate(a: Algebraic): Value {
