@@ -35,9 +35,10 @@ export class OverLimit extends Error {
     readonly allowed: number,
     met: number,
   ) {
-    super(describe(limit, allowed, Math.ceil(met)));
+    const whole = Math.min(Math.ceil(met), Number.MAX_SAFE_INTEGER);
+    super(describe(limit, allowed, whole));
     this.code = CODES[limit];
-    this.met = Math.ceil(met);
+    this.met = whole;
   }
 }
 

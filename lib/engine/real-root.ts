@@ -27,6 +27,7 @@ import {
 } from './element';
 import { signEl } from './enclosure';
 import { characters } from './residues';
+import { isSeparated } from './separation';
 import { rootInField } from './root-in-field';
 import type { El, Field, Gen, Tower } from './tower';
 
@@ -153,6 +154,7 @@ function rootOfIntegral(y: El): El {
  * With y = a + b·s and n² = a² − d·b², √y = h + b·s/(2h) where h² = (a + n)/2: no deeper than h.
  */
 function denest(y: El, depth: number): El | null {
+  if (depth === 1 && y.t.k > 2 && isSeparated(y)) return null;
   const { low, high } = splitTop(y);
   const norm = normOf(y);
   if (signEl(norm) <= 0) return null;

@@ -25,6 +25,7 @@ import {
   subEl,
 } from './element';
 import { maybeSquare } from './residues';
+import { isSeparated } from './separation';
 import type { El, Gen, Tower } from './tower';
 
 /** A root of x in the field of t (either one), or null when there is none. x lies in t. */
@@ -34,6 +35,7 @@ export function rootInField(x: El, t: Tower): El | null {
     const r = rationalRoot(x, t);
     if (r !== null || t.flat) return r;
   }
+  if (x.t.flat && t.flat && x.t.k > 4 && isSeparated(x)) return null;
   if (t.k > 2 || !t.flat) {
     if (!maybeSquare(x, t, 4 + 2 * t.k)) return null;
   }
