@@ -11,7 +11,7 @@
 import type { Int } from './int';
 import { bigGcd, isProbablePrime } from './integers';
 import { character, homOf, PATIENCE } from './residues';
-import type { El, Gen } from './tower';
+import type { El } from './tower';
 
 /** Most roots for which word-size primes are tried. */
 const WORD_PRIMES = 7;

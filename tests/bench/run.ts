@@ -1,5 +1,5 @@
 /**
- * npm run bench [-- task …] [--peers]
+ * npm run bench [-- task … --peers --seconds=60]
  *
  * Prints one row per task: the median CPU time of several warm runs, in milliseconds, and with --peers the same for those Debian
  * packages that are installed (libcalcium as qqbar and ca, pari-gp, python3-sympy), measured in the same run, with the ratio
@@ -9,7 +9,7 @@
 import { readFileSync, readdirSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { createEngine } from '../../lib/engine/index';
-import { peersAvailable, runPeer, type PeerName } from './peers';
+import { LIMIT_SECONDS, peersAvailable, runPeer, type PeerName } from './peers';
 import { parseProgram, runProgram } from './straight-line';
 
 const TASKS: Record<string, string> = {
@@ -118,6 +118,7 @@ function growth(): void {
 function main(): void {
   const args = process.argv.slice(2);
   const wanted = args.filter((a) => !a.startsWith('--'));
+  const limit = Number(args.find((a) => a.startsWith('--seconds='))?.slice(10) ?? LIMIT_SECONDS);
   const peers: PeerName[] = args.includes('--peers') ? peersAvailable() : [];
   row(['task', 'what', 'ours', ...peers, ...(peers.length > 0 ? ['ratio'] : [])]);
   const files = readdirSync(folder).map((f) => f.replace('.slp', ''));
@@ -125,7 +126,7 @@ function main(): void {
     if (!files.includes(task) || (wanted.length > 0 && !wanted.includes(task))) continue;
     const program = parseProgram(readFileSync(`${folder}${task}.slp`, 'utf8'));
     const ours = measure(() => runProgram(program));
-    const theirs = peers.map((p) => runPeer(p, task, folder));
+    const theirs = peers.map((p) => runPeer(p, task, folder, limit));
     const best = theirs.filter((t) => t.exact && t.ms !== null).map((t) => t.ms as number);
     const ratio = best.length === 0 ? '' : `×${(Math.min(...best) / ours).toFixed(1)}`;
     row([
