@@ -9,8 +9,8 @@ import {
   type FermatPrime,
 } from '@/lib/divisions';
 
-/** Rows of a chain that the page shows; the rest is in the file. */
-export const ROWS_SHOWN = 24;
+/** The page shows the first rows of a chain, as many as have this many terms together; the rest is in the file. */
+const TERMS_SHOWN = 100;
 /** Digits to which every quadratic of a chain is checked before it is handed out. */
 const DIGITS = 1000;
 
@@ -22,15 +22,21 @@ export interface ShownChain {
 const shown = new Map<FermatPrime, ShownChain>();
 const files = new Map<FermatPrime, Promise<string>>();
 
-/** A chain with its first rows, made once. For 65537 that is about a third of a second of work, once in this process. */
+/** A chain with its first rows, made once. For 65537 that is about a third of a second of work, once in each process. */
 export function shownChain(prime: FermatPrime): ShownChain {
   let known = shown.get(prime);
   if (known === undefined) {
     const chain = quadraticChain(prime);
-    known = { chain, rows: chainRows(chain, { count: ROWS_SHOWN }) };
+    known = { chain, rows: chainRows(chain, { count: rowsShown(chain) }) };
     shown.set(prime, known);
   }
   return known;
+}
+
+function rowsShown({ quadratics }: Chain): number {
+  let terms = 0;
+  const cut = quadratics.findIndex(({ product }) => (terms += product.terms.length) > TERMS_SHOWN);
+  return cut === -1 ? quadratics.length : cut;
 }
 
 /**

@@ -3,6 +3,7 @@ import { Compartments } from '@/components/drawing/compartments';
 import { SheetFrame } from '@/components/drawing/sheet-frame';
 import { TitleBlock } from '@/components/drawing/title-block';
 import { Notice } from '@/components/ui/notice';
+import { Tex } from '@/components/ui/tex';
 import { divisionSteps, vertices, type DividedCircle } from '@/lib/divisions';
 import { ChainTable } from './chain-table';
 import { shownChain } from './chains';
@@ -79,8 +80,8 @@ export function DivisionSheet({ division, radiusTyped }: DivisionSheetProps) {
         {chains.length > 0 && (
           <Part title="Quadratics and Carlyle circles">
             <p className="max-w-prose text-small">
-              The circle on the diameter from (0, 1) to (s, p) meets the axis in the roots of x² − s
-              x + p = 0. Figures are for the radius 1.
+              The circle on the diameter from (0, 1) to (s, p) meets the axis in the roots of{' '}
+              <Tex tex="x^2-sx+p=0" />. Figures are for the radius 1.
             </p>
             {chains.map((chain) => (
               <ChainTable key={chain.chain.prime} {...chain} />

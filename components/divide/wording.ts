@@ -37,7 +37,9 @@ export function sayVerdict({ parts, reach }: Division): string {
 
 /** Why, sentence by sentence. */
 export function sayReasons({ parts, factors, reach }: Division): string[] {
-  const reasons = [`${sayCount(parts)} = ${sayFactors(factors)}; ${reach.why}.`];
+  const isComposite = factors.some(({ prime }) => prime !== parts);
+  const product = isComposite ? `${sayCount(parts)} = ${sayFactors(factors)}; ` : '';
+  const reasons = [`${product}${reach.why}.`];
   reasons.push(
     reach.compass
       ? 'Straightedge and compass reach a power of two times distinct Fermat primes (3, 5, 17, 257, 65537), and nothing else (Gauss 1801, Wantzel 1837).'

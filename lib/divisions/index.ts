@@ -12,5 +12,5 @@ export { vertices, type Measure, type Measures, type Vertex } from './measures';
 export { cosineDegree, factorise, type PrimePower } from './numbers';
 export { isFermatPrime, lastLevel, type FermatPrime, type Period } from './periods';
 export { decideDivision, FERMAT_PRIMES, type DivisionReach } from './reach';
-export { MOST_PARTS, RADIUS_UNITS, type DivisionFault, type Radius } from './request';
+export type { DivisionFault, Radius } from './request';
 export { divisionSteps, type DivisionStep } from './steps';

@@ -1,6 +1,7 @@
 import { createEngine, type Engine, type Num } from '../engine';
 import { settledDecimal } from './decimals';
 import { cosineDegree } from './numbers';
+import { decideDivision } from './reach';
 import type { Radius } from './request';
 import { encloseCosine, encloseSine } from './turn-value';
 
@@ -39,7 +40,7 @@ const STEPS = 1_000_000;
 export function measure(parts: number, radius: Radius, digits = 15): Measures {
   const n = BigInt(parts);
   const { n: a, d: b } = radius;
-  const write = exactWriter(cosineDegree(parts) <= READABLE_SIZES);
+  const write = exactWriter(parts, READABLE_SIZES);
   return {
     side: {
       decimal: settledDecimal(encloseSine(1n, 2n * n, { n: 2n * a, d: b }), digits),
@@ -63,7 +64,7 @@ export function vertices(
   { first = 0, count = parts, digits = 15 } = {},
 ): Vertex[] {
   const n = BigInt(parts);
-  const write = exactWriter(cosineDegree(parts) <= READABLE_CORNERS);
+  const write = exactWriter(parts, READABLE_CORNERS);
   return Array.from({ length: count }, (_, offset) => {
     const k = BigInt(first + offset);
     return {
@@ -80,8 +81,12 @@ export function vertices(
   });
 }
 
-/** Writes values of one engine; null where the division is out of its reach, or the writing too long to read. */
-function exactWriter(readable: boolean): (make: (engine: Engine) => Num) => Measure['exact'] {
+/** Writes values of one engine; null where square roots do not reach the division, or the writing too long to read. */
+function exactWriter(
+  parts: number,
+  mostDegree: number,
+): (make: (engine: Engine) => Num) => Measure['exact'] {
+  const readable = cosineDegree(parts) <= mostDegree && decideDivision(BigInt(parts)).compass;
   if (!readable) return () => null;
   const engine = createEngine({ steps: STEPS });
   let spent = false;

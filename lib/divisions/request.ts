@@ -62,25 +62,32 @@ export function readParts(given: number | bigint | string): number {
 }
 
 function numberTyped(text: string): number | null {
-  const close = text
-    .trim()
-    .replace(/(?<=\d)[\s_](?=\d{3}(?!\d))/gu, '')
-    .replace('−', '-');
+  const close = closed(text);
   if (close === '') return null;
   const power = /^(\d{1,3})\^(\d{1,3})$/.exec(close);
   if (power) return Number(power[1]) ** Number(power[2]);
   return /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d{1,4})?$/i.test(close) ? Number(close) : NaN;
 }
 
-const PATTERN = /^([+-]?)(?:(\d+)\s+)?(\d+(?:\.\d*)?|\.\d+)(?:\s*\/\s*(\d+))?\s*(mm|cm|m|in|ft)?$/;
+/** Without spaces between thousands, and with a plain minus. A whole number before a fraction keeps its space. */
+function closed(text: string): string {
+  return text
+    .trim()
+    .replace(/(?<=\d)\s(?=\d{3}(?![\d/]|\s*\/))/gu, '')
+    .replace('−', '-');
+}
+
+const PATTERN = new RegExp(
+  String.raw`^([+-]?)(?:(\d+)\s+)?(\d+(?:\.\d*)?|\.\d+)(?:\s*\/\s*(\d+))?\s*(${RADIUS_UNITS.join('|')})?$`,
+);
 
 /**
  * A radius: decimal, fraction, or whole and fraction, with a unit; millimetres where none is given. Fails with a
  * DivisionError. At most 18 digits in each number.
  */
 export function readRadius(text: string): Radius {
-  const trimmed = text.trim().replace('−', '-');
-  const shown = brief(trimmed);
+  const trimmed = closed(text);
+  const shown = brief(text.trim());
   const [, sign, whole, number = '', below, unit] = PATTERN.exec(trimmed) ?? [];
   if (number === '' || (whole !== undefined && below === undefined) || /\..*\//.test(trimmed)) {
     throw new DivisionError('radius-not-a-length', `“${shown}” is not a length. ${LENGTH_WANTED}`);

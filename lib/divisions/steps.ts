@@ -71,7 +71,7 @@ function combineStep(m: number, p: number): DivisionStep {
   return {
     parts: m * p,
     kind: 'combine',
-    words: `${m * p} parts: go ${plus} of a turn forwards from the datum and ${minus} back. What is left is ${1}/${m * p} of a turn.`,
+    words: `${m * p} parts: go ${plus} of a turn forwards from the datum and ${minus} back. What is left is 1/${m * p} of a turn.`,
     tex: `${fraction(`1/${m * p}`)}=${fraction(plus)}-${fraction(minus)},\\quad \\cos\\tfrac{2\\pi}{${m * p}}=\\cos${alpha}\\cos${beta}+\\sin${alpha}\\sin${beta}`,
   };
 }

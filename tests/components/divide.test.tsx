@@ -67,7 +67,7 @@ describe('a division on its sheet', () => {
   it('of 65537 shows the first rows, the count and what it saves', () => {
     sheet(65537);
     const chain = screen.getByLabelText(/^Quadratics for 65537 with/);
-    expect(chain.querySelectorAll('tr')).toHaveLength(1 + 24);
+    expect(chain.querySelectorAll('tr')).toHaveLength(1 + 17);
     expect(screen.getByText(/191 below DeTemple’s bound/)).toBeInTheDocument();
     expect(screen.getByText(/as JSON/).closest('a')).toHaveAttribute(
       'href',
@@ -143,6 +143,7 @@ describe('pieces', () => {
     expect(sayCount(1_000_000)).toBe('1\u202f000\u202f000');
     expect(sayVerdict(divided(1))).toMatch(/^One part:/);
     expect(sayReasons(divided(9))[0]).toBe('9 = 3²; 9 has the prime 3 more than once.');
+    expect(sayReasons(divided(7))[0]).toBe('7 is a prime and no Fermat prime.');
   });
 });
 

@@ -107,7 +107,7 @@ describe('what cannot be divided', () => {
     ['', 'radius-not-a-length'],
     ['wide', 'radius-not-a-length'],
     ['1,5 m', 'radius-not-a-length'],
-    ['1 200 mm', 'radius-not-a-length'],
+    ['1 20 mm', 'radius-not-a-length'],
     ['5 km', 'radius-not-a-length'],
     ['1/0 m', 'radius-not-a-length'],
     ['1.5/2', 'radius-not-a-length'],
@@ -138,6 +138,10 @@ describe('what is asked', () => {
     ['1.25m', 5n, 4n, 'm'],
     ['47 1/4 in', 189n, 4n, 'in'],
     ['3/8 in', 3n, 8n, 'in'],
+    ['1 200 mm', 1200n, 1n, 'mm'],
+    ['12 000 000', 12_000_000n, 1n, 'mm'],
+    ['1 200 1/2 mm', 2401n, 2n, 'mm'],
+    ['47 125/1000 in', 377n, 8n, 'in'],
     ['.5 ft', 1n, 2n, 'ft'],
   ] as const)('the radius %s is %i/%i %s', (text, n, d, unit) => {
     expect(divide(5, text)).toMatchObject({ value: { radius: { n, d, unit } } });
