@@ -23,6 +23,7 @@ import { bitLength } from './integers';
 import type { Algebraic } from './algebraic/algebraic';
 import { Beyond, isAlgebraic, type Value } from './algebraic/beyond';
 import { nearestRoot } from './algebraic/near';
+import { partOfTurn } from './algebraic/roots-of-unity';
 import { trisectorReaches } from './algebraic/trisector';
 import {
   decimalOfAlgebraic,
@@ -265,6 +266,18 @@ class ExactEngine implements Engine {
     const verdict = this.beyond.verdictOf(x);
     const trisector = trisectorReaches(x, this.budget);
     return { ...verdict, trisector, division: x.origin.division ?? null };
+  }
+
+  partOfTurn(a: Num): { k: bigint; n: bigint } | null {
+    const x = this.open(a);
+    if (!isAlgebraic(x) && !isRationalEl(x.re) && isRealCx(x)) return null;
+    const im = this.im(a);
+    return partOfTurn(
+      this.minimalPolynomial(a).reverse(),
+      (P) => (isAlgebraic(x) ? x.box(P).re : enclose(x.re, P)),
+      this.sign(im) < 0,
+      this.budget,
+    );
   }
 
   decimal(a: Num, digits: number): Decimal {

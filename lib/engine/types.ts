@@ -208,6 +208,9 @@ export interface Engine {
   /** e^(2πik/n); as `cosTurn`. */
   rootOfUnity(k: bigint, n: bigint): Num;
 
+  /** k and n in lowest terms, 0 ≤ k < n, when the number is e^(2πik/n) of degree up to 64; null when it is no root of unity. */
+  partOfTurn(a: Num): { k: bigint; n: bigint } | null;
+
   /** Degree of the minimal polynomial over the rationals. */
   degree(a: Num): number;
   /** Minimal polynomial over the integers: highest power first, primitive, leading coefficient positive. */

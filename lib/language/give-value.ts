@@ -81,7 +81,10 @@ function giveStructure(
   engine: Engine,
   value: Num,
   watch: StructureWatch,
-): Pick<GivenNumber, 'degree' | 'minimalPolynomial' | 'tower' | 'reach' | 'omitted'> {
+): Pick<
+  GivenNumber,
+  'degree' | 'minimalPolynomial' | 'tower' | 'reach' | 'omitted' | 'partOfTurn'
+> {
   const omitted: Omission[] = [];
   watch.started();
   const attempt = <T>(field: Omission['field'], work: () => T): T | null => {
@@ -101,7 +104,10 @@ function giveStructure(
   const tower = attempt('tower', () => engine.tower(value));
   const verdict = engine.attempt(() => reachOfValue(engine, value, tower?.length ?? null));
   const reach = verdict.kind === 'value' ? verdict.value : { ...OPEN_REACH };
+  const part = engine.isReal(value) ? null : engine.attempt(() => engine.partOfTurn(value));
+  const turn = part?.kind === 'value' ? part.value : null;
   return {
+    ...(turn === null ? {} : { partOfTurn: `${turn.k}/${turn.n}` }),
     degree,
     minimalPolynomial: polynomial,
     tower,

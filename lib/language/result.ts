@@ -67,6 +67,8 @@ export interface NumberResult extends Parsed {
   reach: Reach;
   /** Parts left out because they went over a limit; the value itself is exact all the same. */
   omitted?: Omission[];
+  /** k/n when the value is the root of unity e^(2πi·k/n) and not real, as in `1/7`. */
+  partOfTurn?: string;
   /** Only for a value that `standin` gave: what it stands for and how well. */
   standIn?: StandInResult;
 }

@@ -86,6 +86,41 @@ describe('cosines of divisions that square roots do not reach', () => {
   });
 });
 
+describe('roots of unity', () => {
+  it('are recognised with their part of a turn, whichever division', () => {
+    const engine = createEngine();
+    for (const [k, n] of [
+      [0n, 1n],
+      [1n, 2n],
+      [3n, 4n],
+      [2n, 5n],
+      [4n, 7n],
+      [8n, 9n],
+      [7n, 12n],
+      [11n, 17n],
+    ] as const) {
+      const value = engine.rootOfUnity(k, n);
+      expect(engine.partOfTurn(value)).toEqual({ k, n });
+    }
+    expect(engine.partOfTurn(engine.rootOfUnity(6n, 14n))).toEqual({ k: 3n, n: 7n });
+  });
+
+  it('are not seen where there are none', () => {
+    const engine = createEngine();
+    const plain = [
+      engine.integer(0),
+      engine.integer(2),
+      engine.sqrt(engine.integer(2)),
+      // On the unit circle and no root of unity: (3 + 4i)/5.
+      engine.div(
+        engine.add(engine.integer(3), engine.mul(engine.integer(4), engine.i)),
+        engine.integer(5),
+      ),
+    ];
+    for (const value of plain) expect(engine.partOfTurn(value)).toBeNull();
+  });
+});
+
 describe('roots of higher index', () => {
   it('come back as square roots where those reach them', () => {
     expect(

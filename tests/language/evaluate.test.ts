@@ -169,6 +169,12 @@ describe('values that straightedge and compass do not reach', () => {
     });
   });
 
+  it('name a root of unity by its part of a turn', () => {
+    expect(evaluateExpression('cos(2*pi/7)+i*sin(2*pi/7)')).toMatchObject({ partOfTurn: '1/7' });
+    expect(evaluateExpression('(1+i)/sqrt(2)')).toMatchObject({ partOfTurn: '1/8' });
+    expect(evaluateExpression('1+i')).not.toHaveProperty('partOfTurn');
+  });
+
   it('give square roots back where an expression comes out in them', () => {
     for (const [source, text] of [
       ['cbrt(2+sqrt(5)) + cbrt(2-sqrt(5))', '1'],
