@@ -30,6 +30,16 @@ export function shorten(decimal: string, figures = FIGURES): string {
   return decimal;
 }
 
+/** A positive bound in so many significant figures, rounded up where it is cut, so that it stays a bound. */
+export function shortenUp(bound: string, figures: number): string {
+  const cut = shorten(bound, figures);
+  if (!cut.endsWith('…')) return bound;
+  const [whole = '', part = ''] = cut.slice(0, -1).split('.');
+  const raised = (BigInt(whole + part) + 1n).toString().padStart(part.length + 1, '0');
+  const point = raised.length - part.length;
+  return part === '' ? raised : `${raised.slice(0, point)}.${raised.slice(point)}`;
+}
+
 /** The decimal of a value as one text: `0.25`, `1.4142… + 0.5 i`. */
 export function sayDecimal({ decimal }: Pick<NumberResult, 'decimal'>, full: boolean): string {
   const part = (text: string) => (full ? text : shorten(text));
@@ -63,6 +73,9 @@ type Reach = NumberResult['reach'];
 export function reachCompartment(reach: Reach | null): Compartment {
   const label = 'Reach';
   if (reach === null) return { label, value: 'not decided', tone: 'approximate' };
+  if (reach.straightedgeAndCompass === null) {
+    return { label, value: 'not decided', tone: 'approximate' };
+  }
   if (reach.straightedgeAndCompass) {
     return { label, value: 'straightedge and compass', tone: 'reached' };
   }
@@ -92,6 +105,31 @@ function decimalCompartment(
   ];
 }
 
+const SIDES = { above: 'above', below: 'below', level: 'either way', exact: '' } as const;
+
+/** What a stand-in stands for and how far off it is; a warning where stepping it round leaves the tolerance. */
+function standInCompartments(standIn: NumberResult['standIn'], unit: string): Compartment[] {
+  if (standIn === undefined) return [];
+  const { bound, direction } = standIn.error;
+  const off =
+    direction === 'exact' ? 'exactly' : `within ${shortenUp(bound, 4)}${unit} ${SIDES[direction]}`;
+  const items: Compartment[] = [
+    { label: 'Stand-in for', value: standIn.of },
+    { label: 'Error', value: off, tone: direction === 'exact' ? 'reached' : 'approximate' },
+    { label: 'Strikes', value: String(standIn.strikes.total) },
+  ];
+  if (standIn.stepped !== null) {
+    items.push({
+      label: `Ring of ${standIn.stepped.parts}`,
+      value: standIn.stepped.inside
+        ? 'stays inside the tolerance'
+        : 'leaves the tolerance when stepped round',
+      tone: standIn.stepped.inside ? 'reached' : 'approximate',
+    });
+  }
+  return items;
+}
+
 function numberCompartments(result: NumberResult, full: boolean): Compartment[] {
   const unit = result.unit === null ? null : sayUnit(result.unit);
   const left = new Map(result.omitted?.map(({ field, message }) => [field, message]));
@@ -109,6 +147,10 @@ function numberCompartments(result: NumberResult, full: boolean): Compartment[] 
   else if (roots > 0)
     items.push({ label: 'Tower', value: roots === 1 ? '1 root' : `${roots} roots` });
   if (!result.real) items.push({ label: 'Kind', value: 'not real' });
+  if (result.partOfTurn) {
+    items.push({ label: 'On the unit circle', value: `${result.partOfTurn} of a turn` });
+  }
+  items.push(...standInCompartments(result.standIn, unit ? ` ${unit}` : ''));
   if (full) {
     if (!result.reach?.straightedgeAndCompass && result.reach?.reason) {
       items.push({ label: 'Because', value: result.reach.reason });
@@ -124,7 +166,11 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
     case 'number':
       return numberCompartments(result, full);
     case 'angle':
-      return [...decimalCompartment(result, '°', full), reachCompartment(result.reach)];
+      return [
+        ...decimalCompartment(result, '°', full),
+        reachCompartment(result.reach),
+        ...standInCompartments(result.standIn, '°'),
+      ];
     case 'truth':
       return [
         {
@@ -149,9 +195,12 @@ export function sayResult(result: Result): string {
       return `${name}: ${result.truth.value ? 'true' : 'false'}, exactly.`;
     case 'number': {
       const size = sayDimension(result)?.figure ?? shorten(sayDecimal(result, false), 8);
-      const reached = result.reach?.straightedgeAndCompass
-        ? 'reached with straightedge and compass'
-        : 'not reached with straightedge and compass';
+      const reached =
+        result.reach?.straightedgeAndCompass === null
+          ? 'reach not decided'
+          : result.reach?.straightedgeAndCompass
+            ? 'reached with straightedge and compass'
+            : 'not reached with straightedge and compass';
       return `${name} is ${size}, degree ${result.degree ?? 'none'}, ${reached}.`;
     }
     case 'angle':

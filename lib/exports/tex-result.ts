@@ -91,6 +91,11 @@ export function compartments(result: Result): { name: string; tex: string }[] {
     });
   }
   entries.push({ name: 'Reach', tex: escapeTex(result.reach.reason) });
+  if (result.standIn !== undefined) {
+    const { of, error, how } = result.standIn;
+    const off = error.direction === 'exact' ? 'exactly' : `error at most ${error.bound}`;
+    entries.push({ name: 'Stand-in for', tex: escapeTex(`${of}, ${off}. ${how}`) });
+  }
   return entries;
 }
 

@@ -8,11 +8,72 @@ import {
   sayDimension,
   sayResult,
   shorten,
+  shortenUp,
 } from '@/components/sheet/wording';
 import { DECIDED, errorResult, numberResult, SUM_OF_ROOTS } from './sample-results';
 
 const labels = (result: Parameters<typeof compartmentsOf>[0], full = false) =>
   compartmentsOf(result, full).map(({ label }) => label);
+
+describe('a shortened bound', () => {
+  it('never falls below the bound it shortens', () => {
+    expect(shortenUp('0.0171185895305', 4)).toBe('0.01712');
+    expect(shortenUp('9.99999', 3)).toBe('10.00');
+    expect(shortenUp('0.25', 4)).toBe('0.25');
+    expect(shortenUp('1.2345e-9', 3)).toBe('1.2345e-9');
+  });
+});
+
+describe('values beyond straightedge and compass', () => {
+  it('say so, and say what is not decided', () => {
+    const reach = (straightedgeAndCompass: boolean | null, withTrisector: boolean | null) =>
+      compartmentsOf(
+        numberResult({ reach: { straightedgeAndCompass, withTrisector, reason: 'Because.' } }),
+        false,
+      ).find(({ label }) => label === 'Reach');
+    expect(reach(false, true)).toMatchObject({
+      value: 'not with straightedge and compass; with an angle trisector, yes',
+      tone: 'approximate',
+    });
+    expect(reach(null, null)).toMatchObject({ value: 'not decided', tone: 'approximate' });
+  });
+
+  it('show a stand-in with its error and warn where stepping it round goes wrong', () => {
+    const bounds = { low: '0', high: '1' };
+    const items = compartmentsOf(
+      numberResult({
+        standIn: {
+          of: 'chord(450 mm, turn/7)',
+          tolerance: '0.2 mm',
+          text: 'sqrt((300 mm)^2+(250 mm)^2)',
+          family: 'hypotenuse',
+          how: 'A right triangle.',
+          source: null,
+          error: { bound: '0.0171185895305', direction: 'above' },
+          strikes: { total: 61, counts: '' },
+          stepped: {
+            kind: 'ring',
+            parts: 7,
+            inside: false,
+            gap: bounds,
+            miss: bounds,
+            last: bounds,
+            worst: bounds,
+          },
+          covered: [],
+          others: [],
+        },
+      }),
+      false,
+    );
+    expect(items.find(({ label }) => label === 'Error')?.value).toMatch(
+      /^within 0\.01712.* above$/,
+    );
+    expect(items.find(({ label }) => label === 'Ring of 7')).toMatchObject({
+      tone: 'approximate',
+    });
+  });
+});
 
 describe('a shortened decimal', () => {
   it('is a beginning of the decimal, never a rounding, and says that it was cut', () => {
