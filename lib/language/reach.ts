@@ -1,5 +1,5 @@
 import type { Engine, Num, Reach as EngineReach } from '../engine/index';
-import { decideDivision } from './divisions';
+import { decideDivision } from '../divisions/reach';
 import type { Reach } from './result';
 
 /** Reach of a value that the engine holds: it is made of square roots, so straightedge and compass reach it. */

@@ -1,6 +1,5 @@
 import { describe, expect, test } from 'vitest';
 import { cosineDegree, decideDivision, divide, factorise, FERMAT_PRIMES } from '@/lib/divisions';
-import { decideDivision as decideInCells } from '@/lib/language/divisions';
 import sequences from '../reference/divisions-sequences.json';
 
 const upTo = (last: number) => Array.from({ length: last }, (_, index) => index + 1);
@@ -40,13 +39,6 @@ describe('straightedge and compass', () => {
   test('are reached exactly where the degree is a power of two', () => {
     const isPower = (x: number) => 2 ** Math.round(Math.log2(x)) === x;
     expect(upTo(20_000).filter((n) => byCompass(n) !== isPower(cosineDegree(n)))).toEqual([]);
-  });
-
-  test('are spoken of in cells with the same sentences', () => {
-    const odd = [9, 25, 51, 7, 11, 49, 289, 65537, 999_983, 131_074].map(BigInt);
-    for (const n of [...upTo(600).map(BigInt), ...odd, 10n ** 30n]) {
-      expect(decideDivision(n)).toEqual(decideInCells(n));
-    }
   });
 });
 

@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
 import { terminatingDecimal } from '@/lib/language/decimals';
-import { decideDivision } from '@/lib/language/divisions';
 import { orderByDependence } from '@/lib/language/graph';
 import { ACTIONS } from '@/lib/language/functions/index';
 import { FUNCTIONS } from '@/lib/language/names';
@@ -13,36 +12,6 @@ import { findNearest } from '@/lib/language/words';
 
 const range = (from: number, to: number) =>
   Array.from({ length: to - from + 1 }, (_, index) => from + index);
-
-describe('divisions of the circle', () => {
-  it('those that can be struck up to 100 parts are those of OEIS A003401', () => {
-    const struck = range(3, 100).filter((n) => decideDivision(BigInt(n)).compass);
-    expect(struck).toEqual([
-      3, 4, 5, 6, 8, 10, 12, 15, 16, 17, 20, 24, 30, 32, 34, 40, 48, 51, 60, 64, 68, 80, 85, 96,
-    ]);
-  });
-
-  it('a trisector adds those of Gleason (American Mathematical Monthly 95, 1988) up to 28', () => {
-    const added = range(3, 28).filter(
-      (n) => !decideDivision(BigInt(n)).compass && decideDivision(BigInt(n)).trisector,
-    );
-    expect(added).toEqual([7, 9, 13, 14, 18, 19, 21, 26, 27, 28]);
-  });
-
-  it('all Fermat primes together, once each, are struck, and a division twice by one of them is not', () => {
-    const product = 3n * 5n * 17n * 257n * 65537n;
-    expect(decideDivision(2n ** 20n * product).compass).toBe(true);
-    expect(decideDivision(257n * product)).toMatchObject({
-      compass: false,
-      why: expect.stringContaining('the prime 257 more than once') as string,
-    });
-  });
-
-  it('leaves open what trial division does not settle', () => {
-    const large = 1_000_003n * 1_000_033n;
-    expect(decideDivision(large)).toMatchObject({ compass: false, trisector: null });
-  });
-});
 
 describe('π', () => {
   it('lies between bounds that the digits of its first sixty places confirm', () => {

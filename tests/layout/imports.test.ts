@@ -13,7 +13,7 @@ const MAY_IMPORT: Record<string, string[]> = {
   'lib/certificate-check': [],
   'lib/divisions': ['lib/engine'],
   'lib/shop': ['lib/engine'],
-  'lib/language': ['lib/engine', 'lib/shop'],
+  'lib/language': ['lib/engine', 'lib/divisions', 'lib/shop'],
   'lib/env': [],
   'lib/access': [],
   db: ['lib/env'],
