@@ -146,4 +146,18 @@ describe('what is asked', () => {
       });
     }
   });
+
+  test('all Fermat primes together, once each, are struck, and a division twice by one of them is not', () => {
+    const product = 3n * 5n * 17n * 257n * 65537n;
+    expect(decideDivision(2n ** 20n * product).compass).toBe(true);
+    expect(decideDivision(257n * product)).toMatchObject({
+      compass: false,
+      why: expect.stringContaining('the prime 257 more than once') as string,
+    });
+  });
+
+  test('what trial division does not settle is left open', () => {
+    const large = 1_000_003n * 1_000_033n;
+    expect(decideDivision(large)).toMatchObject({ compass: false, trisector: null });
+  });
 });
