@@ -188,15 +188,43 @@ function normOfPolynomial(t: Tower, poly: readonly Int[][]): Int[][] {
   const m = poly.length;
   const one = zeros(half);
   one[0] = 1;
-  const low = poly.map((c) => c.slice(0, half));
-  const high = poly.map((c) => c.slice(half));
-  const out = squarePolynomial(below, [...low, one]);
-  const square = squarePolynomial(below, high);
-  for (let i = 0; i < square.length; i++) {
-    const c = square[i] as Int[];
-    if (!isZeroList(c)) out[i] = subList(out[i] as Int[], mulTop(t, c));
+  const low = poly.map((c) => nonZero(c.slice(0, half)));
+  const high = poly.map((c) => nonZero(c.slice(half)));
+  const a = squarePolynomial(below, [...low, one]);
+  const b = squarePolynomial(below, high);
+  const out: Int[][] = [];
+  for (let i = 0; i < 2 * m; i++) {
+    const x = a[i] ?? null;
+    const y = b[i] ?? null;
+    if (y === null) out.push(x ?? zeros(half));
+    else out.push(x === null ? negList(mulTop(t, y)) : subList(x, mulTop(t, y)));
   }
-  out.length = 2 * m;
+  return out;
+}
+
+function nonZero(c: Int[]): Int[] | null {
+  return isZeroList(c) ? null : c;
+}
+
+/** Coefficients of the square; null stands for 0, as it does in half of the places of an even polynomial. */
+function squarePolynomial(t: Tower, a: readonly (Int[] | null)[]): (Int[] | null)[] {
+  const n = a.length;
+  const out = new Array<Int[] | null>(2 * n - 1).fill(null);
+  const put = (k: number, c: Int[]): void => {
+    const old = out[k] ?? null;
+    out[k] = old === null ? c : addList(old, c);
+  };
+  for (let i = 0; i < n; i++) {
+    const x = a[i] ?? null;
+    if (x === null) continue;
+    t.field.budget.charge((n - i) * x.length * (1 + Z.words(x[0] as Int)));
+    put(2 * i, squareList(t, x));
+    const double = scaleList(x, 2);
+    for (let j = i + 1; j < n; j++) {
+      const y = a[j] ?? null;
+      if (y !== null) put(i + j, mulList(t, double, y));
+    }
+  }
   return out;
 }
 
@@ -228,23 +256,4 @@ function squareCoefficient(a: readonly Int[], k: number): Int {
   if (sum !== 0) sum = Z.mul(sum, 2);
   const middle = k % 2 === 0 && k / 2 < a.length ? (a[k / 2] as Int) : 0;
   return middle === 0 ? sum : Z.add(sum, Z.mul(middle, middle));
-}
-
-function squarePolynomial(t: Tower, a: readonly Int[][]): Int[][] {
-  const n = a.length;
-  const size = 1 << t.k;
-  const out: Int[][] = [];
-  for (let i = 0; i < 2 * n - 1; i++) out.push(zeros(size));
-  const live = a.map((c) => !isZeroList(c));
-  for (let i = 0; i < n; i++) {
-    if (!live[i]) continue;
-    const x = a[i] as Int[];
-    const double = scaleList(x, 2);
-    t.field.budget.charge((n - i) * size * (1 + Z.words(x[0] as Int)));
-    out[2 * i] = addList(out[2 * i] as Int[], squareList(t, x));
-    for (let j = i + 1; j < n; j++) {
-      if (live[j]) out[i + j] = addList(out[i + j] as Int[], mulList(t, double, a[j] as Int[]));
-    }
-  }
-  return out;
 }

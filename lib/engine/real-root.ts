@@ -8,7 +8,7 @@
 
 import * as Z from './int';
 import type { Int } from './int';
-import { splitSquare, bigGcd } from './integers';
+import { bigGcd, SMALL_PRIMES, splitSquare } from './integers';
 import {
   addEl,
   integerEl,
@@ -33,6 +33,7 @@ import type { El, Field, Gen, Tower } from './tower';
 
 /** √n for a positive integer: the roots of its squarefree factors, each a generator. */
 export function rootOfInteger(f: Field, n: Int): El {
+  if (typeof n === 'number' && n < SMALL && f.unsplit.length === 0) return rootOfSmall(f, n);
   const split = splitSquare(BigInt(n));
   let scale = split.square;
   let out = integerEl(f, 1);
@@ -42,17 +43,42 @@ export function rootOfInteger(f: Field, n: Int): El {
     : new Map(split.factors.map((p): [bigint, number] => [p, 1]));
   for (const [p, e] of exponents) {
     if (e > 1) scale *= p ** BigInt(e >> 1);
-    if (e & 1) out = mulEl(out, rootOf(integerGen(f, p, split.complete)));
+    if (e & 1) out = mulEl(out, rootOf(integerGen(f, Z.small(p), split.complete)));
   }
   return scaleEl(out, Z.small(scale));
 }
 
-function integerGen(f: Field, p: bigint, prime: boolean): Gen {
-  let g = f.integerRoots.get(p);
+/** Trial division by the table of small primes is complete below this. */
+const SMALL = 4096 * 4096;
+
+function rootOfSmall(f: Field, n: number): El {
+  let rest = n;
+  let scale = 1;
+  let out: El | null = null;
+  const take = (p: number): void => {
+    const root = rootOf(integerGen(f, p, true));
+    out = out === null ? root : mulEl(out, root);
+  };
+  for (const p of SMALL_PRIMES) {
+    if (p * p > rest) break;
+    while (rest % (p * p) === 0) {
+      rest /= p * p;
+      scale *= p;
+    }
+    if (rest % p === 0) {
+      rest /= p;
+      take(p);
+    }
+  }
+  if (rest > 1) take(rest);
+  return out === null ? integerEl(f, scale) : scaleEl(out, scale);
+}
+
+function integerGen(f: Field, n: Int, prime: boolean): Gen {
+  let g = f.integerRoots.get(n);
   if (g === undefined) {
-    const n = Z.small(p);
     g = f.addGen(1, n, integerEl(f, n));
-    f.integerRoots.set(p, g);
+    f.integerRoots.set(n, g);
     if (!prime) f.unsplit.push(g);
   }
   return g;
@@ -69,13 +95,13 @@ function refine(f: Field, factors: readonly bigint[]): Map<bigint, number> {
     const p = todo.pop() as bigint;
     if (p === 1n) continue;
     let g = 1n;
-    for (const n of [...f.integerRoots.keys(), ...out.keys()]) {
+    for (const n of [...[...f.integerRoots.keys()].map(BigInt), ...out.keys()]) {
       if (n === p) continue;
       g = bigGcd(n, p);
       if (g === 1n) continue;
-      const old = f.integerRoots.get(n);
+      const old = f.integerRoots.get(Z.small(n));
       if (g !== n && old !== undefined) {
-        f.integerRoots.delete(n);
+        f.integerRoots.delete(Z.small(n));
         old.parts = [g, n / g];
       }
       if (g !== n && out.has(n)) {
@@ -99,7 +125,7 @@ export function sqrtReal(x: El): El {
   const key = x.t.k === 0 && x.den === 1 ? numerator(x) : keyOf(x);
   let r = cache.get(key);
   if (r === undefined) {
-    r = positive(findRoot(x));
+    r = x.t.k === 0 ? findRoot(x) : positive(findRoot(x));
     cache.set(key, r);
   }
   return r;
@@ -156,7 +182,7 @@ function rootOfIntegral(y: El): El {
 function denest(y: El, depth: number): El | null {
   if (depth === 1 && y.t.k > 2 && isSeparated(y)) return null;
   const { low, high } = splitTop(y);
-  const norm = normOf(y);
+  const norm = subEl(mulEl(low, low), mulEl(mulEl(high, high), (y.t.top as Gen).rad));
   if (signEl(norm) <= 0) return null;
   const n = shallowRoot(norm, y.t.parent as Tower, depth - 1);
   if (n === null) return null;

@@ -42,7 +42,7 @@ function byWordPrimes(x: El): boolean {
 
 function byLargePrime(x: El): boolean {
   const f = x.t.field;
-  const radicands = x.t.gens.map((g) => BigInt((g).int));
+  const radicands = x.t.gens.map((g) => BigInt(g.int));
   const step = 8n * radicands.reduce((a, b) => a * b, 1n);
   if (step > 1n << 2000n || x.m === null) return false;
   if (!radicands.every((q) => q < PROVEN && isProbablePrime(q))) return false;

@@ -217,7 +217,7 @@ export class Field {
   readonly zero: El;
   readonly gens: Gen[] = [];
   /** Roots of integers by their radicand. */
-  readonly integerRoots = new Map<bigint, Gen>();
+  readonly integerRoots = new Map<Int, Gen>();
   /** Integers that could not be factored fully; later numbers are compared with them by gcd. */
   readonly unsplit: Gen[] = [];
   /** Nested roots by tower and radicand. */
