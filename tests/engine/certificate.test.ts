@@ -114,6 +114,14 @@ describe('certificates', () => {
     expect(bad.stdout).toMatch(/^refused: /);
   });
 
+  it('have a command of their own', () => {
+    const file = new URL('../../package.json', import.meta.url);
+    const { scripts } = JSON.parse(readFileSync(file, 'utf8')) as {
+      scripts: Record<string, string>;
+    };
+    expect(scripts['verify-certificate']).toBe('node lib/certificate-check/verify.mjs');
+  });
+
   it('are checked by a program that imports nothing but Node itself', () => {
     const imports = [...readFileSync(program, 'utf8').matchAll(/from '([^']+)'/g)].map((m) => m[1]);
     expect(imports.every((name) => name?.startsWith('node:'))).toBe(true);

@@ -78,6 +78,25 @@ describe.each(KINDS)('values in writing, %s', (_, arbitrary) => {
     );
   });
 
+  it('the polynomials of the inverse and of the opposite are the reverse and the alternation, up to sign', () => {
+    fc.assert(
+      fc.property(arbitrary, (t) => {
+        law([t], (e, a) => {
+          if (e.isZero(a)) return;
+          const p = e.minimalPolynomial(a);
+          const positive = (q: bigint[]): string =>
+            q.map((c) => ((q[0] as bigint) < 0n ? -c : c)).join();
+          expect(e.minimalPolynomial(e.inverse(a)).join()).toBe(positive([...p].reverse()));
+          expect(e.minimalPolynomial(e.neg(a)).join()).toBe(
+            positive(p.map((c, i) => (i % 2 === 0 ? c : -c))),
+          );
+          expect(e.minimalPolynomial(e.conj(a)).join()).toBe(p.join());
+        });
+      }),
+      RUNS,
+    );
+  });
+
   it('the certificate survives JSON and is accepted', () => {
     fc.assert(
       fc.property(arbitrary, (t) => {
