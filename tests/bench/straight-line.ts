@@ -73,7 +73,7 @@ function evaluate(e: Engine, tokens: readonly string[], values: Map<string, Num>
     else if (t.startsWith('U') || t.startsWith('C')) {
       const [p, q] = t.slice(1).split('/').map(BigInt) as [bigint, bigint];
       stack.push(t.startsWith('U') ? e.rootOfUnity(p, q) : e.cosTurn(p, 2n * q));
-    } else stack.push(e.integer(BigInt(t)));
+    } else stack.push(e.integer(t.length < 16 ? Number(t) : BigInt(t)));
   }
   return pop();
 }
