@@ -79,10 +79,10 @@ principal(z) = my(s = sqrt(z * 1.)); if(abs(imag(s)) < 1e-100, real(s), s);
   0);}
 ST = List();
 L = readstr(FILE);
-brief = setsearch(Set(["T3a", "T3b", "T7a", "T7b", "T8c"]), TASK);
+quick = setsearch(Set(["T3a", "T3b", "T7a", "T7b", "T8c"]), TASK);
 \\ Short tasks are repeated, because the clock counts milliseconds.
-batch = if(brief, 200, TIMES > 1, 5, 1);
+batch = if(quick, 200, TIMES > 1, 5, 1);
 {for(r = 1, TIMES, gettime(); my(R);
-  for(b = 1, batch, if(brief, default(realprecision, 38); R = short(TASK), default(realprecision, 154); R = program(L)));
+  for(b = 1, batch, if(quick, default(realprecision, 38); R = short(TASK), default(realprecision, 154); R = program(L)));
   my(t = gettime());
   print("{\"seconds\":", strprintf("%.7f", t / 1000. / batch), ",\"answers\":\"", R, "\"}"));}
