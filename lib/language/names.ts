@@ -41,6 +41,9 @@ export const FUNCTIONS: readonly FunctionWord[] = [
   word('sin(angle)', 'The sine of an angle; a plain number is in radians.'),
   word('cos(angle)', 'The cosine of an angle; a plain number is in radians.'),
   word('tan(angle)', 'The tangent of an angle; a plain number is in radians.'),
+  word('cot(angle)', 'The cotangent, 1/tan.'),
+  word('sec(angle)', 'The secant, 1/cos.'),
+  word('csc(angle)', 'The cosecant, 1/sin.'),
   word(
     'asin(x)',
     'The angle from -90° to 90° with this sine, where it is an exact part of a turn.',

@@ -57,8 +57,14 @@ describe('special angles', () => {
   it.each(values)('sine, cosine and tangent of $angle', ({ angle, sin, cos, tan }) => {
     expect(truthOf(`sin(${angle}) == ${sin}`)).toBe(true);
     expect(truthOf(`cos(${angle}) == ${cos}`)).toBe(true);
-    if (tan !== null) expect(truthOf(`tan(${angle}) == ${tan}`)).toBe(true);
-    else expect(codeOf(evaluateExpression(`tan(${angle})`))).toMatch(/^domain/);
+    if (tan !== null) {
+      expect(truthOf(`tan(${angle}) == ${tan}`)).toBe(true);
+      if (tan !== '0') expect(truthOf(`cot(${angle}) == 1/(${tan})`)).toBe(true);
+    } else {
+      expect(codeOf(evaluateExpression(`tan(${angle})`))).toMatch(/^domain/);
+    }
+    if (cos !== '0') expect(truthOf(`sec(${angle}) == 1/(${cos})`)).toBe(true);
+    if (sin !== '0') expect(truthOf(`csc(${angle}) == 1/(${sin})`)).toBe(true);
   });
 
   it.each(values)(

@@ -66,15 +66,44 @@ export function sine(engine: Engine, value: Value): NumberValue {
   return plain(engine, engine.sinTurn(k, n));
 }
 
-export function tangent(engine: Engine, value: Value): NumberValue {
+export const tangent = (engine: Engine, value: Value): NumberValue =>
+  ratio(engine, value, 'tangent', 'at a quarter turn from 0', (k, n) => [
+    engine.sinTurn(k, n),
+    engine.cosTurn(k, n),
+  ]);
+
+export const cotangent = (engine: Engine, value: Value): NumberValue =>
+  ratio(engine, value, 'cotangent', 'at a whole number of half turns', (k, n) => [
+    engine.cosTurn(k, n),
+    engine.sinTurn(k, n),
+  ]);
+
+export const secant = (engine: Engine, value: Value): NumberValue =>
+  ratio(engine, value, 'secant', 'at a quarter turn from 0', (k, n) => [
+    engine.integer(1n),
+    engine.cosTurn(k, n),
+  ]);
+
+export const cosecant = (engine: Engine, value: Value): NumberValue =>
+  ratio(engine, value, 'cosecant', 'at a whole number of half turns', (k, n) => [
+    engine.integer(1n),
+    engine.sinTurn(k, n),
+  ]);
+
+/** A quotient of circular functions; `domain` where the lower one is 0. */
+function ratio(
+  engine: Engine,
+  value: Value,
+  name: string,
+  place: string,
+  parts: (k: bigint, n: bigint) => [above: Num, below: Num],
+): NumberValue {
   const { k, n } = partOfTurn(engine, value);
-  const below = engine.cosTurn(k, n);
-  if (engine.isZero(below))
-    fail(
-      'domain',
-      'The tangent has no value at a quarter turn from 0; another angle was expected.',
-    );
-  return plain(engine, engine.div(engine.sinTurn(k, n), below));
+  const [above, below] = parts(k, n);
+  if (engine.isZero(below)) {
+    fail('domain', `The ${name} has no value ${place}; another angle was expected.`);
+  }
+  return plain(engine, engine.div(above, below));
 }
 
 export function arcCosine(engine: Engine, value: Value): Value {

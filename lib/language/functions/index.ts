@@ -1,7 +1,17 @@
 import type { Engine } from '../../engine/index';
 import type { Value } from '../values';
 import { squareRoot } from '../values';
-import { arcCosine, arcSine, arcTangent, cosine, sine, tangent } from './circular';
+import {
+  arcCosine,
+  arcSine,
+  arcTangent,
+  cosecant,
+  cosine,
+  cotangent,
+  secant,
+  sine,
+  tangent,
+} from './circular';
 import { absolute, conjugate, extreme, imaginaryPart, realPart, toWhole } from './parts';
 import { cubeRoot } from './roots';
 import { standIn } from './stand-in';
@@ -33,6 +43,9 @@ export const ACTIONS: ReadonlyMap<string, Action> = new Map<string, Action>([
   ['sin', one(sine)],
   ['cos', one(cosine)],
   ['tan', one(tangent)],
+  ['cot', one(cotangent)],
+  ['sec', one(secant)],
+  ['csc', one(cosecant)],
   ['asin', one(arcSine)],
   ['acos', one(arcCosine)],
   ['atan', one(arcTangent)],
