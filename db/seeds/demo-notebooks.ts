@@ -170,6 +170,7 @@ const courtInlay = [
   dimension(
     'inlay',
     'r7 = 450 mm',
+    's7 = chord(r7, turn/7)',
     'q = sqrt((250 mm)^2 + (300 mm)^2)',
     'q == r7 sqrt(61)/9',
     'rule = r7 sqrt(3)/2',

@@ -24,7 +24,7 @@ import type { Algebraic } from './algebraic/algebraic';
 import { Beyond, isAlgebraic, type Value } from './algebraic/beyond';
 import { nearestRoot } from './algebraic/near';
 import { partOfTurn } from './algebraic/roots-of-unity';
-import { trisectorReaches } from './algebraic/trisector';
+import { trisectorReaches, type Trisector } from './algebraic/trisector';
 import {
   decimalOfAlgebraic,
   floorOfIrrational,
@@ -264,7 +264,7 @@ class ExactEngine implements Engine {
     const x = this.open(a);
     if (!isAlgebraic(x)) return { kind: 'constructible' };
     const verdict = this.beyond.verdictOf(x);
-    const trisector = trisectorReaches(x, this.budget);
+    const trisector = this.trisectorOf(x);
     return { ...verdict, trisector, division: x.origin.division ?? null };
   }
 
@@ -278,6 +278,16 @@ class ExactEngine implements Engine {
       this.sign(im) < 0,
       this.budget,
     );
+  }
+
+  /** A question that goes over the step limit is open; the verdict on square roots stands without it. */
+  private trisectorOf(x: Algebraic): Trisector {
+    try {
+      return trisectorReaches(x, this.budget);
+    } catch (error) {
+      if (error instanceof OverLimit) return { reaches: null, by: 'open' };
+      throw error;
+    }
   }
 
   decimal(a: Num, digits: number): Decimal {

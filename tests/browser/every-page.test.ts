@@ -31,6 +31,8 @@ beforeAll(async () => {
     client: `/client/${token}`,
     settings: '/settings',
     help: '/help',
+    divide: '/divide?n=17&radius=1200+mm',
+    'divide not reached': '/divide?n=7&radius=450+mm',
     'not found': '/client/nothing',
   };
 });
@@ -45,6 +47,8 @@ const PAGES = [
   'client',
   'settings',
   'help',
+  'divide',
+  'divide not reached',
   'not found',
 ] as const;
 

@@ -262,6 +262,19 @@ describe('an angle trisector', () => {
 });
 
 describe('limits', () => {
+  it('leave the verdict on square roots standing when the trisector is too much', () => {
+    const engine = createEngine();
+    const value = engine.sub(
+      engine.mul(engine.integer(50), engine.sqrt(engine.integer(61))),
+      engine.mul(engine.integer(900), engine.sinTurn(1n, 14n)),
+    );
+    expect(valueOf(engine.attempt(() => engine.reach(value)))).toMatchObject({
+      kind: 'degree',
+      degree: 12,
+      trisector: { reaches: null, by: 'open' },
+    });
+  });
+
   it('are named when a degree grows out of hand', () => {
     const engine = createEngine();
     const outcome = engine.attempt(() => engine.add(root(engine, 2, 19), root(engine, 3, 17)));
