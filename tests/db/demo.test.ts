@@ -87,9 +87,12 @@ describe.each(Object.entries(checks))('%s', (title, values) => {
     expect(decided.filter(({ truth }) => !truth.value)).toEqual([]);
   });
 
-  test('every figure is reached by straightedge and compass', async () => {
+  test('every figure is reached by straightedge and compass, but for the true side of the seven-part inlay', async () => {
     const numbers = (await evaluated(title)).filter((result) => result.kind === 'number');
-    expect(numbers.filter(({ reach }) => reach.straightedgeAndCompass !== true)).toEqual([]);
+    const beyond = numbers.filter(({ reach }) => reach.straightedgeAndCompass !== true);
+    expect(beyond.map(({ mark }) => mark)).toEqual(
+      title === 'Fifteen-fold paved court' ? ['s7'] : [],
+    );
   });
 });
 
