@@ -4,8 +4,8 @@
  * never trusted; when a proof fails the precision is doubled.
  */
 import type { Budget } from '../limits';
+import { bitLength } from '../integers';
 import {
-  bitLength,
   degreeOf,
   derivativeOf,
   leadingOf,

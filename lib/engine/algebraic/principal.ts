@@ -1,7 +1,6 @@
 /** Principal square roots and real roots of algebraic numbers: the enclosures that pick one root of f(x^e). */
-import { isqrt } from '../integers';
+import { bitLength, isqrt } from '../integers';
 import { OutsideDomain, type Budget } from '../limits';
-import { bitLength } from '../polynomials/integer-poly';
 import { isFraction, type Algebraic, type Fraction, type Root } from './algebraic';
 import { multiplyBox, realBox, type Box } from './box';
 import { changeNamed, plainName } from './name';

@@ -11,7 +11,6 @@ import {
   divideMod,
   gcdMod,
   monicMod,
-  multiplyMod,
   powerModPoly,
   restMod,
   subtractMod,
@@ -67,7 +66,3 @@ export function factorMod(f: ModPoly, p: number): ModPoly[] {
     splitEqualDegree(product, degree, p),
   );
 }
-
-/** Product of the factors, for tests and lifting. */
-export const productMod = (factors: readonly ModPoly[], p: number): ModPoly =>
-  factors.reduce((product, factor) => multiplyMod(product, factor, p), [1]);

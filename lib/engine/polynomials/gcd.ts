@@ -3,7 +3,6 @@
  * division: a candidate is returned only after it has divided both arguments over the integers.
  */
 import {
-  contentOf,
   derivativeOf,
   divideExactly,
   gcdOf,
@@ -87,7 +86,3 @@ export function squarefreeParts(f: IntegerPoly): { part: IntegerPoly; multiplici
   }
   return parts;
 }
-
-/** Whether f has no repeated root. */
-export const isSquarefree = (f: IntegerPoly): boolean =>
-  contentOf(f) !== 0n && gcdPoly(f, derivativeOf(f)).length === 1;

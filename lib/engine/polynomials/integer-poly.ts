@@ -6,6 +6,8 @@
  * Algebra, §8.4): both factors are packed into one big integer each, so that the whole product is one
  * BigInt multiplication, which is asymptotically fast and has no inner loop of ours.
  */
+import { bigGcd, bitLength } from '../integers';
+
 export type IntegerPoly = readonly bigint[];
 
 export const degreeOf = (f: IntegerPoly): number => f.length - 1;
@@ -21,19 +23,8 @@ export function trim(f: IntegerPoly): IntegerPoly {
 
 const absolute = (n: bigint): bigint => (n < 0n ? -n : n);
 
-/** Number of bits of |n|; 0 for 0. */
-export function bitLength(n: bigint): number {
-  const hex = absolute(n).toString(16);
-  return hex === '0' ? 0 : (hex.length - 1) * 4 + (32 - Math.clz32(parseInt(hex[0] as string, 16)));
-}
-
-/** Greatest common divisor, never negative; gcd(0, 0) = 0. Euclid's algorithm. */
-export function gcdOf(a: bigint, b: bigint): bigint {
-  let x = absolute(a);
-  let y = absolute(b);
-  while (y !== 0n) [x, y] = [y, x % y];
-  return x;
-}
+/** Greatest common divisor, never negative; gcd(0, 0) = 0. */
+export const gcdOf = (a: bigint, b: bigint): bigint => bigGcd(absolute(a), absolute(b));
 
 export const maxBits = (f: IntegerPoly): number =>
   f.reduce((most, c) => Math.max(most, bitLength(c)), 0);
@@ -71,7 +62,6 @@ function pack(f: IntegerPoly, width: bigint): bigint {
 /** Reads `count` signed digits to the base 2^width back out of a packed value. */
 function unpack(packed: bigint, width: number, count: number): bigint[] {
   const digits: bigint[] = [];
-  const half = 1n << BigInt(width - 1);
   const read = (value: bigint, digitsHere: number): void => {
     if (digitsHere === 1) {
       digits.push(value);
@@ -84,7 +74,7 @@ function unpack(packed: bigint, width: number, count: number): bigint[] {
     read(low, lower);
     read((value - low) >> BigInt(bits), digitsHere - lower);
   };
-  if (half > 0n) read(packed, count);
+  read(packed, count);
   return digits;
 }
 

@@ -90,7 +90,7 @@ class GramSchmidt {
       const row = this.lambda[i] as bigint[];
       const t = this.coefficient(i, k);
       row[k] = (after * this.coefficient(i, k - 1) - l * t) / at;
-      row[k - 1] = (b * t + l * (row[k])) / after;
+      row[k - 1] = (b * t + l * row[k]) / after;
     }
     d[k] = b;
   }
