@@ -15,14 +15,15 @@ import {
   sqrtCx,
   subCx,
 } from './complex';
-import { decimalOf, type Part } from './decimal';
+import { decimalOf, irrationalDecimal, type Part } from './decimal';
 import { integerEl, isRationalEl, numerator, rationalEl, scaleEl, subEl } from './element';
-import { enclose, floorEl, signEl } from './enclosure';
+import { enclose, floorEl, signEl, type Enclosure } from './enclosure';
 import * as Z from './int';
 import { bitLength } from './integers';
 import type { Algebraic } from './algebraic/algebraic';
 import { Beyond, isAlgebraic, type Value } from './algebraic/beyond';
 import { nearestRoot } from './algebraic/near';
+import type { RealPart } from './algebraic/real-part';
 import { partOfTurn } from './algebraic/roots-of-unity';
 import { trisectorReaches, type Trisector } from './algebraic/trisector';
 import {
@@ -155,9 +156,12 @@ class ExactEngine implements Engine {
     return this.seal(isAlgebraic(x) ? this.beyond.squareRoot(x) : sqrtCx(x));
   }
   realRoot(a: Num, index: number): Num {
-    if (!Number.isSafeInteger(index) || index < 1)
-      throw new RangeError('The index of a root is a positive integer.');
+    checkIndex(index);
     return this.seal(this.beyond.realRoot(this.open(a), index));
+  }
+  principalRoot(a: Num, index: number): Num {
+    checkIndex(index);
+    return this.seal(this.beyond.principalRoot(this.open(a), index));
   }
   nearestRoot(polynomial: readonly bigint[], near: Num): Num {
     const f = [...polynomial].reverse();
@@ -271,11 +275,10 @@ class ExactEngine implements Engine {
   partOfTurn(a: Num): { k: bigint; n: bigint } | null {
     const x = this.open(a);
     if (!isAlgebraic(x) && !isRationalEl(x.re) && isRealCx(x)) return null;
-    const im = this.im(a);
     return partOfTurn(
       this.minimalPolynomial(a).reverse(),
       (P) => (isAlgebraic(x) ? x.box(P).re : enclose(x.re, P)),
-      this.sign(im) < 0,
+      () => (isAlgebraic(x) ? this.beyond.isBelow(x) : signEl(x.im) < 0),
       this.budget,
     );
   }
@@ -298,9 +301,19 @@ class ExactEngine implements Engine {
       const { text, exact } = this.part(a, digits);
       return { re: text, im: null, digits, terminates: exact };
     }
-    const re = this.part(this.re(a), digits);
-    const im = this.part(this.im(a), digits);
+    const x = this.open(a);
+    const [re, im] = isAlgebraic(x)
+      ? this.partsOf(x, digits)
+      : [decimalOf(x.re, digits), decimalOf(x.im, digits)];
     return { re: re.text, im: im.text, digits, terminates: re.exact && im.exact };
+  }
+  private partsOf(x: Algebraic, digits: number): [Part, Part] {
+    const { re, im } = this.beyond.parts(x);
+    const written = (part: RealPart): Part =>
+      typeof part === 'function'
+        ? irrationalDecimal(part, digits, isNegative(part))
+        : this.part(this.rational(part.n, part.d), digits);
+    return [written(re), written(im)];
   }
   private part(a: Num, digits: number): Part {
     const x = this.open(a);
@@ -361,6 +374,19 @@ class ExactEngine implements Engine {
 
 /** Cosines of divisions up to this one are made from their closed form; it takes some tens of milliseconds at the most. */
 const COSINE_DIVISION = 2000n;
+
+/** The sign of an irrational number. */
+function isNegative(encloseAt: (P: number) => Enclosure): boolean {
+  for (let P = 64; ; P *= 2) {
+    const { low, high } = encloseAt(P);
+    if (low > 0n || high < 0n) return high < 0n;
+  }
+}
+
+function checkIndex(index: number): void {
+  if (!Number.isSafeInteger(index) || index < 1)
+    throw new RangeError('The index of a root is a positive integer.');
+}
 
 const gcd = (a: bigint, b: bigint): bigint => {
   let [x, y] = [a < 0n ? -a : a, b];

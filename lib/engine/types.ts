@@ -176,6 +176,8 @@ export interface Engine {
 
   /** The real root of this index of a real number, in square roots where they reach it; `domain` for an even root of a negative number. */
   realRoot(a: Num, index: number): Num;
+  /** The principal root of this index of any number: its argument is that part of the number's own argument in (−π, π]. */
+  principalRoot(a: Num, index: number): Num;
   /** The root nearest to `near` of a polynomial of positive degree, highest power first; `domain` when two are equally near. */
   nearestRoot(polynomial: readonly bigint[], near: Num): Num;
 

@@ -28,7 +28,10 @@ export const FUNCTIONS: readonly FunctionWord[] = [
     'sqrt(x)',
     'The principal square root; halves a dimension, so the root of an area is a length.',
   ),
-  word('cbrt(x)', 'The real cube root, where it has a form in square roots.'),
+  word(
+    'cbrt(x)',
+    'The real cube root of a real x; of any other x the principal one, as in `x^(1/3)`.',
+  ),
   word(
     'root(p, near)',
     'The real root of the polynomial p in x that lies nearest to the second value.',

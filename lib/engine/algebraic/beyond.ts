@@ -6,7 +6,7 @@
  */
 import { isRealCx, real } from '../complex';
 import { isRationalEl, integerEl, numerator, rationalEl } from '../element';
-import { enclose } from '../enclosure';
+import { enclose, signEl } from '../enclosure';
 import * as Z from '../int';
 import type { Budget } from '../limits';
 import type { Cx } from '../complex';
@@ -18,7 +18,8 @@ import { algebraicCosine } from './cosine';
 import { CyclotomicFields, type Cyclotomic } from './cyclotomic';
 import { isolate } from './newton';
 import * as operations from './operations';
-import { nameRoot, principalSquareRoot, realRoot } from './principal';
+import { rationalPart, type RealPart } from './real-part';
+import { nameRoot, principalRoot, principalSquareRoot, realRoot } from './principal';
 import { quadraticChain, type Chain } from './quadratic-chain';
 import { toTower } from './square-roots';
 
@@ -240,6 +241,18 @@ export class Beyond {
     );
   }
 
+  /** The principal e-th root: its argument is the e-th part of the number's own, taken in (−π, π]. */
+  principalRoot(a: Value, e: number): Value {
+    if (e === 1) return a;
+    const isReal = isAlgebraic(a) ? a.isReal : isRealCx(a);
+    if (isReal && this.sign(a) >= 0) return this.realRoot(a, e);
+    return this.settle(principalRoot(this.rootOf(a), e, this.budget));
+  }
+
+  private sign(a: Value): -1 | 0 | 1 {
+    return isAlgebraic(a) ? this.signOf(a) : signEl(a.re);
+  }
+
   re(a: Algebraic): Value {
     if (a.isReal) return a;
     const sum = operations.add(a, operations.conjugate(a), this.budget);
@@ -249,12 +262,30 @@ export class Beyond {
   im(a: Algebraic): Value {
     if (a.isReal) return real(integerEl(this.field, 0));
     const difference = operations.add(a, operations.negate(operations.conjugate(a)), this.budget);
-    // a − ā = 2i·im, and 1/(2i) = −i/2 is a root of 4x² + 1.
-    const minusHalfI = this.rootOf({
-      re: integerEl(this.field, 0),
-      im: rationalEl(this.field, -1, 2),
-    });
-    return this.settle(operations.multiply(difference, minusHalfI, this.budget));
+    // a − ā = 2i·im.
+    return this.settle(operations.multiply(difference, this.imaginary(-1, 2), this.budget));
+  }
+
+  private imaginary(n: number, d: number): Root {
+    return this.rootOf({ re: integerEl(this.field, 0), im: rationalEl(this.field, n, d) });
+  }
+
+  /** Both parts of a number that is not real as digits need them: by enclosures, or as the rational that a part is. */
+  parts(a: Algebraic): { readonly re: RealPart; readonly im: RealPart } {
+    // The imaginary part of a is the real part of −i·a.
+    const turned = operations.multiply(a, this.imaginary(-1, 1), this.budget);
+    return {
+      re: rationalPart(a, this.budget) ?? ((P) => a.box(P).re),
+      im: rationalPart(turned, this.budget) ?? ((P) => a.box(P).im),
+    };
+  }
+
+  /** Whether the imaginary part of a number that is not real is negative. */
+  isBelow(a: Algebraic): boolean {
+    for (let P = 64; ; P *= 2) {
+      const { low, high } = a.box(P).im;
+      if (low > 0n || high < 0n) return high < 0n;
+    }
   }
 
   abs(a: Algebraic): Value {

@@ -1,8 +1,8 @@
-/** Principal square roots and real roots of algebraic numbers: the enclosures that pick one root of f(x^e). */
+/** Principal and real roots of algebraic numbers: the enclosures that pick one root of f(x^e). */
 import { bitLength, isqrt } from '../integers';
 import { OutsideDomain, type Budget } from '../limits';
 import { isFraction, type Algebraic, type Fraction, type Root } from './algebraic';
-import { multiplyBox, realBox, type Box } from './box';
+import { holdsZero, multiplyBox, realBox, rescaleBox, type Box } from './box';
 import { changeNamed, plainName } from './name';
 import { boxOf, negate, rootOf } from './operations';
 
@@ -25,7 +25,7 @@ function squareRootBox(a: Box, P: number): Box | null {
     }
     return null;
   }
-  if (a.im.low <= 0n && a.im.high >= 0n) return null;
+  if (a.re.low <= 0n && a.im.low <= 0n && a.im.high >= 0n) return null;
   // |z| between roots of squares, then √((|z| + x)/2) for the real part and y/(2·re) for the other.
   const square = (low: bigint, high: bigint): { low: bigint; high: bigint } => {
     const [l, h] = [low * low, high * high];
@@ -48,6 +48,53 @@ function squareRootBox(a: Box, P: number): Box | null {
 
 export function principalSquareRoot(a: Algebraic, budget: Budget): Root {
   return rootOf(a, 2, (P) => squareRootBox(a.box(P), P), budget);
+}
+
+/** A whole number above |ln z| for every z of a box that leaves zero out: |ln|z|| + π at the most. */
+function logarithmBound(a: Box, P: number): number {
+  const least = ({ low, high }: Box['re']): bigint => (low > 0n ? low : high < 0n ? -high : 0n);
+  const most = ({ low, high }: Box['re']): bigint => (-low > high ? -low : high);
+  const above = bitLength(most(a.re) > most(a.im) ? most(a.re) : most(a.im)) + 1 - P;
+  const below = bitLength(least(a.re) > least(a.im) ? least(a.re) : least(a.im)) - 1 - P;
+  return Math.max(Math.abs(above), Math.abs(below)) + 4;
+}
+
+/**
+ * The principal e-th root of every number in the box, or null where the box is too wide. 1/e is written to the base 2 and
+ * a^(1/e) = ∏ a^(2^-k) over its digits 1: every factor is a principal square root of a principal square root, so the
+ * arguments add up to arg(a)/e and no other root can come out. The digits left off, of the worth δ, give a factor a^δ
+ * with |a^δ − 1| ≤ 2δ·|ln a|.
+ */
+function rootBox(box: (P: number) => Box, e: number, P: number, budget: Budget): Box | null {
+  const W = P + 48;
+  const w = BigInt(W);
+  let halved: Box | null = box(W);
+  if (holdsZero(halved)) return null;
+  const bound = BigInt(logarithmBound(halved, W));
+  const digits = P + 8 + bitLength(bound);
+  budget.charge(digits * (40 + (W >> 3)));
+  let root: Box = realBox({ low: 1n << w, high: 1n << w });
+  let rest = 1;
+  for (let k = 0; k < digits && rest !== 0; k++) {
+    halved = squareRootBox(halved, W);
+    if (halved === null) return null;
+    rest *= 2;
+    if (rest < e) continue;
+    rest -= e;
+    root = multiplyBox(root, halved, W);
+  }
+  if (rest !== 0) {
+    const off = ((2n * bound) << w) >> BigInt(digits);
+    const near = { low: -off - 1n, high: off + 1n };
+    const one = 1n << w;
+    root = multiplyBox(root, { re: { low: one + near.low, high: one + near.high }, im: near }, W);
+  }
+  return rescaleBox(root, W, P);
+}
+
+/** The principal e-th root of a number that is not a real one above or at zero: the root with its argument in (−π/e, π/e]. */
+export function principalRoot(a: Root, e: number, budget: Budget): Root {
+  return rootOf(a, e, (P) => rootBox((Q) => boxOf(a, Q), e, P, budget), budget);
 }
 
 /** Largest r with r^e ≤ n for n ≥ 0, by bisection on its bits. */

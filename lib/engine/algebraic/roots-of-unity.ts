@@ -19,13 +19,13 @@ const LARGEST_DEGREE = 64;
 
 /**
  * k and n with 0 ≤ k < n, in lowest terms, when a number with this minimal polynomial is e^(2πik/n); null when it is no
- * root of unity. `re` encloses its real part, `isBelow` says whether its imaginary part is negative.
+ * root of unity. `re` encloses its real part, `isBelow` says whether its imaginary part is negative, and is asked only of a root of unity.
  * Cost: log n enclosures of a cosine.
  */
 export function partOfTurn(
   poly: IntegerPoly,
   re: (P: number) => Enclosure,
-  isBelow: boolean,
+  isBelow: () => boolean,
   budget: Budget,
 ): { k: bigint; n: bigint } | null {
   const degree = poly.length - 1;
@@ -42,5 +42,5 @@ export function partOfTurn(
     else if (x.high < c.low) low = middle;
     else P *= 2;
   }
-  return { k: isBelow ? n - low : low, n };
+  return { k: isBelow() ? n - low : low, n };
 }

@@ -6,38 +6,38 @@ import {
   type NumberValue,
   type Value,
   describe,
-  isRealValue,
   needAlgebraic,
   needNumber,
   number,
   power,
-  signOf,
   squareRoot,
 } from '../values';
 import { asAlgebraic } from '../pi-sum';
 
 /**
- * The real cube root of a real value, in square roots where they reach it. A dimension must be a multiple of three.
+ * The real cube root of a real value, the principal one of any other, in square roots where they reach it. A dimension
+ * must be a multiple of three.
  */
 export function cubeRoot(engine: Engine, value: Value): NumberValue {
-  const { plain, radicand } = needReal(engine, value, 'cbrt');
+  const { plain, radicand } = needRadicand(engine, value, 'cbrt');
   if (plain.length % 3 !== 0) {
     fail(
       'unit-mismatch',
       `A cube root divides the dimension by three and this is ${describe(plain)}; a volume or a plain number was expected.`,
     );
   }
-  return number(fromNum(engine, engine.realRoot(radicand, 3)), plain.length / 3);
+  const root = engine.isReal(radicand)
+    ? engine.realRoot(radicand, 3)
+    : engine.principalRoot(radicand, 3);
+  return number(fromNum(engine, root), plain.length / 3);
 }
 
-function needReal(
+function needRadicand(
   engine: Engine,
   value: Value,
   name: string,
 ): { plain: NumberValue; radicand: Num } {
   const plain = needNumber(value, `${name} needs a number`);
-  if (!isRealValue(engine, plain))
-    fail('domain', `${name} needs a real number, and this one is not real.`);
   const radicand = asAlgebraic(engine, plain.sum);
   return {
     plain,
@@ -46,10 +46,7 @@ function needReal(
   };
 }
 
-/**
- * x^(p/q), the principal value. Powers of two in q are square roots, whatever x is; an odd part of q needs x real
- * and not negative.
- */
+/** x^(p/q), the principal value: the q-th root with its argument in (-π/q, π/q], to the power p. */
 export function rationalPower(engine: Engine, base: Value, p: bigint, q: bigint): Value {
   let odd = q;
   let halvings = 0;
@@ -69,21 +66,14 @@ export function rationalPower(engine: Engine, base: Value, p: bigint, q: bigint)
 }
 
 function oddRoot(engine: Engine, base: Value, index: number): NumberValue {
-  const { plain, radicand } = needReal(engine, base, 'A power with this exponent');
-  if (signOf(engine, plain) < 0) {
-    const instead = index === 3 ? '; the real cube root is written `cbrt(x)`' : '';
-    fail(
-      'not-exact',
-      `The principal value of this power of a negative number is not real and has no exact form here${instead}.`,
-    );
-  }
+  const { plain, radicand } = needRadicand(engine, base, 'A power with this exponent');
   if (plain.length % index !== 0) {
     fail(
       'unit-mismatch',
       `The exponent divides the dimension by ${index} and this is ${describe(plain)}, which it does not divide.`,
     );
   }
-  return number(fromNum(engine, engine.realRoot(radicand, index)), plain.length / index);
+  return number(fromNum(engine, engine.principalRoot(radicand, index)), plain.length / index);
 }
 
 /** x to an exponent that is itself an exact value; only rational exponents keep the result algebraic. */
