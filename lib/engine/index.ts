@@ -177,6 +177,13 @@ class ExactEngine implements Engine {
     );
     return this.seal(this.beyond.settle(root));
   }
+  nearestRootOf(coefficients: readonly Num[], near: Num): Num {
+    const [leading, ...others] = coefficients.map((c) => this.open(c));
+    if (leading === undefined || others.length === 0 || this.isZero(coefficients[0] as Num))
+      throw new RangeError('nearestRootOf() takes a polynomial of positive degree.');
+    this.budget.within('degree', others.length);
+    return this.seal(this.beyond.nearestRoot([leading, ...others].reverse(), this.open(near)));
+  }
   re(a: Num): Num {
     const x = this.open(a);
     return this.seal(isAlgebraic(x) ? this.beyond.re(x) : real(x.re));

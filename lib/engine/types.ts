@@ -180,6 +180,8 @@ export interface Engine {
   principalRoot(a: Num, index: number): Num;
   /** The root nearest to `near` of a polynomial of positive degree, highest power first; `domain` when two are equally near. */
   nearestRoot(polynomial: readonly bigint[], near: Num): Num;
+  /** The same for a polynomial with any coefficients, highest power first, the first one not 0. */
+  nearestRootOf(coefficients: readonly Num[], near: Num): Num;
 
   re(a: Num): Num;
   im(a: Num): Num;

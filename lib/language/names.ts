@@ -34,7 +34,7 @@ export const FUNCTIONS: readonly FunctionWord[] = [
   ),
   word(
     'root(p, near)',
-    'The real root of the polynomial p in x that lies nearest to the second value.',
+    'The root of the polynomial p in x, with any exact coefficients, that lies nearest to the second value.',
     2,
   ),
   word('abs(x)', 'The size of x: its distance from 0.'),

@@ -17,6 +17,8 @@ import { addBox, multiplyBox, type Box } from './box';
 import { algebraicCosine } from './cosine';
 import { CyclotomicFields, type Cyclotomic } from './cyclotomic';
 import { isolate } from './newton';
+import { nearestOf } from './near';
+import { rootsOverField } from './norm';
 import * as operations from './operations';
 import { rationalPart, type RealPart } from './real-part';
 import { nameRoot, principalRoot, principalSquareRoot, realRoot } from './principal';
@@ -251,6 +253,16 @@ export class Beyond {
 
   private sign(a: Value): -1 | 0 | 1 {
     return isAlgebraic(a) ? this.signOf(a) : signEl(a.re);
+  }
+
+  /** The nearest root of a polynomial with any coefficients, constant term first, the last one not 0. */
+  nearestRoot(coefficients: readonly Value[], near: Value): Value {
+    const roots = rootsOverField(
+      coefficients.map((c) => this.rootOf(c)),
+      this.budget,
+    );
+    const place = this.rootOf(near);
+    return this.settle(nearestOf(roots, (P) => operations.boxOf(place, P), this.budget));
   }
 
   re(a: Algebraic): Value {

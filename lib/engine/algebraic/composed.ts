@@ -54,7 +54,7 @@ export function fromPowerSums(sums: readonly bigint[]): IntegerPoly {
 }
 
 /** Undoes a scaling of all roots by `by`. */
-function unscaleRoots(monic: IntegerPoly, by: bigint): IntegerPoly {
+export function unscaleRoots(monic: IntegerPoly, by: bigint): IntegerPoly {
   let power = 1n;
   return primitivePart(
     trim(

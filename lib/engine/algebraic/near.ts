@@ -7,7 +7,7 @@ import { Algebraic, refining, type Root } from './algebraic';
 import { rescaleBox, subtractBox, type Box } from './box';
 import { refine } from './newton';
 
-interface Isolated {
+export interface Isolated {
   readonly poly: IntegerPoly;
   readonly box: Box;
   readonly precision: number;
@@ -30,20 +30,39 @@ function distance(a: Box, b: Box): { low: bigint; high: bigint } {
   return { low: x.low + y.low, high: x.high + y.high };
 }
 
-function isolatedRoots(f: IntegerPoly, budget: Budget): Isolated[] {
-  return factorOverIntegers(f, (work) => budget.charge(work)).flatMap(({ poly }) => {
-    const { boxes, precision } = isolateRoots(poly, budget);
-    return boxes.map((box) => ({ poly, box, precision }));
-  });
+/** Boxes of all roots of an irreducible polynomial. */
+export function isolatedRoots(poly: IntegerPoly, budget: Budget): Isolated[] {
+  const { boxes, precision } = isolateRoots(poly, budget);
+  return boxes.map((box) => ({ poly, box, precision }));
+}
+
+function rootsOf(f: IntegerPoly, budget: Budget): Isolated[] {
+  return factorOverIntegers(f, (work) => budget.charge(work)).flatMap(({ poly }) =>
+    isolatedRoots(poly, budget),
+  );
+}
+
+/** A box of the root over 2^P, a few units wide. */
+export function refinedBox(root: Isolated, P: number, budget: Budget): Box {
+  return root.precision >= P && root.box.re.high - root.box.re.low <= 4n
+    ? rescaleBox(root.box, root.precision, P)
+    : refine(root.poly, root.box, root.precision, P, (work) => budget.charge(work));
+}
+
+/** The root of f nearest to the place that `near` encloses. f has positive degree. */
+export function nearestRoot(f: IntegerPoly, near: (P: number) => Box, budget: Budget): Root {
+  return nearestOf(rootsOf(f, budget), near, budget);
 }
 
 /**
- * The root of f nearest to the place that `near` encloses. f has positive degree; the answer carries the root's own
- * minimal polynomial. Two roots as near as each other to 512 bits are refused.
+ * The nearest of some roots to the place that `near` encloses, by its own minimal polynomial. Two roots as near as each
+ * other to 512 bits are refused.
  */
-export function nearestRoot(f: IntegerPoly, near: (P: number) => Box, budget: Budget): Root {
-  const roots = isolatedRoots(f, budget);
-  const charge = (work: number): void => budget.charge(work);
+export function nearestOf(
+  roots: readonly Isolated[],
+  near: (P: number) => Box,
+  budget: Budget,
+): Root {
   let left = roots;
   for (let P = 64; left.length > 1; P *= 2) {
     if (P > TIE_BITS) {
@@ -53,13 +72,10 @@ export function nearestRoot(f: IntegerPoly, near: (P: number) => Box, budget: Bu
       );
     }
     const place = near(P);
-    const measured = left.map((root) => {
-      const box =
-        root.precision >= P && root.box.re.high - root.box.re.low <= 4n
-          ? rescaleBox(root.box, root.precision, P)
-          : refine(root.poly, root.box, root.precision, P, charge);
-      return { root, gap: distance(box, place) };
-    });
+    const measured = left.map((root) => ({
+      root,
+      gap: distance(refinedBox(root, P, budget), place),
+    }));
     const least = measured.reduce(
       (best, { gap }) => (gap.high < best ? gap.high : best),
       measured[0]?.gap.high ?? 0n,
