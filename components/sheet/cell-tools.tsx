@@ -1,15 +1,20 @@
 'use client';
 
+import type { NotebookCell } from '@/lib/notebooks/content';
 import { Button } from '@/components/ui/button';
 import type { SheetActions } from './cells';
 
+type Kind = NotebookCell['kind'];
+
 interface CellToolsProps {
   id: string;
+  kind: Kind;
+  folded?: boolean;
   actions: SheetActions;
 }
 
 /** What can be done with the cell that is in hand or pointed at. Every one also has a key. */
-export function CellTools({ id, actions }: CellToolsProps) {
+export function CellTools({ id, kind, folded = false, actions }: CellToolsProps) {
   return (
     <div
       role="group"
@@ -22,11 +27,20 @@ export function CellTools({ id, actions }: CellToolsProps) {
       <Button look="quiet" onClick={() => actions.insert('note', id, 'after')}>
         Note below
       </Button>
+      <Button look="quiet" onClick={() => actions.insert('section', id, 'after')}>
+        Section below
+      </Button>
       <Button look="quiet" onClick={() => actions.move(id, -1)}>
         Move up
       </Button>
       <Button look="quiet" onClick={() => actions.move(id, 1)}>
         Move down
+      </Button>
+      <Button look="quiet" onClick={() => actions.duplicate(id)}>
+        Duplicate
+      </Button>
+      <Button look="quiet" onClick={() => actions.fold(id)}>
+        {kind === 'section' && folded ? 'Open' : 'Fold'}
       </Button>
       <Button look="quiet" onClick={() => actions.remove(id)}>
         Delete
@@ -34,6 +48,12 @@ export function CellTools({ id, actions }: CellToolsProps) {
     </div>
   );
 }
+
+const HERE: Record<Kind, string> = {
+  dimension: 'Dimension here',
+  note: 'Note here',
+  section: 'Section here',
+};
 
 interface GapProps {
   before: string;
@@ -46,7 +66,7 @@ export function Gap({ before, actions }: GapProps) {
     <div className="group/gap relative h-5 print:hidden" aria-hidden="true">
       <div className="absolute inset-x-0 top-1/2 flex -translate-y-1/2 items-center gap-2 bg-sheet opacity-0 transition-opacity group-hover/gap:opacity-100">
         <span className="h-px w-8 border-t border-dashed border-rule" />
-        {(['dimension', 'note'] as const).map((kind) => (
+        {(Object.keys(HERE) as Kind[]).map((kind) => (
           <button
             key={kind}
             type="button"
@@ -54,7 +74,7 @@ export function Gap({ before, actions }: GapProps) {
             className="px-1 text-small text-snapline hover:underline"
             onClick={() => actions.insert(kind, before, 'before')}
           >
-            {kind === 'dimension' ? 'Dimension here' : 'Note here'}
+            {HERE[kind]}
           </button>
         ))}
         <span className="h-px grow border-t border-dashed border-rule" />

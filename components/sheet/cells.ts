@@ -5,7 +5,7 @@ import type { Change } from './state/changes';
 /** What is in hand: a cell, one of its lines, and where in that line the cursor begins. */
 export interface Hand {
   id: string;
-  /** Of a dimension cell, from 0; a note is taken in hand as a whole (line 0). */
+  /** Of a dimension cell, from 0; a note or a heading is taken in hand as a whole (line 0). */
   line: number;
   /** UTF-16 units into the line; beyond its end means the end. */
   column: number;
@@ -22,8 +22,18 @@ export interface SheetActions {
   step: (hand: Hand, by: -1 | 1) => boolean;
   /** The marks of the sheet as they stand, for completing a name. */
   marks: () => readonly KnownMark[];
+  /** Puts an empty cell beside another, or at the end, and takes it in hand. */
   insert: (kind: NotebookCell['kind'], beside: string | null, where: 'before' | 'after') => void;
+  /** Past the cell above or below; a folded section goes with all that it hides, here and below. */
   move: (id: string, by: -1 | 1) => void;
+  /** To a place among the cells, counted before the cell is taken out. */
+  place: (id: string, at: number) => void;
+  /** A copy below; marks that it defines get fresh names. */
+  duplicate: (id: string) => void;
+  /** Folds what is open and opens what is folded. */
+  fold: (id: string) => void;
+  /** Opens whatever is folded over a cell, so that it can be seen. */
+  reveal: (id: string) => void;
   remove: (id: string) => void;
 }
 

@@ -107,7 +107,7 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
       />
       {hand && (
         <div className="mt-3 sm:ml-[6.125rem]">
-          <CellTools id={id} actions={actions} />
+          <CellTools id={id} kind="dimension" actions={actions} />
         </div>
       )}
     </section>

@@ -69,7 +69,7 @@ export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
                 <pre className="whitespace-pre-wrap font-mono text-source">{cell.source}</pre>
               }
             />
-            <CellTools id={id} actions={actions} />
+            <CellTools id={id} kind="note" actions={actions} />
           </>
         ) : readOnly ? null : (
           <button

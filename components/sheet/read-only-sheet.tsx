@@ -1,3 +1,4 @@
+import { SectionRule } from '@/components/drawing/section-rule';
 import { TitleBlock, type TitleField } from '@/components/drawing/title-block';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { CellRows } from './cell-rows';
@@ -29,6 +30,13 @@ export function ReadOnlySheet({ content, answers, fields }: ReadOnlySheetProps) 
       )}
       <div className="space-y-4">
         {content.cells.map(({ id, kind, source }) => {
+          if (kind === 'section') {
+            return (
+              <section key={id} id={cellAnchor(id)} className="px-3 pt-2 max-sm:px-2">
+                <SectionRule>{source}</SectionRule>
+              </section>
+            );
+          }
           if (kind === 'note') {
             return (
               <section

@@ -40,7 +40,11 @@ function marksOf({ content, shown }: SheetIndexProps): Entry[] {
 export function SheetIndex(props: SheetIndexProps) {
   const marks = marksOf(props);
   const headings = props.content.cells.flatMap(({ id, kind, source }) =>
-    kind === 'note' ? headingsOf(source).map((heading) => ({ ...heading, id })) : [],
+    kind === 'section'
+      ? [{ id, level: 1, text: source.trim() || 'Untitled' }]
+      : kind === 'note'
+        ? headingsOf(source).map((heading) => ({ ...heading, id }))
+        : [],
   );
   if (marks.length === 0 && headings.length === 0) {
     return (

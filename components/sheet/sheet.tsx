@@ -1,33 +1,35 @@
 'use client';
 
-import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import { useEffect, useState } from 'react';
 import { SWRConfig } from 'swr';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { TitleBlock } from '@/components/drawing/title-block';
-import { AT_END, cellAnchor, focusEntry, type Hand, type SheetActions } from './cells';
+import type { Hand } from './cells';
 import { preloadEditor } from './editor/source-editor';
 import { Entries } from './entries';
+import { Removed } from './removed';
 import { SheetBar } from './sheet-bar';
 import { SheetDialogs, type Panel } from './sheet-dialogs';
 import { SheetIndex } from './sheet-index';
 import { SheetLayout, zonesFor } from './sheet-layout';
 import { SheetNews } from './sheet-news';
 import { BoundedCache } from './state/bounded-cache';
-import { newCellId } from './state/changes';
-import type { CellAnswer, Shown } from './state/shown';
+import { useFolds } from './state/folds';
+import type { CellAnswer } from './state/shown';
 import { useEvaluation } from './state/use-evaluation';
 import { useNotebook } from './state/use-notebook';
-import { linesOf } from './source-text';
+import { useSheetActions } from './state/use-sheet-actions';
 import { titleFields } from './title-fields';
-import { sayBriefly, sayResult } from './wording';
+import { sayResult } from './wording';
 
 export interface SheetProps {
   notebook: NotebookHead;
   content: NotebookContent;
   /** The figures as the server computed them with the page; null when it could not. */
   answers: CellAnswer[] | null;
-  /** Name of the person who looks. */
+  /** The person who looks. */
+  personId: string;
   personName: string;
   mayWrite: boolean;
   mayShare: boolean;
@@ -58,7 +60,10 @@ function SheetOnScreen(props: SheetProps) {
   const evaluation = useEvaluation(content, answers);
   const [hand, setHand] = useState<Hand | null>(null);
   const [panel, setPanel] = useState<Panel | null>(null);
-  const actions = useSheetActions(content, evaluation.shown, setHand, dispatch);
+  const [said, say] = useState('');
+  const { folds, setFold } = useFolds(props.personId, notebook.id);
+  const { shown } = evaluation;
+  const actions = useSheetActions({ content, shown, folds, dispatch, setFold, setHand, say });
 
   useEffect(() => {
     if (!mayWrite) return;
@@ -110,7 +115,7 @@ function SheetOnScreen(props: SheetProps) {
         onPanel={setPanel}
       />
       <SheetLayout
-        index={<SheetIndex content={content} shown={evaluation.shown} />}
+        index={<SheetIndex content={content} shown={shown} />}
         zones={zonesFor(content.cells.length)}
         foot={
           <TitleBlock
@@ -130,6 +135,7 @@ function SheetOnScreen(props: SheetProps) {
           content={content}
           evaluation={evaluation}
           hand={mayWrite ? hand : null}
+          folds={folds}
           mayWrite={mayWrite}
           actions={actions}
         />
@@ -137,6 +143,10 @@ function SheetOnScreen(props: SheetProps) {
       <div role="status" aria-live="polite" className="sr-only">
         {spoken}
       </div>
+      <div role="status" aria-live="polite" className="sr-only">
+        {said}
+      </div>
+      <Removed count={sheet.removed} onUndo={undo} />
       <SheetDialogs
         panel={panel}
         notebook={notebook}
@@ -146,75 +156,5 @@ function SheetOnScreen(props: SheetProps) {
         onClose={() => setPanel(null)}
       />
     </div>
-  );
-}
-
-/** The actions of the cells: one object for as long as the sheet is on the screen. */
-function useSheetActions(
-  content: NotebookContent,
-  shown: Shown,
-  setHand: (hand: Hand | null) => void,
-  dispatch: SheetActions['dispatch'],
-): SheetActions {
-  const latest = useRef(content);
-  const figures = useRef(shown);
-  useEffect(() => {
-    latest.current = content;
-    figures.current = shown;
-  });
-  const at = useCallback(
-    (id: string) => latest.current.cells.findIndex((cell) => cell.id === id),
-    [],
-  );
-
-  return useMemo<SheetActions>(
-    () => ({
-      dispatch,
-      take: setHand,
-      marks: () =>
-        [...figures.current.values()]
-          .flat()
-          .flatMap(({ result }) =>
-            result.mark === null ? [] : [{ name: result.mark, size: sayBriefly(result) }],
-          ),
-      step({ id, line, column }, by) {
-        const { cells } = latest.current;
-        const own = cells[at(id)];
-        if (own?.kind === 'dimension' && linesOf(own.source)[line + by] !== undefined) {
-          setHand({ id, line: line + by, column });
-          return true;
-        }
-        const next = cells[at(id) + by];
-        if (!next) return false;
-        const last = next.kind === 'dimension' ? linesOf(next.source).length - 1 : 0;
-        setHand({ id: next.id, line: by < 0 ? last : 0, column });
-        return true;
-      },
-      insert(kind, beside, where) {
-        const cell = { id: newCellId(), kind, source: '' };
-        const end = latest.current.cells.length;
-        const place = beside === null ? end : at(beside) + (where === 'after' ? 1 : 0);
-        dispatch({ kind: 'insert', cell, at: place });
-        setHand({ id: cell.id, line: 0, column: AT_END });
-      },
-      move(id, by) {
-        const focused = document.activeElement;
-        dispatch({ kind: 'move', id, by });
-        requestAnimationFrame(() => {
-          if (focused instanceof HTMLElement) focused.focus();
-          document.getElementById(cellAnchor(id))?.scrollIntoView({ block: 'nearest' });
-        });
-      },
-      remove(id) {
-        const { cells } = latest.current;
-        const next = cells[at(id) + 1] ?? cells[at(id) - 1];
-        dispatch({ kind: 'delete', id });
-        setHand(null);
-        requestAnimationFrame(() => {
-          if (next) focusEntry(next.id);
-        });
-      },
-    }),
-    [at, dispatch, setHand],
   );
 }

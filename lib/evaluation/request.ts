@@ -20,7 +20,12 @@ export const SettingsRequest = z.strictObject({
 
 const source = z.string().max(EVALUATION_LIMITS.sourceLength);
 
-const CellRequest = z.strictObject({ id: z.string().max(200), source });
+/** A cell; settings of its own stand before those of the request. */
+const CellRequest = z.strictObject({
+  id: z.string().max(200),
+  source,
+  settings: SettingsRequest.optional(),
+});
 
 /** What can be asked: one expression, or cells that share marks. */
 export const EvaluateRequest = z

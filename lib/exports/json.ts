@@ -24,21 +24,22 @@ export function notebookDocument(
   results: ExportedResults,
   engine: string,
 ): NotebookDocument {
-  const { id, title, workshop, version, settings, cells } = notebook;
+  const { id, title, workshop, version, settings: whole, cells } = notebook;
   return {
     schema: 1,
     engine,
     notebook: { id, title, workshop },
     version: { number: version.number, author: version.author, savedAt: version.savedAt },
     settings: {
-      digits: settings.digits,
-      unit: settings.unit,
-      step: settings.step,
-      rounding: settings.rounding,
+      digits: whole.digits,
+      unit: whole.unit,
+      step: whole.step,
+      rounding: whole.rounding,
     },
     cells: cells.map((cell) => {
-      const own = { id: cell.id, kind: cell.kind, source: cell.source };
-      return cell.kind === 'note' ? own : { ...own, results: resultsOf(cell, results) };
+      const { id, kind, source, settings } = cell;
+      const own = { id, kind, source, ...(settings === undefined ? {} : { settings }) };
+      return kind === 'dimension' ? { ...own, results: resultsOf(cell, results) } : own;
     }),
     caution: CAUTION,
   };

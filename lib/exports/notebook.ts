@@ -19,11 +19,14 @@ export interface ExportedNotebook {
 
 export interface ExportedCell {
   readonly id: string;
-  readonly kind: 'dimension' | 'note';
+  readonly kind: 'dimension' | 'note' | 'section';
+  /** Of a section, its heading. */
   readonly source: string;
+  /** What a dimension cell is given in instead of the notebook's settings. */
+  readonly settings?: Partial<Settings> | undefined;
 }
 
-/** What the evaluation gave: results by the id of their cell. Note cells have none. */
+/** What the evaluation gave: results by the id of their cell. Only dimension cells have them. */
 export type ExportedResults = readonly {
   readonly id: string;
   readonly results: readonly Result[];

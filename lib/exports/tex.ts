@@ -35,7 +35,14 @@ export function writeNotebookTex(notebook: ExportedNotebook, results: ExportedRe
 
 /** One cell, as it stands in the document; to be copied into another that loads amsmath. */
 export function cellTex(cell: ExportedCell, results: readonly Result[]): string {
-  return cell.kind === 'note' ? noteTex(cell.source) : results.map(entryTex).join('\n\n');
+  switch (cell.kind) {
+    case 'note':
+      return noteTex(cell.source);
+    case 'section':
+      return `\\section*{${escapeTex(cell.source.trim())}}`;
+    case 'dimension':
+      return results.map(entryTex).join('\n\n');
+  }
 }
 
 function entryTex(result: Result): string {

@@ -49,7 +49,7 @@ export interface CellResults {
 /**
  * Evaluates cells that share marks: one result for each line that is not blank or a remark, in order of the page.
  * Accepts any text as source; everything that can be wrong with it is a result of kind `error`, and the other lines
- * still answer. Throws a RangeError for settings that do not make sense. One engine serves the call, so equal values
+ * still answer. A cell with settings of its own is given in them. Throws a RangeError for settings that do not make sense. One engine serves the call, so equal values
  * are written alike. Cost: reading is linear; arithmetic is bounded line by line by the engine's limits.
  */
 export function evaluateCells(
@@ -57,7 +57,7 @@ export function evaluateCells(
   settings: Partial<Settings> = {},
   options: EvaluationOptions = {},
 ): CellResults[] {
-  const evaluation = new Evaluation(readCells(cells), completeSettings(settings), options);
+  const evaluation = new Evaluation(readCells(cells), settingsOf(cells, settings), options);
   const results = evaluation.run();
   return cells.map((cell, index) => ({ id: cell.id, results: results[index] ?? [] }));
 }
@@ -91,6 +91,14 @@ export function evaluateExpression(
   );
 }
 
+/** The settings of each cell: its own before those of the whole. */
+function settingsOf(cells: readonly CellSource[], whole: Partial<Settings>): GivenSettings[] {
+  const common = completeSettings(whole);
+  return cells.map((cell) =>
+    cell.settings === undefined ? common : completeSettings({ ...whole, ...cell.settings }),
+  );
+}
+
 class Evaluation {
   private readonly engine: Engine;
   private readonly evaluator: Evaluator;
@@ -101,7 +109,8 @@ class Evaluation {
 
   constructor(
     private readonly graph: LineGraph,
-    private readonly settings: GivenSettings,
+    /** Of each cell, by its position. */
+    private readonly settings: readonly GivenSettings[],
     private readonly options: EvaluationOptions,
   ) {
     this.engine = createEngine(options.engineLimits);
@@ -198,21 +207,20 @@ class Evaluation {
   }
 
   private giveStatement(index: number, line: SourceLine, statement: Statement) {
+    const settings = this.settings[line.cell] ?? completeSettings();
     if (statement.kind === 'decision') {
       return {
         kind: 'truth' as const,
-        truth: decide(this.engine, this.evaluator, statement, this.settings),
+        truth: decide(this.engine, this.evaluator, statement, settings),
       };
     }
     const value = attemptOrFail(this.engine, () => this.evaluator.value(statement.value));
     this.evaluator.at = statement.value;
-    const given = giveValue(this.engine, value, this.settings, {
+    const given = giveValue(this.engine, value, settings, {
       started: () => this.options.valued?.(line),
       refused: this.options.brief?.get(keyOf(line)) ?? null,
     });
-    const standIn = attemptOrFail(this.engine, () =>
-      giveStandIn(this.engine, value, this.settings),
-    );
+    const standIn = attemptOrFail(this.engine, () => giveStandIn(this.engine, value, settings));
     this.values.set(index, value);
     return { ...given, ...standIn };
   }

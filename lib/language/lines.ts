@@ -2,11 +2,14 @@ import type { Problem } from './failure';
 import { classOfWord } from './names';
 import { orderByDependence } from './graph';
 import { readLine } from './read';
+import type { Settings } from './settings';
 import { type MarkNode, type Statement, marksReadBy } from './syntax';
 
 export interface CellSource {
   readonly id: string;
   readonly source: string;
+  /** In what its results are given, where that differs from the settings of the whole. */
+  readonly settings?: Partial<Settings>;
 }
 
 /** A line that is not blank, with what is known of it before any arithmetic. */

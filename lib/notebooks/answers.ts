@@ -7,7 +7,7 @@ import {
 } from '@/lib/evaluation';
 import { databaseStore } from '@/lib/evaluation/database-store';
 import { Failure } from '@/lib/access';
-import type { NotebookContent } from './content';
+import { settingsField, type NotebookContent } from './content';
 
 const holder = globalThis as typeof globalThis & { surdworkAnswersKept?: true };
 
@@ -30,11 +30,15 @@ export async function answerTo(request: EvaluateRequest): Promise<EvaluateAnswer
   }
 }
 
-/** The question that a notebook's dimension cells put together, under the notebook's settings. */
+/** The question that a notebook's dimension cells put together, under the notebook's settings and their own. */
 export function questionOf(content: NotebookContent): EvaluateRequest {
   const dimensions = content.cells.filter(({ kind }) => kind === 'dimension');
   return {
-    cells: dimensions.map(({ id, source }) => ({ id, source })),
+    cells: dimensions.map(({ id, source, settings }) => ({
+      id,
+      source,
+      ...settingsField(settings),
+    })),
     settings: content.settings,
   };
 }

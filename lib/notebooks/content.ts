@@ -17,6 +17,8 @@ export const CONTENT_LIMITS = {
   digits: 1000,
   /** UTF-16 units of a cutting step such as `0.5 mm`. */
   step: 40,
+  /** UTF-16 units of the heading of a section. */
+  heading: 200,
 } as const;
 
 const plural = (n: number, one: string) => `${n} ${one}${n === 1 ? '' : 's'}`;
@@ -55,7 +57,16 @@ export const DEFAULT_NOTEBOOK_SETTINGS: NotebookSettings = {
   rounding: 'half-even',
 };
 
-export const NotebookCell = z.strictObject({
+/**
+ * What one dimension cell is given in instead of the notebook's settings; what is left out follows
+ * the notebook. A step of null asks for no cut size there.
+ */
+export const CellSettings = NotebookSettings.partial();
+export type CellSettings = z.infer<typeof CellSettings>;
+
+const CELL_KINDS = ['dimension', 'note', 'section'] as const;
+
+const CellFields = z.strictObject({
   id: z
     .string()
     .regex(/^[A-Za-z0-9_-]+$/, {
@@ -64,7 +75,7 @@ export const NotebookCell = z.strictObject({
     .max(CONTENT_LIMITS.cellId, {
       error: `A cell id is at most ${CONTENT_LIMITS.cellId} characters long.`,
     }),
-  kind: z.enum(['dimension', 'note'], { error: 'The kind of a cell is dimension or note.' }),
+  kind: z.enum(CELL_KINDS, { error: 'The kind of a cell is dimension, note or section.' }),
   source: z
     .string()
     .max(CONTENT_LIMITS.source, {
@@ -79,6 +90,27 @@ export const NotebookCell = z.strictObject({
         return `The source of a cell has half of a character at place ${place}; delete it and type it anew.`;
       },
     }),
+  settings: CellSettings.optional(),
+});
+
+/** A cell. The source of a section is its heading: one line, and it reaches to the next section. */
+export const NotebookCell = CellFields.superRefine(({ kind, source, settings }, context) => {
+  const refuse = (path: string, message: string) =>
+    context.addIssue({ code: 'custom', path: [path], message });
+  if (settings !== undefined && kind !== 'dimension') {
+    refuse('settings', `A ${kind} has settings of its own; only a dimension cell can have them.`);
+  }
+  if (kind !== 'section') return;
+  if (/[\r\n]/.test(source)) {
+    refuse('source', 'The heading of a section has several lines; one line was expected.');
+  }
+  if (source.length > CONTENT_LIMITS.heading) {
+    refuse(
+      'source',
+      `The heading of a section is ${source.length} characters long; ` +
+        `at most ${CONTENT_LIMITS.heading} are allowed.`,
+    );
+  }
 });
 export type NotebookCell = z.infer<typeof NotebookCell>;
 
@@ -124,13 +156,28 @@ export function emptyContent(): NotebookContent {
 
 /**
  * The same content with its fields in one fixed order, so that equal contents have equal JSON and
- * equal hashes whatever order a client sent the fields in.
+ * equal hashes whatever order a client sent the fields in. What a cell leaves out stays out, so that
+ * content of before a field was known keeps its hash; settings that set nothing are left out too.
  */
 export function canonicalContent(content: NotebookContent): NotebookContent {
   const { digits, unit, step, rounding } = content.settings;
   return {
     format: content.format,
     settings: { digits, unit, step, rounding },
-    cells: content.cells.map(({ id, kind, source }) => ({ id, kind, source })),
+    cells: content.cells.map(({ id, kind, source, settings }) => ({
+      id,
+      kind,
+      source,
+      ...settingsField(settings),
+    })),
   };
+}
+
+const SETTING_NAMES = ['digits', 'unit', 'step', 'rounding'] as const;
+
+/** The `settings` of a cell in their fixed order, or no such field where they set nothing. */
+export function settingsField(settings: CellSettings | undefined): { settings?: CellSettings } {
+  const set = SETTING_NAMES.filter((name) => settings?.[name] !== undefined);
+  if (settings === undefined || set.length === 0) return {};
+  return { settings: Object.fromEntries(set.map((name) => [name, settings[name]])) };
 }

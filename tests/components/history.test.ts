@@ -15,14 +15,28 @@ const anyChange: fc.Arbitrary<Change> = fc.oneof(
   }),
   fc.record({
     kind: fc.constant('insert' as const),
-    cell: fc.constantFrom(...ids).map((id) => dimension(id, 'x')),
+    cells: fc.uniqueArray(
+      fc.constantFrom(...ids).map((id) => dimension(id, 'x')),
+      {
+        selector: ({ id }) => id,
+        maxLength: 3,
+      },
+    ),
     at: fc.nat(4),
   }),
-  fc.record({ kind: fc.constant('delete' as const), id: fc.constantFrom(...ids) }),
+  fc.record({ kind: fc.constant('delete' as const), ids: fc.subarray(ids) }),
   fc.record({
     kind: fc.constant('move' as const),
+    ids: fc.subarray(ids, { maxLength: 2 }),
+    at: fc.nat(5),
+  }),
+  fc.record({
+    kind: fc.constant('set-cell' as const),
     id: fc.constantFrom(...ids),
-    by: fc.constantFrom(-1 as const, 1 as const),
+    settings: fc.record(
+      { digits: fc.integer({ min: 1, max: 50 }), step: fc.constantFrom(null, '1 mm') },
+      { requiredKeys: [] },
+    ),
   }),
   fc.record({
     kind: fc.constant('set' as const),
@@ -86,13 +100,21 @@ describe('the history of a notebook', () => {
   });
 
   it('brings a deleted cell back at its place', () => {
-    const gone = play([{ kind: 'delete', id: 'b' }]);
+    const gone = play([{ kind: 'delete', ids: ['b'] }]);
     expect(gone.present.cells.map((cell) => cell.id)).toEqual(['a', 'c']);
     expect(times(gone, 'undo', 1).present.cells.map((cell) => cell.id)).toEqual(['a', 'b', 'c']);
   });
 
+  it('says how many cells the last step took away, and no longer once another is done', () => {
+    const gone = play([{ kind: 'delete', ids: ['a', 'b'] }]);
+    expect(gone.removed).toBe(2);
+    expect(times(gone, 'undo', 1).removed).toBe(0);
+    const more = { kind: 'write', id: 'c', source: 'R/4' } as const;
+    expect(historyReducer(gone, { kind: 'change', change: more, at: 1e6 }).removed).toBe(0);
+  });
+
   it('forgets what was undone once something new is done', () => {
-    const undone = times(play([{ kind: 'delete', id: 'b' }]), 'undo', 1);
+    const undone = times(play([{ kind: 'delete', ids: ['b'] }]), 'undo', 1);
     const anew = historyReducer(undone, {
       kind: 'change',
       change: { kind: 'write', id: 'a', source: 'R = 1' },
@@ -106,8 +128,10 @@ describe('the history of a notebook', () => {
     for (const change of [
       { kind: 'write', id: 'a', source: 'R = 1200 mm' },
       { kind: 'write', id: 'nowhere', source: 'x' },
-      { kind: 'move', id: 'a', by: -1 },
-      { kind: 'delete', id: 'nowhere' },
+      { kind: 'move', ids: ['a'], at: 0 },
+      { kind: 'move', ids: ['b', 'c'], at: 2 },
+      { kind: 'set-cell', id: 'a', settings: {} },
+      { kind: 'delete', ids: ['nowhere'] },
     ] satisfies Change[]) {
       expect(historyReducer(history, { kind: 'change', change, at: 0 })).toBe(history);
     }
@@ -122,6 +146,25 @@ describe('a change', () => {
     expect(after.cells[0]).toBe(start.cells[0]);
     expect(after.cells[1]).toBe(start.cells[1]);
     expect(after.cells[2]).not.toBe(start.cells[2]);
+  });
+
+  it('moves cells to a place counted before they are taken out', () => {
+    const order = (moved: string[], at: number) =>
+      applyChange(start, { kind: 'move', ids: moved, at })
+        .cells.map(({ id }) => id)
+        .join('');
+    expect(order(['a'], 2)).toBe('bac');
+    expect(order(['a'], 3)).toBe('bca');
+    expect(order(['b', 'c'], 0)).toBe('bca');
+    expect(order(['c'], 1)).toBe('acb');
+  });
+
+  it('gives a cell settings of its own, and takes them away where they set nothing', () => {
+    const set = applyChange(start, { kind: 'set-cell', id: 'c', settings: { digits: 3 } });
+    expect(set.cells[2]).toEqual({ ...start.cells[2], settings: { digits: 3 } });
+    const plain = applyChange(set, { kind: 'set-cell', id: 'c', settings: {} });
+    expect(sameContent(plain, start)).toBe(true);
+    expect(sameContent(set, start)).toBe(false);
   });
 
   it('gives new cells ids that the server accepts', () => {

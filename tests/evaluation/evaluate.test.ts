@@ -82,6 +82,26 @@ describe('hostile lines', () => {
   });
 });
 
+describe('the settings of a cell', () => {
+  it('belong to the question: other settings of one cell never get the answer to the old ones', async () => {
+    const ask = async (settings?: { digits?: number; unit?: 'cm' | 'in' }) => {
+      const cells = [
+        { id: 'a', source: 'R = 254 mm' },
+        { id: 'b', source: 'R/3', ...(settings ? { settings } : {}) },
+      ];
+      const answer = await evaluate({ cells, settings: { digits: 4 } });
+      return answer.cells?.map(({ results: [result] }) =>
+        result?.kind === 'number' ? `${result.decimal.re} ${result.unit}` : '',
+      );
+    };
+    expect(await ask()).toEqual(['254 mm', '84.67 mm']);
+    expect(await ask({ digits: 2 })).toEqual(['254 mm', '85 mm']);
+    expect(await ask({ unit: 'cm' })).toEqual(['254 mm', '8.467 cm']);
+    expect(await ask({ unit: 'in' })).toEqual(['254 mm', '3.333 in']);
+    expect(await ask()).toEqual(['254 mm', '84.67 mm']);
+  });
+});
+
 describe('requests that cannot be read', () => {
   it.each([
     ['neither form', {}],
@@ -95,6 +115,10 @@ describe('requests that cannot be read', () => {
     ['a step of nothing', { expression: '1', settings: { step: '0 mm' } }],
     ['a step of an angle', { expression: '1', settings: { step: '1 deg' } }],
     ['too long a source', { expression: '1'.repeat(200_001) }],
+    [
+      'a cell with a foreign unit',
+      { cells: [{ id: 'a', source: '1', settings: { unit: 'ell' } }] },
+    ],
     ['a list', []],
     ['nothing', null],
   ])('refuses %s', (_, request) => {

@@ -20,18 +20,30 @@ describe('the JSON of a notebook', () => {
   it('keeps every cell in order, with results for dimension cells only', () => {
     expect(document.cells.map(({ id, kind }) => `${id} ${kind}`)).toEqual([
       'a note',
+      's section',
       'b dimension',
       'c dimension',
       'd dimension',
     ]);
     expect('results' in (document.cells[0] ?? {})).toBe(false);
-    expect(document.cells.slice(1).map((cell) => cell.results)).toEqual(
+    expect(document.cells.slice(2).map((cell) => cell.results)).toEqual(
       results.map((cell) => cell.results),
     );
   });
 
+  it('keeps the heading of a section and the settings of a cell', () => {
+    const cells = [
+      { id: 's', kind: 'section' as const, source: 'Stones' },
+      { id: 't', kind: 'dimension' as const, source: '1', settings: { digits: 3 } },
+    ];
+    expect(notebookDocument({ ...SAMPLE, cells }, [], '0.1.0').cells).toEqual([
+      { id: 's', kind: 'section', source: 'Stones' },
+      { id: 't', kind: 'dimension', source: '1', settings: { digits: 3 }, results: [] },
+    ]);
+  });
+
   it('gives the results of a cell that was not evaluated as none', () => {
-    expect(notebookDocument(SAMPLE, [], '0.1.0').cells[1]?.results).toEqual([]);
+    expect(notebookDocument(SAMPLE, [], '0.1.0').cells[2]?.results).toEqual([]);
   });
 
   it('is the same data as text', () => {

@@ -17,6 +17,7 @@ export const SAMPLE: ExportedNotebook = {
       source:
         '# Pitch\n\nLights on a circle of radius $R$; the angle is $\\frac{2\\pi}{17}$.\n\n- first *point*\n- **datum** at `0`',
     },
+    { id: 's', kind: 'section', source: 'Lights & 100 % of \\stones {' },
     {
       id: 'b',
       kind: 'dimension',

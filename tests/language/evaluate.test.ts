@@ -403,3 +403,41 @@ describe('what is known from an earlier run', () => {
     });
   });
 });
+
+describe('the settings of a cell', () => {
+  const whole = { digits: 6, unit: 'mm', step: '1 mm', rounding: 'up' } as const;
+  const given = (settings: Partial<Settings> | undefined) => {
+    const cells = evaluateCells(
+      [
+        { id: 'a', source: 'R = 100 mm' },
+        { id: 'b', source: 'R/3', ...(settings === undefined ? {} : { settings }) },
+      ],
+      whole,
+    );
+    return cells.map(({ results: [result] }) =>
+      result?.kind === 'number' ? `${result.decimal.re} ${result.unit} ${result.cut?.value}` : '',
+    );
+  };
+
+  it('stand before those of the whole, in that cell alone and only where they say something', () => {
+    expect(given(undefined)).toEqual(['100 mm 100', '33.3333 mm 34']);
+    expect(given({})).toEqual(given(undefined));
+    expect(given({ digits: 3 })).toEqual(['100 mm 100', '33.3 mm 34']);
+    expect(given({ unit: 'cm', rounding: 'down' })).toEqual(['100 mm 100', '3.33333 cm 3.3']);
+    expect(given({ step: null })).toEqual(['100 mm 100', '33.3333 mm undefined']);
+  });
+
+  it('change nothing of the value that other cells read', () => {
+    const read = (settings: Partial<Settings>) =>
+      evaluateCells([
+        { id: 'a', source: 'R = 1 ft', settings },
+        { id: 'b', source: 'R/2' },
+      ])[1]?.results.map(brief);
+    expect(read({ unit: 'in', digits: 1, step: '1 in' })).toEqual(read({}));
+  });
+
+  it('that make no sense are refused like those of the whole', () => {
+    expect(() => given({ digits: 0 })).toThrow(RangeError);
+    expect(() => given({ step: 'half' })).toThrow(RangeError);
+  });
+});

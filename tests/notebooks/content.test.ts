@@ -6,11 +6,33 @@ import {
   canonicalContent,
   emptyContent,
 } from '@/lib/notebooks/content';
+import { SavableContent } from '@/lib/notebooks/savable';
 
 const cell = fc.record({
   id: fc.stringMatching(/^[A-Za-z0-9_-]{1,20}$/),
   kind: fc.constantFrom('dimension' as const, 'note' as const),
   source: fc.string({ unit: 'grapheme', maxLength: 60 }),
+});
+const section = cell.map((made) => ({
+  ...made,
+  kind: 'section' as const,
+  source: made.source.replace(/[\r\n]/g, ' '),
+}));
+const tailored = fc.record({
+  id: cell.map(({ id }) => id),
+  kind: fc.constant('dimension' as const),
+  source: fc.string({ maxLength: 20 }),
+  settings: fc
+    .record(
+      {
+        digits: fc.integer({ min: 1, max: CONTENT_LIMITS.digits }),
+        unit: fc.constantFrom('mm' as const, 'in' as const),
+        step: fc.constantFrom(null, '1 mm'),
+        rounding: fc.constantFrom('up' as const, 'down' as const),
+      },
+      { requiredKeys: [] },
+    )
+    .filter((settings) => Object.keys(settings).length > 0),
 });
 const content = fc.record({
   format: fc.constant(1 as const),
@@ -20,7 +42,10 @@ const content = fc.record({
     step: fc.constantFrom(null, '0.5 mm', '1/64 in'),
     rounding: fc.constantFrom('half-even' as const, 'half-up' as const, 'up' as const),
   }),
-  cells: fc.uniqueArray(cell, { selector: ({ id }) => id, maxLength: 6 }),
+  cells: fc.uniqueArray(fc.oneof(cell, section, tailored), {
+    selector: ({ id }) => id,
+    maxLength: 6,
+  }),
 });
 
 const messagesOf = (sent: unknown): string[] => {
@@ -54,6 +79,37 @@ describe('content', () => {
     );
   });
 
+  it('of before sections and settings of cells has the spelling, and so the hash, that it had', () => {
+    const old = {
+      format: 1 as const,
+      settings: { digits: 12, unit: 'mm' as const, step: null, rounding: 'up' as const },
+      cells: [{ id: 'a', kind: 'note' as const, source: 'x' }],
+    };
+    expect(JSON.stringify(canonicalContent(NotebookContent.parse(old)))).toBe(
+      '{"format":1,"settings":{"digits":12,"unit":"mm","step":null,"rounding":"up"},' +
+        '"cells":[{"id":"a","kind":"note","source":"x"}]}',
+    );
+  });
+
+  it('has the same spelling whether a cell sets nothing or has no settings', () => {
+    const bare = { id: 'a', kind: 'dimension' as const, source: 'x' };
+    const spell = (made: object) =>
+      JSON.stringify(canonicalContent({ ...emptyContent(), cells: [{ ...bare, ...made }] }));
+    expect(spell({ settings: {} })).toBe(spell({}));
+    expect(spell({ settings: { step: null } })).not.toBe(spell({}));
+  });
+
+  it('may be savable only with cutting steps that can be read, its own and those of its cells', () => {
+    const withStep = (step: string) => ({
+      ...emptyContent(),
+      cells: [{ id: 'a', kind: 'dimension', source: 'x', settings: { step } }],
+    });
+    expect(SavableContent.safeParse(withStep('1/64 in')).success).toBe(true);
+    expect(
+      SavableContent.safeParse(withStep('half')).error?.issues.map(({ path }) => path),
+    ).toEqual([['cells', 0, 'settings', 'step']]);
+  });
+
   it('is valid when empty', () => {
     expect(messagesOf(emptyContent())).toEqual([]);
   });
@@ -83,6 +139,16 @@ describe('content', () => {
     ['half of a character', { cells: [{ id: 'a', kind: 'note', source: 'x \ud83d y' }] }],
     ['an id with a blank', { cells: [{ id: 'a b', kind: 'note', source: '' }] }],
     ['a kind nobody knows', { cells: [{ id: 'a', kind: 'figure', source: '' }] }],
+    ['a heading of two lines', { cells: [{ id: 'a', kind: 'section', source: 'x\ny' }] }],
+    ['too long a heading', { cells: [{ id: 'a', kind: 'section', source: 'x'.repeat(201) }] }],
+    [
+      'a note with settings',
+      { cells: [{ id: 'a', kind: 'note', source: '', settings: { digits: 3 } }] },
+    ],
+    [
+      'a cell with a foreign unit',
+      { cells: [{ id: 'a', kind: 'dimension', source: '', settings: { unit: 'ell' } }] },
+    ],
     ['a field nobody knows', { drawing: [] }],
     ['another format', { format: 2 }],
     ['no digits', { settings: { ...emptyContent().settings, digits: 0 } }],

@@ -93,6 +93,12 @@ const CHANGED = {
   both: 'changed by both',
 } as const;
 
+const KINDS: Record<NotebookCell['kind'], string> = {
+  dimension: 'Dimension cell',
+  note: 'Note',
+  section: 'Section',
+};
+
 function DifferenceRow({ difference, choice, author, onChoose }: DifferenceRowProps) {
   const { id, mine, theirs, changed } = difference;
   const sides = [
@@ -103,7 +109,7 @@ function DifferenceRow({ difference, choice, author, onChoose }: DifferenceRowPr
     <li>
       <fieldset>
         <legend className="text-small text-soft">
-          {(mine ?? theirs)?.kind === 'note' ? 'Note' : 'Dimension cell'}, {CHANGED[changed]}
+          {KINDS[(mine ?? theirs)?.kind ?? 'dimension']}, {CHANGED[changed]}
         </legend>
         <div className="grid sm:grid-cols-2">
           {sides.map(({ side, cell, name }) => (
@@ -133,9 +139,15 @@ function DifferenceRow({ difference, choice, author, onChoose }: DifferenceRowPr
 function CellText({ cell }: { cell: NotebookCell | null }) {
   if (cell === null)
     return <span className="block text-small italic text-soft">not on the sheet</span>;
+  const own = Object.entries(cell.settings ?? {}).map(
+    ([name, value]) => `${name} ${value ?? 'none'}`,
+  );
   return (
-    <code className="block whitespace-pre-wrap font-mono text-small [overflow-wrap:anywhere]">
-      {cell.source || '(empty)'}
-    </code>
+    <>
+      <code className="block whitespace-pre-wrap font-mono text-small [overflow-wrap:anywhere]">
+        {cell.source || '(empty)'}
+      </code>
+      {own.length > 0 && <span className="block text-small text-soft">{own.join(', ')}</span>}
+    </>
   );
 }

@@ -1,12 +1,22 @@
-import type { NotebookCell, NotebookContent, NotebookSettings } from '@/lib/notebooks/content';
+import {
+  settingsField,
+  type CellSettings,
+  type NotebookCell,
+  type NotebookContent,
+  type NotebookSettings,
+} from '@/lib/notebooks/content';
 
 /** Everything a person can do to what is on the sheet. */
 export type Change =
   | { kind: 'write'; id: string; source: string }
-  | { kind: 'insert'; cell: NotebookCell; at: number }
-  | { kind: 'delete'; id: string }
-  | { kind: 'move'; id: string; by: -1 | 1 }
+  /** Cells that go in together, at a place counted before they are in. */
+  | { kind: 'insert'; cells: readonly NotebookCell[]; at: number }
+  | { kind: 'delete'; ids: readonly string[] }
+  /** Cells that stand together go elsewhere together; the place is counted before they are taken out. */
+  | { kind: 'move'; ids: readonly string[]; at: number }
   | { kind: 'set'; settings: Partial<NotebookSettings> }
+  /** The settings of one cell as a whole; empty ones follow the notebook again. */
+  | { kind: 'set-cell'; id: string; settings: CellSettings }
   | { kind: 'replace'; content: NotebookContent };
 
 /**
@@ -23,22 +33,34 @@ export function applyChange(content: NotebookContent, change: Change): NotebookC
       return { ...content, cells: cells.with(at, { ...cell, source: change.source }) };
     }
     case 'insert': {
-      if (cells.some((cell) => cell.id === change.cell.id)) return content;
-      return { ...content, cells: cells.toSpliced(change.at, 0, change.cell) };
+      const taken = new Set(cells.map((cell) => cell.id));
+      const fresh = change.cells.filter((cell) => !taken.has(cell.id));
+      if (fresh.length === 0) return content;
+      return { ...content, cells: cells.toSpliced(change.at, 0, ...fresh) };
     }
     case 'delete': {
-      const left = cells.filter((cell) => cell.id !== change.id);
+      const left = cells.filter((cell) => !change.ids.includes(cell.id));
       return left.length === cells.length ? content : { ...content, cells: left };
     }
     case 'move': {
-      const from = cells.findIndex((cell) => cell.id === change.id);
-      const cell = cells[from];
-      const to = from + change.by;
-      if (!cell || to < 0 || to >= cells.length) return content;
-      return { ...content, cells: cells.toSpliced(from, 1).toSpliced(to, 0, cell) };
+      const moved = cells.filter((cell) => change.ids.includes(cell.id));
+      const before = cells.slice(0, change.at).filter((cell) => !change.ids.includes(cell.id));
+      const after = cells.slice(change.at).filter((cell) => !change.ids.includes(cell.id));
+      const order = [...before, ...moved, ...after];
+      return order.every((cell, index) => cell === cells[index])
+        ? content
+        : { ...content, cells: order };
     }
     case 'set':
       return { ...content, settings: { ...content.settings, ...change.settings } };
+    case 'set-cell': {
+      const at = cells.findIndex((cell) => cell.id === change.id);
+      const cell = cells[at];
+      if (!cell) return content;
+      const { id, kind, source } = cell;
+      const tailored = { id, kind, source, ...settingsField(change.settings) };
+      return sameCell(cell, tailored) ? content : { ...content, cells: cells.with(at, tailored) };
+    }
     case 'replace':
       return change.content;
   }
@@ -52,13 +74,8 @@ export function newCellId(): string {
 
 export function sameContent(a: NotebookContent, b: NotebookContent): boolean {
   if (a === b) return true;
-  const one = a.settings;
-  const two = b.settings;
   return (
-    one.digits === two.digits &&
-    one.unit === two.unit &&
-    one.step === two.step &&
-    one.rounding === two.rounding &&
+    sameSettings(a.settings, b.settings) &&
     a.cells.length === b.cells.length &&
     a.cells.every((cell, index) => sameCell(cell, b.cells[index]))
   );
@@ -66,5 +83,19 @@ export function sameContent(a: NotebookContent, b: NotebookContent): boolean {
 
 export function sameCell(a: NotebookCell | undefined, b: NotebookCell | undefined): boolean {
   if (a === b) return true;
-  return a?.id === b?.id && a?.kind === b?.kind && a?.source === b?.source;
+  return (
+    a?.id === b?.id &&
+    a?.kind === b?.kind &&
+    a?.source === b?.source &&
+    sameSettings(a?.settings ?? {}, b?.settings ?? {})
+  );
+}
+
+function sameSettings(one: CellSettings, two: CellSettings): boolean {
+  return (
+    one.digits === two.digits &&
+    one.unit === two.unit &&
+    one.step === two.step &&
+    one.rounding === two.rounding
+  );
 }

@@ -8,6 +8,8 @@ export interface History {
   readonly future: readonly NotebookContent[];
   /** The cell last typed into and when, so that one burst of typing is one step back. */
   readonly typing: { readonly id: string; readonly at: number } | null;
+  /** Cells that the last step took away; 0 when it did something else. */
+  readonly removed: number;
 }
 
 /** Steps kept; contents share their untouched cells, so a step costs one array. */
@@ -19,7 +21,7 @@ export type HistoryAction =
   { kind: 'change'; change: Change; at: number } | { kind: 'undo' } | { kind: 'redo' };
 
 export function beginHistory(present: NotebookContent): History {
-  return { past: [], present, future: [], typing: null };
+  return { past: [], present, future: [], typing: null, removed: 0 };
 }
 
 export function historyReducer(history: History, action: HistoryAction): History {
@@ -34,6 +36,7 @@ export function historyReducer(history: History, action: HistoryAction): History
         present: before,
         future: [history.present, ...history.future],
         typing: null,
+        removed: 0,
       };
     }
     case 'redo': {
@@ -44,6 +47,7 @@ export function historyReducer(history: History, action: HistoryAction): History
         present: after,
         future: rest,
         typing: null,
+        removed: 0,
       };
     }
   }
@@ -64,5 +68,6 @@ function change(history: History, made: Change, at: number): History {
     at - history.typing.at < PAUSE &&
     linesOf(history.present, typing.id) === linesOf(present, typing.id);
   const past = goesOn ? history.past : [...history.past, history.present].slice(-DEPTH);
-  return { past, present, future: [], typing };
+  const removed = made.kind === 'delete' ? history.present.cells.length - present.cells.length : 0;
+  return { past, present, future: [], typing, removed };
 }

@@ -157,6 +157,7 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
     content: present,
     dispatch,
     undo: history.past.length > 0 ? undo : null,
+    removed: history.removed,
     redo: history.future.length > 0 ? redo : null,
     kept,
     dirty,

@@ -34,6 +34,7 @@ export default async function NotebookPage({ params }: PageProps) {
         notebook={notebook}
         content={content}
         answers={answers === null || isHurried(answers) ? null : answers}
+        personId={person.id}
         personName={person.name}
         mayWrite={inUse && can(actor, 'versions.save', guarded)}
         mayShare={can(actor, 'people.change', guarded)}
