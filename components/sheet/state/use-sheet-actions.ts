@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useMemo, useRef } from 'react';
+import { useEffect, useState } from 'react';
 import type { NotebookCell, NotebookContent } from '@/lib/notebooks/content';
 import { AT_END, cellAnchor, focusEntry, type Hand, type SheetActions } from '../cells';
 import { linesOf } from '../source-text';
@@ -28,14 +28,18 @@ const cellsInWords = (count: number) => (count === 1 ? 'Cell' : `${count} cells`
 
 /** The actions of the cells: one object for as long as the sheet is on the screen. */
 export function useSheetActions(sheeted: Sheeted): SheetActions {
-  const latest = useRef(sheeted);
-  useEffect(() => {
-    latest.current = sheeted;
-  });
-  return useMemo(() => makeActions(() => latest.current), []);
+  const [{ actions, follow }] = useState(() => makeActions(sheeted));
+  useEffect(() => follow(sheeted));
+  return actions;
 }
 
-function makeActions(now: () => Sheeted): SheetActions {
+/** Actions on the sheet as it was last followed to. */
+function makeActions(first: Sheeted): {
+  actions: SheetActions;
+  follow: (sheeted: Sheeted) => void;
+} {
+  let latest = first;
+  const now = () => latest;
   const seen = () => blocksOf(now().content.cells, now().folds);
   const seenAt = (id: string) => seen().findIndex(({ cells: [cell] }) => cell?.id === id);
   const placeOf = (id: string) => now().content.cells.findIndex((cell) => cell.id === id);
@@ -72,7 +76,7 @@ function makeActions(now: () => Sheeted): SheetActions {
     });
   };
 
-  return {
+  const actions: SheetActions = {
     dispatch: (change) => now().dispatch(change),
     take,
     reveal,
@@ -146,4 +150,8 @@ function makeActions(now: () => Sheeted): SheetActions {
       });
     },
   };
+  const follow = (sheeted: Sheeted) => {
+    latest = sheeted;
+  };
+  return { actions, follow };
 }
