@@ -3,6 +3,8 @@
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import type { MemberWorkshop } from '@/lib/accounts/types';
+import { findStarter } from '@/components/starters/sheets';
+import { ChooseStarter } from '@/components/starters/choose-starter';
 import { ask, sayFault } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
@@ -15,15 +17,22 @@ export function NewNotebook({ workshops }: { workshops: readonly MemberWorkshop[
   const [open, setOpen] = useState(false);
   const [title, setTitle] = useState('');
   const [workshopId, setWorkshopId] = useState(workshops[0]?.id ?? '');
+  const [beginWith, setBeginWith] = useState('empty');
   const [fault, setFault] = useState<string | null>(null);
   const [busy, setBusy] = useState(false);
 
   const begin = async () => {
     setBusy(true);
     setFault(null);
+    const starter = findStarter(beginWith);
+    const content = starter && {
+      format: 1,
+      settings: starter.settings,
+      cells: starter.cells,
+    };
     try {
       const made = await ask<{ id: string }>('/api/notebooks', {
-        body: { title, ...(workshopId ? { workshopId } : {}) },
+        body: { title, ...(workshopId ? { workshopId } : {}), ...(content ? { content } : {}) },
       });
       router.push(`/notebooks/${made.id}`);
     } catch (refused) {
@@ -69,6 +78,7 @@ export function NewNotebook({ workshops }: { workshops: readonly MemberWorkshop[
                 ))}
               </Choice>
             )}
+            <ChooseStarter chosen={beginWith} onChange={setBeginWith} />
             {fault && <Notice tone="fault">{fault}</Notice>}
             <div className="flex justify-end">
               <Button type="submit" look="main" disabled={busy || title.trim() === ''}>

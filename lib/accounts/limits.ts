@@ -21,6 +21,8 @@ export const LIMITS = {
   badKey: { name: 'bad-key', hits: 60, seconds: 900, what: 'requests with an unknown key' },
   evaluatePerson: { name: 'evaluate-person', hits: 600, seconds: 60, what: 'evaluations' },
   evaluateKey: { name: 'evaluate-key', hits: 300, seconds: 60, what: 'evaluations with this key' },
+  tryAddress: { name: 'try-address', hits: 60, seconds: 60, what: 'tries from this address' },
+  tryAll: { name: 'try-all', hits: 600, seconds: 60, what: 'tries by all visitors together' },
   export: { name: 'export', hits: 60, seconds: 60, what: 'exports' },
 } as const satisfies Record<string, Limit>;
 

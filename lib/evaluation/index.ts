@@ -48,8 +48,12 @@ export function storeAnswersIn(lasting: AnswerStore): void {
  * Evaluates in a child process, within the time and memory of EVALUATION_LIMITS.
  * Accepts a request that the schema has checked. Every failure of a line is in its result; rejects with `PoolBusy` when
  * too many requests wait, and with an Error when the children cannot run at all (their bundle is missing).
+ * With `keep` false nothing of the request is kept: the store is neither read nor written.
  */
-export async function evaluate(request: EvaluateRequest): Promise<EvaluateAnswer> {
+export async function evaluate(
+  request: EvaluateRequest,
+  { keep = true }: { keep?: boolean } = {},
+): Promise<EvaluateAnswer> {
   const { store } = shared();
   const settings = { ...DEFAULT_SETTINGS, ...request.settings };
   const cells = request.cells ?? [];
@@ -57,7 +61,7 @@ export async function evaluate(request: EvaluateRequest): Promise<EvaluateAnswer
   const key = keyOfAnswer(await programIdentity(), asked);
   const identity = request.id === undefined ? {} : { id: request.id };
   const head = { schema: 1 as const, engine: ENGINE_VERSION, ...identity };
-  const kept = await store.read(key).catch(() => null);
+  const kept = keep ? await store.read(key).catch(() => null) : null;
   if (kept !== null)
     return { ...head, ...(JSON.parse(kept) as { result: Result } | { cells: CellResults[] }) };
 
@@ -68,7 +72,8 @@ export async function evaluate(request: EvaluateRequest): Promise<EvaluateAnswer
       ? { cells: assemble(cells, finished) }
       : { result: resultOf(request.expression, finished) };
   // What the clock or the memory stopped may come out otherwise on a quieter machine, so it is not remembered.
-  if (!finished.stopped) await store.write(key, JSON.stringify(body)).catch(() => undefined);
+  if (keep && !finished.stopped)
+    await store.write(key, JSON.stringify(body)).catch(() => undefined);
   return { ...head, ...body };
 }
 
