@@ -4,7 +4,7 @@ import path from 'node:path';
 import { createInterface } from 'node:readline';
 import type { Socket } from 'node:net';
 import { EVALUATION_LIMITS } from './limits';
-import type { Job, Report } from './messages';
+import type { CertifyJob, Job, Report } from './messages';
 
 /** The bundle of `child.ts`. The path is made at run time so that a bundler of the application leaves it alone. */
 export function bundlePath(): string {
@@ -74,7 +74,7 @@ export class EvaluationChild {
   }
 
   /** Sends a job; reports go to the listener until another job is sent. */
-  start(job: Job, listener: (report: Report) => void): void {
+  start(job: Job | CertifyJob, listener: (report: Report) => void): void {
     this.hold(true);
     this.listener = (report) => {
       if (report.job !== job.job) return;

@@ -1,6 +1,6 @@
 import { writeSync } from 'node:fs';
-import { evaluateCells, evaluateExpression } from '@/lib/language/index';
-import type { Job, Refusal, Report } from './messages';
+import { certifyLine, evaluateCells, evaluateExpression } from '@/lib/language/index';
+import type { CertifyJob, Job, Refusal, Report } from './messages';
 
 /**
  * The program of a child process: takes one job after another and reports line by line.
@@ -56,7 +56,19 @@ function refusalOf(error: unknown): Refusal {
   };
 }
 
-process.on('message', (job) => run(job as Job));
+function certify({ job, certify: line, cells, settings }: CertifyJob): void {
+  try {
+    report({ kind: 'certified', job, answer: certifyLine(cells, line, settings) });
+  } catch (error) {
+    report({ kind: 'fault', job, refusal: refusalOf(error), detail: String(error) });
+  }
+}
+
+process.on('message', (message) => {
+  const job = message as Job | CertifyJob;
+  if ('certify' in job) certify(job);
+  else run(job);
+});
 /** Has been compiled and has its tables when the first job comes, so that the job's time is the job's. */
 function warmUp(): void {
   const source = 'a = sqrt(5 + 2 sqrt(6)) mm\nb = chord(a, turn/17)\nb < a\nc = 2 pi a\nd = (a + ';

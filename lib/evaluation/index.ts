@@ -11,6 +11,7 @@ import {
 } from '@/lib/language/index';
 import type { Refusal } from './messages';
 import { type AnswerStore, MemoryStore, keyOfAnswer, layered } from './cache';
+import { type CertificateAnswer, type CertificateRequest, runCertificate } from './certificate';
 import { bundlePath } from './child-process';
 import { EVALUATION_LIMITS } from './limits';
 import { Pool } from './pool';
@@ -18,6 +19,7 @@ import { EvaluateRequest } from './request';
 import { type Finished, runWork } from './run';
 
 export { EVALUATION_LIMITS } from './limits';
+export { CertificateRequest, type CertificateAnswer } from './certificate';
 export { PoolBusy } from './pool';
 export { EvaluateRequest, SettingsRequest, describeIssues } from './request';
 export { type AnswerStore, MemoryStore } from './cache';
@@ -75,6 +77,20 @@ export async function evaluate(
   if (keep && !finished.stopped)
     await store.write(key, JSON.stringify(body)).catch(() => undefined);
   return { ...head, ...body };
+}
+
+/**
+ * The certificate of one line, made in a child process within the time and memory of a line. Why there is none is in
+ * the answer; rejects with `PoolBusy` when too many requests wait.
+ */
+export async function certify(request: CertificateRequest): Promise<CertificateAnswer> {
+  const pool = (shared().pool ??= new Pool());
+  await pool.enter();
+  try {
+    return { schema: 1, engine: ENGINE_VERSION, ...(await runCertificate(pool, request)) };
+  } finally {
+    pool.leave();
+  }
 }
 
 /** Ends all children. A later evaluation starts new ones. */

@@ -1,4 +1,11 @@
-import type { CellSource, ErrorCode, Result, Settings } from '@/lib/language/index';
+import type {
+  CellSource,
+  Certified,
+  CertifiedLine,
+  ErrorCode,
+  Result,
+  Settings,
+} from '@/lib/language/index';
 
 /** What the pool asks a child. Keys name a line by the position of its cell and its number there. */
 export interface Job {
@@ -47,4 +54,13 @@ export type Report =
       readonly result: Result | null;
       /** Processor time of the child since its start, in seconds. */
       readonly processorTime: number;
-    };
+    }
+  | { readonly kind: 'certified'; readonly job: number; readonly answer: Certified };
+
+/** Asks a child for the certificate of one line instead of results; it answers `certified`, or `fault`. */
+export interface CertifyJob {
+  readonly job: number;
+  readonly certify: CertifiedLine;
+  readonly cells: readonly CellSource[];
+  readonly settings: Partial<Settings>;
+}

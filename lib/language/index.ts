@@ -2,6 +2,8 @@
  * The cell language: reading lines, evaluating cells that share marks, and giving results.
  * Pure and synchronous. The application calls it through `lib/evaluation`, which bounds time and memory.
  */
+export { certifyLine } from './certify';
+export type { Certified, CertifiedLine } from './certify';
 export { evaluateCells, evaluateExpression, keyOf } from './evaluate';
 export type { CellResults, EvaluationOptions, LinePlace } from './evaluate';
 export type { ErrorCode, Problem, Span } from './failure';

@@ -1,8 +1,11 @@
 import {
   EvaluateRequest,
   PoolBusy,
+  certify,
   evaluate,
   storeAnswersIn,
+  type CertificateAnswer,
+  type CertificateRequest,
   type EvaluateAnswer,
 } from '@/lib/evaluation';
 import { databaseStore } from '@/lib/evaluation/database-store';
@@ -20,8 +23,17 @@ export async function answerTo(request: EvaluateRequest): Promise<EvaluateAnswer
     storeAnswersIn(databaseStore());
     holder.surdworkAnswersKept = true;
   }
+  return await whenFree(evaluate(request));
+}
+
+/** The certificate of one line. @throws Failure `busy` when too many evaluations wait already */
+export function certificateFor(request: CertificateRequest): Promise<CertificateAnswer> {
+  return whenFree(certify(request));
+}
+
+async function whenFree<T>(work: Promise<T>): Promise<T> {
   try {
-    return await evaluate(request);
+    return await work;
   } catch (error) {
     if (!(error instanceof PoolBusy)) throw error;
     throw new Failure('busy', 'Too many evaluations are waiting; try again in a moment.', {

@@ -1,4 +1,4 @@
-export { answerTo, questionOf } from './answers';
+export { answerTo, certificateFor, questionOf } from './answers';
 export {
   LinkRequest,
   createLink,

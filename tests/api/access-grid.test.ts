@@ -243,6 +243,7 @@ describe('endpoints about oneself', () => {
     ['DELETE', '/api/keys/00000000-0000-4000-8000-000000000000', undefined],
     ['DELETE', '/api/sessions', undefined],
     ['POST', '/api/evaluate', { expression: '1+1' }],
+    ['POST', '/api/certificate', { cells: [], at: { cell: 'a', line: 1 } }],
   ])('%s %s needs a person', async (method, path, body) => {
     const answer = await new Visitor().ask(method, path, { body });
     expect(answer.status).toBe(401);

@@ -1,15 +1,8 @@
 import type { NotebookCell } from '@/lib/notebooks/content';
 import { newCellId } from './changes';
+import { findUses, NAME_OR_REMARK } from './uses';
 
-/** A mark that a line defines; told by its text, as the copy is made before any evaluation. */
-const DEFINITION = /^\s*(\p{L}[\p{L}\d_]*)\s*=(?!=)/gmu;
-/** A name or a remark, the longest at each place: what stands within a longer name is never touched. */
-const NAME_OR_REMARK = /#.*|\p{L}[\p{L}\d_]*/gu;
-
-const marksOf = (cells: readonly NotebookCell[]) =>
-  cells.flatMap(({ kind, source }) =>
-    kind === 'dimension' ? [...source.matchAll(DEFINITION)].map(([, mark = '']) => mark) : [],
-  );
+const marksOf = (cells: readonly NotebookCell[]) => [...findUses(cells).definitions.keys()];
 
 /**
  * Copies of cells, with ids of their own. A mark has one definition on a sheet, so each mark that the
@@ -22,7 +15,7 @@ export function copiesOf(
 ): NotebookCell[] {
   const taken = new Set(marksOf(sheet));
   const fresh = new Map<string, string>();
-  for (const mark of new Set(marksOf(cells))) {
+  for (const mark of marksOf(cells)) {
     let count = 2;
     while (taken.has(`${mark}_${count}`)) count += 1;
     taken.add(`${mark}_${count}`);
