@@ -24,9 +24,26 @@ export function copyForms(result: Result): { label: string; text: string }[] {
         { label: 'TeX', text: result.exact.tex },
         { label: 'Degrees', text: result.decimal.re },
       ];
+    case 'point':
+    case 'line':
+    case 'circle':
+      return [
+        { label: 'Exact text', text: result.exact.text },
+        { label: 'TeX', text: result.exact.tex },
+        ...figureForms(result),
+      ];
     default:
       return [];
   }
+}
+
+/** Coordinates in decimals, and as cut: x and y with a tab between, as a table takes them. */
+function figureForms(result: Extract<Result, { kind: 'point' | 'line' | 'circle' }>) {
+  if (result.kind !== 'point') return [];
+  const { x, y } = result.coordinates;
+  const decimal = { label: 'x and y', text: `${x.decimal.re}\t${y.decimal.re}` };
+  if (!x.cut || !y.cut) return [decimal];
+  return [decimal, { label: 'x and y, cut', text: `${x.cut.value}\t${y.cut.value}` }];
 }
 
 /** Copies a value as exact text, TeX or decimal. */

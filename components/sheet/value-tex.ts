@@ -29,6 +29,9 @@ export function valueTex(result: Result): string | null {
       return `${value}\\,${unitTex(unit)}`;
     }
     case 'angle':
+    case 'point':
+    case 'line':
+    case 'circle':
       return result.exact.tex;
     default:
       return result.typeset;

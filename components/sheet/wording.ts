@@ -1,34 +1,14 @@
 import type { Compartment } from '@/components/drawing/compartments';
+import { figureCompartments, sayFigure, sayFigureBriefly } from './figure-wording';
 import type { Result } from './result';
-
-type OfKind<K extends Result['kind']> = Extract<Result, { kind: K }>;
-export type NumberResult = OfKind<'number'>;
-
-/** Figures shown before a long decimal is cut off with an ellipsis; the whole stays in the title. */
-const FIGURES = 14;
-
-/** Superscripts instead of `^2`, a middle dot instead of `*`. */
-export function sayUnit(unit: string): string {
-  return unit.replace(/\^2/g, '²').replace(/\^3/g, '³').replace(/\*/g, '·');
-}
-
-/** Cuts a decimal string after so many significant figures; never rounds, and shows that it cut. */
-export function shorten(decimal: string, figures = FIGURES): string {
-  const [mantissa = '', exponent] = decimal.split('e');
-  let counted = 0;
-  let started = false;
-  for (let at = 0; at < mantissa.length; at += 1) {
-    const sign = mantissa.charAt(at);
-    if (sign < '0' || sign > '9') continue;
-    started ||= sign !== '0';
-    if (started) counted += 1;
-    const left = mantissa.length - at - 1;
-    if (counted >= figures && left > 1 && mantissa.includes('.') && mantissa.indexOf('.') < at) {
-      return `${mantissa.slice(0, at + 1)}…${exponent === undefined ? '' : `e${exponent}`}`;
-    }
-  }
-  return decimal;
-}
+import {
+  DIRECTIONS,
+  type NumberResult,
+  reachCompartment,
+  sayDecimal,
+  sayUnit,
+  shorten,
+} from './say-number';
 
 /** A positive bound in so many significant figures, rounded up where it is cut, so that it stays a bound. */
 export function shortenUp(bound: string, figures: number): string {
@@ -39,18 +19,6 @@ export function shortenUp(bound: string, figures: number): string {
   const point = raised.length - part.length;
   return part === '' ? raised : `${raised.slice(0, point)}.${raised.slice(point)}`;
 }
-
-/** The decimal of a value as one text: `0.25`, `1.4142… + 0.5 i`. */
-export function sayDecimal({ decimal }: Pick<NumberResult, 'decimal'>, full: boolean): string {
-  const part = (text: string) => (full ? text : shorten(text));
-  const { re, im } = decimal;
-  if (im === null) return part(re);
-  const sign = im.startsWith('-') ? '−' : '+';
-  const size = part(im.replace(/^-/, ''));
-  return re === '0' && sign === '+' ? `${size} i` : `${part(re)} ${sign} ${size} i`;
-}
-
-const DIRECTIONS = { up: 'rounded up', down: 'rounded down', exact: 'exact' } as const;
 
 /** What stands on the drawn dimension line and below it; null where nothing is cut to length. */
 export function sayDimension(result: Result): { figure: string; below: string } | null {
@@ -66,26 +34,6 @@ export function sayDimension(result: Result): { figure: string; below: string } 
   const short = shorten(re, 7);
   const exact = terminates && short === re;
   return { figure: `${short} ${unit}`, below: exact ? 'exact' : 'not rounded: no cutting step' };
-}
-
-type Reach = NumberResult['reach'];
-
-export function reachCompartment(reach: Reach | null): Compartment {
-  const label = 'Reach';
-  if (reach === null) return { label, value: 'not decided', tone: 'approximate' };
-  if (reach.straightedgeAndCompass === null) {
-    return { label, value: 'not decided', tone: 'approximate' };
-  }
-  if (reach.straightedgeAndCompass) {
-    return { label, value: 'straightedge and compass', tone: 'reached' };
-  }
-  const value =
-    reach.withTrisector === true
-      ? 'not with straightedge and compass; with an angle trisector, yes'
-      : reach.withTrisector === false
-        ? 'not with straightedge and compass, nor with an angle trisector'
-        : 'not with straightedge and compass';
-  return { label, value, tone: 'approximate' };
 }
 
 function decimalCompartment(
@@ -171,6 +119,10 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
         reachCompartment(result.reach),
         ...standInCompartments(result.standIn, '°'),
       ];
+    case 'point':
+    case 'line':
+    case 'circle':
+      return figureCompartments(result, full);
     case 'truth':
       return [
         {
@@ -205,6 +157,10 @@ export function sayResult(result: Result): string {
     }
     case 'angle':
       return `${name} is ${shorten(result.decimal.re, 8)} degrees.`;
+    case 'point':
+    case 'line':
+    case 'circle':
+      return `${name} is ${sayFigure(result)}.`;
   }
 }
 
@@ -213,6 +169,7 @@ export function sayBriefly(result: Result): string {
   if (result.kind === 'error') return 'error';
   if (result.kind === 'truth') return result.truth.value ? 'true' : 'false';
   if (result.kind === 'angle') return `${shorten(result.decimal.re, 7)}°`;
+  if (result.kind !== 'number') return sayFigureBriefly(result);
   if (result.cut) return `${result.cut.value} ${result.unit ?? ''}`.trim();
   const short = result.decimal.im === null ? shorten(result.decimal.re, 7) : 'not real';
   return result.unit ? `${short} ${sayUnit(result.unit)}` : short;

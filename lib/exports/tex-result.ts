@@ -1,4 +1,4 @@
-import type { Cut, Result } from '@/lib/language/index';
+import type { Cut, NumberPart, Result } from '@/lib/language/index';
 import { breakableDigits, escapeTex } from './tex-text';
 
 /** A formula longer than this is set as running text, where TeX may break it over lines. */
@@ -22,6 +22,12 @@ export function resultTex(result: Result): string {
     }
     case 'angle':
       return formula(result.typeset, result.exact.tex);
+    case 'point':
+    case 'line':
+    case 'circle':
+      return result.exact.staged
+        ? stagedFormula(result.typeset, result.exact.tex, '')
+        : figureFormula(result);
     case 'truth':
       return `${displayed(result.typeset)}\n\\noindent ${result.truth.value ? 'True' : 'False'}. ${escapeTex(result.truth.reason)}\\par`;
     case 'error': {
@@ -29,6 +35,13 @@ export function resultTex(result: Result): string {
       return `${typed}\\noindent Error (${escapeTex(result.error.code)}): ${escapeTex(result.error.message)}\\par`;
     }
   }
+}
+
+/** A line and a circle have no value to be equal to: their equation stands beside what was typed. */
+function figureFormula({ kind, typeset, exact }: FigureResult): string {
+  return kind === 'point'
+    ? formula(typeset, exact.tex)
+    : displayed(`${typeset}:\\quad ${exact.tex}`);
 }
 
 /** The line as typed and its value; the value only once where it was typed as it is. */
@@ -63,6 +76,8 @@ export function unitTex(unit: string): string {
 /** What stands beside a value, in plain words, one entry for each compartment of the sheet. */
 export function compartments(result: Result): { name: string; tex: string }[] {
   if (result.kind === 'truth' || result.kind === 'error') return [];
+  if (result.kind === 'point' || result.kind === 'line' || result.kind === 'circle')
+    return figureCompartments(result);
   const { decimal } = result;
   const unit =
     result.kind === 'angle' ? '^{\\circ}' : result.unit === null ? '' : unitTex(result.unit);
@@ -97,6 +112,35 @@ export function compartments(result: Result): { name: string; tex: string }[] {
     entries.push({ name: 'Stand-in for', tex: escapeTex(`${of}, ${off}. ${how}`) });
   }
   return entries;
+}
+
+type FigureResult = Extract<Result, { kind: 'point' | 'line' | 'circle' }>;
+
+function figureCompartments(result: FigureResult): { name: string; tex: string }[] {
+  const entries = partsOf(result).flatMap(([name, { decimal, unit, cut }]) => {
+    const size = `$${decimalTex(decimal.re)}${unit === null ? '' : unitTex(unit)}$`;
+    const exactly = decimal.terminates ? ', exactly' : '';
+    const own = [{ name, tex: size + exactly }];
+    return cut === undefined
+      ? own
+      : [...own, { name: `${name}, cut size`, tex: cutTex(cut, unit ?? '') }];
+  });
+  return [...entries, { name: 'Reach', tex: escapeTex(result.reach.reason) }];
+}
+
+function partsOf(result: FigureResult): [name: string, part: NumberPart][] {
+  switch (result.kind) {
+    case 'point':
+      return Object.entries(result.coordinates);
+    case 'line':
+      return Object.entries(result.coefficients);
+    case 'circle':
+      return [
+        ['Centre, x', result.centre.x],
+        ['Centre, y', result.centre.y],
+        ['Radius', result.radius],
+      ];
+  }
 }
 
 /** A decimal string, with a power of ten where it has one. */

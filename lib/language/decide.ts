@@ -1,18 +1,25 @@
 import type { Engine } from '../engine/index';
-import { decimalOfSum, inUnit, isSum, unitName, writeSum } from './give-value';
+import { distance } from '../geometry/index';
+import { decimalOfSum, inUnit, unitName, writeSum } from './give-value';
 import { attemptOrFail } from './attempt';
 import type { Evaluator } from './evaluator';
+import { fail } from './failure';
 import { fromNum } from './pi-sum';
 import type { Settings } from './settings';
 import type { Relation, Statement } from './syntax';
 import {
+  type Scalar,
   type Value,
   compareValues,
   differenceForDecision,
   isRealValue,
   isZeroValue,
+  mismatchInDecision,
+  number,
   signOf,
 } from './values';
+import { type FigureValue, areEqualFigures, describeFigure, isFigure } from './values-geometry';
+import { withUnit } from './written';
 
 type Decision = Extract<Statement, { kind: 'decision' }>;
 
@@ -61,6 +68,14 @@ export function decide(
 }
 
 function holdsBetween(engine: Engine, left: Value, relation: Relation, right: Value): boolean {
+  if (isFigure(left) && isFigure(right)) {
+    const same = areEqualFigures(engine, left, right) ?? mismatchInDecision(left, right);
+    if (relation === '==' || relation === '!=') return same === (relation === '==');
+    return fail(
+      'domain',
+      `Only numbers and angles have an order, and here are ${describeFigure(left)} and ${describeFigure(right)}.`,
+    );
+  }
   if (relation === '==' || relation === '!=') {
     return isZeroValue(engine, differenceForDecision(engine, left, right)) === (relation === '==');
   }
@@ -69,9 +84,10 @@ function holdsBetween(engine: Engine, left: Value, relation: Relation, right: Va
 
 /** One sentence on how the sides stand to each other. */
 function explain(engine: Engine, left: Value, right: Value, settings: Settings): string {
+  if (isFigure(left) && isFigure(right)) return explainFigures(engine, left, right, settings);
   const difference = differenceForDecision(engine, left, right);
   if (isZeroValue(engine, difference)) {
-    const { text, approximate } = inWords(engine, left, settings);
+    const { text, approximate } = inWords(engine, left as Scalar, settings);
     return approximate ? `Both sides are the same value, ${text}.` : `Both sides are ${text}.`;
   }
   if (!isRealValue(engine, difference))
@@ -83,9 +99,26 @@ function explain(engine: Engine, left: Value, right: Value, settings: Settings):
   return `The left side is ${word} by ${about(engine, gap, settings)}.`;
 }
 
+/** Whether two figures of one kind are the same, and for points how far they lie apart. */
+function explainFigures(
+  engine: Engine,
+  left: FigureValue,
+  right: FigureValue,
+  settings: Settings,
+): string {
+  if (areEqualFigures(engine, left, right) === true) return `Both sides are the same ${left.kind}.`;
+  if (left.kind !== 'point' || right.kind !== 'point')
+    return `The sides are two different ${left.kind}s.`;
+  const gap = number(
+    fromNum(engine, distance(engine, left.figure, right.figure)),
+    Math.max(left.length, right.length),
+  );
+  return `The points lie ${about(engine, gap, settings)} apart.`;
+}
+
 function inWords(
   engine: Engine,
-  value: Value,
+  value: Scalar,
   settings: Settings,
 ): { text: string; approximate: boolean } {
   if (value.kind === 'angle') {
@@ -101,7 +134,7 @@ function inWords(
 const DIGITS_IN_A_REASON = 4;
 
 /** A few digits, with the word `about` unless they are the value itself. */
-function about(engine: Engine, value: Value, settings: Settings): string {
+function about(engine: Engine, value: Scalar, settings: Settings): string {
   const sum =
     value.kind === 'angle'
       ? fromNum(engine, engine.mul(value.turns, engine.integer(360n)))
@@ -113,9 +146,4 @@ function about(engine: Engine, value: Value, settings: Settings): string {
   const imaginary = im.startsWith('-') ? `- ${im.slice(1)}` : `+ ${im}`;
   const whole = `${re} ${imaginary} i`;
   return word + (unit === null ? whole : `(${whole}) ${unit}`);
-}
-
-function withUnit(text: string, unit: string | null): string {
-  if (unit === null) return text;
-  return isSum(text) ? `(${text}) ${unit}` : `${text} ${unit}`;
 }

@@ -1,12 +1,14 @@
 import type { Engine, Num } from '../engine/index';
 import { attemptOrFail } from './attempt';
 import { type ErrorCode, fail } from './failure';
+import { type GivenFigure, giveFigure } from './give-figure';
 import { findUnit } from './names';
 import { type PiSum, asAlgebraic, decideByEnclosures, mapSum } from './pi-sum';
 import type { DecimalResult, Exact, NumberResult, Omission } from './result';
 import { OPEN_REACH, TRANSCENDENTAL_REACH, reachOfAngle, reachOfValue } from './reach';
 import { cutSize } from './cut';
 import { MOST_DIGITS, type Settings, type Step } from './settings';
+import { isSum } from './written';
 import { type AngleValue, type NumberValue, type Value, isRealValue } from './values';
 
 export type GivenSettings = Settings & { readonly stepLength: Step | null };
@@ -38,10 +40,13 @@ export function giveValue(
   value: Value,
   settings: GivenSettings,
   watch: StructureWatch,
-): GivenNumber | GivenAngle {
-  return value.kind === 'angle'
-    ? giveAngle(engine, value, settings)
-    : giveNumber(engine, value, settings, watch);
+): GivenNumber | GivenAngle | GivenFigure {
+  if (value.kind === 'angle') return giveAngle(engine, value, settings);
+  if (value.kind === 'number') return giveNumber(engine, value, settings, watch);
+  return giveFigure(engine, value, (part, isCut) => {
+    const stepLength = isCut ? settings.stepLength : null;
+    return giveNumber(engine, part, { ...settings, stepLength }, watch);
+  });
 }
 
 function giveNumber(
@@ -226,11 +231,4 @@ function decimalOfReal(engine: Engine, sum: PiSum, digits: number): DecimalResul
     const below = engine.decimal(low, digits);
     return below.re === engine.decimal(high, digits).re ? { ...below, terminates: false } : null;
   });
-}
-
-/** Whether a written value has terms outside all brackets, so that a factor or unit beside it needs brackets. */
-export function isSum(text: string): boolean {
-  let [before, outside] = ['', text];
-  while (before !== outside) [before, outside] = [outside, outside.replace(/\([^()]*\)/g, '')];
-  return /.[+-]/.test(outside);
 }

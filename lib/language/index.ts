@@ -9,13 +9,18 @@ export type { CellResults, EvaluationOptions, LinePlace } from './evaluate';
 export type { ErrorCode, Problem, Span } from './failure';
 export type {
   AngleResult,
+  CircleResult,
+  Coordinates,
   Cut,
   DecimalResult,
   ErrorResult,
   Exact,
+  LineResult,
   Notice,
+  NumberPart,
   NumberResult,
   Omission,
+  PointResult,
   Reach,
   Result,
   TruthResult,

@@ -86,6 +86,66 @@ export const FUNCTIONS: readonly FunctionWord[] = [
     2,
     4,
   ),
+  word(
+    'point(x, y)',
+    'The point with these coordinates, x to the right and y upwards: lengths, or plain numbers. A coordinate 0 needs no unit.',
+    2,
+  ),
+  word(
+    'polar(R, angle)',
+    'The point at the distance R from the origin, the angle measured anticlockwise from the x-axis.',
+    2,
+  ),
+  word(
+    'line(P, Q)',
+    'The line through two points; `line(a, b, c)` is the line a x + b y + c = 0.',
+    2,
+    3,
+  ),
+  word(
+    'circle(C, R)',
+    'The circle about C with the radius R; `circle(C, P)` passes through P, `circle(P, Q, S)` through three points.',
+    2,
+    3,
+  ),
+  word(
+    'meet(g, h, which)',
+    'Where two lines or circles meet. Of two points, 1 is the left one (the lower, if one stands above the other), 2 the other; a point picks the nearer one.',
+    2,
+    3,
+  ),
+  word('mid(P, Q)', 'The middle of two points.', 2),
+  word('foot(P, g)', 'The foot of the perpendicular from P on the line g.', 2),
+  word('perp(g, P)', 'The line at right angles to g through P.', 2),
+  word('parallel(g, P)', 'The line parallel to g through P.', 2),
+  word(
+    'bisect(P, V, Q)',
+    'The line that halves the angle at V; `bisect(P, Q)` is the line of all points as far from P as from Q.',
+    2,
+    3,
+  ),
+  word(
+    'rotate(P, angle, C)',
+    'A point, line or circle turned anticlockwise about C, or about the origin.',
+    2,
+    3,
+  ),
+  word('reflect(P, g)', 'A point, line or circle mirrored in a line or in a point.', 2),
+  word(
+    'dist(P, Q)',
+    'The distance of two points, of a point and a line, or of two parallel lines.',
+    2,
+  ),
+  word(
+    'angle(P, V, Q)',
+    'The angle at V from 0 to half a turn; `angle(g, h)` is the one between two lines, up to a quarter turn.',
+    2,
+    3,
+  ),
+  word('abscissa(P)', 'The x of a point.'),
+  word('ordinate(P)', 'The y of a point.'),
+  word('centre(c)', 'The centre of a circle.'),
+  word('radius(c)', 'The radius of a circle.'),
 ];
 
 export interface UnitWord {

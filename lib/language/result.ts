@@ -2,7 +2,8 @@ import type { Rounding, TowerStep } from '../engine/index';
 import type { Problem } from './failure';
 
 /** The result of one line, as the page, the exports, the endpoint and the command line give it. */
-export type Result = NumberResult | AngleResult | TruthResult | ErrorResult;
+export type Result =
+  NumberResult | AngleResult | PointResult | LineResult | CircleResult | TruthResult | ErrorResult;
 
 interface Line {
   /** 1-based line in its cell. */
@@ -138,6 +139,40 @@ export interface AngleResult extends Parsed {
   decimal: DecimalResult;
   reach: Reach;
   standIn?: StandInResult;
+}
+
+/** One coordinate, coefficient or radius: what a number result says of its value. */
+export type NumberPart = Omit<NumberResult, keyof Parsed | 'partOfTurn' | 'standIn'>;
+
+/** x to the right and y upwards. */
+export interface Coordinates {
+  x: NumberPart;
+  y: NumberPart;
+}
+
+/** `text` and `tex` of a figure have its units in them; its reach is that of all its parts together. */
+interface FigureResult extends Parsed {
+  exact: Exact;
+  /** Unit of the coordinates; null when they are plain numbers. */
+  unit: string | null;
+  reach: Reach;
+}
+
+export interface PointResult extends FigureResult {
+  kind: 'point';
+  coordinates: Coordinates;
+}
+
+export interface LineResult extends FigureResult {
+  kind: 'line';
+  /** Of a x + b y + c = 0, the first of a and b that is not 0 being 1; c has the unit. */
+  coefficients: { a: NumberPart; b: NumberPart; c: NumberPart };
+}
+
+export interface CircleResult extends FigureResult {
+  kind: 'circle';
+  centre: Coordinates;
+  radius: NumberPart;
 }
 
 export interface TruthResult extends Parsed {

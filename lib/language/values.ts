@@ -13,13 +13,25 @@ import {
   signOfSum,
   sqrtSum,
 } from './pi-sum';
+import {
+  type FigureValue,
+  type PointValue,
+  addPoints,
+  describeFigure,
+  isFigure,
+  scalePoint,
+} from './values-geometry';
 
 /**
  * What an expression can be worth.
  * A number is a sum of algebraic multiples of powers of π, in millimetres to the power `length`; a plain number has
- * length 0. An angle is an algebraic number of turns and is a kind of its own: it is added only to angles.
+ * length 0. An angle is an algebraic number of turns and is a kind of its own: it is added only to angles. Points, lines
+ * and circles are exact figures; points are added and scaled as vectors from the origin.
  */
-export type Value = NumberValue | AngleValue;
+export type Value = Scalar | FigureValue;
+
+/** What has a size: it can be compared, rounded and stood in for. */
+export type Scalar = NumberValue | AngleValue;
 
 export interface NumberValue {
   readonly kind: 'number';
@@ -51,6 +63,7 @@ export function angle(turns: Num): AngleValue {
 /** What a value is, to be read in a sentence: `a length`, `an area`, `a plain number`, `an angle`. */
 export function describe(value: Value): string {
   if (value.kind === 'angle') return 'an angle';
+  if (isFigure(value)) return describeFigure(value);
   const names: Readonly<Record<number, string>> = {
     0: 'a plain number',
     1: 'a length',
@@ -68,6 +81,7 @@ function mismatch(action: string, a: Value, b: Value, hint = ''): never {
 }
 
 function hintFor(a: Value, b: Value): string {
+  if (isFigure(a) || isFigure(b)) return '';
   const kinds = [a, b].map((value) => (value.kind === 'angle' ? 'angle' : value.length));
   if (kinds.includes('angle') && kinds.includes(0)) return ' (π radians are `turn/2`)';
   if (kinds.includes(1) && kinds.includes(0)) return ' (a length needs its unit, as in `12 mm`)';
@@ -78,6 +92,8 @@ export function add(engine: Engine, a: Value, b: Value): Value {
   if (a.kind === 'angle' && b.kind === 'angle') return angle(engine.add(a.turns, b.turns));
   if (a.kind === 'number' && b.kind === 'number' && a.length === b.length)
     return number(addSums(engine, a.sum, b.sum), a.length);
+  const sum = a.kind === 'point' && b.kind === 'point' ? addPoints(engine, a, b) : null;
+  if (sum !== null) return sum;
   return mismatch('a sum needs two values of one kind', a, b, hintFor(a, b));
 }
 
@@ -86,16 +102,27 @@ export function subtract(engine: Engine, a: Value, b: Value): Value {
   if (a.kind === 'number' && b.kind === 'number' && a.length === b.length) {
     return number(addSums(engine, a.sum, negateSum(engine, b.sum)), a.length);
   }
+  const difference =
+    a.kind === 'point' && b.kind === 'point' ? addPoints(engine, a, opposite(engine, b)) : null;
+  if (difference !== null) return difference;
   return mismatch('a difference needs two values of one kind', a, b, hintFor(a, b));
 }
 
 export function negate(engine: Engine, a: Value): Value {
-  return a.kind === 'angle'
-    ? angle(engine.neg(a.turns))
-    : number(negateSum(engine, a.sum), a.length);
+  if (a.kind === 'angle') return angle(engine.neg(a.turns));
+  if (a.kind === 'point') return opposite(engine, a);
+  const plain = needNumber(a, 'Only numbers, angles and points have an opposite');
+  return number(negateSum(engine, plain.sum), plain.length);
 }
 
+const opposite = (engine: Engine, point: PointValue): PointValue =>
+  scalePoint(engine, point, number(fromNum(engine, engine.integer(-1n))));
+
 export function multiply(engine: Engine, a: Value, b: Value): Value {
+  if (a.kind === 'point' && b.kind === 'number') return scalePoint(engine, a, b);
+  if (b.kind === 'point' && a.kind === 'number') return scalePoint(engine, b, a);
+  if (isFigure(a) || isFigure(b))
+    return mismatch('a product has numbers as factors, and a point at most once', a, b);
   if (a.kind === 'angle')
     return b.kind === 'angle'
       ? mismatch('two angles cannot be multiplied', a, b)
@@ -105,6 +132,12 @@ export function multiply(engine: Engine, a: Value, b: Value): Value {
 }
 
 export function divide(engine: Engine, a: Value, b: Value): Value {
+  if (a.kind === 'point' && b.kind === 'number') {
+    const one = fromNum(engine, engine.integer(1n));
+    return scalePoint(engine, a, number(divideSums(engine, one, b.sum), -b.length));
+  }
+  if (isFigure(a) || isFigure(b))
+    return mismatch('only a point can be divided, and only by a number', a, b);
   if (b.kind === 'angle') {
     if (a.kind !== 'angle') return mismatch('only an angle can be divided by an angle', a, b);
     if (engine.isZero(b.turns))
@@ -178,6 +211,12 @@ export function needNumber(value: Value, need: string): NumberValue {
   return fail('unit-mismatch', `${need}, and this is ${describe(value)}.`);
 }
 
+/** A number or an angle rather than a figure. `need` begins the sentence. */
+export function needScalar(value: Value, need: string): Scalar {
+  if (value.kind === 'number' || value.kind === 'angle') return value;
+  return fail('unit-mismatch', `${need}, and this is ${describe(value)}.`);
+}
+
 /** A number without a unit and without π. `need` begins the sentence. */
 export function needAlgebraic(engine: Engine, value: Value, need: string): Num {
   const plain = needNumber(value, need);
@@ -190,26 +229,32 @@ export function needAlgebraic(engine: Engine, value: Value, need: string): Num {
 }
 
 export function isRealValue(engine: Engine, value: Value): boolean {
-  if (value.kind === 'angle') return true;
+  if (value.kind !== 'number') return true;
   for (const coefficient of value.sum.values()) if (!engine.isReal(coefficient)) return false;
   return true;
 }
 
-export function isZeroValue(engine: Engine, value: Value): boolean {
+export function isZeroValue(engine: Engine, value: Scalar): boolean {
   return value.kind === 'angle' ? engine.isZero(value.turns) : value.sum.size === 0;
 }
 
-/** Difference of two values for a decision; both must be of one kind. */
-export function differenceForDecision(engine: Engine, a: Value, b: Value): Value {
-  if (a.kind !== b.kind || (a.kind === 'number' && b.kind === 'number' && a.length !== b.length)) {
-    mismatch('only values of one kind can be compared', a, b, hintFor(a, b));
-  }
-  return subtract(engine, a, b);
+/** Difference of two numbers or two angles for a decision; both must be of one kind. */
+export function differenceForDecision(engine: Engine, a: Value, b: Value): Scalar {
+  if (a.kind === 'angle' && b.kind === 'angle') return angle(engine.sub(a.turns, b.turns));
+  if (a.kind === 'number' && b.kind === 'number' && a.length === b.length)
+    return number(addSums(engine, a.sum, negateSum(engine, b.sum)), a.length);
+  return mismatchInDecision(a, b);
+}
+
+export function mismatchInDecision(a: Value, b: Value): never {
+  return mismatch('only values of one kind can be compared', a, b, hintFor(a, b));
 }
 
 /** Sign of a real value; the order of others is asked in vain: `domain`. */
 export function signOf(engine: Engine, value: Value): -1 | 0 | 1 {
   if (value.kind === 'angle') return engine.sign(value.turns);
+  if (value.kind !== 'number')
+    return fail('domain', `Only numbers and angles have an order, and this is ${describe(value)}.`);
   if (!isRealValue(engine, value))
     fail('domain', 'Only real values have an order, and the difference of these is not real.');
   return signOfSum(engine, value.sum);
@@ -221,6 +266,11 @@ export function compareValues(engine: Engine, a: Value, b: Value): -1 | 0 | 1 {
     [a, 'left'],
     [b, 'right'],
   ] as const) {
+    if (isFigure(value))
+      fail(
+        'domain',
+        `Only numbers and angles have an order, and the ${side} one is ${describe(value)}.`,
+      );
     if (!isRealValue(engine, value))
       fail('domain', `Only real values have an order, and the ${side} one is not real.`);
   }

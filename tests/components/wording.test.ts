@@ -1,13 +1,12 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { copyForms } from '@/components/sheet/copy-menu';
+import { sayDecimal, shorten } from '@/components/sheet/say-number';
 import {
   compartmentsOf,
   sayBriefly,
-  sayDecimal,
   sayDimension,
   sayResult,
-  shorten,
   shortenUp,
 } from '@/components/sheet/wording';
 import { DECIDED, errorResult, numberResult, SUM_OF_ROOTS } from './sample-results';

@@ -1,14 +1,9 @@
 import type { Engine, Num } from '../../engine/index';
+import type { TurnPart } from '../../geometry/index';
 import { fail } from '../failure';
 import { asAlgebraic } from '../pi-sum';
 import { type NumberValue, type Value, angle, describe, needAlgebraic, number } from '../values';
 import { fromNum } from '../pi-sum';
-
-/** An exact part of a turn, as a reduced fraction. */
-interface TurnPart {
-  readonly k: bigint;
-  readonly n: bigint;
-}
 
 /**
  * Reads a value as an angle in turns.
@@ -17,8 +12,8 @@ interface TurnPart {
  */
 export function turnsOf(engine: Engine, value: Value): Num {
   if (value.kind === 'angle') return value.turns;
-  if (value.length !== 0)
-    fail('unit-mismatch', `An angle was expected, and this is ${describe(value)}.`);
+  if (value.kind !== 'number' || value.length !== 0)
+    return fail('unit-mismatch', `An angle was expected, and this is ${describe(value)}.`);
   const algebraic = asAlgebraic(engine, value.sum);
   if (algebraic !== null) {
     if (engine.isZero(algebraic)) return algebraic;
@@ -43,7 +38,7 @@ export function turnsOf(engine: Engine, value: Value): Num {
  * The angle as k/n of a turn.
  * An irrational algebraic part of a turn has transcendental sine and cosine (Gelfond 1934, Schneider 1934): `not-exact`.
  */
-function partOfTurn(engine: Engine, value: Value): TurnPart {
+export function partOfTurn(engine: Engine, value: Value): TurnPart {
   const part = engine.asRational(turnsOf(engine, value));
   if (part === null) {
     return fail(
@@ -144,12 +139,12 @@ function needProperSine(engine: Engine, value: Value, name: string): Num {
 }
 
 /**
- * The part of a turn, from 0 to 1/2, whose cosine this is; `not-exact` when it is no rational part.
+ * The part of a turn, from 0 to 1/2, whose cosine this is; null when it is no rational part.
  * For n > 2 the degree of cos(2πk/n), k prime to n, is φ(n)/2 (Lehmer 1933), so only few n come into question; within
  * one n the cosine falls as k grows, and exact comparisons find k or prove that there is none.
  * Cost: log n comparisons for each n.
  */
-function turnsWithCosine(engine: Engine, value: Num, name: string): Num {
+export function findTurnsWithCosine(engine: Engine, value: Num): Num | null {
   for (const n of divisionsOfDegree(BigInt(engine.degree(value)))) {
     let low = 0n;
     let high = n / 2n;
@@ -161,9 +156,16 @@ function turnsWithCosine(engine: Engine, value: Num, name: string): Num {
       else high = k - 1n;
     }
   }
-  return fail(
-    'not-exact',
-    `The angle that ${name} asks for is not a rational part of a turn, so it has no exact measure; its sine and cosine can be used as they are.`,
+  return null;
+}
+
+function turnsWithCosine(engine: Engine, value: Num, name: string): Num {
+  return (
+    findTurnsWithCosine(engine, value) ??
+    fail(
+      'not-exact',
+      `The angle that ${name} asks for is not a rational part of a turn, so it has no exact measure; its sine and cosine can be used as they are.`,
+    )
   );
 }
 

@@ -12,6 +12,27 @@ import {
   sine,
   tangent,
 } from './circular';
+import {
+  bisect,
+  foot,
+  meet,
+  mid,
+  parallel,
+  perp,
+  reflect,
+  rotateFigure,
+} from './geometry-constructions';
+import {
+  abscissa,
+  centre,
+  circle,
+  line,
+  ordinate,
+  point,
+  polarPoint,
+  radius,
+} from './geometry-figures';
+import { angleBetween, dist } from './geometry-measures';
 import { absolute, conjugate, extreme, imaginaryPart, realPart, toWhole } from './parts';
 import { cubeRoot } from './roots';
 import { standIn } from './stand-in';
@@ -57,4 +78,22 @@ export const ACTIONS: ReadonlyMap<string, Action> = new Map<string, Action>([
   ['sagitta', two(sagitta)],
   ['versine', one(versine)],
   ['standin', standIn],
+  ['point', point],
+  ['polar', polarPoint],
+  ['line', line],
+  ['circle', circle],
+  ['meet', meet],
+  ['mid', mid],
+  ['foot', foot],
+  ['perp', perp],
+  ['parallel', parallel],
+  ['bisect', bisect],
+  ['rotate', rotateFigure],
+  ['reflect', reflect],
+  ['dist', dist],
+  ['angle', angleBetween],
+  ['abscissa', abscissa],
+  ['ordinate', ordinate],
+  ['centre', centre],
+  ['radius', radius],
 ]);

@@ -10,6 +10,7 @@ import {
   mapNumber,
   multiply,
   needNumber,
+  needScalar,
   number,
   signOf,
 } from '../values';
@@ -59,9 +60,10 @@ export function extreme(engine: Engine, values: readonly Value[], sought: -1 | 1
 export function toWhole(
   engine: Engine,
   name: 'floor' | 'round',
-  value: Value,
+  given: Value,
   step: Value | undefined,
 ): Value {
+  const value = needScalar(given, `${name} needs a number or an angle`);
   if (step !== undefined) {
     if (signOf(engine, step) <= 0) fail('domain', `${name} needs a step above 0.`);
     return multiply(engine, wholeOf(engine, name, divide(engine, value, step)), step);

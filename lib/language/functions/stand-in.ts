@@ -23,11 +23,13 @@ import { type PiSum, asAlgebraic, enclose, mapSum } from '../pi-sum';
 import type { StandInOffer, StandInResult, SteppedResult } from '../result';
 import {
   type NumberValue,
+  type Scalar,
   type Value,
   angle,
   describe,
   isRealValue,
   needNumber,
+  needScalar,
   number,
   signOf,
 } from '../values';
@@ -41,12 +43,12 @@ interface Standing {
   readonly chosen: number;
   /** Whether the last and closest offer is the value itself; the search alone cannot tell. */
   readonly exact: boolean;
-  readonly of: Value;
-  readonly tolerance: Value;
+  readonly of: Scalar;
+  readonly tolerance: Scalar;
   readonly radius: NumberValue | null;
 }
 
-type StandInValue = Value & { readonly standing: Standing };
+type StandInValue = Scalar & { readonly standing: Standing };
 
 /**
  * `standin(value, tolerance, R, n)`: the cheapest constructible value within the tolerance, exact, of the same kind.
@@ -55,7 +57,9 @@ type StandInValue = Value & { readonly standing: Standing };
  * `unit-mismatch`, `domain`, and `not-exact` when nothing was found inside the tolerance.
  */
 export function standIn(engine: Engine, args: readonly Value[]): Value {
-  const [value, tolerance, radius, parts] = args as [Value, Value, Value?, Value?];
+  const [given, off, radius, parts] = args as [Value, Value, Value?, Value?];
+  const value = needScalar(given, 'standin needs a number or an angle');
+  const tolerance = needScalar(off, 'standin needs a tolerance that is a number or an angle');
   checkKinds(engine, value, tolerance, radius);
   const base = radius === undefined ? null : needNumber(radius, 'standin needs a radius');
   const allowed = toleranceOf(engine, tolerance);
@@ -84,8 +88,8 @@ export function standIn(engine: Engine, args: readonly Value[]): Value {
 
 function checkKinds(
   engine: Engine,
-  value: Value,
-  tolerance: Value,
+  value: Scalar,
+  tolerance: Scalar,
   radius: Value | undefined,
 ): void {
   const others = [
@@ -115,7 +119,7 @@ function checkKinds(
   }
 }
 
-function toleranceOf(engine: Engine, tolerance: Value): Fraction {
+function toleranceOf(engine: Engine, tolerance: Scalar): Fraction {
   const plain = tolerance.kind === 'angle' ? tolerance.turns : asAlgebraic(engine, tolerance.sum);
   const fraction = plain === null ? null : engine.asRational(plain);
   return (
@@ -139,7 +143,7 @@ function partsOf(engine: Engine, parts: Value): number {
 }
 
 /** Encloses a positive real value, in millimetres to its power or in turns, by whole parts of 2^bits. */
-function targetOf(engine: Engine, value: Value): Target {
+function targetOf(engine: Engine, value: Scalar): Target {
   const known = new Map<number, Interval>();
   const floorOf = (real: Num, bits: number): bigint =>
     engine.floor(engine.mul(real, engine.integer(1n << BigInt(bits))));
@@ -188,7 +192,7 @@ function choose(
 function isExact(
   engine: Engine,
   { offers }: Found,
-  of: Value,
+  of: Scalar,
   radius: NumberValue | null,
 ): boolean {
   const closest = offers.at(-1);
@@ -199,7 +203,7 @@ function isExact(
   return same.kind === 'value' && same.value;
 }
 
-function inPlaceOf(engine: Engine, of: Value, form: Num, radius: NumberValue | null): Value {
+function inPlaceOf(engine: Engine, of: Scalar, form: Num, radius: NumberValue | null): Scalar {
   if (of.kind === 'angle') return angle(form);
   const sum: PiSum =
     radius === null
@@ -208,7 +212,7 @@ function inPlaceOf(engine: Engine, of: Value, form: Num, radius: NumberValue | n
   return number(sum, of.length);
 }
 
-function sameValue(engine: Engine, a: Value, b: Value): boolean {
+function sameValue(engine: Engine, a: Scalar, b: Scalar): boolean {
   if (a.kind === 'angle') return b.kind === 'angle' && engine.equal(a.turns, b.turns);
   if (b.kind === 'angle') return false;
   const [x, y] = [asAlgebraic(engine, a.sum), asAlgebraic(engine, b.sum)];
@@ -308,7 +312,7 @@ function giveStepped(closing: Judged, factor: Fraction): SteppedResult {
 }
 
 /** From millimetres to a power to the unit of the settings, or from turns to degrees. */
-function factorTo(unit: GivenSettings['unit'], of: Value): Fraction {
+function factorTo(unit: GivenSettings['unit'], of: Scalar): Fraction {
   if (of.kind === 'angle') return { n: 360n, d: 1n };
   const word = findUnit(unit);
   if (word === undefined)
@@ -319,7 +323,7 @@ function factorTo(unit: GivenSettings['unit'], of: Value): Fraction {
 }
 
 /** A value with its unit, so that it parses back. */
-function writeWhole(engine: Engine, value: Value, settings: GivenSettings): string {
+function writeWhole(engine: Engine, value: Scalar, settings: GivenSettings): string {
   if (value.kind === 'angle') return `(${engine.write(value.turns).text}) turn`;
   const { text } = writeSum(engine, inUnit(engine, value, settings.unit));
   const unit = unitName(settings.unit, value.length);
