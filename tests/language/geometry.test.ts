@@ -1,12 +1,7 @@
 import fc from 'fast-check';
 import katex from 'katex';
 import { describe, expect, it } from 'vitest';
-import {
-  type Result,
-  type Settings,
-  evaluateCells,
-  evaluateExpression,
-} from '@/lib/language/index';
+import { type Result, type Settings, evaluateCells } from '@/lib/language/index';
 
 /** The results of the lines of one cell. */
 function lines(source: string, settings: Partial<Settings> = {}): Result[] {
