@@ -8,7 +8,7 @@ import { fromNum } from './pi-sum';
 import type { Settings } from './settings';
 import type { Relation, Statement } from './syntax';
 import {
-  type Scalar,
+  type Magnitude,
   type Value,
   compareValues,
   differenceForDecision,
@@ -87,7 +87,7 @@ function explain(engine: Engine, left: Value, right: Value, settings: Settings):
   if (isFigure(left) && isFigure(right)) return explainFigures(engine, left, right, settings);
   const difference = differenceForDecision(engine, left, right);
   if (isZeroValue(engine, difference)) {
-    const { text, approximate } = inWords(engine, left as Scalar, settings);
+    const { text, approximate } = inWords(engine, left as Magnitude, settings);
     return approximate ? `Both sides are the same value, ${text}.` : `Both sides are ${text}.`;
   }
   if (!isRealValue(engine, difference))
@@ -118,7 +118,7 @@ function explainFigures(
 
 function inWords(
   engine: Engine,
-  value: Scalar,
+  value: Magnitude,
   settings: Settings,
 ): { text: string; approximate: boolean } {
   if (value.kind === 'angle') {
@@ -134,7 +134,7 @@ function inWords(
 const DIGITS_IN_A_REASON = 4;
 
 /** A few digits, with the word `about` unless they are the value itself. */
-function about(engine: Engine, value: Scalar, settings: Settings): string {
+function about(engine: Engine, value: Magnitude, settings: Settings): string {
   const sum =
     value.kind === 'angle'
       ? fromNum(engine, engine.mul(value.turns, engine.integer(360n)))

@@ -10,9 +10,9 @@ import type { NumberValue, Value } from './values';
  * are plain numbers. In the equation of a line a and b are plain and c is of that unit.
  */
 export type FigureValue = FigureOf<Point> | FigureOf<Line> | FigureOf<Circle>;
-export type PointValue = FigureOf<Point>;
-export type LineValue = FigureOf<Line>;
-export type CircleValue = FigureOf<Circle>;
+export type PointFigure = FigureOf<Point>;
+export type LineFigure = FigureOf<Line>;
+export type CircleFigure = FigureOf<Circle>;
 
 interface FigureOf<F extends Figure> {
   readonly kind: F['kind'];
@@ -22,9 +22,9 @@ interface FigureOf<F extends Figure> {
 
 export type Length = 0 | 1;
 
-export function figureValue(figure: Point, length: Length): PointValue;
-export function figureValue(figure: Line, length: Length): LineValue;
-export function figureValue(figure: Circle, length: Length): CircleValue;
+export function figureValue(figure: Point, length: Length): PointFigure;
+export function figureValue(figure: Line, length: Length): LineFigure;
+export function figureValue(figure: Circle, length: Length): CircleFigure;
 export function figureValue(figure: Figure, length: Length): FigureValue;
 export function figureValue(figure: Figure, length: Length): FigureValue {
   return { kind: figure.kind, figure, length } as FigureValue;
@@ -53,7 +53,7 @@ export function fitsAnyUnit(engine: Engine, value: NumberValue | FigureValue): b
 }
 
 /** Points are added as vectors from the origin; null when the two do not go together. */
-export function addPoints(engine: Engine, a: PointValue, b: PointValue): PointValue | null {
+export function addPoints(engine: Engine, a: PointFigure, b: PointFigure): PointFigure | null {
   const length = fitsAnyUnit(engine, a) ? b.length : a.length;
   if (length !== b.length && !fitsAnyUnit(engine, b)) return null;
   const [p, q] = [a.figure, b.figure];
@@ -61,7 +61,7 @@ export function addPoints(engine: Engine, a: PointValue, b: PointValue): PointVa
 }
 
 /** A point times a real number: the vector from the origin, scaled. A point without a unit may be given one. */
-export function scalePoint(engine: Engine, point: PointValue, factor: NumberValue): PointValue {
+export function scalePoint(engine: Engine, point: PointFigure, factor: NumberValue): PointFigure {
   const length = point.length + factor.length;
   if (length !== 0 && length !== 1) {
     return fail(

@@ -15,7 +15,7 @@ import {
 } from './pi-sum';
 import {
   type FigureValue,
-  type PointValue,
+  type PointFigure,
   addPoints,
   describeFigure,
   isFigure,
@@ -28,10 +28,10 @@ import {
  * length 0. An angle is an algebraic number of turns and is a kind of its own: it is added only to angles. Points, lines
  * and circles are exact figures; points are added and scaled as vectors from the origin.
  */
-export type Value = Scalar | FigureValue;
+export type Value = Magnitude | FigureValue;
 
 /** What has a size: it can be compared, rounded and stood in for. */
-export type Scalar = NumberValue | AngleValue;
+export type Magnitude = NumberValue | AngleValue;
 
 export interface NumberValue {
   readonly kind: 'number';
@@ -115,7 +115,7 @@ export function negate(engine: Engine, a: Value): Value {
   return number(negateSum(engine, plain.sum), plain.length);
 }
 
-const opposite = (engine: Engine, point: PointValue): PointValue =>
+const opposite = (engine: Engine, point: PointFigure): PointFigure =>
   scalePoint(engine, point, number(fromNum(engine, engine.integer(-1n))));
 
 export function multiply(engine: Engine, a: Value, b: Value): Value {
@@ -212,7 +212,7 @@ export function needNumber(value: Value, need: string): NumberValue {
 }
 
 /** A number or an angle rather than a figure. `need` begins the sentence. */
-export function needScalar(value: Value, need: string): Scalar {
+export function needMagnitude(value: Value, need: string): Magnitude {
   if (value.kind === 'number' || value.kind === 'angle') return value;
   return fail('unit-mismatch', `${need}, and this is ${describe(value)}.`);
 }
@@ -234,12 +234,12 @@ export function isRealValue(engine: Engine, value: Value): boolean {
   return true;
 }
 
-export function isZeroValue(engine: Engine, value: Scalar): boolean {
+export function isZeroValue(engine: Engine, value: Magnitude): boolean {
   return value.kind === 'angle' ? engine.isZero(value.turns) : value.sum.size === 0;
 }
 
 /** Difference of two numbers or two angles for a decision; both must be of one kind. */
-export function differenceForDecision(engine: Engine, a: Value, b: Value): Scalar {
+export function differenceForDecision(engine: Engine, a: Value, b: Value): Magnitude {
   if (a.kind === 'angle' && b.kind === 'angle') return angle(engine.sub(a.turns, b.turns));
   if (a.kind === 'number' && b.kind === 'number' && a.length === b.length)
     return number(addSums(engine, a.sum, negateSum(engine, b.sum)), a.length);

@@ -4,26 +4,26 @@ import { fail } from '../failure';
 import { asAlgebraic } from '../pi-sum';
 import { type NumberValue, type Value, describe } from '../values';
 import {
-  type CircleValue,
+  type CircleFigure,
   type FigureValue,
   type Length,
-  type LineValue,
-  type PointValue,
+  type LineFigure,
+  type PointFigure,
   fitsAnyUnit,
   isFigure,
 } from '../values-geometry';
 
 /** What functions of geometry take, with the sentences for what does not fit. `need` begins the sentence. */
 
-export function needPoint(value: Value | undefined, need: string): PointValue {
+export function needPoint(value: Value | undefined, need: string): PointFigure {
   return value?.kind === 'point' ? value : failKind(value, need);
 }
 
-export function needLine(value: Value | undefined, need: string): LineValue {
+export function needLine(value: Value | undefined, need: string): LineFigure {
   return value?.kind === 'line' ? value : failKind(value, need);
 }
 
-export function needCircle(value: Value | undefined, need: string): CircleValue {
+export function needCircle(value: Value | undefined, need: string): CircleFigure {
   return value?.kind === 'circle' ? value : failKind(value, need);
 }
 

@@ -16,7 +16,12 @@ import {
 import { fail } from '../failure';
 import { asAlgebraic } from '../pi-sum';
 import type { Value } from '../values';
-import { type CircleValue, type LineValue, type PointValue, figureValue } from '../values-geometry';
+import {
+  type CircleFigure,
+  type LineFigure,
+  type PointFigure,
+  figureValue,
+} from '../values-geometry';
 import { partOfTurn } from './circular';
 import {
   commonLength,
@@ -33,7 +38,7 @@ type Arguments = readonly Value[];
  * `meet(f, g)` of two lines or circles; where they have two points, `meet(f, g, 1)` is the left one (the lower one, if
  * they stand one above the other), `meet(f, g, 2)` the other and `meet(f, g, P)` the one nearer to P.
  */
-export function meet(engine: Engine, [first, second, third]: Arguments): PointValue {
+export function meet(engine: Engine, [first, second, third]: Arguments): PointFigure {
   const f = needCurve(first);
   const g = needCurve(second);
   const near = third?.kind === 'point' ? [third] : [];
@@ -42,7 +47,7 @@ export function meet(engine: Engine, [first, second, third]: Arguments): PointVa
   return figureValue(settle(engine, meetAt(engine, f.figure, g.figure, which), length), length);
 }
 
-function needCurve(value: Value | undefined): LineValue | CircleValue {
+function needCurve(value: Value | undefined): LineFigure | CircleFigure {
   return value?.kind === 'line' || value?.kind === 'circle'
     ? value
     : failKind(value, 'meet needs two lines or circles');
@@ -62,7 +67,7 @@ function whichMeet(engine: Engine, value: Value): 1 | 2 | Point {
 }
 
 /** `mid(P, Q)`. */
-export function mid(engine: Engine, [first, second]: Arguments): PointValue {
+export function mid(engine: Engine, [first, second]: Arguments): PointFigure {
   const p = needPoint(first, 'mid needs two points');
   const q = needPoint(second, 'mid needs two points');
   return figureValue(middle(engine, p.figure, q.figure), commonLength(engine, 'mid', [p, q]));
@@ -73,7 +78,7 @@ function lineAndPoint(
   engine: Engine,
   name: string,
   [first, second]: Arguments,
-): { line: LineValue; point: PointValue; length: 0 | 1 } {
+): { line: LineFigure; point: PointFigure; length: 0 | 1 } {
   const [one, other] = first?.kind === 'point' ? [second, first] : [first, second];
   const line = needLine(one, `${name} needs a line and a point`);
   const point = needPoint(other, `${name} needs a line and a point`);
@@ -81,25 +86,25 @@ function lineAndPoint(
 }
 
 /** `foot(P, line)`: the point of the line nearest to P. */
-export function foot(engine: Engine, args: Arguments): PointValue {
+export function foot(engine: Engine, args: Arguments): PointFigure {
   const { line, point, length } = lineAndPoint(engine, 'foot', args);
   return figureValue(footOf(engine, point.figure, line.figure), length);
 }
 
 /** `perp(line, P)`: at right angles to the line, through P. */
-export function perp(engine: Engine, args: Arguments): LineValue {
+export function perp(engine: Engine, args: Arguments): LineFigure {
   const { line, point, length } = lineAndPoint(engine, 'perp', args);
   return figureValue(perpendicular(engine, line.figure, point.figure), length);
 }
 
 /** `parallel(line, P)`: through P. */
-export function parallel(engine: Engine, args: Arguments): LineValue {
+export function parallel(engine: Engine, args: Arguments): LineFigure {
   const { line, point, length } = lineAndPoint(engine, 'parallel', args);
   return figureValue(parallelThrough(engine, line.figure, point.figure), length);
 }
 
 /** `bisect(P, Q)`: all points as far from P as from Q. `bisect(P, V, Q)`: the line that halves the angle at V. */
-export function bisect(engine: Engine, [first, second, third]: Arguments): LineValue {
+export function bisect(engine: Engine, [first, second, third]: Arguments): LineFigure {
   const need = 'bisect needs two points, or three with the vertex of the angle second';
   const p = needPoint(first, need);
   const q = needPoint(second, need);

@@ -10,7 +10,7 @@ import {
   mapNumber,
   multiply,
   needNumber,
-  needScalar,
+  needMagnitude,
   number,
   signOf,
 } from '../values';
@@ -63,7 +63,7 @@ export function toWhole(
   given: Value,
   step: Value | undefined,
 ): Value {
-  const value = needScalar(given, `${name} needs a number or an angle`);
+  const value = needMagnitude(given, `${name} needs a number or an angle`);
   if (step !== undefined) {
     if (signOf(engine, step) <= 0) fail('domain', `${name} needs a step above 0.`);
     return multiply(engine, wholeOf(engine, name, divide(engine, value, step)), step);

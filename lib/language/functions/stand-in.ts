@@ -23,13 +23,13 @@ import { type PiSum, asAlgebraic, enclose, mapSum } from '../pi-sum';
 import type { StandInOffer, StandInResult, SteppedResult } from '../result';
 import {
   type NumberValue,
-  type Scalar,
+  type Magnitude,
   type Value,
   angle,
   describe,
   isRealValue,
   needNumber,
-  needScalar,
+  needMagnitude,
   number,
   signOf,
 } from '../values';
@@ -43,12 +43,12 @@ interface Standing {
   readonly chosen: number;
   /** Whether the last and closest offer is the value itself; the search alone cannot tell. */
   readonly exact: boolean;
-  readonly of: Scalar;
-  readonly tolerance: Scalar;
+  readonly of: Magnitude;
+  readonly tolerance: Magnitude;
   readonly radius: NumberValue | null;
 }
 
-type StandInValue = Scalar & { readonly standing: Standing };
+type StandInValue = Magnitude & { readonly standing: Standing };
 
 /**
  * `standin(value, tolerance, R, n)`: the cheapest constructible value within the tolerance, exact, of the same kind.
@@ -58,8 +58,8 @@ type StandInValue = Scalar & { readonly standing: Standing };
  */
 export function standIn(engine: Engine, args: readonly Value[]): Value {
   const [given, off, radius, parts] = args as [Value, Value, Value?, Value?];
-  const value = needScalar(given, 'standin needs a number or an angle');
-  const tolerance = needScalar(off, 'standin needs a tolerance that is a number or an angle');
+  const value = needMagnitude(given, 'standin needs a number or an angle');
+  const tolerance = needMagnitude(off, 'standin needs a tolerance that is a number or an angle');
   checkKinds(engine, value, tolerance, radius);
   const base = radius === undefined ? null : needNumber(radius, 'standin needs a radius');
   const allowed = toleranceOf(engine, tolerance);
@@ -88,8 +88,8 @@ export function standIn(engine: Engine, args: readonly Value[]): Value {
 
 function checkKinds(
   engine: Engine,
-  value: Scalar,
-  tolerance: Scalar,
+  value: Magnitude,
+  tolerance: Magnitude,
   radius: Value | undefined,
 ): void {
   const others = [
@@ -119,7 +119,7 @@ function checkKinds(
   }
 }
 
-function toleranceOf(engine: Engine, tolerance: Scalar): Fraction {
+function toleranceOf(engine: Engine, tolerance: Magnitude): Fraction {
   const plain = tolerance.kind === 'angle' ? tolerance.turns : asAlgebraic(engine, tolerance.sum);
   const fraction = plain === null ? null : engine.asRational(plain);
   return (
@@ -143,7 +143,7 @@ function partsOf(engine: Engine, parts: Value): number {
 }
 
 /** Encloses a positive real value, in millimetres to its power or in turns, by whole parts of 2^bits. */
-function targetOf(engine: Engine, value: Scalar): Target {
+function targetOf(engine: Engine, value: Magnitude): Target {
   const known = new Map<number, Interval>();
   const floorOf = (real: Num, bits: number): bigint =>
     engine.floor(engine.mul(real, engine.integer(1n << BigInt(bits))));
@@ -192,7 +192,7 @@ function choose(
 function isExact(
   engine: Engine,
   { offers }: Found,
-  of: Scalar,
+  of: Magnitude,
   radius: NumberValue | null,
 ): boolean {
   const closest = offers.at(-1);
@@ -203,7 +203,12 @@ function isExact(
   return same.kind === 'value' && same.value;
 }
 
-function inPlaceOf(engine: Engine, of: Scalar, form: Num, radius: NumberValue | null): Scalar {
+function inPlaceOf(
+  engine: Engine,
+  of: Magnitude,
+  form: Num,
+  radius: NumberValue | null,
+): Magnitude {
   if (of.kind === 'angle') return angle(form);
   const sum: PiSum =
     radius === null
@@ -212,7 +217,7 @@ function inPlaceOf(engine: Engine, of: Scalar, form: Num, radius: NumberValue | 
   return number(sum, of.length);
 }
 
-function sameValue(engine: Engine, a: Scalar, b: Scalar): boolean {
+function sameValue(engine: Engine, a: Magnitude, b: Magnitude): boolean {
   if (a.kind === 'angle') return b.kind === 'angle' && engine.equal(a.turns, b.turns);
   if (b.kind === 'angle') return false;
   const [x, y] = [asAlgebraic(engine, a.sum), asAlgebraic(engine, b.sum)];
@@ -312,7 +317,7 @@ function giveStepped(closing: Judged, factor: Fraction): SteppedResult {
 }
 
 /** From millimetres to a power to the unit of the settings, or from turns to degrees. */
-function factorTo(unit: GivenSettings['unit'], of: Scalar): Fraction {
+function factorTo(unit: GivenSettings['unit'], of: Magnitude): Fraction {
   if (of.kind === 'angle') return { n: 360n, d: 1n };
   const word = findUnit(unit);
   if (word === undefined)
@@ -323,7 +328,7 @@ function factorTo(unit: GivenSettings['unit'], of: Scalar): Fraction {
 }
 
 /** A value with its unit, so that it parses back. */
-function writeWhole(engine: Engine, value: Scalar, settings: GivenSettings): string {
+function writeWhole(engine: Engine, value: Magnitude, settings: GivenSettings): string {
   if (value.kind === 'angle') return `(${engine.write(value.turns).text}) turn`;
   const { text } = writeSum(engine, inUnit(engine, value, settings.unit));
   const unit = unitName(settings.unit, value.length);
