@@ -14,6 +14,10 @@ export const EXAMPLES = [
     meaning: 'A statement. It is decided exactly, never by decimals.',
   },
   { name: 'a < b', meaning: 'Order is decided exactly as well; so are <=, >, >= and !=.' },
+  {
+    name: 'P = meet(circle(A, R), line(A, B), 2)',
+    meaning: 'A point, from marks of other points and a length. Its x and y have cut sizes.',
+  },
   { name: '# from drawing 14', meaning: 'A remark: whatever follows # is not read.' },
 ] as const;
 
@@ -24,6 +28,7 @@ export const RULES = [
   'Units are checked: a length plus an angle is an error that says so. The root of an area is a length.',
   'A name is defined once on a sheet. Names of units and functions cannot be marks.',
   'A plain number as an angle is in radians; write turn/17, 15 deg or 15°.',
+  'Points, lines and circles: x runs to the right and y upwards, angles anticlockwise from the x-axis. A coordinate 0 needs no unit. Points are added and scaled as vectors.',
 ] as const;
 
 export const WORDS = [
