@@ -22,16 +22,10 @@ import * as Z from './int';
 import { bitLength } from './integers';
 import type { Algebraic } from './algebraic/algebraic';
 import { Beyond, isAlgebraic, type Value } from './algebraic/beyond';
-import { nearestRoot } from './algebraic/near';
 import type { RealPart } from './algebraic/real-part';
 import { partOfTurn } from './algebraic/roots-of-unity';
 import { trisectorReaches, type Trisector } from './algebraic/trisector';
-import {
-  decimalOfAlgebraic,
-  floorOfIrrational,
-  roundIrrational,
-  writeAlgebraic,
-} from './algebraic/writing';
+import { decimalOfAlgebraic, floorOfIrrational, roundIrrational } from './algebraic/writing';
 import { Budget, DEFAULT_LIMITS, OutsideDomain, OverLimit } from './limits';
 import { degreeOf, minimalPolynomialOf } from './minimal-polynomial';
 import { certificateOf } from './certificate';
@@ -168,21 +162,14 @@ class ExactEngine implements Engine {
     while (f.length > 0 && f[f.length - 1] === 0n) f.pop();
     if (f.length < 2) throw new RangeError('nearestRoot() takes a polynomial of positive degree.');
     this.budget.within('degree', f.length - 1);
-    const place = this.open(near);
-    const root = nearestRoot(
-      f,
-      (P) =>
-        isAlgebraic(place) ? place.box(P) : { re: enclose(place.re, P), im: enclose(place.im, P) },
-      this.budget,
-    );
-    return this.seal(this.beyond.settle(root));
+    return this.seal(this.beyond.nearestRoot(f, this.open(near)));
   }
   nearestRootOf(coefficients: readonly Num[], near: Num): Num {
     const [leading, ...others] = coefficients.map((c) => this.open(c));
     if (leading === undefined || others.length === 0 || this.isZero(coefficients[0] as Num))
       throw new RangeError('nearestRootOf() takes a polynomial of positive degree.');
     this.budget.within('degree', others.length);
-    return this.seal(this.beyond.nearestRoot([leading, ...others].reverse(), this.open(near)));
+    return this.seal(this.beyond.nearestRootOver([leading, ...others].reverse(), this.open(near)));
   }
   re(a: Num): Num {
     const x = this.open(a);
@@ -338,7 +325,7 @@ class ExactEngine implements Engine {
 
   write(a: Num): Written {
     const x = this.open(a);
-    return isAlgebraic(x) ? writeAlgebraic(x, this.budget) : writeValue(x);
+    return isAlgebraic(x) ? this.beyond.write(x) : writeValue(x);
   }
   tower(a: Num): TowerStep[] | null {
     const x = this.open(a);

@@ -72,3 +72,10 @@ function renderTerms(terms: readonly Term[], style: Style, name?: Naming): strin
   }
   return out;
 }
+
+/** Whether a text has terms outside all brackets, so that a factor or unit beside it needs brackets. */
+export function isSumText(text: string): boolean {
+  let [before, outside] = ['', text];
+  while (before !== outside) [before, outside] = [outside, outside.replace(/\([^()]*\)/g, '')];
+  return /.[+-]/.test(outside);
+}

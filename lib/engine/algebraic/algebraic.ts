@@ -7,7 +7,6 @@ import type { Budget } from '../limits';
 import { factorOverIntegers } from '../polynomials/factor';
 import { degreeOf, isEqual, maxBits, type IntegerPoly } from '../polynomials/integer-poly';
 import { areApart, evaluateBox, holdsZero, hullBox, type Box } from './box';
-import type { Named } from './name';
 import { isolate, refine } from './newton';
 
 export interface Fraction {
@@ -18,8 +17,6 @@ export interface Fraction {
 
 /** What is known of a number besides its polynomial. */
 export interface Origin {
-  /** A short way to write it. */
-  readonly named?: Named;
   /** n when the number lies in the field of the division of a turn into n parts and generates as much as its cosine. */
   readonly division?: bigint;
 }
@@ -41,11 +38,6 @@ export class Algebraic {
 
   get degree(): number {
     return degreeOf(this.poly);
-  }
-
-  /** The same number under a name. */
-  renamed(named: Named): Algebraic {
-    return new Algebraic(this.poly, this.isReal, this.enclose, { ...this.origin, named });
   }
 
   /** A box of the number over 2^P, a few units wide. */

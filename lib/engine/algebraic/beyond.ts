@@ -10,18 +10,21 @@ import { enclose, signEl } from '../enclosure';
 import * as Z from '../int';
 import type { Budget } from '../limits';
 import type { Cx } from '../complex';
+import type { Written } from '../types';
 import { minimalPolynomialOf } from '../minimal-polynomial';
+import type { IntegerPoly } from '../polynomials/integer-poly';
 import type { Field } from '../tower';
 import { Algebraic, identify, isFraction, refining, type Fraction, type Root } from './algebraic';
 import { addBox, multiplyBox, type Box } from './box';
 import { algebraicCosine } from './cosine';
 import { CyclotomicFields, type Cyclotomic } from './cyclotomic';
 import { isolate } from './newton';
-import { nearestOf } from './near';
+import { Naming } from './naming';
+import { nearestOf, rootsOf, type Isolated } from './near';
 import { rootsOverField } from './norm';
 import * as operations from './operations';
 import { rationalPart, type RealPart } from './real-part';
-import { nameRoot, principalRoot, principalSquareRoot, realRoot } from './principal';
+import { principalRoot, principalSquareRoot, realRoot } from './principal';
 import { quadraticChain, type Chain } from './quadratic-chain';
 import { toTower } from './square-roots';
 
@@ -45,11 +48,18 @@ export class Beyond {
   private readonly verdicts = new WeakMap<Algebraic, Verdict>();
   private readonly cyclotomics = new WeakMap<Value, Cyclotomic>();
   private readonly fields = new CyclotomicFields();
+  private readonly naming: Naming;
 
   constructor(
     private readonly field: Field,
     private readonly budget: Budget,
-  ) {}
+  ) {
+    this.naming = new Naming(field, budget);
+  }
+
+  write(a: Algebraic): Written {
+    return this.naming.write(a);
+  }
 
   /** A value of the tower as an algebraic number, by its minimal polynomial and its enclosures. */
   private rootOf(x: Value): Root {
@@ -120,7 +130,7 @@ export class Beyond {
     const cosine = algebraicCosine(k, n, this.budget);
     const element = this.fields.cosine(Number(k), Number(n));
     if (element !== null) this.cyclotomics.set(cosine, element);
-    return cosine;
+    return this.naming.cosine(cosine, k, n);
   }
 
   /** The value as an element of a cyclotomic field, where it is known to be one. */
@@ -136,23 +146,25 @@ export class Beyond {
   }
 
   add(a: Value, b: Value): Value {
-    return this.combine(
+    const sum = this.combine(
       a,
       b,
       (x, y) => this.fields.add(x, y),
       (x, y) => operations.add(x, y, this.budget),
       (x, y) => addBox(x, y),
     );
+    return this.naming.add(sum, a, b);
   }
 
   multiply(a: Value, b: Value): Value {
-    return this.combine(
+    const product = this.combine(
       a,
       b,
       (x, y) => this.fields.multiply(x, y),
       (x, y) => operations.multiply(x, y, this.budget),
       (x, y, P) => multiplyBox(x, y, P),
     );
+    return this.naming.multiply(product, a, b);
   }
 
   /** Inside a cyclotomic field where both values lie in one; a rational operand keeps the other's name either way. */
@@ -202,19 +214,21 @@ export class Beyond {
   negate(a: Algebraic): Value {
     const x = this.cyclotomics.get(a);
     const element = x && this.fields.multiply(x, this.fields.rational(-1n, 1n));
-    return this.mark(this.keep(a, operations.negate(a)), element ?? null);
+    const outcome = this.mark(this.keep(a, operations.negate(a)), element ?? null);
+    return this.naming.negate(outcome, a);
   }
 
   invert(a: Algebraic): Value {
     const x = this.cyclotomics.get(a);
-    return this.mark(
+    const outcome = this.mark(
       this.keep(a, operations.invert(a)),
       x === undefined ? null : this.fields.invert(x),
     );
+    return this.naming.invert(outcome, a);
   }
 
   conjugate(a: Algebraic): Value {
-    return this.keep(a, operations.conjugate(a));
+    return this.naming.conjugate(this.keep(a, operations.conjugate(a)), a);
   }
 
   private keep(a: Algebraic, outcome: Root): Value {
@@ -227,20 +241,19 @@ export class Beyond {
     const base = n < 0n ? operations.invert(a) : a;
     const size = n < 0n ? -n : n;
     if (size > 1000n) this.budget.within('degree', Number(size) * a.degree);
-    return this.settle(operations.power(base, Number(size), this.budget));
+    const outcome = this.settle(operations.power(base, Number(size), this.budget));
+    return this.naming.power(outcome, a, n);
   }
 
   squareRoot(a: Algebraic): Value {
-    return this.settle(principalSquareRoot(a, this.budget));
+    const outcome = this.settle(principalSquareRoot(a, this.budget));
+    return this.naming.squareRoot(outcome, a, isAlgebraic(outcome) && outcome.isReal);
   }
 
   /** The real e-th root of a real number, which is not negative where e is even. */
   realRoot(a: Value, e: number): Value {
-    const radicand = this.rootOf(a);
-    const root = realRoot(radicand, e, this.budget);
-    return this.settle(
-      isFraction(radicand) && !isFraction(root) ? nameRoot(root, radicand, e) : root,
-    );
+    const outcome = this.settle(realRoot(this.rootOf(a), e, this.budget));
+    return this.naming.realRoot(outcome, a, e, this.sign(a) < 0);
   }
 
   /** The principal e-th root: its argument is the e-th part of the number's own, taken in (−π, π]. */
@@ -248,34 +261,50 @@ export class Beyond {
     if (e === 1) return a;
     const isReal = isAlgebraic(a) ? a.isReal : isRealCx(a);
     if (isReal && this.sign(a) >= 0) return this.realRoot(a, e);
-    return this.settle(principalRoot(this.rootOf(a), e, this.budget));
+    const outcome = this.settle(principalRoot(this.rootOf(a), e, this.budget));
+    return this.naming.principalRoot(outcome, a, e, isReal);
   }
 
   private sign(a: Value): -1 | 0 | 1 {
     return isAlgebraic(a) ? this.signOf(a) : signEl(a.re);
   }
 
-  /** The nearest root of a polynomial with any coefficients, constant term first, the last one not 0. */
-  nearestRoot(coefficients: readonly Value[], near: Value): Value {
+  /** The nearest root of an integer polynomial of positive degree, constant term first. */
+  nearestRoot(polynomial: IntegerPoly, near: Value): Value {
+    return this.nearestAmong(rootsOf(polynomial, this.budget), near);
+  }
+
+  /** The same for a polynomial with any coefficients, the last one not 0. */
+  nearestRootOver(coefficients: readonly Value[], near: Value): Value {
     const roots = rootsOverField(
       coefficients.map((c) => this.rootOf(c)),
       this.budget,
     );
-    const place = this.rootOf(near);
-    return this.settle(nearestOf(roots, (P) => operations.boxOf(place, P), this.budget));
+    return this.nearestAmong(roots, near);
+  }
+
+  private nearestAmong(roots: readonly Isolated[], near: Value): Value {
+    const place = (P: number): Box =>
+      isAlgebraic(near) ? near.box(P) : { re: enclose(near.re, P), im: enclose(near.im, P) };
+    const root = nearestOf(roots, place, this.budget);
+    return this.naming.root(this.settle(root));
   }
 
   re(a: Algebraic): Value {
     if (a.isReal) return a;
     const sum = operations.add(a, operations.conjugate(a), this.budget);
-    return this.settle(operations.multiply(sum, { n: 1n, d: 2n }, this.budget));
+    const outcome = this.settle(operations.multiply(sum, { n: 1n, d: 2n }, this.budget));
+    return this.naming.re(outcome, a);
   }
 
   im(a: Algebraic): Value {
     if (a.isReal) return real(integerEl(this.field, 0));
     const difference = operations.add(a, operations.negate(operations.conjugate(a)), this.budget);
     // a − ā = 2i·im.
-    return this.settle(operations.multiply(difference, this.imaginary(-1, 2), this.budget));
+    const outcome = this.settle(
+      operations.multiply(difference, this.imaginary(-1, 2), this.budget),
+    );
+    return this.naming.im(outcome, a);
   }
 
   private imaginary(n: number, d: number): Root {
@@ -303,11 +332,12 @@ export class Beyond {
   abs(a: Algebraic): Value {
     if (a.isReal) return this.signOf(a) < 0 ? this.negate(a) : a;
     const square = operations.multiply(a, operations.conjugate(a), this.budget);
-    return this.settle(
+    const outcome = this.settle(
       isFraction(square)
         ? realRoot(square, 2, this.budget)
         : principalSquareRoot(square, this.budget),
     );
+    return this.naming.abs(outcome, a);
   }
 
   equal(a: Value, b: Value): boolean {

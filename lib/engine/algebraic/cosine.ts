@@ -5,7 +5,6 @@
 import type { Budget } from '../limits';
 import { cosinePolynomial } from '../cosine-polynomial';
 import { Algebraic } from './algebraic';
-import { plainName } from './name';
 
 function arctanOfInverse(x: bigint, one: bigint): bigint {
   let power = one / x;
@@ -54,10 +53,6 @@ export function encloseCosine(
 /** cos(2πk/n) as an algebraic number; k/n in lowest terms, 0 < k/n < 1/2, φ(n)/2 ≥ 2. */
 export function algebraicCosine(k: bigint, n: bigint, budget: Budget): Algebraic {
   const made = new Map<number, { low: bigint; high: bigint }>();
-  // As a part of a half turn: 2πk/n is πk/(n/2) for even n.
-  const [top, bottom] = n % 2n === 0n ? [k, n / 2n] : [2n * k, n];
-  const angle = top === 1n ? 'pi' : `${top}*pi`;
-  const texAngle = top === 1n ? '\\pi' : `${top}\\pi`;
   return new Algebraic(
     cosinePolynomial(n).reverse(),
     true,
@@ -66,9 +61,6 @@ export function algebraicCosine(k: bigint, n: bigint, budget: Budget): Algebraic
       if (re === undefined) made.set(P, (re = encloseCosine(k, n, P, budget)));
       return { re, im: { low: 0n, high: 0n } };
     },
-    {
-      named: plainName(`cos(${angle}/${bottom})`, `\\cos\\frac{${texAngle}}{${bottom}}`),
-      division: n,
-    },
+    { division: n },
   );
 }

@@ -36,7 +36,8 @@ export function isolatedRoots(poly: IntegerPoly, budget: Budget): Isolated[] {
   return boxes.map((box) => ({ poly, box, precision }));
 }
 
-function rootsOf(f: IntegerPoly, budget: Budget): Isolated[] {
+/** Boxes of all different roots of an integer polynomial of positive degree. */
+export function rootsOf(f: IntegerPoly, budget: Budget): Isolated[] {
   return factorOverIntegers(f, (work) => budget.charge(work)).flatMap(({ poly }) =>
     isolatedRoots(poly, budget),
   );
@@ -47,11 +48,6 @@ export function refinedBox(root: Isolated, P: number, budget: Budget): Box {
   return root.precision >= P && root.box.re.high - root.box.re.low <= 4n
     ? rescaleBox(root.box, root.precision, P)
     : refine(root.poly, root.box, root.precision, P, (work) => budget.charge(work));
-}
-
-/** The root of f nearest to the place that `near` encloses. f has positive degree. */
-export function nearestRoot(f: IntegerPoly, near: (P: number) => Box, budget: Budget): Root {
-  return nearestOf(rootsOf(f, budget), near, budget);
 }
 
 /**

@@ -9,10 +9,8 @@ import {
   isSame,
   Algebraic,
   type Fraction,
-  type Origin,
   type Root,
 } from './algebraic';
-import { changeNamed } from './name';
 import { addBox, conjugateBox, invertBox, multiplyBox, negateBox, pointBox, type Box } from './box';
 import {
   composedProduct,
@@ -42,23 +40,9 @@ function fractionBox(a: Fraction, P: number): Box {
 
 export const boxOf = (a: Root, P: number): Box => (isFraction(a) ? fractionBox(a, P) : a.box(P));
 
-/** The origin of a·n/d + r/s. */
-function changed(a: Algebraic, n: bigint, d: bigint, r: bigint, s: bigint): Origin {
-  const { named, division } = a.origin;
-  return {
-    ...(named === undefined ? {} : { named: changeNamed(named, n, d, r, s) }),
-    ...(division === undefined ? {} : { division }),
-  };
-}
-
 export function negate(a: Root): Root {
   if (isFraction(a)) return { n: -a.n, d: a.d };
-  return new Algebraic(
-    negateRoots(a.poly),
-    a.isReal,
-    (P) => negateBox(a.box(P)),
-    changed(a, -1n, 1n, 0n, 1n),
-  );
+  return new Algebraic(negateRoots(a.poly), a.isReal, (P) => negateBox(a.box(P)), a.origin);
 }
 
 export function conjugate(a: Root): Root {
@@ -103,7 +87,7 @@ export function add(a: Root, b: Root, budget: Budget): Root {
       shiftRoots(a.poly, b.n, b.d),
       a.isReal,
       (P) => addBox(a.box(P), fractionBox(b, P)),
-      changed(a, 1n, 1n, b.n, b.d),
+      a.origin,
     );
   }
   checkComposed(a, b, budget);
@@ -121,7 +105,7 @@ export function multiply(a: Root, b: Root, budget: Budget): Root {
       multiplyRoots(a.poly, b.n, b.d),
       a.isReal,
       (P) => multiplyBox(a.box(P), fractionBox(b, P), P),
-      changed(a, b.n, b.d, 0n, 1n),
+      a.origin,
     );
   }
   if (a === b) return power(a, 2, budget);

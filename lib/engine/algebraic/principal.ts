@@ -1,10 +1,10 @@
 /** Principal and real roots of algebraic numbers: the enclosures that pick one root of f(x^e). */
 import { bitLength, isqrt } from '../integers';
 import { OutsideDomain, type Budget } from '../limits';
-import { isFraction, type Algebraic, type Fraction, type Root } from './algebraic';
+import { isFraction, type Algebraic, type Root } from './algebraic';
 import { holdsZero, multiplyBox, realBox, rescaleBox, type Box } from './box';
-import { changeNamed, plainName } from './name';
 import { boxOf, negate, rootOf } from './operations';
+import { wholeRoot } from './whole-root';
 
 const rootDown = (n: bigint): bigint => (n <= 0n ? 0n : isqrt(n));
 const rootUp = (n: bigint): bigint => (n <= 0n ? 0n : isqrt(n) + 1n);
@@ -97,16 +97,6 @@ export function principalRoot(a: Root, e: number, budget: Budget): Root {
   return rootOf(a, e, (P) => rootBox((Q) => boxOf(a, Q), e, P, budget), budget);
 }
 
-/** Largest r with r^e ≤ n for n ≥ 0, by bisection on its bits. */
-function wholeRootDown(n: bigint, e: number): bigint {
-  let root = 0n;
-  for (let bit = BigInt(Math.floor(bitLength(n) / e)); bit >= 0n; bit--) {
-    const tried = root | (1n << bit);
-    if (tried ** BigInt(e) <= n) root = tried;
-  }
-  return root;
-}
-
 /** The real e-th root of a real number; an even e needs a number that is not negative. */
 export function realRoot(a: Root, e: number, budget: Budget): Root {
   if (!isFraction(a) && !a.isReal) {
@@ -134,31 +124,10 @@ export function realRoot(a: Root, e: number, budget: Budget): Root {
       const shift = BigInt((e - 1) * P);
       budget.charge(P * e);
       return realBox({
-        low: wholeRootDown((low < 0n ? 0n : low) << shift, e),
-        high: wholeRootDown(high << shift, e) + 1n,
+        low: wholeRoot((low < 0n ? 0n : low) << shift, e),
+        high: wholeRoot(high << shift, e) + 1n,
       });
     },
     budget,
   );
-}
-
-/** Primes whose e-th powers are taken out from under a written root. */
-const PULLED = [2n, 3n, 5n, 7n, 11n, 13n, 17n, 19n, 23n, 29n, 31n, 37n];
-
-/** The same number with a name: the e-th root of n/d written as s·(r)^(1/e)/d, small e-th powers pulled out. */
-export function nameRoot(root: Algebraic, { n, d }: Fraction, e: number): Algebraic {
-  const power = BigInt(e);
-  let r = (n < 0n ? -n : n) * d ** (power - 1n);
-  let s = n < 0n ? -1n : 1n;
-  for (const p of PULLED) {
-    while (r % p ** power === 0n) {
-      r /= p ** power;
-      s *= p;
-    }
-  }
-  const name =
-    e === 3
-      ? plainName(`cbrt(${r})`, `\\sqrt[3]{${r}}`)
-      : plainName(`${r}^(1/${e})`, `\\sqrt[${e}]{${r}}`);
-  return root.renamed(changeNamed(name, s, d, 0n, 1n));
 }

@@ -2,14 +2,12 @@
 import { irrationalDecimal, type Part } from '../decimal';
 import type { Enclosure } from '../enclosure';
 import type { Budget } from '../limits';
-import type { Multiple, Rounding, Written } from '../types';
+import type { Multiple, Rounding } from '../types';
 import type { Algebraic } from './algebraic';
-import { writeNamed, writePolynomial } from './name';
 import { placeOf } from './near';
 
-/** A named number by its name, any other as `root(polynomial, place)`. */
-export function writeAlgebraic(a: Algebraic, budget: Budget): Written {
-  if (a.origin.named !== undefined) return { ...writeNamed(a.origin.named), staged: false };
+/** `root(polynomial, place)`: text that parses back, and TeX. */
+export function writeRoot(a: Algebraic, budget: Budget): { text: string; tex: string } {
   const { re, im } = placeOf(a, budget);
   const place = (times: string): string => {
     if (im === null) return re;
@@ -21,8 +19,25 @@ export function writeAlgebraic(a: Algebraic, budget: Budget): Written {
   return {
     text: `root(${text}, ${place('*')})`,
     tex: `\\operatorname{root}\\left(${tex},\\ ${place('\\,')}\\right)`,
-    staged: false,
   };
+}
+
+/** Text of an integer polynomial in x, constant term first in the array, highest power first in the text. */
+function writePolynomial(
+  f: readonly bigint[],
+  times: string,
+  power: (k: number) => string,
+): string {
+  let out = '';
+  for (let k = f.length - 1; k >= 0; k--) {
+    const c = f[k] as bigint;
+    if (c === 0n) continue;
+    const size = c < 0n ? -c : c;
+    const x = k === 0 ? '' : k === 1 ? 'x' : power(k);
+    const body = k > 0 && size === 1n ? x : k === 0 ? `${size}` : `${size}${times}${x}`;
+    out += c < 0n ? `-${body}` : out === '' ? body : `+${body}`;
+  }
+  return out;
 }
 
 /** Digits of a real number of degree 2 or more, hence irrational. */
