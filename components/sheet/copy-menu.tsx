@@ -32,6 +32,11 @@ export function copyForms(result: Result): { label: string; text: string }[] {
         { label: 'TeX', text: result.exact.tex },
         ...figureForms(result),
       ];
+    case 'list':
+      return [
+        { label: 'Exact text', text: result.exact.text },
+        { label: 'TeX', text: result.exact.tex },
+      ];
     default:
       return [];
   }

@@ -10,6 +10,13 @@ import {
 } from './say-number';
 
 export type FigureResult = Extract<Result, { kind: 'point' | 'line' | 'circle' }>;
+/** A figure on a line of its own, or as an item of a list. */
+type Figure =
+  | FigureResult
+  | Extract<
+      Extract<Result, { kind: 'list' }>['items'][number],
+      { kind: 'point' | 'line' | 'circle' }
+    >;
 type Part = Pick<NumberResult, 'decimal' | 'unit' | 'cut' | 'degree'>;
 
 /** The numbers that fix a figure, by the names they have on the sheet. */
@@ -70,7 +77,7 @@ const sayLength = ({ cut, decimal, unit }: Part) =>
   withUnit(cut ? cut.value : shorten(decimal.re, FEW_FIGURES), unit);
 
 /** What the index of marks shows beside a name. */
-export function sayFigureBriefly(result: FigureResult): string {
+export function sayFigureBriefly(result: Figure): string {
   switch (result.kind) {
     case 'point':
       return sayPair(result.coordinates.x, result.coordinates.y);

@@ -32,6 +32,7 @@ export function valueTex(result: Result): string | null {
     case 'point':
     case 'line':
     case 'circle':
+    case 'list':
       return result.exact.tex;
     default:
       return result.typeset;

@@ -123,6 +123,13 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
     case 'line':
     case 'circle':
       return figureCompartments(result, full);
+    case 'list':
+      return listCompartments(result, full);
+    case 'function':
+      return [
+        { label: 'Function', value: `called as ${result.signature}` },
+        ...(result.reads.length > 0 ? [{ label: 'Reads', value: result.reads.join(', ') }] : []),
+      ];
     case 'truth':
       return [
         {
@@ -134,6 +141,38 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
       ];
     case 'error':
       return [];
+  }
+}
+
+type ListResult = Extract<Result, { kind: 'list' }>;
+
+/** Items of a list that are told apart before the rest is only counted. */
+const ITEMS_SHOWN = 6;
+
+function listCompartments({ items }: ListResult, full: boolean): Compartment[] {
+  const shown = full ? items : items.slice(0, ITEMS_SHOWN);
+  return [
+    { label: 'Items', value: String(items.length) },
+    ...shown.map((item, index) => ({
+      label: `Item ${index + 1}`,
+      value: sayItem(item),
+      figures: true,
+    })),
+  ];
+}
+
+function sayItem(item: ListResult['items'][number]): string {
+  switch (item.kind) {
+    case 'number': {
+      const size = sayDecimal(item, false);
+      return item.unit === null ? size : `${size} ${sayUnit(item.unit)}`;
+    }
+    case 'angle':
+      return `${shorten(item.decimal.re)}°`;
+    case 'list':
+      return `a list of ${item.items.length}`;
+    default:
+      return sayFigureBriefly(item);
   }
 }
 
@@ -161,6 +200,10 @@ export function sayResult(result: Result): string {
     case 'line':
     case 'circle':
       return `${name} is ${sayFigure(result)}.`;
+    case 'list':
+      return `${name} is a list of ${result.items.length}: ${result.items.slice(0, ITEMS_SHOWN).map(sayItem).join(', ')}.`;
+    case 'function':
+      return `${result.signature} is a function.`;
   }
 }
 
@@ -169,6 +212,8 @@ export function sayBriefly(result: Result): string {
   if (result.kind === 'error') return 'error';
   if (result.kind === 'truth') return result.truth.value ? 'true' : 'false';
   if (result.kind === 'angle') return `${shorten(result.decimal.re, 7)}°`;
+  if (result.kind === 'list') return `list of ${result.items.length}`;
+  if (result.kind === 'function') return result.signature;
   if (result.kind !== 'number') return sayFigureBriefly(result);
   if (result.cut) return `${result.cut.value} ${result.unit ?? ''}`.trim();
   const short = result.decimal.im === null ? shorten(result.decimal.re, 7) : 'not real';

@@ -28,6 +28,12 @@ export function resultTex(result: Result): string {
       return result.exact.staged
         ? stagedFormula(result.typeset, result.exact.tex, '')
         : figureFormula(result);
+    case 'list':
+      return result.exact.staged
+        ? stagedFormula(result.typeset, result.exact.tex, '')
+        : formula(result.typeset, result.exact.tex);
+    case 'function':
+      return displayed(result.typeset);
     case 'truth':
       return `${displayed(result.typeset)}\n\\noindent ${result.truth.value ? 'True' : 'False'}. ${escapeTex(result.truth.reason)}\\par`;
     case 'error': {
@@ -75,9 +81,9 @@ export function unitTex(unit: string): string {
 
 /** What stands beside a value, in plain words, one entry for each compartment of the sheet. */
 export function compartments(result: Result): { name: string; tex: string }[] {
-  if (result.kind === 'truth' || result.kind === 'error') return [];
   if (result.kind === 'point' || result.kind === 'line' || result.kind === 'circle')
     return figureCompartments(result);
+  if (result.kind !== 'number' && result.kind !== 'angle') return [];
   const { decimal } = result;
   const unit =
     result.kind === 'angle' ? '^{\\circ}' : result.unit === null ? '' : unitTex(result.unit);

@@ -6,8 +6,8 @@ import { inUnit, unitName } from './give-value';
 import { type CellSource, type LineGraph, readCells } from './lines';
 import { asAlgebraic } from './pi-sum';
 import { completeSettings, type Settings } from './settings';
-import type { Expression } from './syntax';
-import type { Value } from './values';
+import type { DefinitionStatement, ValueStatement } from './syntax';
+import type { LineValue } from './values';
 
 /** A line by the id of its cell and its 1-based number there. */
 export interface CertifiedLine {
@@ -38,25 +38,27 @@ export function certifyLine(
   const index = cells.findIndex(({ id }) => id === at.cell);
   const asked = graph.lines.findIndex((one) => one.cell === index && one.line === at.line);
   const statement = graph.lines[asked]?.statement;
-  if (!statement || statement.kind === 'decision') {
+  if (!statement || statement.kind === 'decision' || statement.kind === 'function') {
     return none('domain', 'A certificate was asked for a line that has no value of its own.');
   }
   const engine = createEngine();
-  const values = new Map<string, Value>();
+  const values = new Map<string, LineValue>();
   const evaluator = new Evaluator(engine, (name, place) => {
     const message = `\`${name}\` has no value of its own that can be read.`;
     return values.get(name) ?? fail('depends-on-error', message, place);
   });
-  const valueOf = (node: Expression) => attemptOrFail(engine, () => evaluator.value(node));
+  const valueOf = (line: DefinitionStatement | ValueStatement) =>
+    attemptOrFail(engine, () => evaluator.lineValue(line));
   const { unit } = completeSettings({ ...settings, ...cells[index]?.settings });
   try {
     for (const line of linesReadBy(graph, asked)) {
       const { statement: read, mark } = graph.lines[line] ?? {};
-      if (read?.kind === 'definition' && mark && graph.definitions.get(mark)?.length === 1) {
-        values.set(mark, valueOf(read.value));
-      }
+      const alone = mark && graph.definitions.get(mark)?.length === 1 && !graph.cycles.has(line);
+      if (!read || !mark || !alone) continue;
+      if (read.kind === 'definition') values.set(mark, valueOf(read));
+      if (read.kind === 'function') values.set(mark, { kind: 'function', definition: read });
     }
-    const value = valueOf(statement.value);
+    const value = valueOf(statement);
     if (value.kind !== 'number') {
       return none('domain', 'A certificate is of a number, and the value of this line is none.');
     }

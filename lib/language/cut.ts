@@ -1,4 +1,4 @@
-import type { Engine, Multiple, Num } from '../engine/index';
+import type { Engine, Multiple, Num, Rounding } from '../engine/index';
 import { terminatingDecimal } from './decimals';
 import { findUnit } from './names';
 import { type PiSum, asAlgebraic, decideByEnclosures } from './pi-sum';
@@ -11,7 +11,7 @@ import type { Settings, Step } from './settings';
  * correctly rounded to the digits of the settings.
  */
 export function cutSize(engine: Engine, length: PiSum, settings: Settings, step: Step): Cut {
-  const { multiple, direction } = roundLength(engine, length, step, settings);
+  const { multiple, direction } = roundLength(engine, length, step, settings.rounding);
   const unit = findUnit(settings.unit);
   if (unit === undefined)
     throw new Error(`The unit "${settings.unit}" of the settings is not in the name table.`);
@@ -22,8 +22,14 @@ export function cutSize(engine: Engine, length: PiSum, settings: Settings, step:
   return { value, step: settings.step ?? '', rounding: settings.rounding, direction };
 }
 
-function roundLength(engine: Engine, length: PiSum, step: Step, settings: Settings): Multiple {
-  const round = (value: Num): Multiple => engine.roundToMultiple(value, step, settings.rounding);
+/** The multiple of a step in millimetres that a rule of rounding picks for a real length. */
+export function roundLength(
+  engine: Engine,
+  length: PiSum,
+  step: Step,
+  rounding: Rounding,
+): Multiple {
+  const round = (value: Num): Multiple => engine.roundToMultiple(value, step, rounding);
   const algebraic = asAlgebraic(engine, length);
   if (algebraic !== null) return round(algebraic);
   return decideByEnclosures(engine, length, 64, ({ low, high }) => {

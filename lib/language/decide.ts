@@ -6,11 +6,13 @@ import type { Evaluator } from './evaluator';
 import { fail } from './failure';
 import { fromNum } from './pi-sum';
 import type { Settings } from './settings';
-import type { Relation, Statement } from './syntax';
+import type { DecisionStatement, Relation } from './syntax';
 import {
   type Magnitude,
+  type Single,
   type Value,
   compareValues,
+  describe,
   differenceForDecision,
   isRealValue,
   isZeroValue,
@@ -20,8 +22,6 @@ import {
 } from './values';
 import { type FigureValue, areEqualFigures, describeFigure, isFigure } from './values-geometry';
 import { withUnit } from './written';
-
-type Decision = Extract<Statement, { kind: 'decision' }>;
 
 const HOLDS: Readonly<Record<Relation, (order: -1 | 0 | 1) => boolean>> = {
   '==': (order) => order === 0,
@@ -41,10 +41,13 @@ const LONGEST_VALUE_IN_A_REASON = 160;
 export function decide(
   engine: Engine,
   evaluator: Evaluator,
-  statement: Decision,
+  statement: DecisionStatement,
   settings: Settings,
 ): { value: boolean; reason: string } {
-  const values = attemptOrFail(engine, () => statement.sides.map((side) => evaluator.value(side)));
+  const values = attemptOrFail(engine, () => {
+    evaluator.open(statement);
+    return statement.sides.map((side) => evaluator.value(side));
+  });
   let reason = '';
   for (const [index, relation] of statement.relations.entries()) {
     const [left, right] = [values[index], values[index + 1]] as [Value, Value];
@@ -68,6 +71,46 @@ export function decide(
 }
 
 function holdsBetween(engine: Engine, left: Value, relation: Relation, right: Value): boolean {
+  if (left.kind !== 'list' && right.kind !== 'list')
+    return holdsBetweenSingles(engine, left, relation, right);
+  if (relation === '==' || relation === '!=')
+    return (findDifference(engine, left, right) === null) === (relation === '==');
+  return fail(
+    'domain',
+    `Lists have no order, so \`${relation}\` does not hold between them; \`==\` or \`!=\` was expected.`,
+  );
+}
+
+interface Difference {
+  /** Numbers of the items that lead to it. */
+  readonly path: readonly number[];
+  readonly left: Value;
+  readonly right: Value;
+}
+
+/** The first place at which two values are not the same; lists are the same when all their items are. */
+function findDifference(engine: Engine, left: Value, right: Value): Difference | null {
+  if (left.kind !== 'list' && right.kind !== 'list')
+    return holdsBetweenSingles(engine, left, '==', right) ? null : { path: [], left, right };
+  if (left.kind !== 'list' || right.kind !== 'list')
+    return fail(
+      'unit-mismatch',
+      `The left side is ${describe(left)} and the right side is ${describe(right)}; only values of one kind can be compared.`,
+    );
+  if (left.items.length !== right.items.length) return { path: [], left, right };
+  for (const [index, item] of left.items.entries()) {
+    const found = findDifference(engine, item, right.items[index] as Value);
+    if (found !== null) return { ...found, path: [index + 1, ...found.path] };
+  }
+  return null;
+}
+
+function holdsBetweenSingles(
+  engine: Engine,
+  left: Single,
+  relation: Relation,
+  right: Single,
+): boolean {
   if (isFigure(left) && isFigure(right)) {
     const same = areEqualFigures(engine, left, right) ?? mismatchInDecision(left, right);
     if (relation === '==' || relation === '!=') return same === (relation === '==');
@@ -82,8 +125,19 @@ function holdsBetween(engine: Engine, left: Value, relation: Relation, right: Va
   return HOLDS[relation](compareValues(engine, left, right));
 }
 
-/** One sentence on how the sides stand to each other. */
 function explain(engine: Engine, left: Value, right: Value, settings: Settings): string {
+  if (left.kind !== 'list' && right.kind !== 'list')
+    return explainSingles(engine, left, right, settings);
+  const found = findDifference(engine, left, right);
+  if (found === null) return `Both sides are ${describe(left)}, and all items are the same.`;
+  const place = found.path.length === 0 ? '' : `In item ${found.path.join(', item ')}: `;
+  return found.left.kind === 'list' || found.right.kind === 'list'
+    ? `${place}The left side is ${describe(found.left)} and the right side is ${describe(found.right)}.`
+    : place + explainSingles(engine, found.left, found.right, settings);
+}
+
+/** One sentence on how the sides stand to each other. */
+function explainSingles(engine: Engine, left: Single, right: Single, settings: Settings): string {
   if (isFigure(left) && isFigure(right)) return explainFigures(engine, left, right, settings);
   const difference = differenceForDecision(engine, left, right);
   if (isZeroValue(engine, difference)) {

@@ -5,6 +5,7 @@ import { decide } from './decide';
 import { Evaluator } from './evaluator';
 import { giveStandIn } from './functions/stand-in';
 import { type ErrorCode, Failure, type Problem, type Span, fail } from './failure';
+import { giveFunction } from './give-function';
 import { type GivenSettings, giveValue } from './give-value';
 import { LANGUAGE_LIMITS } from './limits';
 import { type CellSource, type LineGraph, type SourceLine, readCells } from './lines';
@@ -13,7 +14,7 @@ import type { Result } from './result';
 import { type Settings, completeSettings } from './settings';
 import type { Statement } from './syntax';
 import { typesetStatement } from './typeset';
-import type { Value } from './values';
+import type { LineValue } from './values';
 import { findNearest } from './words';
 
 /** A line by the position of its cell and its 1-based number there. */
@@ -102,7 +103,7 @@ function settingsOf(cells: readonly CellSource[], whole: Partial<Settings>): Giv
 class Evaluation {
   private readonly engine: Engine;
   private readonly evaluator: Evaluator;
-  private readonly values = new Map<number, Value>();
+  private readonly values = new Map<number, LineValue>();
   private readonly results: (Result | undefined)[] = [];
   /** Lines whose value another line reads that has no result yet. */
   private readonly wanted = new Set<number>();
@@ -114,7 +115,7 @@ class Evaluation {
     private readonly options: EvaluationOptions,
   ) {
     this.engine = createEngine(options.engineLimits);
-    this.evaluator = new Evaluator(this.engine, (name, at) => this.findMark(name, at));
+    this.evaluator = new Evaluator(this.engine, (name, at, use) => this.findMark(name, at, use));
   }
 
   run(): Result[][] {
@@ -159,12 +160,14 @@ class Evaluation {
 
   /** Only for the value; it came out before, so a failure now is a fault that readers of the mark must see. */
   private evaluateAgain(index: number, line: SourceLine): void {
-    if (line.statement?.kind !== 'definition') return;
+    const { statement } = line;
+    if (statement?.kind === 'function')
+      this.values.set(index, { kind: 'function', definition: statement });
+    if (statement?.kind !== 'definition') return;
     this.options.started?.(line);
-    const { value } = line.statement;
     this.values.set(
       index,
-      attemptOrFail(this.engine, () => this.evaluator.value(value)),
+      attemptOrFail(this.engine, () => this.evaluator.lineValue(statement)),
     );
   }
 
@@ -188,7 +191,7 @@ class Evaluation {
         },
       );
     }
-    this.evaluator.at = statement;
+    this.evaluator.open({ ...statement, where: [] });
     try {
       this.refuseByPlace(index, line, statement);
       const given = this.giveStatement(index, line, statement);
@@ -200,9 +203,8 @@ class Evaluation {
       };
     } catch (failure) {
       if (!(failure instanceof Failure)) throw failure;
-      const { from, to } = failure.span ?? this.evaluator.at;
       this.values.delete(index);
-      return error({ code: failure.code, message: failure.message, from, to });
+      return error(this.evaluator.problemOf(failure));
     }
   }
 
@@ -214,13 +216,21 @@ class Evaluation {
         truth: decide(this.engine, this.evaluator, statement, settings),
       };
     }
-    const value = attemptOrFail(this.engine, () => this.evaluator.value(statement.value));
+    if (statement.kind === 'function') {
+      const given = giveFunction(this.evaluator, statement, line.reads);
+      this.values.set(index, { kind: 'function', definition: statement });
+      return given;
+    }
+    const value = attemptOrFail(this.engine, () => this.evaluator.lineValue(statement));
     this.evaluator.at = statement.value;
     const given = giveValue(this.engine, value, settings, {
       started: () => this.options.valued?.(line),
       refused: this.options.brief?.get(keyOf(line)) ?? null,
     });
-    const standIn = attemptOrFail(this.engine, () => giveStandIn(this.engine, value, settings));
+    const standIn =
+      value.kind === 'list'
+        ? {}
+        : attemptOrFail(this.engine, () => giveStandIn(this.engine, value, settings));
     this.values.set(index, value);
     return { ...given, ...standIn };
   }
@@ -236,7 +246,7 @@ class Evaluation {
         statement,
       );
     }
-    if (statement.kind === 'definition') {
+    if (statement.kind === 'definition' || statement.kind === 'function') {
       const others = (this.graph.definitions.get(statement.mark) ?? []).filter(
         (other) => other !== index,
       );
@@ -260,15 +270,15 @@ class Evaluation {
         .filter((mark) => mark !== null && mark !== undefined);
       const message =
         cycle.length === 1
-          ? `\`${line.mark ?? ''}\` is defined by itself; a definition reads only other marks.`
-          : `These marks are defined by one another in a circle: ${marks.map((mark) => `\`${mark}\``).join(', ')}; one of them must not read the others.`;
+          ? `\`${line.mark ?? ''}\` is defined by itself; a definition reads only others.`
+          : `These names are defined by one another in a circle: ${marks.map((mark) => `\`${mark}\``).join(', ')}; one of them must not read the others.`;
       fail('cycle', message, span ?? statement);
     }
   }
 
-  private findMark(name: string, at: Span): Value {
+  private findMark(name: string, at: Span, use: 'mark' | 'function'): LineValue {
     const [definition, second] = this.graph.definitions.get(name) ?? [];
-    if (definition === undefined) return failUnknown(name, at, this.graph.definitions.keys());
+    if (definition === undefined) return failUnknown(name, at, use, this.graph.definitions.keys());
     const value = this.values.get(definition);
     if (second === undefined && value !== undefined) return value;
     const reader = this.graph.lines.find((line) =>
@@ -291,10 +301,17 @@ class Evaluation {
   }
 }
 
-function failUnknown(name: string, at: Span, marks: Iterable<string>): never {
+function failUnknown(
+  name: string,
+  at: Span,
+  use: 'mark' | 'function',
+  marks: Iterable<string>,
+): never {
   const nearest = findNearest(name, marks);
   const exponent = /^[eE]\d*$/.test(name) ? ' (a power of ten is written `10^3`)' : '';
   const hint = nearest === null ? exponent : `; did you mean \`${nearest}\`?`;
   const stop = hint.endsWith('?') ? '' : '.';
-  return fail('unknown-name', `No mark \`${name}\` is defined${hint}${stop}`, at);
+  const none =
+    use === 'mark' ? `No mark \`${name}\` is defined` : `There is no function \`${name}\``;
+  return fail('unknown-name', none + hint + stop, at);
 }

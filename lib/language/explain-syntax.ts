@@ -1,6 +1,9 @@
+import { type Finding, readBeginning } from './explain-head';
+import { readNumber } from './explain-quantity';
 import type { Problem, Span } from './failure';
 import { findFunction } from './names';
-import { findNearest } from './words';
+import { type Token, tokenize } from './tokens';
+import { describeWord, suggestMark } from './words';
 
 /**
  * Says in words why a line does not parse: what stands there, what was expected and, where one is likely, the mend.
@@ -10,106 +13,38 @@ import { findNearest } from './words';
  */
 export function explainSyntax(source: string, refused: Span): Problem {
   const found = new Explainer(tokenize(source)).run();
-  const {
-    message,
-    span,
-    code = 'syntax',
-  } = found ?? {
+  const { message, span } = found ?? {
     message: 'This part of the line cannot be read; an expression was expected.',
     span: refused,
   };
   const to = Math.max(span.to, Math.min(span.from + 1, source.length));
-  return { code, message, from: Math.min(span.from, to), to };
-}
-
-type TokenKind =
-  | 'number'
-  | 'name'
-  | 'function'
-  | 'open'
-  | 'close'
-  | 'comma'
-  | 'sign'
-  | 'times'
-  | 'caret'
-  | 'superscript'
-  | 'root'
-  | 'relation'
-  | 'equals'
-  | 'value'
-  | 'other'
-  | 'end';
-
-interface Token extends Span {
-  readonly kind: TokenKind;
-  readonly text: string;
-}
-
-const PATTERN =
-  /([ \t\u00a0\u2009\u202f]+|#.*)|(\d+(?:\.\d*)?|\.\d+)|([A-Za-zÀ-ÖØ-öø-ÿΑ-Ωα-ορ-ω][A-Za-zÀ-ÖØ-öø-ÿΑ-Ωα-ορ-ω0-9_]*)|(==|!=|<=|>=|[<>≤≥≠])|([^])/uy;
-
-const SINGLE: Readonly<Record<string, TokenKind>> = {
-  '(': 'open',
-  ')': 'close',
-  ',': 'comma',
-  '+': 'sign',
-  '-': 'sign',
-  '−': 'sign',
-  '*': 'times',
-  '/': 'times',
-  '×': 'times',
-  '÷': 'times',
-  '·': 'times',
-  '⋅': 'times',
-  '^': 'caret',
-  '²': 'superscript',
-  '³': 'superscript',
-  '√': 'root',
-  π: 'value',
-  '°': 'value',
-  '=': 'equals',
-};
-
-function tokenize(source: string): Token[] {
-  const tokens: Token[] = [];
-  PATTERN.lastIndex = 0;
-  for (let match = PATTERN.exec(source); match !== null; match = PATTERN.exec(source)) {
-    const [text, skipped, number, name, relation] = match;
-    const from = match.index;
-    if (skipped !== undefined) continue;
-    let kind: TokenKind = SINGLE[text] ?? 'other';
-    if (number !== undefined) kind = 'number';
-    else if (name !== undefined) kind = findFunction(name) === undefined ? 'name' : 'function';
-    else if (relation !== undefined) kind = 'relation';
-    tokens.push({ kind, text, from, to: from + text.length });
-  }
-  const end = tokens.at(-1)?.to ?? 0;
-  tokens.push({ kind: 'end', text: '', from: end, to: end });
-  return tokens;
+  return { code: 'syntax', message, from: Math.min(span.from, to), to };
 }
 
 /** Characters that people type for something the language writes otherwise. */
 const MENDS: Readonly<Record<string, string>> = {
   ';': 'write one statement on each line',
   ':': 'a mark is defined with `=`, as in `R = 1200 mm`',
-  '[': 'use round brackets `( )`',
-  ']': 'use round brackets `( )`',
-  '{': 'use round brackets `( )`',
-  '}': 'use round brackets `( )`',
-  '"': 'write inches as `in`',
-  '″': 'write inches as `in`',
-  "'": 'write feet as `ft`',
-  '′': 'write feet as `ft`',
+  '{': 'use round brackets `( )`, or square ones for a list',
+  '}': 'use round brackets `( )`, or square ones for a list',
   '%': 'write a hundredth part as `/100`',
   º: 'the degree sign is `°`; `deg` means the same',
   '–': 'write minus as `-`',
   '—': 'write minus as `-`',
+  '‘': 'write feet as `ft`, and minutes of arc as `′`',
+  '“': 'write inches as `in`, and seconds of arc as `″`',
   '∛': 'write a cube root as `cbrt(x)`',
   '⁄': 'write a fraction with `/`',
   '∕': 'write a fraction with `/`',
   '½': 'write `1/2`',
   '¼': 'write `1/4`',
   '¾': 'write `3/4`',
+  '⅛': 'write `1/8`',
+  '⅜': 'write `3/8`',
+  '⅝': 'write `5/8`',
+  '⅞': 'write `7/8`',
+  '⅓': 'write `1/3`',
+  '⅔': 'write `2/3`',
   '¹': 'write a power with `^`',
   '⁴': 'write a power with `^`, as in `x^4`',
   _: 'a mark begins with a letter',
@@ -117,38 +52,28 @@ const MENDS: Readonly<Record<string, string>> = {
   $: 'prices have no place here; a mark begins with a letter',
 };
 
-interface Finding {
-  readonly message: string;
-  readonly span: Span;
-  readonly code?: 'unknown-name';
-}
+type Due = 'value' | 'operator';
+type BracketUse = 'group' | 'call' | 'list' | 'index';
+
+const CLOSES: Readonly<Record<string, string>> = { '(': ')', '[': ']' };
 
 class Explainer {
   private index = 0;
-  private readonly open: { token: Token; call: boolean }[] = [];
+  private readonly open: { token: Token; use: BracketUse }[] = [];
   private defines = false;
+  private where = false;
 
   constructor(private readonly tokens: readonly Token[]) {}
 
   run(): Finding | null {
-    const [first, second] = this.tokens;
-    if (
-      first !== undefined &&
-      second?.kind === 'equals' &&
-      ['name', 'function', 'value'].includes(first.kind)
-    ) {
-      this.defines = true;
-      this.index = 2;
-      if (first.kind === 'value')
-        return {
-          message: `\`${first.text}\` cannot be a mark; a mark begins with a letter.`,
-          span: first,
-        };
-    }
-    let due: 'value' | 'operator' = 'value';
+    const beginning = readBeginning(this.tokens);
+    if (beginning.finding !== null) return beginning.finding;
+    this.defines = beginning.defines;
+    this.index = beginning.length;
+    let due: Due = 'value';
     for (;;) {
       const token = this.current();
-      const step: Finding | 'value' | 'operator' | null =
+      const step: Finding | Due | null =
         due === 'value' ? this.valueDue(token) : this.operatorDue(token);
       if (step === null || typeof step === 'object') return step;
       due = step;
@@ -164,20 +89,25 @@ class Explainer {
     return this.tokens[this.index - 1];
   }
 
-  private valueDue(token: Token): Finding | 'value' | 'operator' {
+  private next(): Token | undefined {
+    return this.tokens[this.index + 1];
+  }
+
+  private valueDue(token: Token): Finding | Due {
     switch (token.kind) {
       case 'number':
+        return this.number();
       case 'name':
-      case 'value':
+      case 'unit':
+      case 'constant':
         return 'operator';
       case 'function': {
-        const next = this.tokens[this.index + 1];
-        if (next?.kind === 'open') return 'value';
+        if (this.next()?.text === '(') return 'value';
         const message = `\`${token.text}\` needs its argument in brackets, as in \`${findFunction(token.text)?.signature ?? token.text}\`.`;
         return { message, span: token };
       }
       case 'open':
-        this.open.push({ token, call: this.previous()?.kind === 'function' });
+        this.open.push({ token, use: this.useOfBracket(token, 'value') });
         return 'value';
       case 'sign':
         if (this.previous()?.kind === 'root')
@@ -188,20 +118,8 @@ class Explainer {
         return 'value';
       case 'root':
         return 'value';
-      case 'close': {
-        const before = this.previous();
-        if (before?.kind === 'open')
-          return {
-            message: 'There is nothing between these brackets; a value was expected.',
-            span: { from: before.from, to: token.to },
-          };
-        if (this.open.length === 0)
-          return { message: 'This `)` closes a bracket that was never opened.', span: token };
-        return {
-          message: `A value was expected before \`)\`${this.afterPrevious()}.`,
-          span: token,
-        };
-      }
+      case 'close':
+        return this.closeTooEarly(token);
       case 'times':
         if (this.previous()?.text === '*' && token.text === '*') {
           return {
@@ -209,10 +127,7 @@ class Explainer {
             span: { from: token.from - 1, to: token.to },
           };
         }
-        return {
-          message: `Found \`${token.text}\` where a value was expected${this.afterPrevious()}.`,
-          span: token,
-        };
+        return this.noValue(token);
       case 'end': {
         const before = this.previous();
         if (before === undefined)
@@ -222,112 +137,227 @@ class Explainer {
           span: before,
         };
       }
+      case 'part sign':
       case 'other':
         return this.foreign(token, 'a value');
       default:
-        return {
-          message: `Found \`${token.text}\` where a value was expected${this.afterPrevious()}.`,
-          span: token,
-        };
+        return this.noValue(token);
     }
   }
 
-  private operatorDue(token: Token): Finding | 'value' | 'operator' | null {
+  private number(): Finding | Due {
+    const reading = readNumber(this.tokens, this.index);
+    if (reading.kind === 'finding') return reading.finding;
+    this.index += reading.length - 1;
+    return 'operator';
+  }
+
+  private noValue(token: Token): Finding {
+    return {
+      message: `Found \`${token.text}\` where a value was expected${this.afterPrevious()}.`,
+      span: token,
+    };
+  }
+
+  private useOfBracket(token: Token, due: Due): BracketUse {
+    if (token.text === '[') return due === 'operator' ? 'index' : 'list';
+    const before = this.previous();
+    const called = before?.kind === 'function' || (due === 'operator' && before?.kind === 'name');
+    return called ? 'call' : 'group';
+  }
+
+  private closeTooEarly(token: Token): Finding {
+    const before = this.previous();
+    if (before?.kind === 'open')
+      return {
+        message: 'There is nothing between these brackets; a value was expected.',
+        span: { from: before.from, to: token.to },
+      };
+    if (this.open.length === 0) return neverOpened(token);
+    return {
+      message: `A value was expected before \`${token.text}\`${this.afterPrevious()}.`,
+      span: token,
+    };
+  }
+
+  private operatorDue(token: Token): Finding | Due | null {
     switch (token.kind) {
-      case 'number': {
-        const before = this.previous();
-        const message =
-          before?.kind === 'number'
-            ? `Two numbers, \`${before.text}\` and \`${token.text}\`, stand side by side; an operator was expected between them, or a single point in a decimal.`
-            : `The number \`${token.text}\` stands directly after a value; write \`*\` between them, or the number first.`;
-        return { message, span: token };
-      }
+      case 'number':
+        return this.numberAfterValue(token);
       case 'name':
-      case 'value':
+      case 'unit':
+      case 'constant':
         return 'operator';
-      case 'function':
       case 'open':
+        return this.openAfterValue(token);
+      case 'function':
       case 'root':
-        return this.valueDue(token);
+        return this.functionAfterValue(token);
       case 'superscript':
-        return this.previous()?.kind === 'superscript'
-          ? {
-              message: 'Two exponents stand side by side; put the first power in brackets.',
-              span: token,
-            }
-          : 'operator';
-      case 'close':
-        if (this.open.pop() === undefined)
-          return { message: 'This `)` closes a bracket that was never opened.', span: token };
-        return 'operator';
+      case 'caret':
+        if (this.previous()?.kind === 'superscript')
+          return {
+            message: 'Two exponents stand side by side; put the first power in brackets.',
+            span: token,
+          };
+        return token.kind === 'caret' ? 'value' : 'operator';
+      case 'close': {
+        const opened = this.open.pop();
+        if (opened === undefined) return neverOpened(token);
+        const expected = CLOSES[opened.token.text] ?? ')';
+        return expected === token.text ? 'operator' : mismatched(token, opened.token, expected);
+      }
       case 'sign':
       case 'times':
         return 'value';
-      case 'caret':
-        return this.previous()?.kind === 'superscript'
-          ? {
-              message: 'Two exponents stand side by side; put the first power in brackets.',
-              span: token,
-            }
-          : 'value';
       case 'comma':
-        return this.open.at(-1)?.call === true ? 'value' : this.comma(token);
+        return this.comma(token);
+      case 'where':
+        return this.beginWhere(token);
       case 'equals':
-        return {
-          message: this.defines
-            ? 'A line has one `=`, after the mark that it defines; to decide whether two values are equal write `==`.'
-            : '`=` defines a mark and needs a single name before it; to decide whether two values are equal write `==`.',
-          span: token,
-        };
+        return this.equals(token);
       case 'relation':
-        if (this.open.length > 0)
-          return {
-            message: `\`${token.text}\` compares whole sides of a line and cannot stand inside brackets.`,
-            span: token,
-          };
-        if (this.defines)
-          return {
-            message: `A mark holds a value; \`${token.text}\` decides and needs a line of its own.`,
-            span: token,
-          };
-        return 'value';
+        return this.relation(token);
       case 'end':
         return this.unclosed(token);
+      case 'part sign':
       case 'other':
         return this.foreign(token, 'an operator');
     }
   }
 
-  private comma(token: Token): Finding {
+  private numberAfterValue(token: Token): Finding {
     const before = this.previous();
-    const after = this.tokens[this.index + 1];
-    const opened = this.open.at(-1);
-    const called =
-      opened === undefined ? undefined : this.tokens[this.tokens.indexOf(opened.token) - 1];
-    if (called?.kind === 'name') {
-      const nearest = findNearest(called.text, []);
-      const hint = nearest === null ? '.' : `; did you mean \`${nearest}\`?`;
+    const earlier = this.tokens[this.index - 2];
+    if (
+      /^[xX]$/.test(before?.text ?? '') &&
+      (earlier?.kind === 'number' || earlier?.kind === 'unit')
+    ) {
       return {
-        code: 'unknown-name',
-        message: `There is no function \`${called.text}\`${hint}`,
-        span: called,
+        message: `A product is written with \`*\` or \`×\`, not with the letter \`${before?.text ?? ''}\`.`,
+        span: before ?? token,
       };
     }
+    return {
+      message: `The number \`${token.text}\` stands directly after a value; write \`*\` between them, or the number first.`,
+      span: token,
+    };
+  }
+
+  private openAfterValue(token: Token): Finding | Due {
+    const before = this.previous();
+    const indexable = before?.kind === 'name' || before?.kind === 'close';
+    if (token.text === '[' && !indexable)
+      return {
+        message: `\`[\` after \`${before?.text ?? ''}\` is no index, as only a list has items; to multiply by a list write \`*\`.`,
+        span: token,
+      };
+    this.open.push({ token, use: this.useOfBracket(token, 'operator') });
+    return 'value';
+  }
+
+  private functionAfterValue(token: Token): Finding | Due {
+    if (['min', 'sec'].includes(token.text) && this.previous()?.kind === 'number') {
+      if (this.next()?.text !== '(')
+        return {
+          message: `\`${token.text}\` of arc stands only after degrees, as in \`0 deg ${this.previous()?.text ?? ''} ${token.text}\`.`,
+          span: token,
+        };
+    }
+    return this.valueDue(token);
+  }
+
+  private comma(token: Token): Finding | Due {
+    const opened = this.open.at(-1);
+    if (opened?.use === 'call' || opened?.use === 'list') return 'value';
+    if (opened === undefined && this.where) return this.local(token);
+    const before = this.previous();
+    const after = this.next();
+    if (before?.kind === 'number' && after?.kind === 'number')
+      return { message: decimalComma(before.text, after.text), span: token };
     const message =
-      before?.kind === 'number' && after?.kind === 'number'
-        ? `A decimal is written with a point: \`${before.text}.${after.text}\`.`
-        : 'A comma only separates the arguments of a function; an operator was expected.';
+      opened?.use === 'index'
+        ? 'An index is one whole number; an item of a list inside a list is `L[2][3]`.'
+        : 'A comma parts the arguments of a function or the items of a list, as in `[a, b]`; an operator was expected.';
     return { message, span: token };
   }
 
+  private beginWhere(token: Token): Finding | Due {
+    if (this.open.length > 0)
+      return {
+        message:
+          '`where` gives names for the whole line and cannot stand inside brackets; a bracket is still open.',
+        span: token,
+      };
+    if (this.where)
+      return {
+        message: 'A line has one `where`; further names follow after a comma.',
+        span: token,
+      };
+    this.where = true;
+    return this.local(token);
+  }
+
+  /** After `where`, or a comma behind it: a name, the sign `=`, and then a value. */
+  private local(token: Token): Finding | Due {
+    const [name, sign] = [this.next(), this.tokens[this.index + 2]];
+    if (name?.kind !== 'name') {
+      const kept = name !== undefined && /^\p{L}/u.test(name.text) && name.kind !== 'end';
+      return {
+        message: kept
+          ? `\`${name.text}\` is ${describeWord(name.text)} and cannot be a local name; try \`${suggestMark(name.text)}\`.`
+          : `After \`${token.text}\` a local name and its value were expected, as in \`where r = 5 mm\`.`,
+        span: kept ? name : token,
+      };
+    }
+    if (sign?.kind !== 'equals')
+      return {
+        message: `\`=\` and a value were expected after the local name \`${name.text}\`.`,
+        span: sign === undefined || sign.kind === 'end' ? name : sign,
+      };
+    this.index += 2;
+    return 'value';
+  }
+
+  private equals(token: Token): Finding {
+    const decide = 'to decide whether two values are equal write `==`.';
+    if (this.where)
+      return {
+        message: `Each local name has one \`=\`, and a comma stands before the next name; ${decide}`,
+        span: token,
+      };
+    return {
+      message: this.defines
+        ? `A line has one \`=\`, after the mark that it defines; ${decide}`
+        : `\`=\` defines a mark and needs a single name before it; ${decide}`,
+      span: token,
+    };
+  }
+
+  private relation(token: Token): Finding | Due {
+    const inCall = this.open.at(-1)?.use === 'call';
+    if (this.open.length > 0 && !inCall)
+      return {
+        message: `\`${token.text}\` compares whole sides of a line and cannot stand inside brackets.`,
+        span: token,
+      };
+    if (this.where || (this.defines && !inCall))
+      return {
+        message: `A mark holds a value; \`${token.text}\` decides and needs a line of its own.`,
+        span: token,
+      };
+    return 'value';
+  }
+
   private unclosed(end: Token): Finding | null {
-    const innermost = this.open.at(-1);
+    const innermost = this.open.at(-1)?.token;
     if (innermost === undefined) return null;
-    const message = `A \`)\` is missing for the bracket opened at column ${innermost.token.from + 1}.`;
-    return { message, span: { from: innermost.token.from, to: end.to } };
+    const message = `A \`${CLOSES[innermost.text] ?? ')'}\` is missing for the bracket opened at column ${innermost.from + 1}.`;
+    return { message, span: { from: innermost.from, to: end.to } };
   }
 
   private foreign(token: Token, expected: string): Finding {
+    if (token.kind === 'part sign') return partSign(token, this.previous());
     const mend = MENDS[token.text];
     const message =
       mend === undefined
@@ -340,4 +370,34 @@ class Explainer {
     const before = this.previous();
     return before === undefined ? '' : ` after \`${before.text}\``;
   }
+}
+
+function neverOpened(token: Token): Finding {
+  return {
+    message: `This \`${token.text}\` closes a bracket that was never opened.`,
+    span: token,
+  };
+}
+
+function mismatched(token: Token, opened: Token, expected: string): Finding {
+  return {
+    message: `\`${token.text}\` does not close the \`${opened.text}\` opened at column ${opened.from + 1}; \`${expected}\` was expected.`,
+    span: token,
+  };
+}
+
+/** `2,5` is meant as a decimal; `1,200` may as well be meant as a whole number. */
+function decimalComma(before: string, after: string): string {
+  const thousands = /^\d{3}$/.test(after) && /^\d{1,3}$/.test(before);
+  return thousands
+    ? `A comma stands neither in a decimal nor between thousands; write \`${before}.${after}\` or \`${before}${after}\`.`
+    : `A decimal is written with a point: \`${before}.${after}\`.`;
+}
+
+function partSign(token: Token, before: Token | undefined): Finding {
+  const minute = "'′’".includes(token.text);
+  const [unit, name] = minute ? ['ft', 'feet'] : ['in', 'inches'];
+  const example = `0° ${before?.kind === 'number' ? before.text : '30'}${minute ? '′' : '″'}`;
+  const message = `\`${token.text}\` means ${minute ? 'minutes' : 'seconds'} of arc and stands only after degrees, as in \`${example}\`; write ${name} as \`${unit}\`.`;
+  return { message, span: token };
 }

@@ -1,26 +1,30 @@
 import type { Engine, Num } from '../engine/index';
 import { attemptOrFail } from './attempt';
 import { type ErrorCode, fail } from './failure';
-import { type GivenFigure, giveFigure } from './give-figure';
+import { giveFigure } from './give-figure';
+import { giveList } from './give-list';
 import { findUnit } from './names';
 import { type PiSum, asAlgebraic, decideByEnclosures, mapSum } from './pi-sum';
-import type { DecimalResult, Exact, NumberResult, Omission } from './result';
+import type {
+  AngleResult,
+  Bare,
+  DecimalResult,
+  Exact,
+  ItemResult,
+  NumberResult,
+  Omission,
+} from './result';
 import { OPEN_REACH, TRANSCENDENTAL_REACH, reachOfAngle, reachOfValue } from './reach';
 import { cutSize } from './cut';
 import { MOST_DIGITS, type Settings, type Step } from './settings';
+import { inDegrees, inInches } from './parts-of-unit';
 import { isSum } from './written';
 import { type AngleValue, type NumberValue, type Value, isRealValue } from './values';
 
 export type GivenSettings = Settings & { readonly stepLength: Step | null };
 
-type Given<T> = Omit<T, 'line' | 'source' | 'mark' | 'typeset' | 'notices'>;
-export type GivenNumber = Given<NumberResult>;
-export interface GivenAngle {
-  kind: 'angle';
-  exact: Exact;
-  decimal: DecimalResult;
-  reach: NumberResult['reach'];
-}
+export type GivenNumber = Bare<NumberResult>;
+export type GivenAngle = Bare<AngleResult>;
 
 /** How the last and often longest part of giving a number is watched, and whether it is to be left out. */
 export interface StructureWatch {
@@ -40,28 +44,53 @@ export function giveValue(
   value: Value,
   settings: GivenSettings,
   watch: StructureWatch,
-): GivenNumber | GivenAngle | GivenFigure {
-  if (value.kind === 'angle') return giveAngle(engine, value, settings);
-  if (value.kind === 'number') return giveNumber(engine, value, settings, watch);
-  return giveFigure(engine, value, (part, isCut) => {
-    const stepLength = isCut ? settings.stepLength : null;
-    return giveNumber(engine, part, { ...settings, stepLength }, watch);
-  });
+): ItemResult {
+  return sizesOf(engine, value, settings)(watch);
 }
 
-function giveNumber(
+/** Works out all sizes at once, and leaves the structure of the numbers for later. */
+function sizesOf(
+  engine: Engine,
+  value: Value,
+  settings: GivenSettings,
+): (watch: StructureWatch) => ItemResult {
+  switch (value.kind) {
+    case 'number':
+      return sizesOfNumber(engine, value, settings);
+    case 'angle': {
+      const given = giveAngle(engine, value, settings);
+      return () => given;
+    }
+    case 'list': {
+      const items = value.items.map((item) => sizesOf(engine, item, settings));
+      return (watch) => giveList(items.map((item) => item(watch)));
+    }
+    default:
+      return (watch) =>
+        giveFigure(engine, value, (part, isCut) => {
+          const stepLength = isCut ? settings.stepLength : null;
+          return sizesOfNumber(engine, part, { ...settings, stepLength })(watch);
+        });
+  }
+}
+
+function sizesOfNumber(
   engine: Engine,
   value: NumberValue,
   settings: GivenSettings,
-  watch: StructureWatch,
-): GivenNumber {
+): (watch: StructureWatch) => GivenNumber {
   const sum = attemptOrFail(engine, () => inUnit(engine, value, settings.unit));
   const algebraic = asAlgebraic(engine, sum);
   const real = isRealValue(engine, value);
   const { stepLength } = settings;
+  const isLength = real && value.length === 1;
   const cut =
-    real && value.length === 1 && stepLength !== null
+    isLength && stepLength !== null
       ? { cut: attemptOrFail(engine, () => cutSize(engine, value.sum, settings, stepLength)) }
+      : {};
+  const inches =
+    isLength && (settings.unit === 'in' || settings.unit === 'ft')
+      ? { inches: attemptOrFail(engine, () => inInches(engine, value.sum, settings.unit)) }
       : {};
   const common = {
     kind: 'number' as const,
@@ -70,16 +99,18 @@ function giveNumber(
     real,
     decimal: attemptOrFail(engine, () => decimalOfSum(engine, sum, settings.digits)),
     ...cut,
+    ...inches,
   };
-  return algebraic === null
-    ? {
-        ...common,
-        degree: null,
-        minimalPolynomial: null,
-        tower: null,
-        reach: { ...TRANSCENDENTAL_REACH },
-      }
-    : { ...common, ...giveStructure(engine, algebraic, watch) };
+  return (watch) =>
+    algebraic === null
+      ? {
+          ...common,
+          degree: null,
+          minimalPolynomial: null,
+          tower: null,
+          reach: { ...TRANSCENDENTAL_REACH },
+        }
+      : { ...common, ...giveStructure(engine, algebraic, watch) };
 }
 
 function giveStructure(
@@ -128,6 +159,7 @@ function giveAngle(engine: Engine, value: AngleValue, settings: GivenSettings): 
     decimal: attemptOrFail(engine, () =>
       engine.decimal(engine.mul(value.turns, engine.integer(360n)), settings.digits),
     ),
+    dms: attemptOrFail(engine, () => inDegrees(engine, value.turns)),
     reach: attemptOrFail(engine, () => reachOfAngle(engine, value.turns)),
   };
 }

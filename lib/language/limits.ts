@@ -8,6 +8,14 @@ export const LANGUAGE_LIMITS = {
   lines: 5_000,
   /** Factors of √ in a root exponent such as 1/8. */
   rootIndex: 64,
+  /** Values in one list, those of the lists inside it included. */
+  listItems: 1_000,
+  /** Lists inside one another. */
+  listDepth: 8,
+  /** Operations of one line, those of the functions that it calls included. */
+  operations: 200_000,
+  /** Operations inside one another, through all the functions that are called. */
+  depth: 1_500,
 } as const;
 
 export type LanguageLimits = { readonly [name in keyof typeof LANGUAGE_LIMITS]: number };

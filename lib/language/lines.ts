@@ -1,9 +1,10 @@
+import { attachCalls } from './attach-calls';
 import type { Problem } from './failure';
 import { classOfWord } from './names';
 import { orderByDependence } from './graph';
 import { readLine } from './read';
 import type { Settings } from './settings';
-import { type MarkNode, type Statement, marksReadBy } from './syntax';
+import { type MarkNode, type Statement, markDefinedBy, marksReadBy } from './syntax';
 
 export interface CellSource {
   readonly id: string;
@@ -37,7 +38,7 @@ export interface LineGraph {
 
 /** Reads all lines of all cells and orders them so that what a line reads comes before it. */
 export function readCells(cells: readonly CellSource[]): LineGraph {
-  const lines = cells.flatMap((cell, index) => readCell(cell.source, index));
+  const lines = attachCallsIn(cells.flatMap((cell, index) => readCell(cell.source, index)));
   const definitions = new Map<string, number[]>();
   lines.forEach(({ mark }, index) => {
     if (mark === null) return;
@@ -47,6 +48,21 @@ export function readCells(cells: readonly CellSource[]): LineGraph {
   });
   const reads = lines.map((line) => line.reads.flatMap(({ name }) => definitions.get(name) ?? []));
   return { lines, definitions, ...orderByDependence(reads) };
+}
+
+/** Reads products of a name and a bracket as calls where any line defines that name as a function. */
+function attachCallsIn(lines: readonly SourceLine[]): SourceLine[] {
+  const functions = new Set(
+    lines.flatMap(({ source, mark }) => (mark !== null && HEAD.test(source) ? [mark] : [])),
+  );
+  return lines.map((line) => {
+    if (line.statement === null) return line;
+    const statement = attachCalls(
+      line.statement,
+      (name, several) => several || functions.has(name),
+    );
+    return { ...line, statement, reads: marksReadBy(statement) };
+  });
 }
 
 function readCell(source: string, cell: number): SourceLine[] {
@@ -68,15 +84,19 @@ function readCell(source: string, cell: number): SourceLine[] {
         ];
       case 'statement': {
         const { statement } = reading;
-        const mark = statement.kind === 'definition' ? statement.mark : null;
-        return [{ ...common, mark, statement, problem: null, reads: marksReadBy(statement) }];
+        const mark = markDefinedBy(statement);
+        return [{ ...common, mark, statement, problem: null, reads: [] }];
       }
     }
   });
 }
 
-/** The mark that a line means to define, told without parsing it: also for one that does not parse. */
+/** A mark, or a function with its parameters, before the sign of a definition. */
+const DEFINED = /^\s*(\p{L}[\p{L}\d_]*)\s*(?:\([^()=]*\)\s*)?=(?!=)/u;
+const HEAD = /^\s*\p{L}[\p{L}\d_]*\s*\([^()=]*\)\s*=(?!=)/u;
+
+/** The mark or function that a line means to define, told without parsing it: also for one that does not parse. */
 export function markOfLine(text: string): string | null {
-  const name = /^\s*(\p{L}[\p{L}\d_]*)\s*=(?!=)/u.exec(text.slice(0, 200))?.[1];
+  const name = DEFINED.exec(text.slice(0, 200))?.[1];
   return name === undefined || classOfWord(name) !== null ? null : name;
 }

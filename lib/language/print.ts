@@ -1,13 +1,21 @@
-import type { Expression, Statement } from './syntax';
+import type { Expression, FunctionStatement, Statement } from './syntax';
+import { partsOf } from './syntax';
 
 /**
  * Writes a statement in the cell language, in one plain way: `*` for every multiplication, `sqrt()` for √, `deg` for °,
  * no remarks. Reading what is written gives the same tree again, places and signs of writing aside.
  */
 export function printStatement(statement: Statement): string {
+  const locals = statement.where.map(({ name, value }) => `${name} = ${printExpression(value)}`);
+  return printBeforeWhere(statement) + (locals.length === 0 ? '' : ` where ${locals.join(', ')}`);
+}
+
+function printBeforeWhere(statement: Statement): string {
   switch (statement.kind) {
     case 'definition':
       return `${statement.mark} = ${printExpression(statement.value)}`;
+    case 'function':
+      return `${signatureOf(statement)} = ${printExpression(statement.value)}`;
     case 'value':
       return printExpression(statement.value);
     case 'decision':
@@ -21,6 +29,11 @@ export function printStatement(statement: Statement): string {
   }
 }
 
+/** `f(x, y)` */
+export function signatureOf({ mark, parameters }: FunctionStatement): string {
+  return `${mark}(${parameters.map(({ name }) => name).join(', ')})`;
+}
+
 export function printExpression(node: Expression): string {
   switch (node.kind) {
     case 'number':
@@ -30,7 +43,9 @@ export function printExpression(node: Expression): string {
     case 'unit':
       return node.name;
     case 'quantity':
-      return `${node.numerator.text}${node.denominator === null ? '' : `/${node.denominator.text}`} ${printExpression(node.unit)}`;
+      return `${node.whole === null ? '' : `${node.whole.text} `}${node.numerator.text}${node.denominator === null ? '' : `/${node.denominator.text}`} ${printExpression(node.unit)}`;
+    case 'compound':
+      return node.parts.map(printExpression).join(' ');
     case 'sum':
       return node.terms
         .map((term, index) => (index === 0 ? '' : ` ${term.sign} `) + printExpression(term.value))
@@ -49,8 +64,18 @@ export function printExpression(node: Expression): string {
       return `${printExpression(node.base)}^${printExpression(node.exponent)}`;
     case 'call':
       return `${node.name}(${node.args.map(printExpression).join(', ')})`;
+    case 'application':
+      return `${node.callee.name}(${node.args.map(printExpression).join(', ')})`;
+    case 'each':
+      return `each(${node.counter.name}, ${partsOf(node).map(printExpression).join(', ')})`;
+    case 'equation':
+      return `${printExpression(node.left)} == ${printExpression(node.right)}`;
+    case 'list':
+      return `[${node.items.map(printExpression).join(', ')}]`;
+    case 'index':
+      return `${printExpression(node.list)}[${printExpression(node.index)}]`;
     case 'group':
-      return `(${printExpression(node.value)})`;
+      return `(${[node.value, ...node.more].map(printExpression).join(', ')})`;
     case 'root':
       return `√${printExpression(node.value)}`;
   }

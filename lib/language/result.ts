@@ -3,7 +3,15 @@ import type { Problem } from './failure';
 
 /** The result of one line, as the page, the exports, the endpoint and the command line give it. */
 export type Result =
-  NumberResult | AngleResult | PointResult | LineResult | CircleResult | TruthResult | ErrorResult;
+  | NumberResult
+  | AngleResult
+  | PointResult
+  | LineResult
+  | CircleResult
+  | ListResult
+  | FunctionResult
+  | TruthResult
+  | ErrorResult;
 
 interface Line {
   /** 1-based line in its cell. */
@@ -53,6 +61,24 @@ export interface Cut {
   direction: 'up' | 'down' | 'exact';
 }
 
+/** A length as a rule in inches shows it, to the nearest 1/64 of an inch; a tie goes to the even one. */
+export interface Inches {
+  /** In inches, or in feet and inches when the unit is `ft`; parses back to the rounded length. */
+  text: string;
+  /** Parts of an inch that it was rounded to. */
+  denominator: number;
+  /** The rounded length less the exact one, in millimetres, to six decimals; `0` when they are the same. */
+  error: string;
+  direction: 'up' | 'down' | 'exact';
+}
+
+/** An angle in degrees, minutes and seconds, to a tenth of a second; a tie goes to the even one. */
+export interface DegreesMinutesSeconds {
+  /** Parses back to the rounded angle. */
+  text: string;
+  direction: 'up' | 'down' | 'exact';
+}
+
 export interface NumberResult extends Parsed {
   kind: 'number';
   exact: Exact;
@@ -61,6 +87,8 @@ export interface NumberResult extends Parsed {
   decimal: DecimalResult;
   /** Only for a real length when the settings have a step. */
   cut?: Cut;
+  /** Only for a real length given in inches or feet. */
+  inches?: Inches;
   /** Null when transcendental, and where working it out went over a limit (`omitted` then says so). */
   degree: number | null;
   minimalPolynomial: string[] | null;
@@ -137,6 +165,7 @@ export interface AngleResult extends Parsed {
   exact: Exact;
   /** The angle in degrees. */
   decimal: DecimalResult;
+  dms: DegreesMinutesSeconds;
   reach: Reach;
   standIn?: StandInResult;
 }
@@ -173,6 +202,35 @@ export interface CircleResult extends FigureResult {
   kind: 'circle';
   centre: Coordinates;
   radius: NumberPart;
+}
+
+/** A value as a result gives it, without what belongs to its line. */
+export type Bare<T> = Omit<T, keyof Parsed>;
+
+export interface ListResult extends Parsed {
+  kind: 'list';
+  /** All items with their units; the text parses back to the same list. */
+  exact: Exact;
+  /** Each item as it would be given on a line of its own. */
+  items: ItemResult[];
+}
+
+export type ItemResult =
+  | Bare<NumberResult>
+  | Bare<AngleResult>
+  | Bare<PointResult>
+  | Bare<LineResult>
+  | Bare<CircleResult>
+  | Bare<ListResult>;
+
+/** What a line gives that defines a function: it has no value of its own. */
+export interface FunctionResult extends Parsed {
+  kind: 'function';
+  /** As it is called, with its parameters: `f(x, y)`. */
+  signature: string;
+  parameters: string[];
+  /** Marks and functions of the notebook that its value reads, each once, in order. */
+  reads: string[];
 }
 
 export interface TruthResult extends Parsed {

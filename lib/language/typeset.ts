@@ -87,9 +87,21 @@ const COMMANDS: Readonly<Record<string, string>> = {
 
 /** TeX of a line as it was typed, marks in it. Uses commands of amsmath only. */
 export function typesetStatement(statement: Statement): string {
+  const before = typesetBeforeWhere(statement);
+  if (statement.where.length === 0) return before;
+  const locals = statement.where.map(({ name, value }) => `${typesetMark(name)}=${typeset(value)}`);
+  return `${before}\\quad\\text{where }${locals.join(',\\;')}`;
+}
+
+function typesetBeforeWhere(statement: Statement): string {
   switch (statement.kind) {
     case 'definition':
       return `${typesetMark(statement.mark)}=${typeset(statement.value)}`;
+    case 'function': {
+      const parameters = statement.parameters.map(({ name }) => typesetMark(name));
+      const head = typesetMark(statement.mark) + inBrackets(parameters.join(',\\,'));
+      return `${head}=${typeset(statement.value)}`;
+    }
     case 'value':
       return typeset(statement.value);
     case 'decision':
@@ -172,9 +184,11 @@ function typeset(node: Expression): string {
     case 'constant':
       return node.name === 'i' ? 'i' : '\\pi';
     case 'unit':
-      return node.degreeSign ? '^{\\circ}' : `\\mathrm{${node.name}}`;
+      return node.sign ? (UNIT_SIGNS[node.name] ?? '') : `\\mathrm{${node.name}}`;
     case 'quantity':
       return typesetQuantity(node);
+    case 'compound':
+      return node.parts.map(typesetQuantity).join('\\,');
     case 'sum':
       return node.terms
         .map((term, index) =>
@@ -186,16 +200,28 @@ function typeset(node: Expression): string {
     case 'negative':
       return `-${typeset(node.value)}`;
     case 'power': {
-      const base =
-        node.base.kind === 'call' || node.base.kind === 'root'
-          ? `\\left(${typeset(node.base)}\\right)`
-          : typeset(node.base);
+      const base = BRACKETED_BASES.has(node.base.kind)
+        ? inBrackets(typeset(node.base))
+        : typeset(node.base);
       return `{${base}}^{${typeset(unwrap(node.exponent))}}`;
     }
     case 'call':
       return typesetCall(node.name, node.args);
+    case 'application':
+      return typesetMark(node.callee.name) + typesetArguments(node.args);
+    case 'each': {
+      const [first, last] = [typeset(unwrap(node.first)), typeset(unwrap(node.last))];
+      const counter = `${typesetMark(node.counter.name)}=${first}`;
+      return `\\left[${typeset(unwrap(node.value))}\\right]_{${counter}}^{${last}}`;
+    }
+    case 'equation':
+      return `${typeset(node.left)}=${typeset(node.right)}`;
+    case 'list':
+      return `\\left[${node.items.map(typeset).join(',\\,')}\\right]`;
+    case 'index':
+      return `${typeset(node.list)}\\left[${typeset(unwrap(node.index))}\\right]`;
     case 'group':
-      return `\\left(${typeset(node.value)}\\right)`;
+      return inBrackets([node.value, ...node.more].map(typeset).join(',\\,'));
     case 'root':
       return `\\sqrt{${typeset(unwrap(node.value))}}`;
   }
@@ -212,13 +238,13 @@ function unwrap(node: Expression): Expression {
 
 /** A thin space stands before a unit, and none before a degree sign. */
 function unitGap(unit: Expression): string {
-  return (unit.kind === 'power' ? unit.base : unit).kind === 'unit' && !isDegreeSign(unit)
+  return (unit.kind === 'power' ? unit.base : unit).kind === 'unit' && !isUnitSign(unit)
     ? '\\,'
     : '';
 }
 
-function isDegreeSign(unit: Expression): boolean {
-  return unit.kind === 'unit' && unit.degreeSign;
+function isUnitSign(unit: Expression): boolean {
+  return unit.kind === 'unit' && unit.sign;
 }
 
 function typesetQuantity(node: QuantityNode): string {
@@ -226,7 +252,7 @@ function typesetQuantity(node: QuantityNode): string {
     node.denominator === null
       ? node.numerator.text
       : `\\tfrac{${node.numerator.text}}{${node.denominator.text}}`;
-  return count + unitGap(node.unit) + typeset(node.unit);
+  return (node.whole?.text ?? '') + count + unitGap(node.unit) + typeset(node.unit);
 }
 
 /** Read left to right, as it is evaluated: each `/` puts all that stands before it over what follows. */
@@ -251,7 +277,7 @@ function typesetProduct(node: ProductNode): string {
 }
 
 function typesetCall(name: string, args: readonly Expression[]): string {
-  const [first, second] = args;
+  const [first] = args;
   if (first !== undefined && args.length === 1) {
     if (name === 'sqrt') return `\\sqrt{${typeset(unwrap(first))}}`;
     if (name === 'cbrt') return `\\sqrt[3]{${typeset(unwrap(first))}}`;
@@ -260,9 +286,30 @@ function typesetCall(name: string, args: readonly Expression[]): string {
     if (name === 'conj') return `\\overline{${typeset(unwrap(first))}}`;
   }
   const command = COMMANDS[name] ?? `\\operatorname{${name}}`;
-  const list =
+  return command + typesetArguments(args);
+}
+
+function typesetArguments(args: readonly Expression[]): string {
+  const [first, second] = args;
+  return inBrackets(
     second === undefined && first !== undefined
       ? typeset(unwrap(first))
-      : args.map(typeset).join(',\\,');
-  return `${command}\\left(${list}\\right)`;
+      : args.map(typeset).join(',\\,'),
+  );
 }
+
+const inBrackets = (tex: string): string => `\\left(${tex}\\right)`;
+
+/** What a raised exponent would seem to belong to only in part. */
+const BRACKETED_BASES: ReadonlySet<Expression['kind']> = new Set([
+  'call',
+  'application',
+  'each',
+  'root',
+]);
+
+const UNIT_SIGNS: Readonly<Record<string, string>> = {
+  deg: '^{\\circ}',
+  min: '^{\\prime}',
+  sec: '^{\\prime\\prime}',
+};

@@ -1,5 +1,6 @@
 import type { Engine, Num } from '../engine/index';
 import { fail } from './failure';
+import type { FunctionStatement } from './syntax';
 import {
   type PiSum,
   addSums,
@@ -22,13 +23,16 @@ import {
   scalePoint,
 } from './values-geometry';
 
+/** What an expression can be worth. */
+export type Value = Single | ListValue;
+
 /**
- * What an expression can be worth.
+ * One value rather than a list of them.
  * A number is a sum of algebraic multiples of powers of π, in millimetres to the power `length`; a plain number has
  * length 0. An angle is an algebraic number of turns and is a kind of its own: it is added only to angles. Points, lines
  * and circles are exact figures; points are added and scaled as vectors from the origin.
  */
-export type Value = Magnitude | FigureValue;
+export type Single = Magnitude | FigureValue;
 
 /** What has a size: it can be compared, rounded and stood in for. */
 export type Magnitude = NumberValue | AngleValue;
@@ -42,6 +46,24 @@ export interface NumberValue {
 export interface AngleValue {
   readonly kind: 'angle';
   readonly turns: Num;
+}
+
+/** At least one value, in order. */
+export interface ListValue {
+  readonly kind: 'list';
+  readonly items: readonly Value[];
+  /** Values that are no lists, in it and in the lists inside it. */
+  readonly size: number;
+  /** 1 for a list without lists in it. */
+  readonly depth: number;
+}
+
+/** What a line that defines a name gives to those that read it. */
+export type LineValue = Value | FunctionValue;
+
+export interface FunctionValue {
+  readonly kind: 'function';
+  readonly definition: FunctionStatement;
 }
 
 const LARGEST_DIMENSION = 60;
@@ -60,8 +82,12 @@ export function angle(turns: Num): AngleValue {
   return { kind: 'angle', turns };
 }
 
-/** What a value is, to be read in a sentence: `a length`, `an area`, `a plain number`, `an angle`. */
+/** What a value is, to be read in a sentence: `a length`, `an area`, `a plain number`, `an angle`, `a list of 3 items`. */
 export function describe(value: Value): string {
+  if (value.kind === 'list') {
+    const count = value.items.length;
+    return `a list of ${count} item${count === 1 ? '' : 's'}`;
+  }
   if (value.kind === 'angle') return 'an angle';
   if (isFigure(value)) return describeFigure(value);
   const names: Readonly<Record<number, string>> = {
@@ -73,14 +99,14 @@ export function describe(value: Value): string {
   return names[value.length] ?? `a value in mm^${value.length}`;
 }
 
-function mismatch(action: string, a: Value, b: Value, hint = ''): never {
+function mismatch(action: string, a: Single, b: Single, hint = ''): never {
   return fail(
     'unit-mismatch',
     `The left side is ${describe(a)} and the right side is ${describe(b)}; ${action}${hint}.`,
   );
 }
 
-function hintFor(a: Value, b: Value): string {
+function hintFor(a: Single, b: Single): string {
   if (isFigure(a) || isFigure(b)) return '';
   const kinds = [a, b].map((value) => (value.kind === 'angle' ? 'angle' : value.length));
   if (kinds.includes('angle') && kinds.includes(0)) return ' (π radians are `turn/2`)';
@@ -88,7 +114,7 @@ function hintFor(a: Value, b: Value): string {
   return '';
 }
 
-export function add(engine: Engine, a: Value, b: Value): Value {
+export function add(engine: Engine, a: Single, b: Single): Single {
   if (a.kind === 'angle' && b.kind === 'angle') return angle(engine.add(a.turns, b.turns));
   if (a.kind === 'number' && b.kind === 'number' && a.length === b.length)
     return number(addSums(engine, a.sum, b.sum), a.length);
@@ -97,7 +123,7 @@ export function add(engine: Engine, a: Value, b: Value): Value {
   return mismatch('a sum needs two values of one kind', a, b, hintFor(a, b));
 }
 
-export function subtract(engine: Engine, a: Value, b: Value): Value {
+export function subtract(engine: Engine, a: Single, b: Single): Single {
   if (a.kind === 'angle' && b.kind === 'angle') return angle(engine.sub(a.turns, b.turns));
   if (a.kind === 'number' && b.kind === 'number' && a.length === b.length) {
     return number(addSums(engine, a.sum, negateSum(engine, b.sum)), a.length);
@@ -108,7 +134,7 @@ export function subtract(engine: Engine, a: Value, b: Value): Value {
   return mismatch('a difference needs two values of one kind', a, b, hintFor(a, b));
 }
 
-export function negate(engine: Engine, a: Value): Value {
+export function negate(engine: Engine, a: Single): Single {
   if (a.kind === 'angle') return angle(engine.neg(a.turns));
   if (a.kind === 'point') return opposite(engine, a);
   const plain = needNumber(a, 'Only numbers, angles and points have an opposite');
@@ -118,7 +144,7 @@ export function negate(engine: Engine, a: Value): Value {
 const opposite = (engine: Engine, point: PointFigure): PointFigure =>
   scalePoint(engine, point, number(fromNum(engine, engine.integer(-1n))));
 
-export function multiply(engine: Engine, a: Value, b: Value): Value {
+export function multiply(engine: Engine, a: Single, b: Single): Single {
   if (a.kind === 'point' && b.kind === 'number') return scalePoint(engine, a, b);
   if (b.kind === 'point' && a.kind === 'number') return scalePoint(engine, b, a);
   if (isFigure(a) || isFigure(b))
@@ -131,7 +157,7 @@ export function multiply(engine: Engine, a: Value, b: Value): Value {
   return number(multiplySums(engine, a.sum, b.sum), a.length + b.length);
 }
 
-export function divide(engine: Engine, a: Value, b: Value): Value {
+export function divide(engine: Engine, a: Single, b: Single): Single {
   if (a.kind === 'point' && b.kind === 'number') {
     const one = fromNum(engine, engine.integer(1n));
     return scalePoint(engine, a, number(divideSums(engine, one, b.sum), -b.length));
@@ -156,8 +182,8 @@ function scale(
   engine: Engine,
   turned: AngleValue,
   factor: NumberValue,
-  left: Value,
-  right: Value,
+  left: Single,
+  right: Single,
 ): AngleValue {
   if (factor.length !== 0) {
     mismatch(
@@ -178,7 +204,7 @@ function scale(
   return angle(engine.mul(turned.turns, algebraic));
 }
 
-export function power(engine: Engine, base: Value, exponent: bigint): Value {
+export function power(engine: Engine, base: Single, exponent: bigint): Single {
   const plain = needNumber(base, 'A power needs a number as its base');
   const least = BigInt(LARGEST_DIMENSION);
   if (plain.length !== 0 && (exponent > least || exponent < -least)) {
@@ -194,7 +220,7 @@ export function power(engine: Engine, base: Value, exponent: bigint): Value {
 }
 
 /** The principal square root. A dimension must be even to be halved. */
-export function squareRoot(engine: Engine, value: Value): NumberValue {
+export function squareRoot(engine: Engine, value: Single): NumberValue {
   const plain = needNumber(value, 'A square root needs a number');
   if (plain.length % 2 !== 0) {
     fail(
@@ -209,6 +235,12 @@ export function squareRoot(engine: Engine, value: Value): NumberValue {
 export function needNumber(value: Value, need: string): NumberValue {
   if (value.kind === 'number') return value;
   return fail('unit-mismatch', `${need}, and this is ${describe(value)}.`);
+}
+
+/** One value rather than a list of them. */
+export function needSingle(value: Value): Single {
+  if (value.kind !== 'list') return value;
+  return fail('unit-mismatch', `A single value was expected, and this is ${describe(value)}.`);
 }
 
 /** A number or an angle rather than a figure. `need` begins the sentence. */
@@ -228,7 +260,7 @@ export function needAlgebraic(engine: Engine, value: Value, need: string): Num {
   );
 }
 
-export function isRealValue(engine: Engine, value: Value): boolean {
+export function isRealValue(engine: Engine, value: Single): boolean {
   if (value.kind !== 'number') return true;
   for (const coefficient of value.sum.values()) if (!engine.isReal(coefficient)) return false;
   return true;
@@ -239,19 +271,19 @@ export function isZeroValue(engine: Engine, value: Magnitude): boolean {
 }
 
 /** Difference of two numbers or two angles for a decision; both must be of one kind. */
-export function differenceForDecision(engine: Engine, a: Value, b: Value): Magnitude {
+export function differenceForDecision(engine: Engine, a: Single, b: Single): Magnitude {
   if (a.kind === 'angle' && b.kind === 'angle') return angle(engine.sub(a.turns, b.turns));
   if (a.kind === 'number' && b.kind === 'number' && a.length === b.length)
     return number(addSums(engine, a.sum, negateSum(engine, b.sum)), a.length);
   return mismatchInDecision(a, b);
 }
 
-export function mismatchInDecision(a: Value, b: Value): never {
+export function mismatchInDecision(a: Single, b: Single): never {
   return mismatch('only values of one kind can be compared', a, b, hintFor(a, b));
 }
 
 /** Sign of a real value; the order of others is asked in vain: `domain`. */
-export function signOf(engine: Engine, value: Value): -1 | 0 | 1 {
+export function signOf(engine: Engine, value: Single): -1 | 0 | 1 {
   if (value.kind === 'angle') return engine.sign(value.turns);
   if (value.kind !== 'number')
     return fail('domain', `Only numbers and angles have an order, and this is ${describe(value)}.`);
@@ -261,7 +293,7 @@ export function signOf(engine: Engine, value: Value): -1 | 0 | 1 {
 }
 
 /** -1, 0 or 1 as a is below, equal to or above b; both must be real and of one kind. */
-export function compareValues(engine: Engine, a: Value, b: Value): -1 | 0 | 1 {
+export function compareValues(engine: Engine, a: Single, b: Single): -1 | 0 | 1 {
   for (const [value, side] of [
     [a, 'left'],
     [b, 'right'],

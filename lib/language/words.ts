@@ -9,6 +9,8 @@ export function describeWord(word: string): string {
       return 'the name of a function';
     case 'constant':
       return word === 'i' ? 'the imaginary unit' : 'the constant π';
+    case 'word':
+      return 'a word of the language';
     case null:
       return 'a free name';
   }

@@ -16,8 +16,13 @@ export const sources: fc.Arbitrary<string> = fc.letrec<{
     unit,
     tie('sum').map((inner) => `(${inner})`),
     tie('atom').map((inner) => `√${inner}`),
+    tie('sum').map((inner) => `L[${inner}]`),
+    fc.tuple(tie('sum'), tie('sum')).map((args) => `g(${args.join(', ')})`),
     fc
-      .constantFrom(...FUNCTIONS)
+      .tuple(fc.constantFrom('k', 'n_1'), tie('sum'), tie('sum'), tie('sum'))
+      .map((args) => `each(${args.join(', ')})`),
+    fc
+      .constantFrom(...FUNCTIONS.filter(({ name }) => name !== 'each'))
       .chain(({ name, least }) =>
         fc
           .array(tie('sum'), { minLength: least, maxLength: least })
@@ -28,7 +33,13 @@ export const sources: fc.Arbitrary<string> = fc.letrec<{
     .tuple(number, unit, fc.constantFrom('', '^2', '²', '^-1'))
     .map((parts) => `${parts[0]} ${parts[1]}${parts[2]}`);
   return {
-    atom: fc.oneof({ maxDepth: 3 }, number, named),
+    atom: fc.oneof(
+      { maxDepth: 3 },
+      number,
+      named,
+      fc.array(tie('sum'), { minLength: 1, maxLength: 3 }).map((items) => `[${items.join(', ')}]`),
+      fc.tuple(tie('sum'), tie('sum')).map(([item, index]) => `[${item}][${index}]`),
+    ),
     power: fc.oneof(
       { maxDepth: 3 },
       tie('atom'),
@@ -45,6 +56,8 @@ export const sources: fc.Arbitrary<string> = fc.letrec<{
         .map((parts) => parts.join('')),
       fc.tuple(tie('power'), named).map((parts) => parts.join(' ')),
       fc.constantFrom('1/2 mm', '3/4 in', 'a/2 mm', '2*3/4 ft', '6/3/4 in'),
+      fc.constantFrom('3 1/2 in', '2 1/4 ft²', '5 ft 3 1/2 in', '6/5 ft 3/4 in', '2*5 ft 3.5 in'),
+      fc.constantFrom('51° 30′ 15.5″', 'a/51 deg 30\' 7"', '0 deg 15 sec', '9° 1 min 2 sec b'),
     ),
     sum: fc.oneof(
       { maxDepth: 3 },
@@ -61,7 +74,7 @@ export const sources: fc.Arbitrary<string> = fc.letrec<{
   };
 }).sum;
 
-export const statements: fc.Arbitrary<string> = fc.oneof(
+const plainStatements: fc.Arbitrary<string> = fc.oneof(
   sources,
   fc
     .tuple(fc.constantFrom('R', 'x_2', 'β'), sources)
@@ -70,6 +83,29 @@ export const statements: fc.Arbitrary<string> = fc.oneof(
     .tuple(sources, fc.constantFrom('==', '!=', '<', '≤', '>=', '>'), sources)
     .map((parts) => parts.join(' ')),
 );
+
+/** Statements of every kind, with local names or without. */
+export const statements: fc.Arbitrary<string> = fc
+  .tuple(
+    fc.oneof(
+      { weight: 4, arbitrary: plainStatements },
+      {
+        weight: 1,
+        arbitrary: fc
+          .tuple(fc.constantFrom('f(x)', 'rise(span, R_1)', 'β(a, b, c)'), sources)
+          .map(([head, source]) => `${head} = ${source}`),
+      },
+    ),
+    fc.oneof(
+      { weight: 4, arbitrary: fc.constant('') },
+      { weight: 1, arbitrary: sources.map((source) => ` where r = ${source}`) },
+      {
+        weight: 1,
+        arbitrary: fc.tuple(sources, sources).map(([r, s]) => ` where r = ${r}, s_1 = ${s}`),
+      },
+    ),
+  )
+  .map((parts) => parts.join(''));
 
 /** Exact plain numbers as sources: rationals and sums with small square roots. */
 export const values: fc.Arbitrary<string> = fc

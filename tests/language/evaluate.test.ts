@@ -20,7 +20,9 @@ const brief = (result: Result) =>
       ? result.exact.text
       : result.kind === 'truth'
         ? String(result.truth.value)
-        : result.exact.text;
+        : result.kind === 'function'
+          ? result.signature
+          : result.exact.text;
 const evaluateAll = (...sources: string[]) =>
   evaluateCells(sources.map((source, index) => ({ id: `c${index}`, source }))).map(({ results }) =>
     results.map(brief),
@@ -280,7 +282,7 @@ describe('marks across cells', () => {
     expect(first?.kind === 'error' && first.error).toEqual({
       code: 'cycle',
       message:
-        'These marks are defined by one another in a circle: `a`, `b`, `c`; one of them must not read the others.',
+        'These names are defined by one another in a circle: `a`, `b`, `c`; one of them must not read the others.',
       from: 4,
       to: 5,
     });

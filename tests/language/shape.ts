@@ -1,15 +1,27 @@
-import type { Expression, Statement } from '@/lib/language/syntax';
+import { type Expression, type Statement, partsOf } from '@/lib/language/syntax';
 
 /** A syntax tree with every operation in brackets, so that a test can see how a line was read. */
 export function shapeOf(statement: Statement): string {
-  if (statement.kind === 'definition') return `${statement.mark} = ${shape(statement.value)}`;
-  if (statement.kind === 'value') return shape(statement.value);
-  return statement.sides
-    .map(
-      (side, index) =>
-        (index === 0 ? '' : ` ${statement.relations[index - 1] ?? ''} `) + shape(side),
-    )
-    .join('');
+  const locals = statement.where.map(({ name, value }) => `${name} = ${shape(value)}`);
+  return shapeBeforeWhere(statement) + (locals.length === 0 ? '' : ` where ${locals.join(', ')}`);
+}
+
+function shapeBeforeWhere(statement: Statement): string {
+  switch (statement.kind) {
+    case 'definition':
+      return `${statement.mark} = ${shape(statement.value)}`;
+    case 'function':
+      return `${statement.mark}<${statement.parameters.map(({ name }) => name).join(', ')}> = ${shape(statement.value)}`;
+    case 'value':
+      return shape(statement.value);
+    case 'decision':
+      return statement.sides
+        .map(
+          (side, index) =>
+            (index === 0 ? '' : ` ${statement.relations[index - 1] ?? ''} `) + shape(side),
+        )
+        .join('');
+  }
 }
 
 export function shape(node: Expression): string {
@@ -21,7 +33,9 @@ export function shape(node: Expression): string {
     case 'unit':
       return node.name;
     case 'quantity':
-      return `[${node.numerator.text}${node.denominator === null ? '' : `/${node.denominator.text}`} ${shape(node.unit)}]`;
+      return `[${node.whole === null ? '' : `${node.whole.text}+`}${node.numerator.text}${node.denominator === null ? '' : `/${node.denominator.text}`} ${shape(node.unit)}]`;
+    case 'compound':
+      return `[${node.parts.map(shape).join('')}]`;
     case 'sum':
       return node.terms
         .map((term) => [term.sign, shape(term.value)] as const)
@@ -46,6 +60,16 @@ export function shape(node: Expression): string {
       return `(${shape(node.base)} ^ ${shape(node.exponent)})`;
     case 'call':
       return `${node.name}(${node.args.map(shape).join(', ')})`;
+    case 'application':
+      return `${node.callee.name}<${node.args.map(shape).join(', ')}>`;
+    case 'each':
+      return `each<${node.counter.name}: ${partsOf(node).map(shape).join(', ')}>`;
+    case 'equation':
+      return `${shape(node.left)} == ${shape(node.right)}`;
+    case 'list':
+      return `{${node.items.map(shape).join(', ')}}`;
+    case 'index':
+      return `${shape(node.list)}#${shape(node.index)}`;
     case 'group':
       return shape(node.value);
     case 'root':

@@ -2,7 +2,15 @@ import type { Engine, Num } from '../../engine/index';
 import type { TurnPart } from '../../geometry/index';
 import { fail } from '../failure';
 import { asAlgebraic } from '../pi-sum';
-import { type NumberValue, type Value, angle, describe, needAlgebraic, number } from '../values';
+import {
+  type NumberValue,
+  type Single,
+  type Value,
+  angle,
+  describe,
+  needAlgebraic,
+  number,
+} from '../values';
 import { fromNum } from '../pi-sum';
 
 /**
@@ -51,35 +59,35 @@ export function partOfTurn(engine: Engine, value: Value): TurnPart {
 
 const plain = (engine: Engine, value: Num): NumberValue => number(fromNum(engine, value));
 
-export function cosine(engine: Engine, value: Value): NumberValue {
+export function cosine(engine: Engine, value: Single): NumberValue {
   const { k, n } = partOfTurn(engine, value);
   return plain(engine, engine.cosTurn(k, n));
 }
 
-export function sine(engine: Engine, value: Value): NumberValue {
+export function sine(engine: Engine, value: Single): NumberValue {
   const { k, n } = partOfTurn(engine, value);
   return plain(engine, engine.sinTurn(k, n));
 }
 
-export const tangent = (engine: Engine, value: Value): NumberValue =>
+export const tangent = (engine: Engine, value: Single): NumberValue =>
   ratio(engine, value, 'tangent', 'at a quarter turn from 0', (k, n) => [
     engine.sinTurn(k, n),
     engine.cosTurn(k, n),
   ]);
 
-export const cotangent = (engine: Engine, value: Value): NumberValue =>
+export const cotangent = (engine: Engine, value: Single): NumberValue =>
   ratio(engine, value, 'cotangent', 'at a whole number of half turns', (k, n) => [
     engine.cosTurn(k, n),
     engine.sinTurn(k, n),
   ]);
 
-export const secant = (engine: Engine, value: Value): NumberValue =>
+export const secant = (engine: Engine, value: Single): NumberValue =>
   ratio(engine, value, 'secant', 'at a quarter turn from 0', (k, n) => [
     engine.integer(1n),
     engine.cosTurn(k, n),
   ]);
 
-export const cosecant = (engine: Engine, value: Value): NumberValue =>
+export const cosecant = (engine: Engine, value: Single): NumberValue =>
   ratio(engine, value, 'cosecant', 'at a whole number of half turns', (k, n) => [
     engine.integer(1n),
     engine.sinTurn(k, n),
@@ -88,7 +96,7 @@ export const cosecant = (engine: Engine, value: Value): NumberValue =>
 /** A quotient of circular functions; `domain` where the lower one is 0. */
 function ratio(
   engine: Engine,
-  value: Value,
+  value: Single,
   name: string,
   place: string,
   parts: (k: bigint, n: bigint) => [above: Num, below: Num],
@@ -101,19 +109,19 @@ function ratio(
   return plain(engine, engine.div(above, below));
 }
 
-export function arcCosine(engine: Engine, value: Value): Value {
+export function arcCosine(engine: Engine, value: Single): Single {
   const cosineValue = needProperSine(engine, value, 'acos');
   return angle(turnsWithCosine(engine, cosineValue, 'acos'));
 }
 
 /** asin(y) is a quarter turn less acos(y). */
-export function arcSine(engine: Engine, value: Value): Value {
+export function arcSine(engine: Engine, value: Single): Single {
   const sineValue = needProperSine(engine, value, 'asin');
   return angle(engine.sub(engine.rational(1n, 4n), turnsWithCosine(engine, sineValue, 'asin')));
 }
 
 /** With cos 2a = (1 - y²)/(1 + y²) and the sign of y. */
-export function arcTangent(engine: Engine, value: Value): Value {
+export function arcTangent(engine: Engine, value: Single): Single {
   const y = needReal(engine, value, 'atan');
   const one = engine.integer(1n);
   const square = engine.mul(y, y);
@@ -122,14 +130,14 @@ export function arcTangent(engine: Engine, value: Value): Value {
   return angle(engine.sign(y) < 0 ? engine.neg(turns) : turns);
 }
 
-function needReal(engine: Engine, value: Value, name: string): Num {
+function needReal(engine: Engine, value: Single, name: string): Num {
   const algebraic = needAlgebraic(engine, value, `${name} needs a plain number`);
   if (!engine.isReal(algebraic))
     fail('domain', `${name} needs a real number, and this one is not real.`);
   return algebraic;
 }
 
-function needProperSine(engine: Engine, value: Value, name: string): Num {
+function needProperSine(engine: Engine, value: Single, name: string): Num {
   const algebraic = needReal(engine, value, name);
   const one = engine.integer(1n);
   if (engine.compare(algebraic, one) > 0 || engine.compare(algebraic, engine.neg(one)) < 0) {

@@ -1,6 +1,5 @@
 import type { Engine } from '../../engine/index';
-import type { Value } from '../values';
-import { squareRoot } from '../values';
+import { type Single, type Value, needSingle, squareRoot } from '../values';
 import {
   arcCosine,
   arcSine,
@@ -33,6 +32,7 @@ import {
   radius,
 } from './geometry-figures';
 import { angleBetween, dist } from './geometry-measures';
+import { countOf, flatten, sumOf } from './lists';
 import { absolute, conjugate, extreme, imaginaryPart, realPart, toWhole } from './parts';
 import { cubeRoot } from './roots';
 import { standIn } from './stand-in';
@@ -40,19 +40,21 @@ import { chord, sagitta, versine } from './trade';
 
 type Action = (engine: Engine, args: readonly Value[]) => Value;
 
-const one =
-  (action: (engine: Engine, value: Value) => Value): Action =>
-  (engine, [value]) =>
-    action(engine, value as Value);
+/** A function of single values. */
+const single =
+  (action: (engine: Engine, args: readonly Single[]) => Value): Action =>
+  (engine, args) =>
+    action(engine, args.map(needSingle));
 
-const two =
-  (action: (engine: Engine, a: Value, b: Value) => Value): Action =>
-  (engine, [a, b]) =>
-    action(engine, a as Value, b as Value);
+const one = (action: (engine: Engine, value: Single) => Value): Action =>
+  single((engine, [value]) => action(engine, value as Single));
+
+const two = (action: (engine: Engine, a: Single, b: Single) => Value): Action =>
+  single((engine, [a, b]) => action(engine, a as Single, b as Single));
 
 /**
  * What each function of the name table does. The caller has checked the number of arguments against the table; `root`
- * is not here, as its first argument is a polynomial and not a value.
+ * and `each` are not here, as not all of their arguments are values.
  */
 export const ACTIONS: ReadonlyMap<string, Action> = new Map<string, Action>([
   ['sqrt', one(squareRoot)],
@@ -70,14 +72,16 @@ export const ACTIONS: ReadonlyMap<string, Action> = new Map<string, Action>([
   ['asin', one(arcSine)],
   ['acos', one(arcCosine)],
   ['atan', one(arcTangent)],
-  ['min', (engine, args) => extreme(engine, args, -1)],
-  ['max', (engine, args) => extreme(engine, args, 1)],
-  ['floor', (engine, [value, step]) => toWhole(engine, 'floor', value as Value, step)],
-  ['round', (engine, [value, step]) => toWhole(engine, 'round', value as Value, step)],
+  ['min', (engine, args) => extreme(engine, args.flatMap(flatten), -1)],
+  ['max', (engine, args) => extreme(engine, args.flatMap(flatten), 1)],
+  ['floor', single((engine, [value, step]) => toWhole(engine, 'floor', value as Single, step))],
+  ['round', single((engine, [value, step]) => toWhole(engine, 'round', value as Single, step))],
+  ['sum', (engine, [value]) => sumOf(engine, value as Value)],
+  ['count', (engine, [value]) => countOf(engine, value as Value)],
   ['chord', two(chord)],
   ['sagitta', two(sagitta)],
   ['versine', one(versine)],
-  ['standin', standIn],
+  ['standin', single(standIn)],
   ['point', point],
   ['polar', polarPoint],
   ['line', line],

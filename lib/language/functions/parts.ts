@@ -3,7 +3,7 @@ import { fail } from '../failure';
 import { asAlgebraic, decideByEnclosures, fromNum } from '../pi-sum';
 import {
   type NumberValue,
-  type Value,
+  type Single,
   compareValues,
   divide,
   isRealValue,
@@ -16,26 +16,26 @@ import {
 } from '../values';
 import { negate } from '../values';
 
-export function realPart(engine: Engine, value: Value): Value {
+export function realPart(engine: Engine, value: Single): Single {
   return mapNumber(engine, needNumber(value, 're needs a number'), (coefficient) =>
     engine.re(coefficient),
   );
 }
 
-export function imaginaryPart(engine: Engine, value: Value): Value {
+export function imaginaryPart(engine: Engine, value: Single): Single {
   return mapNumber(engine, needNumber(value, 'im needs a number'), (coefficient) =>
     engine.im(coefficient),
   );
 }
 
-export function conjugate(engine: Engine, value: Value): Value {
+export function conjugate(engine: Engine, value: Single): Single {
   return mapNumber(engine, needNumber(value, 'conj needs a number'), (coefficient) =>
     engine.conj(coefficient),
   );
 }
 
 /** The size of a value; of a complex one with several powers of π in it there is none of this form. */
-export function absolute(engine: Engine, value: Value): Value {
+export function absolute(engine: Engine, value: Single): Single {
   if (isRealValue(engine, value)) return signOf(engine, value) < 0 ? negate(engine, value) : value;
   const plain = needNumber(value, 'abs needs a number');
   if (plain.sum.size > 1)
@@ -46,7 +46,7 @@ export function absolute(engine: Engine, value: Value): Value {
   return mapNumber(engine, plain, (coefficient) => engine.abs(coefficient));
 }
 
-export function extreme(engine: Engine, values: readonly Value[], sought: -1 | 1): Value {
+export function extreme(engine: Engine, values: readonly Single[], sought: -1 | 1): Single {
   const [first, ...others] = values;
   if (first === undefined) throw new RangeError('At least one value is needed.');
   compareValues(engine, first, first);
@@ -60,9 +60,9 @@ export function extreme(engine: Engine, values: readonly Value[], sought: -1 | 1
 export function toWhole(
   engine: Engine,
   name: 'floor' | 'round',
-  given: Value,
-  step: Value | undefined,
-): Value {
+  given: Single,
+  step: Single | undefined,
+): Single {
   const value = needMagnitude(given, `${name} needs a number or an angle`);
   if (step !== undefined) {
     if (signOf(engine, step) <= 0) fail('domain', `${name} needs a step above 0.`);
@@ -77,7 +77,7 @@ export function toWhole(
   return wholeOf(engine, name, value);
 }
 
-function wholeOf(engine: Engine, name: 'floor' | 'round', ratio: Value): NumberValue {
+function wholeOf(engine: Engine, name: 'floor' | 'round', ratio: Single): NumberValue {
   const plain = needNumber(ratio, `${name} needs a number`);
   if (plain.length !== 0) fail('unit-mismatch', `${name} needs a value and a step of one kind.`);
   if (!isRealValue(engine, plain))

@@ -4,7 +4,7 @@ import { LANGUAGE_LIMITS } from '../limits';
 import { fromNum } from '../pi-sum';
 import {
   type NumberValue,
-  type Value,
+  type Single,
   describe,
   needAlgebraic,
   needNumber,
@@ -18,7 +18,7 @@ import { asAlgebraic } from '../pi-sum';
  * The real cube root of a real value, the principal one of any other, in square roots where they reach it. A dimension
  * must be a multiple of three.
  */
-export function cubeRoot(engine: Engine, value: Value): NumberValue {
+export function cubeRoot(engine: Engine, value: Single): NumberValue {
   const { plain, radicand } = needRadicand(engine, value, 'cbrt');
   if (plain.length % 3 !== 0) {
     fail(
@@ -34,7 +34,7 @@ export function cubeRoot(engine: Engine, value: Value): NumberValue {
 
 function needRadicand(
   engine: Engine,
-  value: Value,
+  value: Single,
   name: string,
 ): { plain: NumberValue; radicand: Num } {
   const plain = needNumber(value, `${name} needs a number`);
@@ -47,7 +47,7 @@ function needRadicand(
 }
 
 /** x^(p/q), the principal value: the q-th root with its argument in (-π/q, π/q], to the power p. */
-export function rationalPower(engine: Engine, base: Value, p: bigint, q: bigint): Value {
+export function rationalPower(engine: Engine, base: Single, p: bigint, q: bigint): Single {
   let odd = q;
   let halvings = 0;
   while (odd % 2n === 0n) {
@@ -60,12 +60,12 @@ export function rationalPower(engine: Engine, base: Value, p: bigint, q: bigint)
       `The exponent asks for a root of index ${q}; the limit is ${LANGUAGE_LIMITS.rootIndex} for its odd part and as many square roots.`,
     );
   }
-  let root: Value = odd === 1n ? base : oddRoot(engine, base, Number(odd));
+  let root: Single = odd === 1n ? base : oddRoot(engine, base, Number(odd));
   for (let step = 0; step < halvings; step += 1) root = squareRoot(engine, root);
   return power(engine, root, p);
 }
 
-function oddRoot(engine: Engine, base: Value, index: number): NumberValue {
+function oddRoot(engine: Engine, base: Single, index: number): NumberValue {
   const { plain, radicand } = needRadicand(engine, base, 'A power with this exponent');
   if (plain.length % index !== 0) {
     fail(
@@ -77,7 +77,7 @@ function oddRoot(engine: Engine, base: Value, index: number): NumberValue {
 }
 
 /** x to an exponent that is itself an exact value; only rational exponents keep the result algebraic. */
-export function raise(engine: Engine, base: Value, exponent: Value): Value {
+export function raise(engine: Engine, base: Single, exponent: Single): Single {
   const exact = needAlgebraic(engine, exponent, 'An exponent is a plain number');
   const rational = engine.asRational(exact);
   if (rational === null) {

@@ -24,7 +24,7 @@ import type { StandInOffer, StandInResult, SteppedResult } from '../result';
 import {
   type NumberValue,
   type Magnitude,
-  type Value,
+  type Single,
   angle,
   describe,
   isRealValue,
@@ -56,8 +56,8 @@ type StandInValue = Magnitude & { readonly standing: Standing };
  * above 0; for numbers a radius that constructions start from and the number of parts it is stepped round. Fails with
  * `unit-mismatch`, `domain`, and `not-exact` when nothing was found inside the tolerance.
  */
-export function standIn(engine: Engine, args: readonly Value[]): Value {
-  const [given, off, radius, parts] = args as [Value, Value, Value?, Value?];
+export function standIn(engine: Engine, args: readonly Single[]): Single {
+  const [given, off, radius, parts] = args as [Single, Single, Single?, Single?];
   const value = needMagnitude(given, 'standin needs a number or an angle');
   const tolerance = needMagnitude(off, 'standin needs a tolerance that is a number or an angle');
   checkKinds(engine, value, tolerance, radius);
@@ -90,7 +90,7 @@ function checkKinds(
   engine: Engine,
   value: Magnitude,
   tolerance: Magnitude,
-  radius: Value | undefined,
+  radius: Single | undefined,
 ): void {
   const others = [
     ['tolerance', tolerance],
@@ -130,7 +130,7 @@ function toleranceOf(engine: Engine, tolerance: Magnitude): Fraction {
 
 const MOST_PARTS = 1_000_000n;
 
-function partsOf(engine: Engine, parts: Value): number {
+function partsOf(engine: Engine, parts: Single): number {
   const count =
     parts.kind === 'number' && parts.length === 0 ? asAlgebraic(engine, parts.sum) : null;
   const whole = count === null ? null : engine.asRational(count);
@@ -247,7 +247,7 @@ function failNearest(
 function writeOffer(
   engine: Engine,
   { form }: StandIn,
-  of: Value,
+  of: Single,
   radius: NumberValue | null,
 ): string {
   if (of.kind === 'angle') {
@@ -267,7 +267,7 @@ function writeOffer(
 /** The addition to the result of a value that `standin` gave; nothing for all other values. */
 export function giveStandIn(
   engine: Engine,
-  value: Value,
+  value: Single,
   settings: GivenSettings,
 ): { standIn?: StandInResult } {
   if (!('standing' in value)) return {};

@@ -3,7 +3,7 @@ import { fail } from '../failure';
 import { fromNum } from '../pi-sum';
 import {
   type NumberValue,
-  type Value,
+  type Single,
   angle,
   multiply,
   needNumber,
@@ -14,28 +14,28 @@ import {
 import { cosine, sine, turnsOf } from './circular';
 
 /** 2 R sin(angle/2) for an angle at the centre from 0 to a whole turn; `domain` outside it. */
-export function chord(engine: Engine, radius: Value, central: Value): Value {
+export function chord(engine: Engine, radius: Single, central: Single): Single {
   const { half, reach } = halfOf(engine, radius, central, 'chord');
   return multiply(engine, multiply(engine, whole(engine, 2n), reach), sine(engine, half));
 }
 
 /** R (1 - cos(angle/2)): from the middle of the chord to the arc. */
-export function sagitta(engine: Engine, radius: Value, central: Value): Value {
+export function sagitta(engine: Engine, radius: Single, central: Single): Single {
   const { half, reach } = halfOf(engine, radius, central, 'sagitta');
   return multiply(engine, reach, subtract(engine, whole(engine, 1n), cosine(engine, half)));
 }
 
 /** 1 - cos(angle). */
-export function versine(engine: Engine, value: Value): Value {
+export function versine(engine: Engine, value: Single): Single {
   return subtract(engine, whole(engine, 1n), cosine(engine, value));
 }
 
 function halfOf(
   engine: Engine,
-  radius: Value,
-  central: Value,
+  radius: Single,
+  central: Single,
   name: string,
-): { half: Value; reach: NumberValue } {
+): { half: Single; reach: NumberValue } {
   const reach = needNumber(radius, `${name} needs a radius first`);
   if (signOf(engine, reach) < 0)
     fail('domain', `${name} needs a radius that is not negative, and this one is.`);
