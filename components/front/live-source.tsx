@@ -2,9 +2,9 @@
 
 import { useEffect, useRef, useState } from 'react';
 import type { EditorHandle } from '@/components/sheet/editor/make-editor';
+import { knownMarks } from '@/components/sheet/editor/names';
 import { placedFaults } from '@/components/sheet/editor/source-editor';
 import type { ShownLine } from '@/components/sheet/state/shown';
-import { sayBriefly } from '@/components/sheet/wording';
 import { TRIAL_LIMITS } from '@/lib/notebooks/trial-limits';
 
 interface LiveSourceProps {
@@ -50,10 +50,11 @@ export function LiveSource({ source, lines, onWrite }: LiveSourceProps) {
         column,
         onWrite: (text) => latest.current.onWrite(text),
         onLeave: () => false,
-        marks: () =>
-          latest.current.lines.flatMap(({ result }) =>
-            result.mark === null ? [] : [{ name: result.mark, size: sayBriefly(result) }],
-          ),
+        names: {
+          marks: () => knownMarks([{ id: LABEL }], new Map([[LABEL, latest.current.lines]])),
+          goTo: () => false,
+          rename: () => false,
+        },
       });
       handle.current = made;
       setReady(true);

@@ -1,52 +1,252 @@
-import type { KeyboardEvent } from 'react';
-import { focusNeighbour, type SheetActions } from './cells';
+/**
+ * The keys of the sheet: one table, from which the handlers, the sheet of keys and the help page read. `Mod` is Ctrl, or
+ * Cmd on a Mac. None is a single letter and none belongs to browsers, screen readers or the writing of text.
+ */
 
-/** The keys of the sheet, as the help page lists them; `Mod` is Ctrl, or Cmd on a Mac. */
-export const KEYS = [
+export type SheetCommand =
+  'find' | 'findNext' | 'findBefore' | 'undo' | 'redo' | 'keep' | 'keys' | 'goBack';
+export type CellCommand =
+  | 'dimensionBelow'
+  | 'noteBelow'
+  | 'dimensionAbove'
+  | 'noteAbove'
+  | 'moveUp'
+  | 'moveDown'
+  | 'copy'
+  | 'remove'
+  | 'cellBefore'
+  | 'cellAfter'
+  | 'headingBefore'
+  | 'headingAfter';
+export type EntryCommand =
+  'open' | 'entryBefore' | 'entryAfter' | 'firstEntry' | 'lastEntry' | 'remove' | 'rename' | 'keys';
+export type SourceCommand =
+  'close' | 'lineBefore' | 'lineAfter' | 'newLine' | 'offer' | 'about' | 'goTo' | 'rename';
+/** While names are offered below the cursor. */
+export type OfferCommand = 'accept';
+
+interface CommandsOf {
+  /** Anywhere on the page of a sheet. */
+  sheet: SheetCommand;
+  /** Anywhere in a cell, its source open or not. */
+  cell: CellCommand;
+  /** On a line whose source is closed. */
+  entry: EntryCommand;
+  /** In an open source. */
+  source: SourceCommand;
+  offer: OfferCommand;
+}
+
+export type KeyScope = keyof CommandsOf;
+
+export const KEY_GROUPS = ['Writing', 'Names', 'Cells', 'Getting about', 'The sheet'] as const;
+
+type KeyOf<S extends KeyScope> = {
+  readonly scope: S;
+  readonly group: (typeof KEY_GROUPS)[number];
+  readonly keys: readonly string[];
+  /** The command of each key, in the same order. */
+  readonly runs: readonly CommandsOf[S][];
+  readonly does: string;
+};
+
+export type Key = { [S in KeyScope]: KeyOf<S> }[KeyScope];
+
+export const KEYS: readonly Key[] = [
   {
+    scope: 'entry',
+    group: 'Writing',
     keys: ['Enter'],
-    does: 'Open the source of the line that has the focus; in the source, begin a new line',
+    runs: ['open'],
+    does: 'Open the source of the line that has the focus',
   },
-  { keys: ['Esc'], does: 'Close the source' },
-  { keys: ['↑', '↓'], does: 'Go to the line above or below' },
-  { keys: ['Mod+Enter'], does: 'Add a dimension cell below' },
-  { keys: ['Mod+Shift+Enter'], does: 'Add a note below' },
-  { keys: ['Alt+↑', 'Alt+↓'], does: 'Move the cell up or down' },
-  { keys: ['Delete'], does: 'Delete the cell that has the focus (undo brings it back)' },
   {
-    keys: ['Mod+Z', 'Mod+Shift+Z'],
-    does: 'Undo, redo: typing, moving, deleting and settings alike',
+    scope: 'source',
+    group: 'Writing',
+    keys: ['Enter'],
+    runs: ['newLine'],
+    does: 'In an open source: begin a new line',
   },
-  { keys: ['Mod+S'], does: 'Keep a version' },
-] as const;
-
-const isMod = (event: KeyboardEvent) => event.ctrlKey || event.metaKey;
-
-/** Keys pressed anywhere within a cell, its source open or not. */
-export function onCellKey(event: KeyboardEvent, id: string, actions: SheetActions) {
-  if (event.defaultPrevented) return;
-  const handled = handle(event, id, actions);
-  if (handled) {
-    event.preventDefault();
-    event.stopPropagation();
-  }
-}
-
-function handle(event: KeyboardEvent, id: string, actions: SheetActions): boolean {
-  if (event.key === 'Enter' && isMod(event)) {
-    actions.insert(event.shiftKey ? 'note' : 'dimension', id, 'after');
-    return true;
-  }
-  const by = event.key === 'ArrowUp' ? -1 : event.key === 'ArrowDown' ? 1 : null;
-  if (by !== null && event.altKey) {
-    actions.move(id, by);
-    return true;
-  }
-  if (!(event.target instanceof HTMLElement) || event.target.dataset.entry !== id) return false;
-  if (by !== null && !isMod(event) && !event.shiftKey) return focusNeighbour(event.target, by);
-  if (event.key === 'Delete') {
-    actions.remove(id);
-    return true;
-  }
-  return false;
-}
+  {
+    scope: 'source',
+    group: 'Writing',
+    keys: ['Esc'],
+    runs: ['close'],
+    does: 'Close the source',
+  },
+  {
+    scope: 'sheet',
+    group: 'Writing',
+    keys: ['Mod+Z'],
+    runs: ['undo'],
+    does: 'Undo: typing, moving, deleting, renaming and settings alike',
+  },
+  {
+    scope: 'sheet',
+    group: 'Writing',
+    keys: ['Mod+Shift+Z', 'Mod+Y'],
+    runs: ['redo', 'redo'],
+    does: 'Do again what was undone',
+  },
+  {
+    scope: 'source',
+    group: 'Names',
+    keys: ['Ctrl+Space'],
+    runs: ['offer'],
+    does: 'Offer the names and units that fit here; the arrows choose one',
+  },
+  {
+    scope: 'offer',
+    group: 'Names',
+    keys: ['Enter', 'Tab'],
+    runs: ['accept', 'accept'],
+    does: 'Take the name that is chosen',
+  },
+  {
+    scope: 'source',
+    group: 'Names',
+    keys: ['Shift+F1'],
+    runs: ['about'],
+    does: 'Say what the name at the cursor is: its value, or what the function gives',
+  },
+  {
+    scope: 'source',
+    group: 'Names',
+    keys: ['F8'],
+    runs: ['goTo'],
+    does: 'Go to the line that defines the name at the cursor; Mod and a press on it do the same',
+  },
+  {
+    scope: 'sheet',
+    group: 'Names',
+    keys: ['Shift+F8'],
+    runs: ['goBack'],
+    does: 'Go back to where one came from',
+  },
+  {
+    scope: 'source',
+    group: 'Names',
+    keys: ['F2'],
+    runs: ['rename'],
+    does: 'Rename the mark at the cursor, wherever it is read',
+  },
+  {
+    scope: 'entry',
+    group: 'Names',
+    keys: ['F2'],
+    runs: ['rename'],
+    does: 'Rename the mark of the line that has the focus',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Mod+Enter', 'Alt+Enter'],
+    runs: ['dimensionBelow', 'dimensionAbove'],
+    does: 'Add a dimension cell below, above',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Mod+Shift+Enter', 'Alt+Shift+Enter'],
+    runs: ['noteBelow', 'noteAbove'],
+    does: 'Add a note below, above',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Alt+↑', 'Alt+↓'],
+    runs: ['moveUp', 'moveDown'],
+    does: 'Move the cell up, down',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Alt+Shift+C'],
+    runs: ['copy'],
+    does: 'Copy the value of the line: open the choice of forms',
+  },
+  {
+    scope: 'entry',
+    group: 'Cells',
+    keys: ['Delete'],
+    runs: ['remove'],
+    does: 'Delete the cell that has the focus; undo brings it back',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Alt+Shift+Delete', 'Alt+Shift+Backspace'],
+    runs: ['remove', 'remove'],
+    does: 'Delete the cell, its source open or not',
+  },
+  {
+    scope: 'entry',
+    group: 'Getting about',
+    keys: ['↑', '↓'],
+    runs: ['entryBefore', 'entryAfter'],
+    does: 'Go to the line above, below',
+  },
+  {
+    scope: 'source',
+    group: 'Getting about',
+    keys: ['↑', '↓'],
+    runs: ['lineBefore', 'lineAfter'],
+    does: 'In an open source: go on to the line above, below',
+  },
+  {
+    scope: 'cell',
+    group: 'Getting about',
+    keys: ['Alt+PageUp', 'Alt+PageDown'],
+    runs: ['cellBefore', 'cellAfter'],
+    does: 'Go to the cell before, after',
+  },
+  {
+    scope: 'cell',
+    group: 'Getting about',
+    keys: ['Alt+Shift+PageUp', 'Alt+Shift+PageDown'],
+    runs: ['headingBefore', 'headingAfter'],
+    does: 'Go to the heading before, after',
+  },
+  {
+    scope: 'entry',
+    group: 'Getting about',
+    keys: ['Home', 'End'],
+    runs: ['firstEntry', 'lastEntry'],
+    does: 'Go to the first, the last line of the sheet',
+  },
+  {
+    scope: 'sheet',
+    group: 'Getting about',
+    keys: ['Mod+F'],
+    runs: ['find'],
+    does: 'Find in sources and notes',
+  },
+  {
+    scope: 'sheet',
+    group: 'Getting about',
+    keys: ['F3', 'Shift+F3'],
+    runs: ['findNext', 'findBefore'],
+    does: 'Go to the next place found, to the one before',
+  },
+  {
+    scope: 'sheet',
+    group: 'The sheet',
+    keys: ['Mod+S'],
+    runs: ['keep'],
+    does: 'Keep a version',
+  },
+  {
+    scope: 'sheet',
+    group: 'The sheet',
+    keys: ['F1'],
+    runs: ['keys'],
+    does: 'Show these keys',
+  },
+  {
+    scope: 'entry',
+    group: 'The sheet',
+    keys: ['?'],
+    runs: ['keys'],
+    does: 'Show these keys, from a line whose source is closed',
+  },
+];

@@ -10,11 +10,13 @@ interface CellToolsProps {
   id: string;
   kind: Kind;
   folded?: boolean;
+  /** The mark that the line in hand defines, if it does. */
+  mark?: string | null;
   actions: SheetActions;
 }
 
 /** What can be done with the cell that is in hand or pointed at. Every one also has a key. */
-export function CellTools({ id, kind, folded = false, actions }: CellToolsProps) {
+export function CellTools({ id, kind, folded = false, mark = null, actions }: CellToolsProps) {
   return (
     <div
       role="group"
@@ -42,6 +44,11 @@ export function CellTools({ id, kind, folded = false, actions }: CellToolsProps)
       <Button look="quiet" onClick={() => actions.fold(id)}>
         {kind === 'section' && folded ? 'Open' : 'Fold'}
       </Button>
+      {mark !== null && (
+        <Button look="quiet" onClick={() => actions.rename(mark)}>
+          Rename {mark}
+        </Button>
+      )}
       <Button look="quiet" onClick={() => actions.remove(id)}>
         Delete
       </Button>

@@ -1,5 +1,5 @@
 import type { NotebookCell } from '@/lib/notebooks/content';
-import type { KnownMark } from './editor/completion';
+import type { SheetNames } from './editor/names';
 import type { Change } from './state/changes';
 
 /** What is in hand: a cell, one of its lines, and where in that line the cursor begins. */
@@ -13,15 +13,13 @@ export interface Hand {
 
 export const AT_END = Number.MAX_SAFE_INTEGER;
 
-/** What a cell may ask of its sheet; one stable object, so that cells are drawn only when they change. */
-export interface SheetActions {
+/** What a cell may ask of its sheet for itself; one stable object, so that cells are drawn only when they change. */
+export interface CellActions extends Pick<SheetNames, 'marks'> {
   dispatch: (change: Change) => void;
   /** Takes a line in hand (its source opens), or puts down whatever was. */
   take: (hand: Hand | null) => void;
   /** Goes from the line in hand to the one above or below, into the next cell if need be. */
   step: (hand: Hand, by: -1 | 1) => boolean;
-  /** The marks of the sheet as they stand, for completing a name. */
-  marks: () => readonly KnownMark[];
   /** Puts an empty cell beside another, or at the end, and takes it in hand. */
   insert: (kind: NotebookCell['kind'], beside: string | null, where: 'before' | 'after') => void;
   /** Past the cell above or below; a folded section goes with all that it hides, here and below. */
@@ -37,10 +35,23 @@ export interface SheetActions {
   remove: (id: string) => void;
 }
 
+/** Everything a cell may ask of its sheet. */
+export interface SheetActions extends CellActions, SheetNames {
+  /** The mark that a line defines as it is written, or null. */
+  markOf: (id: string, line: number) => string | null;
+  /** Puts the focus on the cell before or after, or on the nearest heading that way. */
+  jump: (id: string, by: -1 | 1, to: 'cell' | 'heading') => boolean;
+  showKeys: () => void;
+}
+
 export const cellAnchor = (id: string) => `cell-${id}`;
 
 /** The element that takes the focus for a line while its source is closed. */
 export const entryId = (id: string, line: number) => `entry-${id}-${line}`;
+
+/** The line, from 0, that such an element stands for. */
+export const lineOfEntry = (entry: HTMLElement): number =>
+  Number(/-(\d+)$/.exec(entry.id)?.[1] ?? 0);
 
 export function focusEntry(id: string, line = 0) {
   document.getElementById(entryId(id, line))?.focus();

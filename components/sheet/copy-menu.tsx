@@ -65,7 +65,7 @@ export function CopyMenu({ result }: { result: Result }) {
     );
 
   return (
-    <div className="flex items-center gap-2 text-small">
+    <div data-copy className="flex items-center gap-2 text-small">
       <Disclosure
         label="Copy"
         name={`Copy the value of ${name}`}

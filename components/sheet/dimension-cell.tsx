@@ -5,8 +5,9 @@ import type { NotebookCell } from '@/lib/notebooks/content';
 import { CellRows } from './cell-rows';
 import { CellTools } from './cell-tools';
 import { AT_END, cellAnchor, entryId, focusEntry, type Hand, type SheetActions } from './cells';
-import { onCellKey } from './cell-keys';
+import { onCellKey } from './keys/on-cell-key';
 import { CopyMenu } from './copy-menu';
+import { markDefinedBy } from './editor/names';
 import { SourceEditor } from './editor/source-editor';
 import { linesOf } from './source-text';
 import { joinAfter, joinBefore, replaceLine, type LineEdit } from './state/line-edits';
@@ -52,7 +53,7 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
           label={`Line ${index + 1} of ${label}`}
           results={results}
           meanwhile={standing}
-          marks={actions.marks}
+          names={actions}
           onWrite={(written, cursor) =>
             edit(replaceLine(source, index, written, cursor), !written.includes('\n'))
           }
@@ -107,7 +108,12 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
       />
       {hand && (
         <div className="mt-3 sm:ml-[6.125rem]">
-          <CellTools id={id} kind="dimension" actions={actions} />
+          <CellTools
+            id={id}
+            kind="dimension"
+            mark={markDefinedBy(linesOf(source)[hand.line] ?? '')}
+            actions={actions}
+          />
         </div>
       )}
     </section>

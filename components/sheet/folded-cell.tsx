@@ -3,7 +3,7 @@
 import type { NotebookCell } from '@/lib/notebooks/content';
 import { Mark } from '@/components/drawing/balloon';
 import { cellAnchor, entryId, type SheetActions } from './cells';
-import { onCellKey } from './cell-keys';
+import { onCellKey } from './keys/on-cell-key';
 import type { ShownLine } from './state/shown';
 import { sayBriefly } from './wording';
 

@@ -4,7 +4,7 @@ import { memo, type MouseEvent } from 'react';
 import type { NotebookCell } from '@/lib/notebooks/content';
 import { CellTools } from './cell-tools';
 import { AT_END, cellAnchor, entryId, focusEntry, type Hand, type SheetActions } from './cells';
-import { onCellKey } from './cell-keys';
+import { onCellKey } from './keys/on-cell-key';
 import { SourceEditor } from './editor/source-editor';
 import { NoteText } from './note-text';
 

@@ -3,7 +3,7 @@
 import { memo, useLayoutEffect, useRef, type KeyboardEvent } from 'react';
 import { CONTENT_LIMITS, type NotebookCell } from '@/lib/notebooks/content';
 import { SectionRule } from '@/components/drawing/section-rule';
-import { onCellKey } from './cell-keys';
+import { onCellKey } from './keys/on-cell-key';
 import { CellTools } from './cell-tools';
 import { AT_END, cellAnchor, entryId, focusEntry, type Hand, type SheetActions } from './cells';
 

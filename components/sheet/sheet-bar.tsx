@@ -15,6 +15,8 @@ interface SheetBarProps {
   mayWrite: boolean;
   mayShare: boolean;
   onPanel: (panel: Panel) => void;
+  onFind: () => void;
+  onKeys: () => void;
 }
 
 const STATES = {
@@ -26,7 +28,7 @@ const STATES = {
 
 /** Above the sheet: which one it is, whether it is kept, and what can be done with it as a whole. */
 export function SheetBar(props: SheetBarProps) {
-  const { notebook, sheet, evaluation, mayWrite, mayShare, onPanel } = props;
+  const { notebook, sheet, evaluation, mayWrite, mayShare, onPanel, onFind, onKeys } = props;
   return (
     <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2">
       <div className="min-w-0">
@@ -60,6 +62,8 @@ export function SheetBar(props: SheetBarProps) {
             <Button onClick={() => onPanel('settings')}>Unit and step</Button>
           </>
         )}
+        <Button onClick={onFind}>Find</Button>
+        <Button onClick={onKeys}>Keys</Button>
         <LinkButton href={`/notebooks/${notebook.id}/versions`}>Versions</LinkButton>
         <Disclosure
           label="Hand over"

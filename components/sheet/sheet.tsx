@@ -1,13 +1,15 @@
 'use client';
 
-import { useEffect, useState } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 import { SWRConfig } from 'swr';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { TitleBlock } from '@/components/drawing/title-block';
-import type { Hand } from './cells';
+import type { Hand, SheetActions } from './cells';
 import { preloadEditor } from './editor/source-editor';
 import { Entries } from './entries';
+import { preloadAids, useAids } from './keys/use-aids';
+import { useSheetKeys } from './keys/use-sheet-keys';
 import { Removed } from './removed';
 import { SheetBar } from './sheet-bar';
 import { SheetDialogs, type Panel } from './sheet-dialogs';
@@ -63,32 +65,28 @@ function SheetOnScreen(props: SheetProps) {
   const [said, say] = useState('');
   const { folds, setFold } = useFolds(props.personId, notebook.id);
   const { shown } = evaluation;
-  const actions = useSheetActions({ content, shown, folds, dispatch, setFold, setHand, say });
+  const cellActions = useSheetActions({ content, shown, folds, dispatch, setFold, setHand, say });
+  const aids = useAids({ content, hand, mayWrite, actions: cellActions });
+  const actions = useMemo<SheetActions>(
+    () => ({ ...cellActions, ...aids.actions }),
+    [cellActions, aids.actions],
+  );
 
   useEffect(() => {
-    if (!mayWrite) return;
-    if ('requestIdleCallback' in window) window.requestIdleCallback(() => preloadEditor());
-    else setTimeout(preloadEditor, 800);
+    const preload = () => {
+      if (mayWrite) preloadEditor();
+      preloadAids();
+    };
+    if ('requestIdleCallback' in window) window.requestIdleCallback(preload);
+    else setTimeout(preload, 800);
   }, [mayWrite]);
 
-  useEffect(() => {
-    const onKey = (event: KeyboardEvent) => {
-      if (!mayWrite || !(event.ctrlKey || event.metaKey) || event.altKey) return;
-      const key = event.key.toLowerCase();
-      if (key === 's') {
-        event.preventDefault();
-        if (sheet.dirty && panel === null) setPanel('keep');
-        return;
-      }
-      const inField =
-        event.target instanceof Element && event.target.closest('input, textarea, dialog');
-      if (inField || (key !== 'z' && key !== 'y')) return;
-      event.preventDefault();
-      (key === 'y' || event.shiftKey ? redo : undo)?.();
-    };
-    window.addEventListener('keydown', onKey);
-    return () => window.removeEventListener('keydown', onKey);
-  }, [mayWrite, panel, redo, sheet.dirty, undo]);
+  useSheetKeys({
+    ...aids.keys,
+    undo: mayWrite ? undo : null,
+    redo: mayWrite ? redo : null,
+    keep: mayWrite && sheet.dirty && panel === null ? () => setPanel('keep') : null,
+  });
 
   const spoken =
     hand !== null && evaluation.state === 'settled'
@@ -107,7 +105,10 @@ function SheetOnScreen(props: SheetProps) {
         mayWrite={mayWrite}
         mayShare={props.mayShare}
         onPanel={setPanel}
+        onFind={aids.keys.find}
+        onKeys={aids.keys.keys}
       />
+      {aids.bar}
       <SheetNews
         sheet={sheet}
         evaluation={evaluation}
@@ -155,6 +156,7 @@ function SheetOnScreen(props: SheetProps) {
         mayShare={props.mayShare}
         onClose={() => setPanel(null)}
       />
+      {aids.dialogs}
     </div>
   );
 }

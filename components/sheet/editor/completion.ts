@@ -1,39 +1,86 @@
-import type { Completion, CompletionContext, CompletionResult } from '@codemirror/autocomplete';
+import {
+  insertCompletionText,
+  pickedCompletion,
+  type Completion,
+  type CompletionContext,
+  type CompletionResult,
+} from '@codemirror/autocomplete';
+import type { EditorView } from '@codemirror/view';
 import { CONSTANTS, FUNCTIONS, UNITS } from '@/lib/language/names';
-
-/** A mark of the sheet, with its size as the index of marks shows it. */
-export interface KnownMark {
-  name: string;
-  size: string;
-}
-
-const WORDS: readonly Completion[] = [
-  ...FUNCTIONS.map(({ name, signature, meaning }) => ({
-    label: name,
-    detail: signature.slice(name.length),
-    info: meaning,
-    apply: `${name}(`,
-  })),
-  ...[...UNITS, ...CONSTANTS].map(({ name, meaning }) => ({ label: name, detail: meaning })),
-];
+import type { KnownMark } from './names';
+import { codeLength, findFacts } from './word-at';
+import { drawWordCard } from './word-card';
 
 /** A name begins so; shorter ones are typed faster than chosen. */
 const NAME = /[\p{L}][\p{L}\p{N}_]*/u;
 const SHORTEST = 2;
+/** Directly after a number a unit is likely, and its first letter is enough. */
+const AFTER_NUMBER = /[\d.]\s*$/;
 
-/** Offers marks of the sheet, then the words of the language; nothing where the word is whole. */
+/** Puts the brackets of a call and stands between them; brackets that are there already serve. */
+function applyCall(view: EditorView, completion: Completion, from: number, to: number) {
+  const open = view.state.sliceDoc(to, to + 1) === '(';
+  const text = open ? completion.label : `${completion.label}()`;
+  const change = insertCompletionText(view.state, text, from, to);
+  view.dispatch({
+    ...change,
+    selection: { anchor: from + completion.label.length + 1 },
+    annotations: pickedCompletion.of(completion),
+  });
+}
+
+function infoOf(name: string, marks: readonly KnownMark[]) {
+  return () => {
+    const facts = findFacts(name, marks);
+    return facts && drawWordCard(facts);
+  };
+}
+
+const unitWords: readonly Completion[] = UNITS.map(({ name, meaning }) => ({
+  label: name,
+  detail: meaning,
+  type: 'unit',
+}));
+
+const otherWords: readonly Completion[] = [
+  ...FUNCTIONS.map(({ name, signature }) => ({
+    label: name,
+    detail: signature.slice(name.length),
+    type: 'function',
+    info: infoOf(name, []),
+    apply: applyCall,
+  })),
+  ...CONSTANTS.map(({ name, meaning }) => ({ label: name, detail: meaning, type: 'constant' })),
+];
+
+const boosted = (options: readonly Completion[], boost: number) =>
+  options.map((option) => ({ ...option, boost }));
+
+/** Offers marks of the sheet, then the words of the language, units first after a number; nothing where the word is whole. */
 export function completeFrom(marks: () => readonly KnownMark[]) {
   return (context: CompletionContext): CompletionResult | null => {
+    const { state, pos, explicit } = context;
+    const line = state.doc.lineAt(pos);
+    if (pos - line.from > codeLength(line.text)) return null;
     const before = context.matchBefore(NAME);
-    const remark = context.state.sliceDoc(0, context.pos).includes('#');
-    if (remark || (!before && !context.explicit)) return null;
+    if (!before && !explicit) return null;
     const word = before?.text ?? '';
-    if (word.length < SHORTEST && !context.explicit) return null;
-    const options: Completion[] = [
-      ...marks().map(({ name, size }) => ({ label: name, detail: size, boost: 10 })),
-      ...WORDS,
+    const from = before?.from ?? pos;
+    const afterNumber = AFTER_NUMBER.test(state.sliceDoc(line.from, from));
+    if (!explicit && word.length < (afterNumber ? 1 : SHORTEST)) return null;
+    const known = marks();
+    const offered: Completion[] = [
+      ...known.map(({ name, size }) => ({
+        label: name,
+        detail: size,
+        type: 'mark',
+        boost: 10,
+        info: infoOf(name, known),
+      })),
+      ...boosted(unitWords, afterNumber ? 50 : -5),
+      ...otherWords,
     ];
-    if (options.some(({ label }) => label === word)) return null;
-    return { from: before?.from ?? context.pos, options, validFor: /^[\p{L}\p{N}_]*$/u };
+    if (!explicit && offered.some(({ label }) => label === word)) return null;
+    return { from, options: offered, validFor: /^[\p{L}\p{N}_]*$/u };
   };
 }

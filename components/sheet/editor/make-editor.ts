@@ -1,19 +1,26 @@
-import { autocompletion, completionStatus } from '@codemirror/autocomplete';
-import { insertNewline, standardKeymap } from '@codemirror/commands';
 import {
-  bracketMatching,
-  HighlightStyle,
-  Language,
-  LRLanguage,
-  syntaxHighlighting,
-} from '@codemirror/language';
+  acceptCompletion,
+  autocompletion,
+  closeBrackets,
+  closeBracketsKeymap,
+  completionStatus,
+  startCompletion,
+} from '@codemirror/autocomplete';
+import { insertNewline, standardKeymap } from '@codemirror/commands';
+import { bracketMatching, Language, LRLanguage, syntaxHighlighting } from '@codemirror/language';
 import { setDiagnostics, type Diagnostic } from '@codemirror/lint';
 import { Annotation, EditorState, Prec } from '@codemirror/state';
-import { EditorView, keymap, placeholder } from '@codemirror/view';
-import { tags } from '@lezer/highlight';
+import { EditorView, keymap, placeholder, type Command } from '@codemirror/view';
 import { documentNonce } from '@/components/ui/nonce';
-import { completeFrom, type KnownMark } from './completion';
+import { findFunction } from '@/lib/language/names';
 import { parser } from '@/lib/language/parser/cell.parser';
+import type { SourceCommand } from '../cell-keys';
+import { editorKeys } from '../keys/chord';
+import { aboutWords, hideCard, sayWordAtCursor, wordIn } from './about-word';
+import { completeFrom } from './completion';
+import { highlighting, theme } from './look';
+import type { SheetNames } from './names';
+import { signatureHelp } from './signature';
 
 export interface EditorOptions {
   parent: HTMLElement;
@@ -29,8 +36,8 @@ export interface EditorOptions {
   onLeave: (to: 'here' | 'before' | 'after', column: number) => boolean;
   /** Backspace at the beginning or Delete at the end: the neighbouring line is to be joined. */
   onJoin?: (side: 'before' | 'after') => boolean;
-  /** Names to complete from, in a dimension cell. */
-  marks?: () => readonly KnownMark[];
+  /** The names of the sheet, for a dimension cell. */
+  names?: SheetNames;
 }
 
 export interface PlacedFault {
@@ -47,65 +54,10 @@ export interface EditorHandle {
   destroy: () => void;
 }
 
-const cellLanguage: Language = LRLanguage.define({ name: 'cell', parser });
-
-const highlighting = HighlightStyle.define([
-  { tag: tags.definition(tags.variableName), color: 'var(--ruddle)', fontWeight: '500' },
-  { tag: tags.function(tags.variableName), color: 'var(--snapline)' },
-  { tag: tags.constant(tags.variableName), color: 'var(--snapline)' },
-  { tag: tags.unit, color: 'var(--lichen)' },
-  { tag: tags.lineComment, color: 'var(--soft)', fontStyle: 'italic' },
-]);
-
-const theme = EditorView.theme({
-  '&': { color: 'var(--ink)', backgroundColor: 'transparent', fontSize: '0.9375rem' },
-  '&.cm-focused': { outline: 'none' },
-  '.cm-content': {
-    fontFamily: 'var(--font-mono), monospace',
-    lineHeight: '1.5rem',
-    padding: '0',
-    caretColor: 'var(--ruddle)',
-  },
-  '.cm-line': { padding: '0' },
-  '.cm-scroller': { fontFamily: 'inherit', lineHeight: '1.5rem' },
-  '.cm-cursor': { borderLeftColor: 'var(--ruddle)', borderLeftWidth: '2px' },
-  '.cm-placeholder': { color: 'var(--soft)' },
-  '.cm-matchingBracket, &.cm-focused .cm-matchingBracket': {
-    backgroundColor: 'var(--snapline-wash)',
-    outline: '1px solid var(--snapline)',
-  },
-  '.cm-lintRange-error': {
-    backgroundImage: 'none',
-    textDecoration: 'underline wavy 1px var(--ruddle)',
-    textUnderlineOffset: '4px',
-    backgroundColor: 'var(--ruddle-wash)',
-  },
-  '.cm-lintRange-warning': {
-    backgroundImage: 'none',
-    textDecoration: 'underline dotted 2px var(--ochre)',
-    textUnderlineOffset: '4px',
-  },
-  '.cm-tooltip': {
-    border: '1px solid var(--ink)',
-    backgroundColor: 'var(--sheet)',
-    color: 'var(--ink)',
-    fontFamily: 'var(--font-grotesque), sans-serif',
-    fontSize: '0.8125rem',
-  },
-  '.cm-tooltip.cm-tooltip-autocomplete > ul': { fontFamily: 'var(--font-mono), monospace' },
-  '.cm-tooltip-autocomplete ul li[aria-selected]': {
-    backgroundColor: 'var(--snapline-wash)',
-    color: 'var(--ink)',
-  },
-  '.cm-completionDetail': { color: 'var(--soft)', fontStyle: 'normal' },
-  '.cm-completionMatchedText': {
-    textDecoration: 'none',
-    fontWeight: '500',
-    color: 'var(--snapline)',
-  },
-  '.cm-diagnostic': { padding: '0.25rem 0.5rem' },
-  '.cm-diagnostic-warning': { borderLeft: '3px solid var(--ochre)' },
-  '.cm-diagnostic-error': { borderLeft: '3px solid var(--ruddle)' },
+const cellLanguage: Language = LRLanguage.define({
+  name: 'cell',
+  parser,
+  languageData: { closeBrackets: { brackets: ['(', '['], before: ')],' } },
 });
 
 /** Marks a change that came from outside (undo of the notebook, another version), not from typing. */
@@ -113,24 +65,41 @@ const fromOutside = Annotation.define<boolean>();
 
 const PLACEHOLDERS = { dimension: 'p = 2 R sin(turn/34)', note: 'A note, in Markdown' } as const;
 
-const dimensionExtensions = (marks: EditorOptions['marks']) => [
+const NO_NAMES: SheetNames = { marks: () => [], goTo: () => false, rename: () => false };
+
+const dimensionExtensions = (names: SheetNames) => [
   cellLanguage,
   syntaxHighlighting(highlighting),
   bracketMatching(),
+  closeBrackets(),
   autocompletion({
-    override: [completeFrom(marks ?? (() => []))],
+    override: [completeFrom(names.marks)],
     icons: false,
     // Enter ends the line unless a name has been chosen with the arrows.
     selectOnOpen: false,
+    defaultKeymap: true,
+  }),
+  signatureHelp((name) => findFunction(name)?.signature ?? null),
+  aboutWords(names.marks),
+  EditorView.domEventHandlers({
+    mousedown(event, view) {
+      if (event.button !== 0 || !(event.ctrlKey || event.metaKey)) return false;
+      const at = view.posAtCoords({ x: event.clientX, y: event.clientY });
+      const word = at === null ? null : wordIn(view.state, at);
+      return word !== null && names.goTo(word.name);
+    },
   }),
 ];
 
 /** Whether names to choose from are on the screen; then the arrows and Escape are for them. */
 const isChoosing = (view: EditorView) => completionStatus(view.state) === 'active';
 
+const nameAtCursor = (view: EditorView) =>
+  wordIn(view.state, view.state.selection.main.head)?.name ?? null;
+
 /** Opens a source in place. Loaded only when the first line is taken in hand. */
 export function makeEditor(options: EditorOptions): EditorHandle {
-  const { kind, label, onWrite, onLeave, onJoin } = options;
+  const { kind, label, onWrite, onLeave, onJoin, names = NO_NAMES } = options;
   const nonce = documentNonce();
   const atEdge = (view: EditorView, edge: 'before' | 'after') => {
     const { main } = view.state.selection;
@@ -146,6 +115,27 @@ export function makeEditor(options: EditorOptions): EditorHandle {
     const edge = side === 'before' ? 0 : view.state.doc.length;
     return main.empty && main.head === edge && (onJoin?.(side) ?? false);
   };
+  /** The name under the cursor; where there is none, the mark that the line defines. */
+  const rename = (view: EditorView) => {
+    const here = nameAtCursor(view);
+    if (here !== null && names.rename(here)) return true;
+    const own = wordIn(view.state, view.state.doc.toString().search(/\S/))?.name;
+    return own !== undefined && names.rename(own);
+  };
+  const commands: Record<SourceCommand, Command> = {
+    close: (view) => !isChoosing(view) && (hideCard(view) || onLeave('here', 0)),
+    lineBefore: (view) => !isChoosing(view) && atEdge(view, 'before'),
+    lineAfter: (view) => !isChoosing(view) && atEdge(view, 'after'),
+    // A line of a sheet begins at its margin, whatever bracket the one before left open.
+    newLine: insertNewline,
+    offer: startCompletion,
+    about: (view) => sayWordAtCursor(view, names.marks),
+    goTo: (view) => names.goTo(nameAtCursor(view) ?? ''),
+    rename,
+  };
+  const bound = (command: SourceCommand) =>
+    editorKeys(command).map((key) => ({ key, run: commands[command] }));
+  const named: SourceCommand[] = kind === 'dimension' ? ['offer', 'about', 'goTo', 'rename'] : [];
   const view = new EditorView({
     parent: options.parent,
     state: EditorState.create({
@@ -155,17 +145,15 @@ export function makeEditor(options: EditorOptions): EditorHandle {
         nonce ? EditorView.cspNonce.of(nonce) : [],
         Prec.highest(
           keymap.of([
-            { key: 'Escape', run: (view) => !isChoosing(view) && onLeave('here', 0) },
-            { key: 'ArrowUp', run: (view) => !isChoosing(view) && atEdge(view, 'before') },
-            { key: 'ArrowDown', run: (view) => !isChoosing(view) && atEdge(view, 'after') },
+            ...(['close', 'lineBefore', 'lineAfter', ...named] as const).flatMap(bound),
             { key: 'Backspace', run: (view) => join(view, 'before') },
             { key: 'Delete', run: (view) => join(view, 'after') },
+            ...editorKeys('accept').map((key) => ({ key, run: acceptCompletion })),
           ]),
         ),
         // No history here: the notebook has one of its own, across all cells.
-        // A line of a sheet begins at its margin, whatever bracket the one before left open.
-        keymap.of([{ key: 'Enter', run: insertNewline }, ...standardKeymap]),
-        kind === 'dimension' ? dimensionExtensions(options.marks) : [],
+        keymap.of([...closeBracketsKeymap, ...bound('newLine'), ...standardKeymap]),
+        kind === 'dimension' ? dimensionExtensions(names) : [],
         theme,
         placeholder(PLACEHOLDERS[kind]),
         EditorView.lineWrapping,

@@ -9,7 +9,7 @@ type Loaded = typeof import('./make-editor');
 
 interface SourceEditorProps extends Pick<
   EditorOptions,
-  'source' | 'kind' | 'label' | 'column' | 'marks' | 'onWrite' | 'onLeave' | 'onJoin'
+  'source' | 'kind' | 'label' | 'column' | 'names' | 'onWrite' | 'onLeave' | 'onJoin'
 > {
   results: readonly Result[];
   /** What stands here until the editor has been loaded. */

@@ -2,9 +2,9 @@
 
 import { useEffect, useState } from 'react';
 import type { NotebookCell, NotebookContent } from '@/lib/notebooks/content';
-import { AT_END, cellAnchor, focusEntry, type Hand, type SheetActions } from '../cells';
+import { AT_END, cellAnchor, focusEntry, type CellActions, type Hand } from '../cells';
+import { knownMarks } from '../editor/names';
 import { linesOf } from '../source-text';
-import { sayBriefly } from '../wording';
 import { blocksOf, hiddenBy, placeBeyond, type Folds } from './blocks';
 import { newCellId } from './changes';
 import { copiesOf } from './copies';
@@ -14,7 +14,7 @@ export interface Sheeted {
   content: NotebookContent;
   shown: Shown;
   folds: Folds;
-  dispatch: SheetActions['dispatch'];
+  dispatch: CellActions['dispatch'];
   setFold: (id: string, folded: boolean) => void;
   setHand: (hand: Hand | null) => void;
   /** Tells whoever listens what has just been done. */
@@ -27,7 +27,7 @@ const lastLine = (cell: NotebookCell) =>
 const cellsInWords = (count: number) => (count === 1 ? 'Cell' : `${count} cells`);
 
 /** The actions of the cells: one object for as long as the sheet is on the screen. */
-export function useSheetActions(sheeted: Sheeted): SheetActions {
+export function useSheetActions(sheeted: Sheeted): CellActions {
   const [{ actions, follow }] = useState(() => makeActions(sheeted));
   useEffect(() => follow(sheeted));
   return actions;
@@ -35,7 +35,7 @@ export function useSheetActions(sheeted: Sheeted): SheetActions {
 
 /** Actions on the sheet as it was last followed to. */
 function makeActions(first: Sheeted): {
-  actions: SheetActions;
+  actions: CellActions;
   follow: (sheeted: Sheeted) => void;
 } {
   let latest = first;
@@ -76,17 +76,12 @@ function makeActions(first: Sheeted): {
     });
   };
 
-  const actions: SheetActions = {
+  const actions: CellActions = {
     dispatch: (change) => now().dispatch(change),
     take,
     reveal,
     place,
-    marks: () =>
-      [...now().shown.values()]
-        .flat()
-        .flatMap(({ result }) =>
-          result.mark === null ? [] : [{ name: result.mark, size: sayBriefly(result) }],
-        ),
+    marks: () => knownMarks(now().content.cells, now().shown),
     step({ id, line, column }, by) {
       const own = now().content.cells[placeOf(id)];
       if (own?.kind === 'dimension' && linesOf(own.source)[line + by] !== undefined) {
