@@ -114,7 +114,7 @@ export const KEYS: readonly Key[] = [
     group: 'Names',
     keys: ['F8'],
     runs: ['goTo'],
-    does: 'Go to the line that defines the name at the cursor; Mod and a press on it do the same',
+    does: 'Go to the line that defines the name at the cursor; a press on it with Ctrl or Cmd does the same',
   },
   {
     scope: 'sheet',

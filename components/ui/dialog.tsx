@@ -15,10 +15,12 @@ interface DialogProps {
 export function Dialog({ title, onClose, children, wide = false }: DialogProps) {
   const box = useRef<HTMLDialogElement>(null);
   const heading = useId();
+  /** What had the focus before; an effect that runs a second time must not take the dialog for it. */
+  const opener = useRef<Element | null>(null);
 
   useEffect(() => {
     const dialog = box.current;
-    const before = document.activeElement;
+    const before = (opener.current ??= document.activeElement);
     if (dialog && !dialog.open) dialog.showModal();
     // Of itself the browser would choose the first button, which closes.
     dialog?.querySelector<HTMLElement>('input, select, textarea')?.focus();

@@ -1,4 +1,5 @@
 import {
+  insertBracket,
   insertCompletionText,
   pickedCompletion,
   type Completion,
@@ -19,14 +20,15 @@ const AFTER_NUMBER = /[\d.]\s*$/;
 
 /** Puts the brackets of a call and stands between them; brackets that are there already serve. */
 function applyCall(view: EditorView, completion: Completion, from: number, to: number) {
-  const open = view.state.sliceDoc(to, to + 1) === '(';
-  const text = open ? completion.label : `${completion.label}()`;
-  const change = insertCompletionText(view.state, text, from, to);
+  const { label } = completion;
+  const isOpen = view.state.sliceDoc(to, to + 1) === '(';
   view.dispatch({
-    ...change,
-    selection: { anchor: from + completion.label.length + 1 },
+    ...insertCompletionText(view.state, label, from, to),
     annotations: pickedCompletion.of(completion),
   });
+  // Put as if typed, so that the closing one can be typed over.
+  const brackets = isOpen ? null : insertBracket(view.state, '(');
+  view.dispatch(brackets ?? { selection: { anchor: from + label.length + 1 } });
 }
 
 function infoOf(name: string, marks: readonly KnownMark[]) {

@@ -52,12 +52,12 @@ export const theme = EditorView.theme({
     // Above the strip of the sheet that stays at the top.
     zIndex: '40',
   },
-  '.cm-tooltip .signature-line': {
+  '.cm-tooltip.signature-line': {
     fontFamily: 'var(--font-mono), monospace',
     padding: '0.0625rem 0.5rem',
     color: 'var(--soft)',
   },
-  '.cm-tooltip .signature-line b': {
+  '.cm-tooltip.signature-line b': {
     fontWeight: '600',
     color: 'var(--ink)',
     borderBottom: '2px solid var(--ruddle)',
@@ -68,11 +68,18 @@ export const theme = EditorView.theme({
     border: '1px solid var(--rule)',
   },
   '.cm-tooltip.cm-tooltip-autocomplete > ul': { fontFamily: 'var(--font-mono), monospace' },
+  '.cm-tooltip.cm-tooltip-autocomplete > ul > li': {
+    padding: '0.125rem 0.625rem',
+    lineHeight: '1.25rem',
+    display: 'flex',
+    justifyContent: 'space-between',
+    gap: '1.5rem',
+  },
   '.cm-tooltip-autocomplete ul li[aria-selected]': {
     backgroundColor: 'var(--snapline-wash)',
     color: 'var(--ink)',
   },
-  '.cm-completionDetail': { color: 'var(--soft)', fontStyle: 'normal' },
+  '.cm-completionDetail': { color: 'var(--soft)', fontStyle: 'normal', marginLeft: '0' },
   '.cm-completionMatchedText': {
     textDecoration: 'none',
     fontWeight: '500',

@@ -19,7 +19,7 @@ import { editorKeys } from '../keys/chord';
 import { aboutWords, hideCard, sayWordAtCursor, wordIn } from './about-word';
 import { completeFrom } from './completion';
 import { highlighting, theme } from './look';
-import type { SheetNames } from './names';
+import { markDefinedBy, type SheetNames } from './names';
 import { signatureHelp } from './signature';
 
 export interface EditorOptions {
@@ -119,8 +119,8 @@ export function makeEditor(options: EditorOptions): EditorHandle {
   const rename = (view: EditorView) => {
     const here = nameAtCursor(view);
     if (here !== null && names.rename(here)) return true;
-    const own = wordIn(view.state, view.state.doc.toString().search(/\S/))?.name;
-    return own !== undefined && names.rename(own);
+    const own = markDefinedBy(view.state.doc.toString());
+    return own !== null && names.rename(own);
   };
   const commands: Record<SourceCommand, Command> = {
     close: (view) => !isChoosing(view) && (hideCard(view) || onLeave('here', 0)),

@@ -80,8 +80,8 @@ export function findDefinition(
   cells: readonly { id: string; kind: string; source: string }[],
   name: string,
 ): LinePlace | null {
-  const begins = new RegExp(String.raw`^\s*(${name})\s*(?:\([^()]*\)\s*)?=(?!=)`, 'u');
   if (!/^\p{L}[\p{L}\p{N}_]*$/u.test(name)) return null;
+  const begins = new RegExp(String.raw`^\s*(${name})\s*(?:\([^()]*\)\s*)?=(?!=)`, 'u');
   for (const { id, kind, source } of cells) {
     if (kind !== 'dimension' || !source.includes(name)) continue;
     const lines = source.split(/\r?\n/);

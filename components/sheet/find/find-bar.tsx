@@ -108,7 +108,8 @@ export function FindBar(props: FindBarProps) {
           : `${index + 1} of ${hits.length}, in cell ${place}`;
 
   return (
-    <search
+    <div
+      role="search"
       aria-label="Find on this sheet"
       onKeyDown={onKey}
       className="sticky top-0 z-30 block border border-l-4 border-ochre bg-sheet px-3 py-2 print:hidden"
@@ -190,6 +191,6 @@ export function FindBar(props: FindBarProps) {
           </Button>
         </div>
       )}
-    </search>
+    </div>
   );
 }

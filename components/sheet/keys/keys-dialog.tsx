@@ -40,12 +40,12 @@ export function KeysDialog({ onClose }: { onClose: () => void }) {
                   key={does}
                   className="grid grid-cols-[minmax(0,1fr)_auto] items-baseline gap-x-4 border-b border-hairline py-1"
                 >
-                  <dt className="order-2 flex flex-col items-end gap-1">
+                  <dt className="order-2 flex max-w-48 flex-wrap justify-end gap-x-2 gap-y-1">
                     {keys.map((written) => (
                       <Chord key={written} written={written} mac={mac} />
                     ))}
                   </dt>
-                  <dd className="text-base">{mac ? does : does.replace('Mod', 'Ctrl')}</dd>
+                  <dd className="text-base">{does}</dd>
                 </div>
               ))}
             </dl>
