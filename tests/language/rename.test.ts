@@ -75,11 +75,11 @@ describe('renaming a mark', () => {
       cell('b', 'x = 1'),
       cell('c', 's/R'),
     ];
-    const { cells: after, places, changed } = renamed(cells, 'R', 'radius');
+    const { cells: after, places, changed } = renamed(cells, 'R', 'outer');
     expect(after.map(({ source }) => source)).toEqual([
-      'radius = 1200 mm\ns = 2radius sin(turn/34)',
+      'outer = 1200 mm\ns = 2outer sin(turn/34)',
       'x = 1',
-      's/radius',
+      's/outer',
     ]);
     expect([places, changed]).toEqual([3, 2]);
     expect(after[1]).toBe(cells[1]);

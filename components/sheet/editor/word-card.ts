@@ -38,7 +38,7 @@ export function drawWordCard(facts: WordFacts): HTMLElement {
     card.append(sentence('word-card-text', facts.meaning));
     return card;
   }
-  const { name, tex, decimal, cut, fault, where } = facts.mark;
+  const { name, size, tex, decimal, cut, fault, where } = facts.mark;
   head.append(
     element('span', 'word-card-name', name),
     element('span', 'word-card-note', `defined in ${where}`),
@@ -56,11 +56,11 @@ export function drawWordCard(facts: WordFacts): HTMLElement {
     });
     card.append(value);
   }
-  if (decimal !== null || cut !== null) {
-    const figures = element('dl', 'word-card-figures');
-    if (decimal !== null) figures.append(compartment('Decimal', decimal));
-    if (cut !== null) figures.append(compartment('Cut size', cut));
-    card.append(figures);
-  }
+  const figures = element('dl', 'word-card-figures');
+  if (decimal !== null) figures.append(compartment('Decimal', decimal));
+  if (cut !== null) figures.append(compartment('Cut size', cut));
+  // A point or a circle has no single decimal: what the index says of it stands here.
+  if (decimal === null && fault === null) figures.append(compartment('Value', size));
+  if (figures.hasChildNodes()) card.append(figures);
   return card;
 }

@@ -124,7 +124,7 @@ export function FindBar(props: FindBarProps) {
           type="text"
           value={query.text}
           onChange={(event) => look({ ...query, text: event.target.value })}
-          placeholder="In sources and notes"
+          placeholder="In sources, notes and headings"
           autoComplete="off"
           autoCapitalize="off"
           spellCheck={false}

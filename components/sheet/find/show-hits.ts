@@ -5,7 +5,7 @@ import { patternOf, type Hit } from './find-hits';
 const ALL = 'found';
 const CURRENT = 'found-here';
 
-const TEXTS = 'code, .cm-line, .prose-note';
+const TEXTS = 'code, .cm-line, .prose-note, h2';
 
 /** The element in which a hit is read: its line, open or closed, or its cell. */
 export function elementOf({ id, line, kind }: Hit): HTMLElement | null {
@@ -73,7 +73,7 @@ function currentRange(current: Hit, hits: readonly Hit[], pattern: RegExp): Rang
   const element = elementOf(current);
   if (!element) return null;
   const ofLine = hits.filter(
-    ({ id, line, kind }) => id === current.id && (kind === 'note' || line === current.line),
+    ({ id, line, kind }) => id === current.id && (kind !== 'dimension' || line === current.line),
   );
   const ranges = textsOf(element).flatMap((one) => rangesIn(one, pattern));
   return ranges[ofLine.indexOf(current)] ?? null;
