@@ -1,34 +1,68 @@
-/** What the help page says, as data: the page only sets it. Functions and units come from the language. */
-export const EXAMPLES = [
+/** What the reference says beside the language's own words, as data: the page only sets it. */
+export const FORMS = [
   {
-    name: 'R = 1200 mm',
-    meaning: 'Gives a length the mark R. Order on the sheet does not matter.',
+    name: 'mark',
+    form: 'mark = value',
+    meaning:
+      'Gives a value a mark that other lines read, wherever they stand on the sheet. A mark is given once; names of units and functions cannot be marks.',
+    example: 'R = 1200 mm\ns = 2 R sin(turn/34)',
   },
   {
-    name: 's = 2 R sin(turn/34)',
-    meaning: 'A side of a regular seventeen-sided figure, from the mark R.',
+    name: 'value',
+    form: 'value',
+    meaning:
+      'Sums, differences, products, quotients and square roots of whole numbers, fractions and exact decimals: `0.1` is one tenth.',
+    example: '(1 + sqrt(5))/2',
   },
-  { name: 'sqrt(5 + 2 sqrt(6))', meaning: 'A value without a mark. √(5+2√6) is read too.' },
   {
-    name: 's^2 == 2 R^2 (1 - cos(turn/17))',
+    name: 'decision',
+    form: 'a == b, a != b, a < b, a <= b, a > b, a >= b',
     meaning: 'A statement. It is decided exactly, never by decimals.',
+    example: 'sqrt(2) + sqrt(3) == sqrt(5 + 2 sqrt(6))',
   },
-  { name: 'a < b', meaning: 'Order is decided exactly as well; so are <=, >, >= and !=.' },
   {
-    name: 'P = meet(circle(A, R), line(A, B), 2)',
-    meaning: 'A point, from marks of other points and a length. Its x and y have cut sizes.',
+    name: 'product',
+    form: '2R, 3 sqrt(2), 1/2 R',
+    meaning:
+      'A number before a name or a bracket multiplies. Multiplying and dividing go from left to right, so `1/2 R` is half of R; brackets say otherwise.',
+    example: 'R = 3\n1/2 R == (1/2) * R',
   },
-  { name: '# from drawing 14', meaning: 'A remark: whatever follows # is not read.' },
-] as const;
-
-export const RULES = [
-  'Sums, differences, products, quotients and square roots of whole numbers, fractions and exact decimals: 0.1 is one tenth.',
-  'A number before a name or a bracket multiplies: 2R, 3 sqrt(2). × ÷ · − π ° ² ³ √ are read as typed.',
-  'Multiplying and dividing go from left to right, so 1/2 R is half of R. Brackets say otherwise.',
-  'Units are checked: a length plus an angle is an error that says so. The root of an area is a length.',
-  'A name is defined once on a sheet. Names of units and functions cannot be marks.',
-  'A plain number as an angle is in radians; write turn/17, 15 deg or 15°.',
-  'Points, lines and circles: x runs to the right and y upwards, angles anticlockwise from the x-axis. A coordinate 0 needs no unit. Points are added and scaled as vectors.',
+  {
+    name: 'signs',
+    form: '× ÷ · − π ° ² ³ √',
+    meaning:
+      'Are read as typed; on a keyboard `*` `/` `-` `pi` `deg` `^2` `^3` `sqrt()` mean the same. `√` takes the next number, name or bracket.',
+    example: '√(5 + 2√6)',
+  },
+  {
+    name: 'quantity',
+    form: '1200 mm, 3/4 in, 15°',
+    meaning:
+      'A number with a unit. Units are checked: a length plus an angle is an error that says so. The root of an area is a length.',
+    example: 'sqrt((250 mm)^2 + (300 mm)^2)',
+  },
+  {
+    name: 'angle',
+    form: 'turn/17, 15 deg, 15°',
+    meaning:
+      'An angle is a part of a turn or a number of degrees; a plain number as an angle is in radians.',
+    example: 'turn/24 == 15°',
+  },
+  {
+    name: 'remark',
+    form: '# remark',
+    meaning: 'Whatever follows `#` is not read.',
+    example: 'R = 1200 mm   # from drawing 14',
+  },
+  {
+    name: 'point',
+    form: 'point(x, y), A + B, 2 A',
+    meaning:
+      'Points, lines and circles: x runs to the right and y upwards, angles anticlockwise from the x-axis. A coordinate 0 needs no unit. Points are added and scaled as vectors, and have cut sizes.',
+    example: 'A = point(0, 0)
+B = point(300 mm, 400 mm)
+(A + B)/2 == mid(A, B)',
+  },
 ] as const;
 
 export const WORDS = [

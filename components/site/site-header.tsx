@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import { Logo } from '@/components/ui/logo';
+import { ReferenceLink } from './reference-link';
 
 interface SiteHeaderProps {
   /** The person signed in; `guest` for whoever came by a client link and needs no way in. */
@@ -27,9 +28,7 @@ export function SiteHeader({ who }: SiteHeaderProps) {
             <Link className={LINK} href="/divide">
               Divide a circle
             </Link>
-            <Link className={LINK} href="/help">
-              How to write cells
-            </Link>
+            <ReferenceLink className={LINK} />
             {signedIn ? (
               <Link className={`${LINK} max-w-40 truncate`} href="/settings" title={who.name}>
                 {who.name}

@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import type { ButtonHTMLAttributes, ComponentProps } from 'react';
 
-type Look = 'main' | 'plain' | 'quiet' | 'warn';
+export type Look = 'main' | 'plain' | 'quiet' | 'warn';
 
 const BASE =
   'inline-flex items-center justify-center gap-2 whitespace-nowrap rounded-cut text-small font-medium ' +

@@ -1,14 +1,17 @@
 'use client';
 
 import { useEffect, useState } from 'react';
-import { Button } from './button';
+import { Button, type Look } from './button';
 
 interface CopyButtonProps {
   text: string;
   label: string;
+  look?: Look;
+  /** What a screen reader calls it, where the label alone does not say what is copied. */
+  name?: string;
 }
 
-export function CopyButton({ text, label }: CopyButtonProps) {
+export function CopyButton({ text, label, look = 'plain', name }: CopyButtonProps) {
   const [said, setSaid] = useState<string | null>(null);
 
   useEffect(() => {
@@ -25,7 +28,12 @@ export function CopyButton({ text, label }: CopyButtonProps) {
   };
 
   return (
-    <Button onClick={copy} aria-live="polite">
+    <Button
+      look={look}
+      onClick={copy}
+      aria-live="polite"
+      aria-label={said === null ? name : undefined}
+    >
       {said ?? label}
     </Button>
   );

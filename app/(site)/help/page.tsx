@@ -1,67 +1,146 @@
 import type { Metadata } from 'next';
 import type { ReactNode } from 'react';
-import { CAUTIONS, EXAMPLES, RULES, WORDS } from '@/components/help/text';
-import { WordTable } from '@/components/help/word-table';
+import { answersTo } from '@/components/help/answers';
+import { GROUPS, type Entry } from '@/components/help/entries';
+import { EntryText } from '@/components/help/entry-text';
+import { Filter, Filtered } from '@/components/help/filter';
+import { PutProvider } from '@/components/help/put-in';
+import { CAUTIONS, WORDS } from '@/components/help/text';
 import { KEYS } from '@/components/sheet/cell-keys';
-import { CONSTANTS, FUNCTIONS, UNITS } from '@/lib/language/names';
+import { isId } from '@/lib/accounts';
+import { currentPerson } from '@/lib/accounts/session';
+import { listNotebooks } from '@/lib/notebooks';
 
 export const metadata: Metadata = { title: 'How to write cells' };
 
-function Part({ title, children }: { title: string; children: ReactNode }) {
-  return (
-    <section className="space-y-3">
-      <h2 className="font-serif text-figure font-semibold">{title}</h2>
-      {children}
-    </section>
-  );
+interface PageProps {
+  searchParams: Promise<Record<string, string | string[] | undefined>>;
 }
 
-function List({ items }: { items: readonly string[] }) {
-  return (
-    <ul className="list-disc space-y-1.5 pl-5">
-      {items.map((item) => (
-        <li key={item}>{item}</li>
-      ))}
-    </ul>
-  );
-}
-
-const functions = FUNCTIONS.map(({ signature, meaning }) => ({ name: signature, meaning }));
 const keys = KEYS.map(({ keys: pressed, does }) => ({
   name: pressed.join('   ').replaceAll('Mod', 'Ctrl'),
   meaning: does,
 }));
 
-export default function HelpPage() {
+const textOf = ({ form, meaning, sample }: Entry) => `${form} ${meaning} ${sample ?? ''}`;
+const pairText = ({ name, meaning }: { name: string; meaning: string }) => `${name} ${meaning}`;
+const pairs = [
+  { id: 'keys', title: 'Keys', about: 'On a Mac, Cmd stands for Ctrl.', items: keys, mono: true },
+  { id: 'words', title: 'Words', about: null, items: WORDS, mono: false },
+];
+const CONTENTS = [...GROUPS, ...pairs, { id: 'cautions', title: 'Cautions' }];
+const TEXTS = [
+  ...GROUPS.flatMap(({ entries }) => entries.map(textOf)),
+  ...pairs.flatMap(({ items }) => items.map(pairText)),
+  ...CAUTIONS,
+];
+
+function Part({ id, title, children }: { id: string; title: string; children: ReactNode }) {
   return (
-    <div className="mx-auto max-w-4xl space-y-10">
-      <div>
+    <section id={id} aria-labelledby={`${id}-title`} className="pt-7">
+      <h2 id={`${id}-title`} className="mb-2 font-serif text-head font-semibold">
+        {title}
+      </h2>
+      {children}
+    </section>
+  );
+}
+
+/** The notebook that the page was opened from, when the person may write in it. */
+async function sheetBehind(asked: string | string[] | undefined) {
+  const person = await currentPerson();
+  if (person === null) return { signedIn: false, from: null };
+  if (typeof asked !== 'string' || !isId(asked)) return { signedIn: true, from: null };
+  const found = (await listNotebooks(person)).find(({ id }) => id === asked);
+  const from = found && found.role !== 'viewer' ? { id: found.id, title: found.title } : null;
+  return { signedIn: true, from };
+}
+
+export default async function HelpPage({ searchParams }: PageProps) {
+  const samples = GROUPS.flatMap(({ entries }) => entries.flatMap(({ sample }) => sample ?? []));
+  const [{ signedIn, from }, answers] = await Promise.all([
+    sheetBehind((await searchParams).from),
+    answersTo(samples),
+  ]);
+  return (
+    <div className="mx-auto grid max-w-page gap-x-10 lg:grid-cols-[13rem_minmax(0,1fr)]">
+      <nav aria-label="Contents" className="max-lg:mb-5 lg:pt-24 print:hidden">
+        <div className="lg:sticky lg:top-4 lg:max-h-[calc(100dvh-2rem)] lg:overflow-y-auto">
+          <ul className="flex flex-wrap gap-x-4 text-small lg:flex-col lg:border-t lg:border-rule">
+            {CONTENTS.map(({ id, title }) => (
+              <li key={id} className="lg:border-b lg:border-hairline">
+                <a
+                  href={`#${id}`}
+                  className="block py-1 underline-offset-4 hover:bg-snapline-wash hover:underline"
+                >
+                  {title}
+                </a>
+              </li>
+            ))}
+          </ul>
+          <div className="mt-5 hidden flex-wrap gap-x-2.5 gap-y-0.5 font-mono text-small lg:flex">
+            {GROUPS.filter(({ id }) => id !== 'forms').flatMap(({ entries }) =>
+              entries.map(({ id }) => (
+                <a key={id} href={`#${id}`} className="py-0.5 text-snapline hover:underline">
+                  {id}
+                </a>
+              )),
+            )}
+          </div>
+        </div>
+      </nav>
+      <div className="min-w-0 max-lg:row-start-1 lg:row-start-1 lg:col-start-2">
         <h1 className="font-serif text-title font-semibold">How to write cells</h1>
-        <p className="mt-2 max-w-prose text-soft">
+        <p className="mb-4 mt-2 max-w-prose font-serif text-note text-soft">
           A sheet holds dimension cells, whose lines are evaluated exactly, and notes in Markdown,
-          with TeX between dollar signs.
+          with TeX between dollar signs. Every sample below has just been worked out by this server.
         </p>
+        <PutProvider from={from}>
+          <Filter texts={TEXTS}>
+            {GROUPS.map(({ id, title, entries }) => (
+              <Filtered key={id} texts={entries.map(textOf)}>
+                <Part id={id} title={title}>
+                  {entries.map((entry) => (
+                    <Filtered key={entry.id} texts={[textOf(entry)]}>
+                      <EntryText
+                        entry={entry}
+                        results={(entry.sample && answers.get(entry.sample)) || []}
+                        signedIn={signedIn}
+                      />
+                    </Filtered>
+                  ))}
+                </Part>
+              </Filtered>
+            ))}
+            {pairs.map(({ id, title, about, items, mono }) => (
+              <Filtered key={id} texts={items.map(pairText)}>
+                <Part id={id} title={title}>
+                  {about && <p className="mb-2 text-soft">{about}</p>}
+                  {items.map((item) => (
+                    <Filtered key={item.name} texts={[pairText(item)]}>
+                      <div className="grid gap-x-6 border-t border-hairline py-1.5 sm:grid-cols-[13rem_minmax(0,1fr)]">
+                        <span className={mono ? 'font-mono text-source' : 'font-semibold'}>
+                          {item.name}
+                        </span>
+                        <span>{item.meaning}</span>
+                      </div>
+                    </Filtered>
+                  ))}
+                </Part>
+              </Filtered>
+            ))}
+            <Filtered texts={CAUTIONS}>
+              <Part id="cautions" title="Cautions">
+                <ul className="max-w-prose list-disc space-y-1.5 pl-5">
+                  {CAUTIONS.map((caution) => (
+                    <li key={caution}>{caution}</li>
+                  ))}
+                </ul>
+              </Part>
+            </Filtered>
+          </Filter>
+        </PutProvider>
       </div>
-      <Part title="Lines of a dimension cell">
-        <WordTable words={EXAMPLES} />
-        <List items={RULES} />
-      </Part>
-      <Part title="Keys">
-        <p className="text-soft">On a Mac, Cmd stands for Ctrl.</p>
-        <WordTable words={keys} />
-      </Part>
-      <Part title="Functions">
-        <WordTable words={functions} />
-      </Part>
-      <Part title="Units and constants">
-        <WordTable words={[...UNITS, ...CONSTANTS]} />
-      </Part>
-      <Part title="Words">
-        <WordTable words={WORDS} />
-      </Part>
-      <Part title="Cautions">
-        <List items={CAUTIONS} />
-      </Part>
     </div>
   );
 }
