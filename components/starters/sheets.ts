@@ -17,8 +17,8 @@ export interface Starter {
 const joined = (lines: readonly string[]) => lines.join('\n');
 const heading = (id: string, text: string): NotebookCell => ({
   id,
-  kind: 'note',
-  source: `## ${text}`,
+  kind: 'section',
+  source: text,
 });
 const note = (id: string, ...lines: string[]): NotebookCell => ({
   id,

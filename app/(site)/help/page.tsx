@@ -64,11 +64,11 @@ export default async function HelpPage({ searchParams }: PageProps) {
   ]);
   return (
     <div className="mx-auto grid max-w-page gap-x-10 lg:grid-cols-[13rem_minmax(0,1fr)]">
-      <nav aria-label="Contents" className="max-lg:mb-5 lg:pt-24 print:hidden">
-        <div className="lg:sticky lg:top-4 lg:max-h-[calc(100dvh-2rem)] lg:overflow-y-auto">
-          <ul className="flex flex-wrap gap-x-4 text-small lg:flex-col lg:border-t lg:border-rule">
+      <nav aria-label="Contents" className="pt-24 max-lg:hidden print:hidden">
+        <div className="sticky top-4 max-h-[calc(100dvh-2rem)] overflow-y-auto">
+          <ul className="border-t border-rule text-small">
             {CONTENTS.map(({ id, title }) => (
-              <li key={id} className="lg:border-b lg:border-hairline">
+              <li key={id} className="border-b border-hairline">
                 <a
                   href={`#${id}`}
                   className="block py-1 underline-offset-4 hover:bg-snapline-wash hover:underline"
@@ -78,7 +78,7 @@ export default async function HelpPage({ searchParams }: PageProps) {
               </li>
             ))}
           </ul>
-          <div className="mt-5 hidden flex-wrap gap-x-2.5 gap-y-0.5 font-mono text-small lg:flex">
+          <div className="mt-5 flex flex-wrap gap-x-2.5 gap-y-0.5 font-mono text-small">
             {GROUPS.filter(({ id }) => id !== 'forms').flatMap(({ entries }) =>
               entries.map(({ id }) => (
                 <a key={id} href={`#${id}`} className="py-0.5 text-snapline hover:underline">
@@ -89,12 +89,23 @@ export default async function HelpPage({ searchParams }: PageProps) {
           </div>
         </div>
       </nav>
-      <div className="min-w-0 max-lg:row-start-1 lg:row-start-1 lg:col-start-2">
+      <div className="min-w-0">
         <h1 className="font-serif text-title font-semibold">How to write cells</h1>
         <p className="mb-4 mt-2 max-w-prose font-serif text-note text-soft">
           A sheet holds dimension cells, whose lines are evaluated exactly, and notes in Markdown,
-          with TeX between dollar signs. Every sample below has just been worked out by this server.
+          with TeX between dollar signs. Every sample below is worked out by this server.
         </p>
+        <nav aria-label="Contents" className="mb-4 text-small lg:hidden print:hidden">
+          {CONTENTS.map(({ id, title }) => (
+            <a
+              key={id}
+              href={`#${id}`}
+              className="mr-4 inline-block py-0.5 text-snapline underline underline-offset-4"
+            >
+              {title}
+            </a>
+          ))}
+        </nav>
         <PutProvider from={from}>
           <Filter texts={TEXTS}>
             {GROUPS.map(({ id, title, entries }) => (
