@@ -28,7 +28,9 @@ export default async function RootLayout({ children }: { children: ReactNode }) 
       {...(theme === 'system' ? {} : { 'data-theme': theme })}
       suppressHydrationWarning
     >
-      <body className="flex min-h-dvh flex-col font-sans text-base antialiased">{children}</body>
+      <body className="flex min-h-dvh flex-col font-sans print:block print:min-h-0 text-base antialiased">
+        {children}
+      </body>
     </html>
   );
 }

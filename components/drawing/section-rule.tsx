@@ -13,7 +13,7 @@ interface SectionRuleProps {
 export function SectionRule({ children, fold, folded = false, note = null }: SectionRuleProps) {
   return (
     <div
-      className={`flex items-center gap-2 border-b pb-1.5 pt-3 ${folded ? 'border-double border-b-4 border-rule' : 'border-rule'}`}
+      className={`flex break-after-avoid items-center gap-2 border-b pb-1.5 pt-3 ${folded ? 'border-double border-b-4 border-rule' : 'border-rule'}`}
     >
       {fold}
       <h2 className="min-w-0 grow font-serif text-figure font-semibold [overflow-wrap:anywhere]">

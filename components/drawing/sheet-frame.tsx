@@ -23,16 +23,20 @@ interface SheetFrameProps {
 }
 
 function Centring({ className }: { className: string }) {
-  return <span aria-hidden="true" className={`absolute bg-ink ${className}`} />;
+  return <span aria-hidden="true" className={`absolute bg-ink print:hidden ${className}`} />;
 }
 
 /**
  * The sheet itself: trimmed edge, zone letters and figures, ruled border with centring marks, and
- * the title block in its lower right corner.
+ * the title block in its lower right corner. On paper the border is that of each page, the title
+ * block stands at the foot of every page, and an unseen copy of it keeps its place free.
  */
 export function SheetFrame({ children, foot, zones = 40, short = false }: SheetFrameProps) {
   return (
-    <div className="relative border border-rule bg-sheet sm:px-zone print:border-0 print:p-0">
+    <div
+      data-sheet
+      className="relative border border-rule bg-sheet sm:px-zone print:static print:border-0 print:p-0"
+    >
       <div
         aria-hidden="true"
         className="flex h-zone select-none items-center text-tag tracking-normal text-soft print:hidden"
@@ -64,16 +68,32 @@ export function SheetFrame({ children, foot, zones = 40, short = false }: SheetF
         </div>
       ))}
       <div
-        className={`relative flex flex-col border-2 border-ink max-sm:border-x-0 ${short ? '' : 'min-h-[60vh]'}`}
+        className={`relative flex flex-col border-2 border-ink max-sm:border-x-0 print:static print:table print:w-full print:border-0 ${short ? '' : 'min-h-[60vh] print:min-h-0'}`}
       >
         <Centring className="-top-2.5 left-1/2 h-2.5 w-0.5 -translate-x-1/2" />
         <Centring className="-bottom-2.5 left-1/2 h-2.5 w-0.5 -translate-x-1/2" />
         <Centring className="-left-2.5 top-1/2 h-0.5 w-2.5 max-sm:hidden" />
         <Centring className="-right-2.5 top-1/2 h-0.5 w-2.5 max-sm:hidden" />
-        <div className="flex grow flex-col">{children}</div>
-        {foot}
+        <div
+          aria-hidden="true"
+          className="hidden break-inside-avoid print:table-header-group print:[&>div]:h-4"
+        >
+          <div />
+        </div>
+        <div className="flex grow flex-col print:table-row-group">{children}</div>
+        {foot && (
+          <>
+            <div className="print:fixed print:inset-x-0 print:bottom-0">{foot}</div>
+            <div
+              aria-hidden="true"
+              className="hidden break-inside-avoid print:invisible print:table-footer-group"
+            >
+              {foot}
+            </div>
+          </>
+        )}
       </div>
-      <div aria-hidden="true" className="h-zone" />
+      <div aria-hidden="true" className="h-zone print:hidden" />
     </div>
   );
 }

@@ -23,7 +23,7 @@ export function TitleBlock({ fields }: { fields: readonly TitleField[] }) {
   return (
     <footer
       aria-label="Title block"
-      className="ml-auto w-full max-w-3xl border-t-2 border-ink bg-sheet sm:border-l-2 [break-inside:avoid]"
+      className="ml-auto w-full max-w-3xl border-t-2 border-ink bg-sheet sm:border-l-2 break-inside-avoid"
     >
       <dl className="-mb-px -mr-px grid grid-cols-12 overflow-hidden">
         {fields.map(({ label, value, span, strong }) => (

@@ -7,6 +7,7 @@ import { Tex } from '@/components/ui/tex';
 import type { Result } from './result';
 import type { ShownLine } from './state/shown';
 import { stepTex, valueTex } from './value-tex';
+import { sayUnit } from './say-number';
 import { compartmentsOf, sayDimension } from './wording';
 
 interface EntryLineProps {
@@ -36,11 +37,29 @@ const lengthOf = (result: Result) =>
 
 const mayScroll = (result: Result) => lengthOf(result) > 24;
 
+/** On paper a drawn dimension stands beside a value only where both have room. */
+const isWide = (result: Result) => lengthOf(result) >= 40;
+
+/** Typeset in one line it would run off an A4 sheet, where nothing can be scrolled. */
+const isTooWideForPaper = (result: Result) =>
+  'exact' in result && lengthOf(result) > 130 && !(result.kind === 'number' && result.exact.staged);
+
+/** The exact value as text, which breaks at any place: what paper shows of a value too wide for it. */
+function OnPaper({ result }: { result: Result }) {
+  if (!('exact' in result)) return null;
+  const unit = result.kind === 'number' && result.unit !== null ? ` ${sayUnit(result.unit)}` : '';
+  return (
+    <p className="hidden font-mono text-small [overflow-wrap:anywhere] print:block">
+      {unit === '' ? result.exact.text : `(${result.exact.text})${unit}`}
+    </p>
+  );
+}
+
 /** Long values are set smaller, so that most are seen whole beside their drawn dimension. */
 function sizeOf(result: Result): string {
   const length = lengthOf(result);
   if (length < 48) return 'text-value';
-  return length < 90 ? 'text-figure' : 'text-base';
+  return length < 90 ? 'text-figure print:text-base' : 'text-base print:text-small';
 }
 
 /** The named quadratics of a value too wide to read in one piece, one under another. */
@@ -69,19 +88,23 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
   return (
     <div
       data-row
-      className="grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem] [break-inside:avoid]"
+      data-wide={value && isWide(value) ? '' : undefined}
+      className="group/row grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 break-inside-avoid lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem] print:grid-cols-[5.5rem_minmax(0,1fr)_10rem] print:data-wide:grid-cols-[5.5rem_minmax(0,1fr)]"
     >
       <div>{result && <Balloon sign={signOf(result)} faulty={faulty} />}</div>
       <div className="min-w-0 space-y-1.5 max-sm:col-span-2">
         {value && (
           <div
-            className={`-ml-1 min-h-balloon scroll-hint overflow-x-auto overflow-y-hidden py-1 pl-1 ${sizeOf(value)} ${dim ? 'opacity-55' : ''}`}
+            className={`-ml-1 min-h-balloon scroll-hint overflow-x-auto overflow-y-hidden py-1 pl-1 print:overflow-visible print:bg-none ${sizeOf(value)} ${dim ? 'opacity-55' : ''}`}
             // Only what may be wider than its row has to be reached by keyboard to be scrolled.
             tabIndex={mayScroll(value) ? 0 : undefined}
             role="group"
             aria-label={faulty ? 'Last good value' : 'Exact value'}
           >
-            <Value result={value} />
+            <div className={isTooWideForPaper(value) ? 'print:hidden' : undefined}>
+              <Value result={value} />
+            </div>
+            {isTooWideForPaper(value) && <OnPaper result={value} />}
             <Steps result={value} />
           </div>
         )}
@@ -108,7 +131,7 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
         </div>
       </div>
       {dimension && (
-        <div className="w-44 max-sm:col-start-2 max-sm:row-start-1 max-sm:justify-self-end sm:col-start-2 lg:col-start-3 lg:row-start-1 lg:w-full">
+        <div className="w-44 print:group-data-wide/row:col-start-2 print:group-data-wide/row:row-start-auto print:col-start-3 print:row-start-1 max-sm:col-start-2 max-sm:row-start-1 max-sm:justify-self-end sm:col-start-2 lg:col-start-3 lg:row-start-1 lg:w-full">
           <DimensionLine {...dimension} greyed={dim} />
         </div>
       )}

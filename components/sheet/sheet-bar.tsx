@@ -30,7 +30,7 @@ const STATES = {
 export function SheetBar(props: SheetBarProps) {
   const { notebook, sheet, evaluation, mayWrite, mayShare, onPanel, onFind, onKeys } = props;
   return (
-    <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2">
+    <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2 print:hidden">
       <div className="min-w-0">
         <p className="text-small text-soft">
           <Link href="/notebooks" className="underline-offset-4 hover:underline">

@@ -12,7 +12,7 @@ interface SheetLayoutProps {
 export function SheetLayout({ index, children, foot, zones }: SheetLayoutProps) {
   return (
     <SheetFrame foot={foot} zones={zones}>
-      <div className="grid grow max-lg:content-start lg:grid-cols-[15rem_minmax(0,1fr)]">
+      <div className="grid grow max-lg:content-start lg:grid-cols-[15rem_minmax(0,1fr)] print:block">
         <nav
           aria-label="Index of the sheet"
           className="border-rule max-lg:hidden lg:border-r print:hidden"
@@ -25,7 +25,7 @@ export function SheetLayout({ index, children, foot, zones }: SheetLayoutProps) 
             {index}
           </nav>
         </details>
-        <div className="min-w-0 px-2 py-5 sm:px-4">{children}</div>
+        <div className="min-w-0 px-2 py-5 sm:px-4 print:py-0">{children}</div>
       </div>
     </SheetFrame>
   );

@@ -22,7 +22,11 @@ export async function PageShell({ who, children }: PageShellProps) {
         Skip to the content
       </a>
       <SiteHeader who={who} />
-      <main id="content" tabIndex={-1} className="w-full grow px-3 py-5 outline-none sm:px-6">
+      <main
+        id="content"
+        tabIndex={-1}
+        className="w-full grow px-3 py-5 outline-none sm:px-6 print:p-0"
+      >
         {children}
       </main>
       <SiteFooter theme={theme} />

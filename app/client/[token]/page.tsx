@@ -25,8 +25,8 @@ export default async function ClientPage({ params }: PageProps) {
   const { notebook, version, content } = await open(token);
   const answers = await answersFor(content);
   return (
-    <div className="mx-auto max-w-sheet space-y-3">
-      <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2">
+    <div className="mx-auto max-w-sheet space-y-3 print:max-w-none">
+      <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2 print:hidden">
         <div className="min-w-0">
           <p className="text-small text-soft">{notebook.workshop}</p>
           <h1 className="font-serif text-head font-semibold [overflow-wrap:anywhere]">

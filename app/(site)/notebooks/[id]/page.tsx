@@ -28,7 +28,7 @@ export default async function NotebookPage({ params }: PageProps) {
   const answers = await answersFor(content);
   const inUse = notebook.archivedAt === null;
   return (
-    <div className="mx-auto max-w-sheet">
+    <div className="mx-auto max-w-sheet print:max-w-none">
       <Sheet
         key={`${notebook.id}-${notebook.version}`}
         notebook={notebook}

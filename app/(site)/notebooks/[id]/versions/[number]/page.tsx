@@ -31,8 +31,8 @@ export default async function VersionPage({ params }: PageProps) {
   const old = version.number !== notebook.version;
   const note = sayNote(version);
   return (
-    <div className="mx-auto max-w-sheet space-y-3">
-      <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2">
+    <div className="mx-auto max-w-sheet space-y-3 print:max-w-none">
+      <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2 print:hidden">
         <div className="min-w-0">
           <p className="text-small">
             <Link
