@@ -35,8 +35,8 @@ const entryOf = (word: Word): Entry => ({
   sample: SAMPLES[word.name] ?? null,
 });
 
-/** An anchor for a name that may hold spaces. */
-const anchorOf = (name: string) => name.replace(/[^A-Za-z0-9]+/g, '-');
+/** An anchor for a form, apart from those of the words, which are the words themselves. */
+const anchorOf = (name: string) => `form-${name.replace(/[^A-Za-z0-9]+/g, '-')}`;
 
 /** Everything that can be written in a dimension cell, in the order of the page. */
 export const GROUPS: readonly Group[] = [

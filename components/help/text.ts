@@ -59,9 +59,7 @@ export const FORMS = [
     form: 'point(x, y), A + B, 2 A',
     meaning:
       'Points, lines and circles: x runs to the right and y upwards, angles anticlockwise from the x-axis. A coordinate 0 needs no unit. Points are added and scaled as vectors, and have cut sizes.',
-    example: 'A = point(0, 0)
-B = point(300 mm, 400 mm)
-(A + B)/2 == mid(A, B)',
+    example: 'A = point(0, 0)\nB = point(300 mm, 400 mm)\n(A + B)/2 == mid(A, B)',
   },
 ] as const;
 
