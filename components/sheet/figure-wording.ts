@@ -57,7 +57,10 @@ export function figureCompartments(result: FigureResult, full: boolean): Compart
   items.push(reachCompartment(result.reach));
   if (!full) return items;
   for (const [label, { degree }] of parts)
-    items.push({ label: `Degree of ${label}`, value: degree === null ? 'over the limit' : String(degree) });
+    items.push({
+      label: `Degree of ${label}`,
+      value: degree === null ? 'over the limit' : String(degree),
+    });
   if (result.reach.straightedgeAndCompass !== true)
     items.push({ label: 'Because', value: result.reach.reason });
   return items;

@@ -9,6 +9,7 @@ import {
 import { fail } from '../failure';
 import { fromNum } from '../pi-sum';
 import { type AngleValue, type NumberValue, type Value, angle, number } from '../values';
+import { aboutDegrees } from './about-degrees';
 import { findTurnsWithCosine } from './circular';
 import { commonLength, failKind, needLine, needPoint, settle } from './figure-arguments';
 
@@ -60,8 +61,10 @@ function angleWith(engine: Engine, cosine: Num): AngleValue {
   if (turns !== null) return angle(turns);
   const { text } = engine.write(cosine);
   const known = text.length <= LONGEST_COSINE ? `is \`${text}\`` : 'can be had from `dist`';
+  const degrees = aboutDegrees(engine, cosine);
+  const size = degrees === null ? '' : `, about ${degrees} deg,`;
   return fail(
     'not-exact',
-    `This angle is not a rational part of a turn, so it has no exact measure; its cosine ${known}.`,
+    `This angle${size} is not a rational part of a turn, so it has no exact measure; its cosine ${known}.`,
   );
 }
