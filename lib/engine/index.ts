@@ -282,7 +282,7 @@ class ExactEngine implements Engine {
     try {
       return trisectorReaches(x, this.budget);
     } catch (error) {
-      if (error instanceof OverLimit) return { reaches: null, by: 'open' };
+      if (error instanceof OverLimit) return { reaches: null, by: 'open', why: 'limit' };
       throw error;
     }
   }

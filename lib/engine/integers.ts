@@ -278,3 +278,9 @@ export function bigGcd(a: bigint, b: bigint): bigint {
   while (y !== 0n) [x, y] = [y, x % y];
   return x;
 }
+
+const gcdSmall = (a: number, b: number): number => (b === 0 ? a : gcdSmall(b, a % b));
+
+/** Least common multiple of positive safe integers; 1 for none. */
+export const leastCommonMultiple = (numbers: readonly number[]): number =>
+  numbers.reduce((a, b) => (a / gcdSmall(a, b)) * b, 1);

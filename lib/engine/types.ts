@@ -138,9 +138,14 @@ export type Reach =
       | { kind: 'stuck'; degree: number }
       | { kind: 'undecided'; degree: number }
     ) & {
-      /** Whether an angle trisector helps, and what tells: the division, an order in the Galois group, a cubic's real roots. */
+      /**
+       * Whether an angle trisector helps, and what tells: the division, an order in the Galois group, real roots of cubics.
+       * Not decided where a cubic has coefficients that are not real, where a step of degree 9 or more has no fields between, and
+       * where the search for subfields is too long.
+       */
       trisector:
-        { reaches: boolean; by: 'division' | 'order' | 'cubic' } | { reaches: null; by: 'open' };
+        | { reaches: boolean; by: 'division' | 'order' | 'cubic' }
+        | { reaches: null; by: 'open'; why: 'coefficients' | 'step' | 'limit' };
       division: bigint | null;
     });
 

@@ -41,6 +41,12 @@ function whyNot(verdict: Beyond): string {
   }
 }
 
+const WHY_OPEN = {
+  coefficients: 'a cubic that it needs has coefficients that are not real',
+  step: 'its field has a step of a high degree without a field between',
+  limit: 'the search of its subfields went over a limit',
+} as const;
+
 function trisectorClause({ trisector, division, degree }: Beyond): string {
   switch (trisector.by) {
     case 'division':
@@ -49,10 +55,10 @@ function trisectorClause({ trisector, division, degree }: Beyond): string {
       return `an angle trisector does not help, as ${hasLargePrime(degree) ? 'the degree' : 'the order of the Galois group'} has a prime factor above 3 (Gleason)`;
     case 'cubic':
       return trisector.reaches
-        ? 'an angle trisector as well reaches it, as the cubic that it needs has three real roots (Gleason)'
-        : 'an angle trisector does not help, as the cubic that it needs has only one real root: like a cube root it takes a tool of another kind (Gleason)';
+        ? 'an angle trisector as well reaches it, as every cubic that it needs has three real roots (Gleason)'
+        : 'an angle trisector does not help, as a cubic that it needs has only one real root: like a cube root it takes a tool of another kind (Gleason)';
     case 'open':
-      return 'whether an angle trisector helps is not decided here';
+      return `whether an angle trisector helps is not decided here, as ${WHY_OPEN[trisector.why]}`;
   }
 }
 

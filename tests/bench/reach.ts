@@ -76,6 +76,72 @@ row(
   'root of an octic with group E8: √2+√3+√5',
   cost(asked((e) => e.nearestRoot([1n, 0n, -40n, 0n, 352n, 0n, -960n, 0n, 576n], e.integer(5)))),
 );
+const SUM_OF_FOUR = [
+  1n,
+  0n,
+  -136n,
+  0n,
+  6476n,
+  0n,
+  -141912n,
+  0n,
+  1513334n,
+  0n,
+  -7453176n,
+  0n,
+  13950764n,
+  0n,
+  -5596840n,
+  0n,
+  46225n,
+];
+/** √(5+√(3+√(2+√2))): ((x² − 5)² − 3)² − 2)² − 2. */
+const NEST_OF_FOUR = [
+  1n,
+  0n,
+  -40n,
+  0n,
+  688n,
+  0n,
+  -6640n,
+  0n,
+  39300n,
+  0n,
+  -146000n,
+  0n,
+  332416n,
+  0n,
+  -424160n,
+  0n,
+  232322n,
+];
+/** √2 + √3 + a root of x⁴ − x − 1, whose group is S4. */
+const WITH_QUARTIC = [
+  1n,
+  0n,
+  -40n,
+  -4n,
+  600n,
+  40n,
+  -4154n,
+  -544n,
+  9966n,
+  7516n,
+  2624n,
+  -17108n,
+  -17159n,
+  -12200n,
+  -4330n,
+  19888n,
+  8257n,
+];
+for (const [what, polynomial] of [
+  ['root of degree 16, yes: √2+√3+√5+√7', SUM_OF_FOUR],
+  ['root of degree 16, yes: √(5+√(3+√(2+√2)))', NEST_OF_FOUR],
+  ['root of degree 16, no: an S4 quartic inside', WITH_QUARTIC],
+] as const) {
+  row(what, cost(asked((e) => e.nearestRoot(polynomial, e.integer(100)))));
+}
 row(
   'verdict for n below 10⁶, mean of 1 000',
   cost(() => {

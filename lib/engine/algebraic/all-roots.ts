@@ -53,7 +53,7 @@ function evaluatePoint(f: IntegerPoly, at: Point, p: bigint): Point {
 }
 
 /** Bits of a radius that holds all roots: 2·max |f_(n−k)/f_n|^(1/k) (Fujiwara 1916), rounded up to a power of two. */
-function rootBits(f: IntegerPoly): number {
+export function rootBits(f: IntegerPoly): number {
   const lead = bitLength(leadingOf(f));
   let most = 0;
   for (let k = 1; k < f.length; k++) {

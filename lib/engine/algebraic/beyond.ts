@@ -25,6 +25,7 @@ import { rootsOverField } from './norm';
 import * as operations from './operations';
 import { rationalPart, type RealPart } from './real-part';
 import { principalRoot, principalSquareRoot, realRoot } from './principal';
+import { TooManyPartitions } from '../subfields/subfield';
 import { quadraticChain, type Chain } from './quadratic-chain';
 import { toTower } from './square-roots';
 
@@ -33,9 +34,9 @@ export type Value = Cx | Algebraic;
 export const isAlgebraic = (x: unknown): x is Algebraic => x instanceof Algebraic;
 
 /** The chain of subfields is worked out up to this degree; above it the verdict is left open. */
-const CHAIN_DEGREE = 16;
+const CHAIN_DEGREE = 64;
 /** Work that one verdict may take, in the units of the step budget. */
-const CHAIN_WORK = 3_000_000;
+const CHAIN_WORK = 4_000_000;
 
 /** What is known about square roots reaching a number: a chain's refusal, or a limit that was met. */
 export type Verdict =
@@ -110,7 +111,7 @@ export class Beyond {
     try {
       return quadraticChain(a.poly, charge);
     } catch (error) {
-      if (error instanceof TooLong) return undecided;
+      if (error instanceof TooLong || error instanceof TooManyPartitions) return undecided;
       throw error;
     }
   }

@@ -5,6 +5,7 @@ import {
   multiplyPoly,
   scalePoly,
   addPoly,
+  restByMonic,
   trim,
   type IntegerPoly,
 } from '../polynomials/integer-poly';
@@ -28,34 +29,12 @@ export class NumberField {
   }
 
   element(numerator: IntegerPoly, denominator: bigint): FieldElement {
-    const rest = this.reduce(numerator);
+    const rest = restByMonic(trim(numerator), this.modulus);
     let common = denominator;
     for (const c of rest) common = gcdOf(common, c);
     if (denominator < 0n) common = -common;
     if (common === 1n) return { numerator: rest, denominator };
     return { numerator: rest.map((c) => c / common), denominator: denominator / common };
-  }
-
-  private reduce(a: IntegerPoly): IntegerPoly {
-    const n = degreeOf(this.modulus);
-    if (a.length <= n) return trim(a);
-    const rest = [...a];
-    for (let k = rest.length - 1; k >= n; k--) {
-      const q = rest[k] as bigint;
-      if (q === 0n) continue;
-      for (let j = 0; j <= n; j++) {
-        rest[k - n + j] = (rest[k - n + j] as bigint) - q * (this.modulus[j] as bigint);
-      }
-    }
-    return trim(rest.slice(0, n));
-  }
-
-  isZero(a: FieldElement): boolean {
-    return a.numerator.length === 0;
-  }
-
-  equal(a: FieldElement, b: FieldElement): boolean {
-    return this.isZero(this.add(a, this.scale(b, -1n, 1n)));
   }
 
   add(a: FieldElement, b: FieldElement): FieldElement {
@@ -67,24 +46,6 @@ export class NumberField {
 
   multiply(a: FieldElement, b: FieldElement): FieldElement {
     return this.element(multiplyPoly(a.numerator, b.numerator), a.denominator * b.denominator);
-  }
-
-  scale(a: FieldElement, n: bigint, d: bigint): FieldElement {
-    return this.element(scalePoly(a.numerator, n), a.denominator * d);
-  }
-
-  /** An integer polynomial at an element, by Horner's rule. */
-  substitute(f: IntegerPoly, at: FieldElement): FieldElement {
-    let value: FieldElement = this.element([], 1n);
-    for (let k = f.length - 1; k >= 0; k--) {
-      value = this.add(this.multiply(value, at), this.element([f[k] as bigint], 1n));
-    }
-    return value;
-  }
-
-  /** The element a, read as a polynomial in α, with α replaced by `at`. */
-  substituteElement(a: FieldElement, at: FieldElement): FieldElement {
-    return this.scale(this.substitute(a.numerator, at), 1n, a.denominator);
   }
 
   /** Tr a: the sum of the conjugates, as a fraction. */
@@ -116,7 +77,7 @@ export class NumberField {
    * Rational x_k with Σ x_k·columns_k = target, over one common denominator, or null when there are none.
    * Fraction-free elimination (Bareiss 1968).
    */
-  combination(
+  private combination(
     columns: readonly FieldElement[],
     target: FieldElement,
   ): { n: bigint; d: bigint }[] | null {

@@ -1,18 +1,30 @@
 /**
- * Does an angle trisector, added to straightedge and compass, reach a real number?
+ * Does an angle trisector, added to straightedge and compass, reach a number?
  *
- * With it the real roots of cubics that have three of them become reachable, and nothing else does (Gleason 1988): a
- * number is reached iff it lies in a tower of real fields of steps of degree 2 and of cubic steps with three
- * real roots. Divisions of the circle: n = 2^a·3^b times distinct Pierpont primes (Gleason 1988).
+ * Theorem (after Gleason 1988, Angle trisection, the heptagon, and the triskaidecagon). A real number is reached iff it lies
+ * in a tower of real fields over the rationals whose steps have degree 2, or degree 3 with a cubic of three real
+ * roots. A complex number is reached iff its parts are; these numbers are a field, closed under complex square roots.
+ *
+ * What follows from it and is used here, for a chain of subfields Q = F_0 < F_1 < … < Q(α) without fields between:
+ * - The Galois group of a number reached has order 2^a·3^b: that of a tower of such steps embeds in repeated wreath products
+ *   of S2 and S3. Such groups are solvable (Burnside), so that a step without fields between has a prime power as its
+ *   degree (Galois), here a power of 2 or 3; and not 8, as irreducible subgroups of GL(3, 2) have elements of order 7.
+ * - Degree 2 is always reached from below.
+ * - Degree 3 over a real field F: reached iff three roots are real. For if the cubic has one real root γ and γ were reached,
+ *   it would first become reducible at a cubic step of a tower over F, which γ then generates; but that step has
+ *   only real conjugates. A non-real root would give γ by Vieta's formulas.
+ * - Degree 4 over a real field, without a field between: the group is A4 or S4, and a chain of subgroups of index 2 and 3 has to pass
+ *   through the resolvent cubic. It has three real roots iff the quartic has four or none.
+ * - One step that is not reached refuses the number, whatever lies below it.
+ * Divisions of the circle: n = 2^a·3^b times distinct Pierpont primes (Gleason 1988).
  */
 import type { Budget } from '../limits';
-import { isSquarefreeMod, splitByDegree } from '../polynomials/factor-mod';
 import { degreeOf, type IntegerPoly } from '../polynomials/integer-poly';
-import { monicMod, reduceMod } from '../polynomials/mod-poly';
-import { smallPrimes } from '../polynomials/primes';
+import { makeIntegral } from '../subfields/integral';
+import { isMadeOf, surveySplittings, type Splitting } from '../subfields/splitting';
+import { TooManyPartitions, findSubfield, type Subfield } from '../subfields/subfield';
 import type { Algebraic } from './algebraic';
-import { isolateRoots } from './all-roots';
-import { fieldBelow } from './quadratic-chain';
+import { countFibre, integralBox, lowerBox, type BoxAt } from './lower-box';
 
 /** n/2^a·3^b and squarefree in Pierpont primes; n > 0 small enough for trial division. */
 export function trisectorDivides(n: bigint): boolean {
@@ -29,71 +41,113 @@ export function trisectorDivides(n: bigint): boolean {
   return true;
 }
 
-const isSmooth = (n: number): boolean => {
-  let rest = n;
-  for (const p of [2, 3]) while (rest % p === 0) rest /= p;
-  return rest === 1;
-};
-
-const PRIMES_LOOKED_AT = 40;
+const SMOOTH = [2, 3];
+const PRIMES_AT_FIRST = 40;
+const PRIMES_BELOW = 10;
 /** Fields of a larger degree are not searched for subfields. */
-const LARGEST_DEGREE = 12;
-
-/** Whether some splitting of f shows an element whose order has a prime factor above 3 (Dedekind). */
-function showsLargerOrder(f: IntegerPoly, budget: Budget): boolean {
-  let looked = 0;
-  for (const p of smallPrimes()) {
-    if ((f[f.length - 1] as bigint) % BigInt(p) === 0n) continue;
-    const image = reduceMod(f, p);
-    if (!isSquarefreeMod(image, p)) continue;
-    budget.charge(f.length * f.length * 16);
-    for (const { degree } of splitByDegree(monicMod(image, p), p)) {
-      if (!isSmooth(degree)) return true;
-    }
-    if (++looked === PRIMES_LOOKED_AT) return false;
-  }
-  return false;
-}
-
-function realRoots(f: IntegerPoly, budget: Budget): number {
-  return isolateRoots(f, budget).boxes.filter(({ im }) => im.low === 0n && im.high === 0n).length;
-}
-
-/** The answer and what it rests on; `open` where it is not decided. */
-export type Trisector =
-  | { readonly reaches: boolean; readonly by: 'division' | 'order' | 'cubic' }
-  | { readonly reaches: null; readonly by: 'open' };
-
-const OPEN: Trisector = { reaches: null, by: 'open' };
+const LARGEST_DEGREE = 36;
 
 /**
- * Decided are divisions of the circle, orders with a prime above 3, and real numbers whose field leads down by
- * quadratic steps to degree 3 or to a quartic without a subfield. Cost: one survey of primes, at most log₂(degree)
- * lattice reductions and one isolation of all roots.
+ * The answer and what it rests on. `open` where it is not decided: a cubic over a field that is not real (`coefficients`), a step
+ * of degree 9, 16, 27 … without fields between (`step`), or a search that is too long (`limit`).
+ */
+export type Trisector =
+  | { readonly reaches: boolean; readonly by: 'division' | 'order' | 'cubic' }
+  | {
+      readonly reaches: null;
+      readonly by: 'open';
+      readonly why: 'coefficients' | 'step' | 'limit';
+    };
+
+const BY_ORDER: Trisector = { reaches: false, by: 'order' };
+const BY_CUBIC: Trisector = { reaches: false, by: 'cubic' };
+
+/** A step down; `lower` is null where the next field is that of the rationals. */
+interface Step {
+  readonly polynomial: IntegerPoly;
+  readonly index: number;
+  readonly field: Subfield | null;
+}
+
+function leastSubfield(
+  f: IntegerPoly,
+  splittings: readonly Splitting[],
+  charge: (work: number) => void,
+): Subfield | null {
+  const n = degreeOf(f);
+  for (let index = 2; 2 * index <= n; index++) {
+    if (n % index !== 0) continue;
+    const found = findSubfield(f, index, splittings, charge);
+    if (found !== null) return found;
+  }
+  return null;
+}
+
+/** Whether a step of this degree without fields between can have a group of order 2^a·3^b. */
+const isPrimitiveDegree = (n: number): boolean => n !== 8 && (isMadeOf(n, [2]) || isMadeOf(n, [3]));
+
+/** The steps, top first, or `order` where a group has an order with a prime factor above 3. */
+function stepsDown(f: IntegerPoly, charge: (work: number) => void): Step[] | 'order' {
+  const steps: Step[] = [];
+  let current = f;
+  while (degreeOf(current) > 1) {
+    const count = steps.length === 0 ? PRIMES_AT_FIRST : PRIMES_BELOW;
+    const survey = surveySplittings(current, SMOOTH, count, charge);
+    if (survey.kind === 'foreign') return 'order';
+    const field = leastSubfield(current, survey.splittings, charge);
+    const index = field?.index ?? degreeOf(current);
+    if (!isPrimitiveDegree(index)) return 'order';
+    steps.push({ polynomial: current, index, field });
+    if (field === null) break;
+    current = field.lower;
+  }
+  return steps;
+}
+
+type StepVerdict = 'reached' | 'refused' | 'coefficients' | 'step';
+
+/** One step; `box` closes in on the generator of its upper field. */
+function decideStep({ polynomial, index, field }: Step, box: BoxAt, budget: Budget): StepVerdict {
+  if (index === 2) return 'reached';
+  if (index > 4) return 'step';
+  const { real, isLowerReal } = countFibre(polynomial, field, box, budget);
+  if (!isLowerReal) return 'coefficients';
+  if (index === 3) return real === 3 ? 'reached' : 'refused';
+  return real === 2 ? 'refused' : 'reached';
+}
+
+/**
+ * Decides for divisions of the circle, and for every number of a degree up to 36 whose subfields can be found, except as
+ * `Trisector` says. Cost: a search for subfields at every step down, and an isolation of all roots at those of degree 3 and 4.
  */
 export function trisectorReaches(a: Algebraic, budget: Budget): Trisector {
   const { division } = a.origin;
   if (division !== undefined) return { reaches: trisectorDivides(division), by: 'division' };
-  if (!isSmooth(a.degree) || showsLargerOrder(a.poly, budget)) {
-    return { reaches: false, by: 'order' };
+  if (!isMadeOf(a.degree, SMOOTH)) return BY_ORDER;
+  const charge = (work: number): void => {
+    budget.charge(work);
+  };
+  const start = makeIntegral(a.poly);
+  if (a.degree > LARGEST_DEGREE) {
+    const survey = surveySplittings(start.monic, SMOOTH, PRIMES_AT_FIRST, charge);
+    return survey.kind === 'foreign' ? BY_ORDER : { reaches: null, by: 'open', why: 'limit' };
   }
-  if (!a.isReal || a.degree > LARGEST_DEGREE) return OPEN;
-  let poly = a.poly;
-  for (;;) {
-    const degree = degreeOf(poly);
-    if (degree === 3) return { reaches: realRoots(poly, budget) === 3, by: 'cubic' };
-    const lower =
-      degree % 2 === 0
-        ? fieldBelow(poly, (work) => {
-            budget.charge(work);
-          })
-        : null;
-    if (lower !== null) {
-      poly = lower;
-      continue;
+  try {
+    const steps = stepsDown(start.monic, charge);
+    if (steps === 'order') return BY_ORDER;
+    let box = integralBox(start, (P) => a.box(P));
+    let open: 'coefficients' | 'step' | null = null;
+    for (const step of steps) {
+      const verdict = decideStep(step, box, budget);
+      if (verdict === 'refused') return BY_CUBIC;
+      if (verdict !== 'reached') open = verdict;
+      if (step.field !== null) box = lowerBox(step.field, box);
     }
-    // A quartic without a quadratic subfield is solved by its resolvent cubic, which has three real roots exactly
-    // when the quartic has four or none; with two, the cubic step it needs has one real root.
-    return degree === 4 ? { reaches: realRoots(poly, budget) !== 2, by: 'cubic' } : OPEN;
+    return open === null
+      ? { reaches: true, by: 'cubic' }
+      : { reaches: null, by: 'open', why: open };
+  } catch (error) {
+    if (error instanceof TooManyPartitions) return { reaches: null, by: 'open', why: 'limit' };
+    throw error;
   }
 }

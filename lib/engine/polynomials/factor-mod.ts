@@ -11,22 +11,51 @@ import {
   divideMod,
   gcdMod,
   monicMod,
+  multiplyMod,
   powerModPoly,
   restMod,
   subtractMod,
   type ModPoly,
 } from './mod-poly';
 
+/** Up to this length the Frobenius map is written out: its set-up costs as much as about n/15 powers. */
+const MAP_LENGTH = 48;
+
 export const isSquarefreeMod = (f: ModPoly, p: number): boolean =>
   gcdMod(f, derivativeMod(f, p), p).length === 1;
 
-/** Splits a monic squarefree f into products of irreducible factors of one degree each. */
+/** The map h ↦ h^p modulo f, as the images of 1, x, x², …; it is linear over the residues. */
+function frobeniusMap(f: ModPoly, xToP: ModPoly, p: number): (h: ModPoly) => ModPoly {
+  const n = f.length - 1;
+  const images: ModPoly[] = [[1]];
+  for (let k = 1; k < n; k++) {
+    images.push(restMod(multiplyMod(images[k - 1] as ModPoly, xToP, p), f, p));
+  }
+  return (h) => {
+    const sum = new Array<number>(n).fill(0);
+    h.forEach((c, k) => {
+      if (c === 0) return;
+      images[k]?.forEach((b, j) => {
+        sum[j] = ((sum[j] as number) + c * b) % p;
+      });
+    });
+    return subtractMod(sum, [], p);
+  };
+}
+
+/**
+ * Splits a monic squarefree f into products of irreducible factors of one degree each. For small f the linear
+ * map h ↦ h^p is written out once, which makes every further degree cheap.
+ */
 export function splitByDegree(f: ModPoly, p: number): { degree: number; product: ModPoly }[] {
   const parts: { degree: number; product: ModPoly }[] = [];
   let rest = f;
   let frobenius: ModPoly = [0, 1];
+  let map: ((h: ModPoly) => ModPoly) | null = null;
   for (let degree = 1; 2 * degree <= rest.length - 1; degree++) {
-    frobenius = powerModPoly(restMod(frobenius, rest, p), BigInt(p), rest, p);
+    if (map !== null) frobenius = map(frobenius);
+    else frobenius = powerModPoly(restMod(frobenius, rest, p), BigInt(p), rest, p);
+    if (degree === 1) map = rest.length <= MAP_LENGTH ? frobeniusMap(rest, frobenius, p) : null;
     const product = gcdMod(rest, subtractMod(frobenius, [0, 1], p), p);
     if (product.length > 1) {
       parts.push({ degree, product });
@@ -35,6 +64,12 @@ export function splitByDegree(f: ModPoly, p: number): { degree: number; product:
   }
   if (rest.length > 1) parts.push({ degree: rest.length - 1, product: rest });
   return parts;
+}
+
+/** Whether a monic f of positive degree is irreducible. */
+export function isIrreducibleMod(f: ModPoly, p: number): boolean {
+  if (!isSquarefreeMod(f, p)) return false;
+  return splitByDegree(f, p)[0]?.degree === f.length - 1;
 }
 
 /** The n-th trial polynomial: x plus the digits of n to the base p, one more coefficient per power of p. */

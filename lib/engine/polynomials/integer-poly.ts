@@ -136,6 +136,22 @@ export function divideExactly(f: IntegerPoly, g: IntegerPoly): IntegerPoly | nul
   return rest.some((c) => c !== 0n) ? null : trim(quotient);
 }
 
+/** The remainder of f divided by a monic g. */
+export function restByMonic(f: IntegerPoly, g: IntegerPoly): IntegerPoly {
+  const n = degreeOf(g);
+  if (f.length <= n) return f;
+  const rest = [...f];
+  for (let k = rest.length - 1; k >= n; k--) {
+    const q = rest[k] as bigint;
+    if (q === 0n) continue;
+    for (let j = 0; j < n; j++) {
+      const c = g[j] as bigint;
+      if (c !== 0n) rest[k - n + j] = (rest[k - n + j] as bigint) - q * c;
+    }
+  }
+  return trim(rest.slice(0, n));
+}
+
 /** Square of the Euclidean norm of the coefficients. */
 export const normSquared = (f: IntegerPoly): bigint => f.reduce((sum, c) => sum + c * c, 0n);
 

@@ -120,17 +120,3 @@ export function reduceLattice(rows: Row[]): bigint[] {
   }
   return data.d;
 }
-
-/**
- * The target minus a lattice vector near to it (Babai 1986, nearest plane) for a full-rank reduced basis: the
- * only vector of its class whose components along the Gram–Schmidt vectors are at most half their length.
- */
-export function reduceAgainst(basis: readonly Row[], target: Row): Row {
-  // One more coordinate keeps the target independent of a basis of the whole space.
-  const rows: Row[] = [...basis.map((row) => [...row, 0n]), [...target, 1n]];
-  const data = new GramSchmidt(rows);
-  for (let k = 0; k < rows.length; k++) data.extend();
-  const last = rows.length - 1;
-  for (let l = last - 1; l >= 0; l--) data.sizeReduce(last, l);
-  return (rows[last] as Row).slice(0, -1);
-}
