@@ -1,11 +1,10 @@
 /** Enclosures of the generators of a chain of subfields, each from the one above it. */
 import type { Budget } from '../limits';
-import { degreeOf, derivativeOf, type IntegerPoly } from '../polynomials/integer-poly';
+import { derivativeOf, type IntegerPoly } from '../polynomials/integer-poly';
 import type { Integral } from '../subfields/integral';
 import type { Subfield } from '../subfields/subfield';
-import { refining } from './algebraic';
-import { isolateRoots } from './all-roots';
 import { addBox, areApart, evaluateBox, invertBox, multiplyBox, pointBox, type Box } from './box';
+import { isolatedRoots, refinedBox, type Isolated } from './near';
 import { boxOf, fraction } from './operations';
 
 /** Boxes over 2^P that shrink to a number as P grows; null where a precision does not suffice. */
@@ -32,25 +31,14 @@ export function lowerBox(
   };
 }
 
-interface Isolated {
-  readonly isReal: boolean;
-  readonly box: (P: number) => Box;
-}
-
-function isolated(f: IntegerPoly, budget: Budget): Isolated[] {
-  const { boxes, precision } = isolateRoots(f, budget);
-  return boxes.map((box) => ({
-    isReal: box.im.low === 0n && box.im.high === 0n,
-    box: refining(f, box, precision, budget),
-  }));
-}
+const isReal = ({ box }: Isolated): boolean => box.im.low === 0n && box.im.high === 0n;
 
 /** The one among all roots of a polynomial that the boxes close in on; they must close in on one. */
-function nearestOf(roots: readonly Isolated[], box: BoxAt): Isolated {
+function rootAt(roots: readonly Isolated[], at: BoxAt, budget: Budget): Isolated {
   let left = roots;
   for (let P = 64; ; P *= 2) {
-    const at = box(P);
-    if (at !== null) left = left.filter((root) => !areApart(root.box(P), at));
+    const box = at(P);
+    if (box !== null) left = left.filter((root) => !areApart(refinedBox(root, P, budget), box));
     const [only, ...others] = left;
     if (only === undefined) throw new RangeError('the boxes lie at none of the roots');
     if (others.length === 0) return only;
@@ -67,11 +55,13 @@ export function countFibre(
   box: BoxAt,
   budget: Budget,
 ): { real: number; isLowerReal: boolean } {
-  const real = isolated(f, budget).filter(({ isReal }) => isReal);
-  if (field === null || degreeOf(field.lower) === 1)
-    return { real: real.length, isLowerReal: true };
-  const below = isolated(field.lower, budget);
-  const own = nearestOf(below, lowerBox(field, box));
-  const fibre = real.filter((root) => nearestOf(below, lowerBox(field, root.box)) === own);
-  return { real: fibre.length, isLowerReal: own.isReal };
+  const real = isolatedRoots(f, budget).filter(isReal);
+  if (field === null) return { real: real.length, isLowerReal: true };
+  const below = isolatedRoots(field.lower, budget);
+  const own = rootAt(below, lowerBox(field, box), budget);
+  const fibre = real.filter((root) => {
+    const at: BoxAt = (P) => refinedBox(root, P, budget);
+    return rootAt(below, lowerBox(field, at), budget) === own;
+  });
+  return { real: fibre.length, isLowerReal: isReal(own) };
 }

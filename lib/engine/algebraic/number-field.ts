@@ -48,6 +48,28 @@ export class NumberField {
     return this.element(multiplyPoly(a.numerator, b.numerator), a.denominator * b.denominator);
   }
 
+  isZero(a: FieldElement): boolean {
+    return a.numerator.length === 0;
+  }
+
+  scale(a: FieldElement, n: bigint, d: bigint): FieldElement {
+    return this.element(scalePoly(a.numerator, n), a.denominator * d);
+  }
+
+  /** An integer polynomial at an element, by Horner's rule. */
+  private substitute(f: IntegerPoly, at: FieldElement): FieldElement {
+    let value: FieldElement = this.element([], 1n);
+    for (let k = f.length - 1; k >= 0; k--) {
+      value = this.add(this.multiply(value, at), this.element([f[k] as bigint], 1n));
+    }
+    return value;
+  }
+
+  /** The element a, read as a polynomial in α, with α replaced by `at`. */
+  substituteElement(a: FieldElement, at: FieldElement): FieldElement {
+    return this.scale(this.substitute(a.numerator, at), 1n, a.denominator);
+  }
+
   /** Tr a: the sum of the conjugates, as a fraction. */
   trace(a: FieldElement): { n: bigint; d: bigint } {
     let n = 0n;
