@@ -55,7 +55,7 @@ function decimalCompartment(
 
 const SIDES = { above: 'above', below: 'below', level: 'either way', exact: '' } as const;
 
-/** What a stand-in stands for and how far off it is; a warning where stepping it round leaves the tolerance. */
+/** What a stand-in stands for and how far off it is; a warning where no stand-in keeps to the tolerance when stepped round. */
 function standInCompartments(standIn: NumberResult['standIn'], unit: string): Compartment[] {
   if (standIn === undefined) return [];
   const { bound, direction } = standIn.error;
@@ -71,7 +71,7 @@ function standInCompartments(standIn: NumberResult['standIn'], unit: string): Co
       label: `Ring of ${standIn.stepped.parts}`,
       value: standIn.stepped.inside
         ? 'stays inside the tolerance'
-        : 'leaves the tolerance when stepped round',
+        : 'leaves the tolerance when stepped round, as all that were found do',
       tone: standIn.stepped.inside ? 'reached' : 'approximate',
     });
   }

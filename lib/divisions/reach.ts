@@ -20,14 +20,9 @@ export type DivisionReach =
  */
 export function decideDivision(n: bigint): DivisionReach {
   let rest = oddPart(n);
-  for (const prime of FERMAT_PRIMES) if (rest % prime === 0n) rest /= prime;
-  if (rest === 1n) {
-    const why =
-      n <= 2n || oddPart(n) === 1n
-        ? `${n} is a power of two`
-        : `${n} is a power of two times distinct Fermat primes`;
-    return { compass: true, trisector: true, why };
-  }
+  const primes = FERMAT_PRIMES.filter((prime) => rest % prime === 0n);
+  for (const prime of primes) rest /= prime;
+  if (rest === 1n) return { compass: true, trisector: true, why: whyReached(n, primes) };
   const repeated = FERMAT_PRIMES.find((prime) => rest % prime === 0n);
   const factor = repeated ?? smallestFactor(rest);
   const why =
@@ -39,6 +34,19 @@ export function decideDivision(n: bigint): DivisionReach {
           ? `${n} is a prime and no Fermat prime`
           : `${n} has the prime factor ${factor}, which is no Fermat prime`;
   return { compass: false, trisector: decideTrisector(n), why };
+}
+
+/** n is a power of two times these distinct Fermat primes. */
+function whyReached(n: bigint, primes: readonly bigint[]): string {
+  const twos = (n / oddPart(n)).toString(2).length - 1;
+  const last = primes[primes.length - 1];
+  if (last === undefined) return `${n} is a power of two`;
+  if (last === n) return `${n} is a Fermat prime`;
+  const times = twos === 0 ? '' : twos === 1 ? 'twice ' : `2^${twos} times `;
+  const others = primes.slice(0, -1);
+  return others.length === 0
+    ? `${n} is ${times}the Fermat prime ${last}`
+    : `${n} is ${times}the product of the distinct Fermat primes ${others.join(', ')} and ${last}`;
 }
 
 function oddPart(n: bigint): bigint {

@@ -202,7 +202,7 @@ export const FUNCTIONS: readonly FunctionWord[] = [
         x: 'A length or an angle above 0.',
         tolerance: 'How far off it may be.',
         R: 'The radius to start from; left out, the unit.',
-        n: 'The number of parts it is stepped round.',
+        n: 'The number of parts it is stepped round; a stand-in whose ring keeps to the tolerance is taken first.',
       },
     },
   ),

@@ -77,7 +77,10 @@ export interface Coverage {
 export type StandInAnswer =
   | {
       readonly kind: 'found';
-      /** Cheapest first; each further one is dearer and closer than all before it. At least one. */
+      /**
+       * Cheapest first; each further one is dearer and closer than all before it. At least one. Where a number of parts
+       * was given, those whose stepped ring keeps to the tolerance come first in that order, the others after them.
+       */
       readonly offers: readonly [StandIn, ...StandIn[]];
       readonly covered: readonly Coverage[];
     }
@@ -109,7 +112,8 @@ interface Weighed {
  * Looks for constructible numbers within a tolerance of a positive target.
  * Accepts any real target that can be enclosed; it need not be algebraic. Keeps: a candidate counts as inside only when
  * its whole error interval is; nothing rests on floating point. Of the candidates inside, those stay that no other one
- * beats in strikes and error at once, cheapest first, equals in the order of the families. Deterministic.
+ * beats in strikes and error at once, cheapest first, equals in the order of the families; with a number of parts that
+ * is done first among those that keep inside when stepped round. Deterministic.
  * Cost: a handful of products of a few hundred bits for each candidate; the number of candidates is limited.
  * Throws a RangeError for a tolerance, number of parts or limit that makes no sense.
  */
@@ -159,12 +163,39 @@ export function findStandIns(
   });
   const judge = (weighed: Weighed): StandIn =>
     judgeStandIn(request, weighed, bits, Math.min(4 * bits, limits.bits));
-  const [first, ...others] = front(mergeEquals(inside)).slice(0, limits.offers);
+  const [first, ...others] = ordered(request, scale, inside, limits.offers).map(judge);
   if (first === undefined) {
     const closest = nearest as Weighed | null;
     return { kind: 'none-inside', nearest: closest === null ? null : judge(closest), covered };
   }
-  return { kind: 'found', offers: [judge(first), ...others.map(judge)], covered };
+  return { kind: 'found', offers: [first, ...others], covered };
+}
+
+/** Of the offers that leave the tolerance when stepped round, this many are kept a place behind the others. */
+const FLAGGED = 2;
+
+/** At most `most` offers in their order: with a number of parts, those that keep inside when stepped round go first. */
+function ordered(
+  request: StandInRequest,
+  scale: Scale,
+  inside: readonly Weighed[],
+  most: number,
+): Weighed[] {
+  const all = mergeEquals(inside);
+  const cheapest = front(all);
+  if (request.parts === undefined) return cheapest.slice(0, most);
+  const { arithmetic, base, target } = scale;
+  const allowed = arithmetic.fraction(request.tolerance).low;
+  const closes = ({ candidate }: Weighed): boolean => {
+    const form = encloseForm(arithmetic, candidate.form);
+    const error = arithmetic.subtract(arithmetic.multiply(form, base), target);
+    const closing = closingOf(request, scale, form, error);
+    return closing !== null && keepsTo(closing, arithmetic, allowed);
+  };
+  const closing = front(all, closes);
+  const others = cheapest.filter((weighed) => !closing.includes(weighed));
+  const kept = closing.slice(0, Math.max(1, most - Math.min(FLAGGED, others.length)));
+  return [...kept, ...others].slice(0, most);
 }
 
 function checkRequest({ tolerance, measure, radius, parts }: StandInRequest, limits: SearchLimits) {
@@ -233,15 +264,22 @@ function mergeEquals(all: readonly Weighed[]): Weighed[] {
 const rank = ({ candidate }: Weighed): number => FAMILIES.indexOf(candidate.family);
 const order = (a: bigint, b: bigint): number => (a < b ? -1 : a > b ? 1 : 0);
 
-/** Those that no other beats in strikes and error at once, fewest strikes first and so with falling error. */
-function front(all: readonly Weighed[]): Weighed[] {
+/**
+ * Of those that pass, the ones that no other beats in strikes and error at once, fewest strikes first and so with falling
+ * error. Only those that would be kept are put to the test.
+ */
+function front(
+  all: readonly Weighed[],
+  passes: (weighed: Weighed) => boolean = () => true,
+): Weighed[] {
   const sorted = [...all].sort(
     (a, b) => a.simplicity - b.simplicity || order(a.size.high, b.size.high) || rank(a) - rank(b),
   );
   const kept: Weighed[] = [];
   for (const weighed of sorted) {
     const best = kept.at(-1);
-    if (best === undefined || weighed.size.high < best.size.low) kept.push(weighed);
+    if (best !== undefined && weighed.size.high >= best.size.low) continue;
+    if (passes(weighed)) kept.push(weighed);
   }
   return kept;
 }

@@ -29,6 +29,19 @@ describe('straightedge and compass', () => {
     expect(missed.filter((n) => !withTrisector(n))).toEqual(neither);
   });
 
+  test('say which Fermat primes they are made of', () => {
+    const why = [16n, 17n, 34n, 68n, 51n, 60n, 255n].map((n) => decideDivision(n).why);
+    expect(why).toEqual([
+      '16 is a power of two',
+      '17 is a Fermat prime',
+      '34 is twice the Fermat prime 17',
+      '68 is 2^2 times the Fermat prime 17',
+      '51 is the product of the distinct Fermat primes 3 and 17',
+      '60 is 2^2 times the product of the distinct Fermat primes 3 and 5',
+      '255 is the product of the distinct Fermat primes 3, 5 and 17',
+    ]);
+  });
+
   test('doubling the parts changes nothing', () => {
     for (const n of upTo(3000)) {
       const { compass, trisector } = decideDivision(BigInt(n));

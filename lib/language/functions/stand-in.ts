@@ -41,7 +41,7 @@ interface Standing {
   readonly found: Found;
   /** Which of the offers the value is; those before it went over a limit of the engine. */
   readonly chosen: number;
-  /** Whether the last and closest offer is the value itself; the search alone cannot tell. */
+  /** Whether the closest offer is the value itself; the search alone cannot tell. */
   readonly exact: boolean;
   readonly of: Magnitude;
   readonly tolerance: Magnitude;
@@ -51,7 +51,8 @@ interface Standing {
 type StandInValue = Magnitude & { readonly standing: Standing };
 
 /**
- * `standin(value, tolerance, R, n)`: the cheapest constructible value within the tolerance, exact, of the same kind.
+ * `standin(value, tolerance, R, n)`: the cheapest constructible value within the tolerance, exact, of the same kind; with
+ * n, the cheapest whose ring of n steps keeps to the tolerance too, where there is one.
  * Accepts a positive real number of any unit, or a positive angle; a tolerance of the same kind that is rational and
  * above 0; for numbers a radius that constructions start from and the number of parts it is stepped round. Fails with
  * `unit-mismatch`, `domain`, and `not-exact` when nothing was found inside the tolerance.
@@ -188,15 +189,15 @@ function choose(
   );
 }
 
-/** Only the closest offer can be level with the value, as every offer is closer than those before it. */
+/** Only the closest offer can be level with the value. */
 function isExact(
   engine: Engine,
   { offers }: Found,
   of: Magnitude,
   radius: NumberValue | null,
 ): boolean {
-  const closest = offers.at(-1);
-  if (closest?.error.direction !== 'level') return false;
+  const closest = offers.find(({ error }) => error.direction === 'level');
+  if (closest === undefined) return false;
   const same = engine.attempt(() =>
     sameValue(engine, inPlaceOf(engine, of, buildForm(engine, closest.form), radius), of),
   );
