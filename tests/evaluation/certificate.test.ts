@@ -13,7 +13,7 @@ const CELLS = [
   { id: 'b', source: 'q = p/R + x\nx = sqrt(2)', settings: { unit: 'in' as const } },
   {
     id: 'c',
-    source: 'w = cos(turn/7)\nc = 2 pi R\np == R\nangle = turn/5\nu = v\nv = u\nbad = 1/0',
+    source: 'w = cos(turn/7)\nc = 2 pi R\np == R\nalpha = turn/5\nu = v\nv = u\nbad = 1/0',
   },
 ];
 const certificateOf = (cell: string, line: number) => certify({ cells: CELLS, at: { cell, line } });
