@@ -1,16 +1,5 @@
 import type { ReactNode } from 'react';
-
-/** Zone letters leave out I and O, which read as figures (ISO 5457). */
-const LETTERS = 'ABCDEFGHJKLMNPQRSTUVWXYZ';
-
-/** The letter of a zone counted from 0; after Z come AA, AB … */
-export function zoneLetter(zone: number): string {
-  const last = LETTERS[zone % LETTERS.length] ?? '';
-  return zone < LETTERS.length ? last : zoneLetter(Math.floor(zone / LETTERS.length) - 1) + last;
-}
-
-/** Zones along the side are as tall as this; the strip is cut off where the sheet ends. */
-const ZONE_REM = 13;
+import { ZONE_REM, zoneLetter } from './zones';
 
 interface SheetFrameProps {
   children: ReactNode;

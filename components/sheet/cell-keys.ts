@@ -17,6 +17,7 @@ export type CellCommand =
   | 'duplicate'
   | 'fold'
   | 'copy'
+  | 'proof'
   | 'remove'
   | 'cellBefore'
   | 'cellAfter'
@@ -189,6 +190,13 @@ export const KEYS: readonly Key[] = [
     keys: ['Alt+Shift+C'],
     runs: ['copy'],
     does: 'Copy the value of the line: open the choice of forms',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Alt+Shift+P'],
+    runs: ['proof'],
+    does: 'Open the proof of the figure of the line: digits, polynomial, tower, reach, certificate',
   },
   {
     scope: 'entry',

@@ -33,6 +33,10 @@ export interface CellActions extends Pick<SheetNames, 'marks'> {
   /** Opens whatever is folded over a cell, so that it can be seen. */
   reveal: (id: string) => void;
   remove: (id: string) => void;
+  /** Shows all that is known of the value of a line, counted from 0. */
+  details: (id: string, line: number) => void;
+  /** Brings a line into sight, whatever is folded over it, and gives it the focus. */
+  showLine: (id: string, line: number) => void;
 }
 
 /** Everything a cell may ask of its sheet. */
@@ -55,6 +59,13 @@ export const lineOfEntry = (entry: HTMLElement): number =>
 
 export function focusEntry(id: string, line = 0) {
   document.getElementById(entryId(id, line))?.focus();
+}
+
+/** Gives the focus back to a line: to its source where that is open, else to its entry. */
+export function focusLine(id: string, line: number) {
+  const open = document.querySelector<HTMLElement>(`#${cellAnchor(id)} .cm-content`);
+  if (open) open.focus();
+  else focusEntry(id, line);
 }
 
 /** Puts the focus on the entry before or after the one that has it, in the order of the sheet. */

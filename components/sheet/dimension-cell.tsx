@@ -8,6 +8,7 @@ import { AT_END, cellAnchor, entryId, focusEntry, type Hand, type SheetActions }
 import { onCellKey } from './keys/on-cell-key';
 import { CopyMenu } from './copy-menu';
 import { markDefinedBy } from './editor/names';
+import { ProofButton } from './proof-button';
 import { SourceEditor } from './editor/source-editor';
 import { linesOf } from './source-text';
 import { joinAfter, joinBefore, replaceLine, type LineEdit } from './state/line-edits';
@@ -104,7 +105,12 @@ export const DimensionCell = memo(function DimensionCell(props: DimensionCellPro
         greyed={greyed}
         inHand={hand?.line ?? null}
         renderSource={readOnly ? undefined : renderSource}
-        renderActions={({ result }) => <CopyMenu result={result} />}
+        renderActions={({ result }) => (
+          <>
+            <ProofButton result={result} onOpen={() => actions.details(id, result.line - 1)} />
+            <CopyMenu result={result} />
+          </>
+        )}
       />
       {hand && (
         <div className="mt-3 sm:ml-[6.125rem]">

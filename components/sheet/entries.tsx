@@ -1,11 +1,13 @@
 'use client';
 
+import { lazy, memo, Suspense } from 'react';
 import type { NotebookCell, NotebookContent } from '@/lib/notebooks/content';
 import { Button } from '@/components/ui/button';
 import { Gap } from './cell-tools';
 import type { Hand, SheetActions } from './cells';
 import { DimensionCell } from './dimension-cell';
 import { FoldedCell } from './folded-cell';
+import { Grip } from './grip';
 import { NoteCell } from './note-cell';
 import { SectionCell } from './section-cell';
 import { blocksOf, sectionSizes, type Folds } from './state/blocks';
@@ -29,37 +31,31 @@ const LAZY_FROM = 30;
 export function Entries(props: EntriesProps) {
   const { content, evaluation, hand, folds, mayWrite, actions } = props;
   const { cells } = content;
-  const lazy = cells.length >= LAZY_FROM;
   const sizes = sectionSizes(cells);
   const late = evaluation.state === 'slow' || evaluation.state === 'failed';
 
   return (
     <>
-      {cells.length === 0 && <EmptySheet mayWrite={mayWrite} />}
+      {cells.length === 0 && <EmptySheet mayWrite={mayWrite} actions={actions} />}
       <div>
-        {blocksOf(cells, folds).map(({ from, cells: [cell] }) => {
-          if (!cell) return null;
-          const common = {
-            cell,
-            place: from + 1,
-            readOnly: !mayWrite,
-            actions,
-          };
-          return (
-            <div key={cell.id} className={mayWrite ? undefined : 'mb-5'}>
-              {mayWrite && <Gap before={cell.id} actions={actions} />}
-              <Entry
-                {...common}
-                lines={evaluation.shown.get(cell.id) ?? NONE}
-                hand={hand?.id === cell.id ? hand : null}
-                folded={folds.has(cell.id)}
-                count={sizes.get(cell.id) ?? 0}
-                greyed={late}
-                lazy={lazy}
-              />
-            </div>
-          );
-        })}
+        {blocksOf(cells, folds).map(({ from, cells: [cell, ...hidden] }) =>
+          cell ? (
+            <Entry
+              key={cell.id}
+              cell={cell}
+              from={from}
+              until={from + 1 + hidden.length}
+              lines={evaluation.shown.get(cell.id) ?? NONE}
+              hand={hand?.id === cell.id ? hand : null}
+              folded={folds.has(cell.id)}
+              count={sizes.get(cell.id) ?? 0}
+              greyed={late}
+              isLazy={cells.length >= LAZY_FROM}
+              readOnly={!mayWrite}
+              actions={actions}
+            />
+          ) : null,
+        )}
       </div>
       {mayWrite && (
         <div className="mt-6 flex flex-wrap gap-2 px-3 sm:ml-[6.125rem] print:hidden">
@@ -76,37 +72,89 @@ export function Entries(props: EntriesProps) {
 
 interface EntryProps {
   cell: NotebookCell;
-  place: number;
+  /** Place of the cell among all cells, and of the first one that neither is it nor is hidden by it. */
+  from: number;
+  until: number;
   lines: readonly ShownLine[];
   hand: Hand | null;
   folded: boolean;
+  /** Cells in a section. */
   count: number;
   greyed: boolean;
-  lazy: boolean;
+  isLazy: boolean;
   readOnly: boolean;
   actions: SheetActions;
 }
 
-/** A cell as its kind and its fold have it. */
-function Entry({ folded, count, lines, greyed, lazy, ...common }: EntryProps) {
-  const { cell, hand, ...still } = common;
-  if (cell.kind === 'section') return <SectionCell {...common} folded={folded} count={count} />;
-  if (folded) return <FoldedCell {...still} cell={cell} lines={lines} />;
-  if (cell.kind === 'note') return <NoteCell {...common} lazy={lazy} />;
-  return (
-    <DimensionCell {...still} cell={cell} hand={hand} lines={lines} greyed={greyed} lazy={lazy} />
-  );
-}
+const KIND_NAMES: Record<NotebookCell['kind'], string> = {
+  dimension: 'Dimension cell',
+  note: 'Note',
+  section: 'Section',
+};
 
-function EmptySheet({ mayWrite }: { mayWrite: boolean }) {
+/** A cell as its kind and its fold have it, with the gap above and the grip beside it. */
+const Entry = memo(function Entry(props: EntryProps) {
+  const { cell, from, until, lines, hand, folded, count, greyed, isLazy, readOnly, actions } =
+    props;
+  const common = { cell, place: from + 1, readOnly, actions };
   return (
-    <div className="px-3 py-8 sm:ml-[6.125rem]">
+    <div
+      data-block
+      data-from={from}
+      data-until={until}
+      className={`group/block relative ${readOnly ? 'mb-5' : ''}`}
+    >
+      {!readOnly && (
+        <>
+          <Gap before={cell.id} actions={actions} />
+          <Grip
+            id={cell.id}
+            name={`${KIND_NAMES[cell.kind]} ${from + 1}`}
+            reachable={hand !== null}
+            actions={actions}
+          />
+        </>
+      )}
+      {cell.kind === 'section' ? (
+        <SectionCell {...common} hand={hand} folded={folded} count={count} />
+      ) : folded ? (
+        <FoldedCell {...common} lines={lines} />
+      ) : cell.kind === 'note' ? (
+        <NoteCell {...common} hand={hand} lazy={isLazy} />
+      ) : (
+        <DimensionCell {...common} hand={hand} lines={lines} greyed={greyed} lazy={isLazy} />
+      )}
+    </div>
+  );
+});
+
+/** Fetched only for a sheet with nothing on it. */
+const Starters = lazy(() =>
+  import('@/components/starters/starters').then(({ Starters: component }) => ({
+    default: component,
+  })),
+);
+
+function EmptySheet({ mayWrite, actions }: { mayWrite: boolean; actions: SheetActions }) {
+  return (
+    <div className="px-3 py-6">
       <p className="font-serif text-head font-semibold">The sheet is empty.</p>
       <p className="mt-2 max-w-prose font-serif text-note text-soft">
         {mayWrite
-          ? 'Begin with a dimension you were given, such as R = 1200 mm, and derive the others from it: s = R sqrt(2 - sqrt(2)). A note says where they come from.'
+          ? 'Begin with a dimension you were given, such as R = 1200 mm, and derive the others from it: s = R sqrt(2 - sqrt(2)). Or begin with one of these and write your own figures into it.'
           : 'Nothing has been written on it yet.'}
       </p>
+      {mayWrite && (
+        <div className="mt-5 min-h-60 print:hidden">
+          <Suspense>
+            <Starters
+              onChoose={(cells, settings) =>
+                actions.dispatch({ kind: 'replace', content: { format: 1, settings, cells } })
+              }
+            />
+          </Suspense>
+        </div>
+      )}
     </div>
   );
 }

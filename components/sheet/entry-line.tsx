@@ -62,17 +62,41 @@ function sizeOf(result: Result): string {
   return length < 90 ? 'text-figure print:text-base' : 'text-base print:text-small';
 }
 
+/** More steps than this stand folded until they are asked for. */
+const MANY_STEPS = 4;
+/** Values of a longer text than this can be read whole beneath, broken over lines. */
+const WIDE = 90;
+
+const MORE = 'w-fit text-small text-snapline underline-offset-4 hover:underline print:hidden';
+
 /** The named quadratics of a value too wide to read in one piece, one under another. */
 function Steps({ result }: { result: Result }) {
   if (result.kind !== 'number' || !result.exact.staged || !result.tower) return null;
+  const { tower } = result;
   return (
-    <ol className="mt-1 space-y-1 border-l border-hairline pl-3" aria-label="Steps, lowest first">
-      {result.tower.map((step) => (
-        <li key={step.name} className="py-0.5 text-base">
-          <Tex tex={stepTex(step)} />
-        </li>
-      ))}
-    </ol>
+    <details open={tower.length <= MANY_STEPS} className="mt-1 text-base">
+      <summary className={MORE}>{`${tower.length} steps, lowest first`}</summary>
+      <ol className="mt-1 space-y-1 border-l border-hairline pl-3" aria-label="Steps, lowest first">
+        {tower.map((step) => (
+          <li key={step.name} className="py-0.5 text-base">
+            <Tex tex={stepTex(step)} />
+          </li>
+        ))}
+      </ol>
+    </details>
+  );
+}
+
+/** A value wider than its row, as text that breaks over lines. */
+function WholeText({ result }: { result: Result }) {
+  if (!('exact' in result) || result.exact.text.length <= WIDE) return null;
+  return (
+    <details>
+      <summary className={MORE}>Read it whole</summary>
+      <code className="mt-1 block max-h-72 overflow-y-auto border-l border-hairline pl-3 font-mono text-small [overflow-wrap:anywhere]">
+        {result.exact.text}
+      </code>
+    </details>
   );
 }
 
@@ -108,6 +132,7 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
             <Steps result={value} />
           </div>
         )}
+        {value && !faulty && <WholeText result={value} />}
         {source}
         {fault && (
           <p data-fault className="text-base text-ruddle">

@@ -17,7 +17,11 @@ interface SheetBarProps {
   onPanel: (panel: Panel) => void;
   onFind: () => void;
   onKeys: () => void;
+  /** Shows the index of marks where it does not stand beside the sheet. */
+  onMarks: () => void;
 }
+
+export const MARKS_BUTTON = 'sheet-marks';
 
 const STATES = {
   settled: '',
@@ -28,7 +32,8 @@ const STATES = {
 
 /** Above the sheet: which one it is, whether it is kept, and what can be done with it as a whole. */
 export function SheetBar(props: SheetBarProps) {
-  const { notebook, sheet, evaluation, mayWrite, mayShare, onPanel, onFind, onKeys } = props;
+  const { notebook, sheet, evaluation, mayWrite, mayShare, onPanel, onFind, onKeys, onMarks } =
+    props;
   return (
     <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2 print:hidden">
       <div className="min-w-0">
@@ -46,11 +51,18 @@ export function SheetBar(props: SheetBarProps) {
               ? `Changed since version ${sheet.kept.number}`
               : `Version ${sheet.kept.number}, kept`}
           </span>
+          {sheet.dirty &&
+            (sheet.storeFull
+              ? ' · not kept on this computer: save soon'
+              : ' · kept on this computer until saved')}
           {sheet.keepState.kind === 'keeping' && ' · keeping…'}
           {STATES[evaluation.state] && ` · ${STATES[evaluation.state]}`}
         </p>
       </div>
       <div className="flex flex-wrap gap-2 print:hidden">
+        <Button id={MARKS_BUTTON} className="lg:hidden" onClick={onMarks}>
+          Marks
+        </Button>
         {mayWrite && (
           <>
             <Button onClick={sheet.undo ?? undefined} disabled={sheet.undo === null}>

@@ -1,56 +1,17 @@
 import { Mark } from '@/components/drawing/balloon';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { cellAnchor } from './cells';
-import { headingsOf } from './note';
+import { listHeadings, listMarks, type IndexedHeading } from './state/index-entries';
 import type { Shown } from './state/shown';
-import { sayBriefly } from './wording';
 
 interface SheetIndexProps {
   content: NotebookContent;
   shown: Shown;
 }
 
-interface Entry {
-  key: string;
-  cell: string;
-  mark: string;
-  size: string;
-  faulty: boolean;
-}
-
-function marksOf({ content, shown }: SheetIndexProps): Entry[] {
-  return content.cells.flatMap(({ id }) =>
-    (shown.get(id) ?? []).flatMap(({ result }) =>
-      result.mark === null
-        ? []
-        : [
-            {
-              key: `${id}:${result.line}`,
-              cell: id,
-              mark: result.mark,
-              size: sayBriefly(result),
-              faulty: result.kind === 'error',
-            },
-          ],
-    ),
-  );
-}
-
-/** The marks of the sheet with their sizes, and its headings; each leads to its place. */
-export function SheetIndex(props: SheetIndexProps) {
-  const marks = marksOf(props);
-  const headings = props.content.cells.flatMap(({ id, kind, source }) =>
-    kind === 'section'
-      ? [{ id, level: 1, text: source.trim() || 'Untitled' }]
-      : kind === 'note'
-        ? headingsOf(source).map((heading) => ({ ...heading, id }))
-        : [],
-  );
-  if (marks.length === 0 && headings.length === 0) {
-    return (
-      <p className="text-small text-soft">Marks and headings are listed here as you write them.</p>
-    );
-  }
+/** The marks of a sheet that is only read, with their sizes, and its headings; each leads to its place. */
+export function SheetIndex({ content, shown }: SheetIndexProps) {
+  const marks = listMarks(content, shown);
   return (
     <div className="space-y-6">
       {marks.length > 0 && (
@@ -59,10 +20,10 @@ export function SheetIndex(props: SheetIndexProps) {
             Marks
           </h2>
           <ul className="border-t border-rule">
-            {marks.map(({ key, cell, mark, size, faulty }) => (
-              <li key={key} className="border-b border-hairline">
+            {marks.map(({ id, line, mark, size, faulty }) => (
+              <li key={`${id}:${line}`} className="border-b border-hairline">
                 <a
-                  href={`#${cellAnchor(cell)}`}
+                  href={`#${cellAnchor(id)}`}
                   className="flex items-baseline justify-between gap-3 py-1 hover:bg-snapline-wash"
                 >
                   <span className="min-w-0 truncate text-base">
@@ -79,25 +40,43 @@ export function SheetIndex(props: SheetIndexProps) {
           </ul>
         </section>
       )}
-      {headings.length > 0 && (
-        <section aria-labelledby="index-headings">
-          <h2 id="index-headings" className="mb-1 text-small font-semibold">
-            On this sheet
-          </h2>
-          <ul className="border-t border-rule">
-            {headings.map(({ id, text, level }, index) => (
-              <li key={index} className="border-b border-hairline">
-                <a
-                  href={`#${cellAnchor(id)}`}
-                  className={`block truncate py-1 text-small hover:bg-snapline-wash ${level > 1 ? 'pl-3' : ''}`}
-                >
-                  {text}
-                </a>
-              </li>
-            ))}
-          </ul>
-        </section>
-      )}
+      <HeadingList headings={listHeadings(content)} />
     </div>
+  );
+}
+
+interface HeadingListProps {
+  headings: readonly IndexedHeading[];
+  /** Goes there by script, which opens what is folded; without it the link alone does. */
+  onGo?: (id: string) => void;
+}
+
+export function HeadingList({ headings, onGo }: HeadingListProps) {
+  if (headings.length === 0) return null;
+  return (
+    <section aria-labelledby="index-headings">
+      <h2 id="index-headings" className="mb-1 text-small font-semibold">
+        On this sheet
+      </h2>
+      <ul className="border-t border-rule">
+        {headings.map(({ id, text, level }, index) => (
+          <li key={index} className="border-b border-hairline">
+            <a
+              href={`#${cellAnchor(id)}`}
+              onClick={
+                onGo &&
+                ((event) => {
+                  event.preventDefault();
+                  onGo(id);
+                })
+              }
+              className={`block truncate py-1 text-small hover:bg-snapline-wash ${level > 1 ? 'pl-3' : ''}`}
+            >
+              {text}
+            </a>
+          </li>
+        ))}
+      </ul>
+    </section>
   );
 }

@@ -6,10 +6,12 @@ interface SheetLayoutProps {
   children: ReactNode;
   foot: ReactNode;
   zones: number;
+  /** On a narrow screen the index folds above the entries, or the page shows it elsewhere. */
+  narrow?: 'above' | 'elsewhere';
 }
 
-/** The index beside the entries, within the border; on a narrow screen it folds above them. */
-export function SheetLayout({ index, children, foot, zones }: SheetLayoutProps) {
+/** The index beside the entries, within the border. */
+export function SheetLayout({ index, children, foot, zones, narrow = 'above' }: SheetLayoutProps) {
   return (
     <SheetFrame foot={foot} zones={zones}>
       <div className="grid grow max-lg:content-start lg:grid-cols-[15rem_minmax(0,1fr)] print:block">
@@ -19,12 +21,14 @@ export function SheetLayout({ index, children, foot, zones }: SheetLayoutProps) 
         >
           <div className="sticky top-0 max-h-dvh overflow-y-auto px-4 py-5">{index}</div>
         </nav>
-        <details className="border-b border-rule px-4 py-2 lg:hidden print:hidden">
-          <summary className="text-small font-semibold">Marks and headings</summary>
-          <nav aria-label="Index of the sheet" className="py-3">
-            {index}
-          </nav>
-        </details>
+        {narrow === 'above' && (
+          <details className="border-b border-rule px-4 py-2 lg:hidden print:hidden">
+            <summary className="text-small font-semibold">Marks and headings</summary>
+            <nav aria-label="Index of the sheet" className="py-3">
+              {index}
+            </nav>
+          </details>
+        )}
         <div className="min-w-0 px-2 py-5 sm:px-4 print:py-0">{children}</div>
       </div>
     </SheetFrame>

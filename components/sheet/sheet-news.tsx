@@ -4,6 +4,7 @@ import { Button } from '@/components/ui/button';
 import { Moment } from '@/components/ui/moment';
 import { Notice } from '@/components/ui/notice';
 import type { Panel } from './sheet-dialogs';
+import { useConnection } from './state/use-connection';
 import type { Evaluation } from './state/use-evaluation';
 import type { NotebookOnScreen } from './state/use-notebook';
 
@@ -16,16 +17,32 @@ interface SheetNewsProps {
 
 /** What whoever writes should know now: a draft found, one put aside, a conflict, a lost connection. */
 export function SheetNews({ sheet, evaluation, archived, onPanel }: SheetNewsProps) {
-  const { found, aside, conflict, keepState, storeFull } = sheet;
+  const connection = useConnection();
+  const { found, aside, conflict, keepState, storeFull, elsewhere } = sheet;
   return (
     <div className="space-y-2 empty:hidden print:hidden">
       {archived && (
         <Notice tone="caution">This notebook is archived: it can be read, but not changed.</Notice>
       )}
-      {evaluation.state === 'failed' && <Notice tone="caution">{evaluation.fault}</Notice>}
+      {connection === 'lost' ? (
+        <Notice tone="caution" title="The connection is lost">
+          The figures shown are the last ones.
+          {sheet.dirty &&
+            ` What you typed is ${storeFull ? 'on this page only' : 'kept on this computer'} until it can be saved.`}
+        </Notice>
+      ) : (
+        evaluation.state === 'failed' && <Notice tone="caution">{evaluation.fault}</Notice>
+      )}
+      {connection === 'back' && <Notice tone="good">The connection is back.</Notice>}
       {storeFull && (
         <Notice tone="caution">
           This browser has no room for a draft, so what you type is safe only once it is kept.
+        </Notice>
+      )}
+      {elsewhere && (
+        <Notice tone="caution">
+          This notebook is open in another tab as well, with text that is not saved there. Each tab
+          keeps its own; save one, and the other is brought together with it.
         </Notice>
       )}
       {conflict && (

@@ -1,27 +1,29 @@
 'use client';
 
-import { useEffect, useMemo, useState } from 'react';
+import { lazy, Suspense, useEffect, useMemo, useState } from 'react';
 import { SWRConfig } from 'swr';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { TitleBlock } from '@/components/drawing/title-block';
-import type { Hand, SheetActions } from './cells';
+import { Drawer } from '@/components/ui/drawer';
+import { focusLine, type Hand, type SheetActions } from './cells';
 import { preloadEditor } from './editor/source-editor';
 import { Entries } from './entries';
 import { preloadAids, useAids } from './keys/use-aids';
 import { useSheetKeys } from './keys/use-sheet-keys';
+import { MarkIndex } from './mark-index';
 import { Removed } from './removed';
-import { SheetBar } from './sheet-bar';
+import { MARKS_BUTTON, SheetBar } from './sheet-bar';
 import { SheetDialogs, type Panel } from './sheet-dialogs';
-import { SheetIndex } from './sheet-index';
 import { SheetLayout, zonesFor } from './sheet-layout';
 import { SheetNews } from './sheet-news';
 import { BoundedCache } from './state/bounded-cache';
 import { useFolds } from './state/folds';
-import type { CellAnswer } from './state/shown';
+import type { CellAnswer, Shown } from './state/shown';
 import { useEvaluation } from './state/use-evaluation';
 import { useNotebook } from './state/use-notebook';
 import { useSheetActions } from './state/use-sheet-actions';
+import type { Place } from './state/uses';
 import { titleFields } from './title-fields';
 import { sayResult } from './wording';
 
@@ -39,6 +41,14 @@ export interface SheetProps {
 
 /** Answers kept in the browser: enough for undo to be at once. */
 const ANSWERS = 80;
+
+/** Loaded when a proof is first asked for. */
+const ProofDrawer = lazy(() =>
+  import('./proof/proof-drawer').then(({ ProofDrawer: component }) => ({ default: component })),
+);
+
+const resultAt = (shown: Shown, { id, line }: Place) =>
+  shown.get(id)?.find(({ result }) => result.line === line + 1)?.result ?? null;
 
 export function Sheet(props: SheetProps) {
   const [cache] = useState(() => new BoundedCache(ANSWERS));
@@ -63,13 +73,36 @@ function SheetOnScreen(props: SheetProps) {
   const [hand, setHand] = useState<Hand | null>(null);
   const [panel, setPanel] = useState<Panel | null>(null);
   const [said, say] = useState('');
+  const [details, setDetails] = useState<Place | null>(null);
+  const [listing, setListing] = useState(false);
   const { folds, setFold } = useFolds(props.personId, notebook.id);
   const { shown } = evaluation;
-  const cellActions = useSheetActions({ content, shown, folds, dispatch, setFold, setHand, say });
+  const cellActions = useSheetActions({
+    content,
+    shown,
+    folds,
+    dispatch,
+    setFold,
+    setHand,
+    setDetails,
+    say,
+  });
   const aids = useAids({ content, hand, mayWrite, actions: cellActions });
   const actions = useMemo<SheetActions>(
     () => ({ ...cellActions, ...aids.actions }),
     [cellActions, aids.actions],
+  );
+
+  // In its drawer the index makes room for what it leads to.
+  const indexActions = useMemo(
+    () => ({
+      showLine(id: string, line: number) {
+        setListing(false);
+        actions.showLine(id, line);
+      },
+      rename: (mark: string) => actions.rename(mark),
+    }),
+    [actions],
   );
 
   useEffect(() => {
@@ -96,6 +129,10 @@ function SheetOnScreen(props: SheetProps) {
           .join(' ')
       : '';
 
+  const index = (
+    <MarkIndex content={content} shown={shown} mayWrite={mayWrite} actions={indexActions} />
+  );
+
   return (
     <div className="space-y-3">
       <SheetBar
@@ -107,6 +144,7 @@ function SheetOnScreen(props: SheetProps) {
         onPanel={setPanel}
         onFind={aids.keys.find}
         onKeys={aids.keys.keys}
+        onMarks={() => setListing(true)}
       />
       {aids.bar}
       <SheetNews
@@ -116,7 +154,8 @@ function SheetOnScreen(props: SheetProps) {
         onPanel={setPanel}
       />
       <SheetLayout
-        index={<SheetIndex content={content} shown={shown} />}
+        index={index}
+        narrow="elsewhere"
         zones={zonesFor(content.cells.length)}
         foot={
           <TitleBlock
@@ -148,6 +187,34 @@ function SheetOnScreen(props: SheetProps) {
         {said}
       </div>
       <Removed count={sheet.removed} onUndo={undo} />
+      {listing && (
+        <Drawer
+          title="Marks"
+          side="left"
+          onClose={() => {
+            setListing(false);
+            document.getElementById(MARKS_BUTTON)?.focus();
+          }}
+        >
+          {index}
+        </Drawer>
+      )}
+      {details && (
+        <Suspense>
+          <ProofDrawer
+            key={`${details.id}:${details.line}`}
+            content={content}
+            at={details}
+            result={resultAt(shown, details)}
+            mayWrite={mayWrite}
+            actions={actions}
+            onClose={() => {
+              setDetails(null);
+              focusLine(details.id, details.line);
+            }}
+          />
+        </Suspense>
+      )}
       <SheetDialogs
         panel={panel}
         notebook={notebook}

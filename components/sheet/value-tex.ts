@@ -43,3 +43,17 @@ export function valueTex(result: Result): string | null {
 export function stepTex({ name, tex }: { name: string; tex: string }): string {
   return `${name.replace(/^([A-Za-z])_?(\d+)$/, '$1_{$2}')}=\\sqrt{${tex}}`;
 }
+
+/** A polynomial in x from its coefficients, highest power first; whole numbers as text. */
+export function polynomialTex(coefficients: readonly string[]): string {
+  const degree = coefficients.length - 1;
+  const terms = coefficients.flatMap((coefficient, index) => {
+    if (/^-?0+$/.test(coefficient)) return [];
+    const power = degree - index;
+    const x = power === 0 ? '' : power === 1 ? 'x' : `x^{${power}}`;
+    const size = coefficient.replace(/^-/, '');
+    const sign = coefficient.startsWith('-') ? '-' : '+';
+    return [`${sign}${size === '1' && x !== '' ? '' : size}${x}`];
+  });
+  return terms.join('').replace(/^\+/, '') || '0';
+}

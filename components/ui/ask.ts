@@ -1,3 +1,5 @@
+import { noteReach } from './reach';
+
 /** A refusal of the server: the code and the plain sentence of its problem document. */
 export class Refusal extends Error {
   override readonly name = 'Refusal';
@@ -33,12 +35,14 @@ export async function ask<T>(path: string, { method, body, signal }: Asking = {}
     });
   } catch (cause) {
     if (cause instanceof DOMException && cause.name === 'AbortError') throw cause;
+    noteReach(false);
     throw new Refusal(
       0,
       'unreachable',
       'No answer came from the server; the connection may be down.',
     );
   }
+  noteReach(true);
   if (response.status === 204) return undefined as T;
   const document = (await response.json().catch(() => null)) as Record<string, unknown> | null;
   if (response.ok) return document as T;

@@ -58,11 +58,11 @@ describe('bad input on the sheet', () => {
     await ida.page.getByRole('group', { name: 'Exact value' }).waitFor();
     await ida.page.route('**/api/evaluate', (route) => route.abort());
     await ida.page.keyboard.type(' + 1 mm');
-    await ida.page.getByText('No answer came from the server').waitFor();
+    await ida.page.getByText('The connection is lost').waitFor();
     expect(await ida.page.getByRole('group', { name: 'Exact value' }).count()).toBe(1);
     await ida.page.unroute('**/api/evaluate');
     await ida.page.keyboard.type(' + 1 mm');
-    await ida.page.getByText('No answer came from the server').waitFor({ state: 'detached' });
+    await ida.page.getByText('The connection is back.').waitFor();
     await ida.page.getByRole('figure').getByText('1202 mm').waitFor();
   });
 });

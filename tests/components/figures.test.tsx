@@ -1,6 +1,6 @@
 import { render, screen, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
-import { copyForms } from '@/components/sheet/copy-menu';
+import { copyForms } from '@/components/sheet/copy-forms';
 import { EntryLine } from '@/components/sheet/entry-line';
 import { valueTex } from '@/components/sheet/value-tex';
 import { compartmentsOf, sayBriefly, sayDimension, sayResult } from '@/components/sheet/wording';
@@ -88,12 +88,19 @@ describe('figures in words', () => {
 
 describe('figures copied', () => {
   it('leave as text that reads back, as TeX, and as coordinates with a tab between', () => {
-    expect(copyForms(POINT)).toEqual([
+    const texts = (result: Result) =>
+      copyForms(result).filter(({ label }) => label !== 'MathML' && label !== 'JSON');
+    expect(texts(POINT)).toEqual([
       { label: 'Exact text', text: 'point(600*sqrt(3) mm, 600 mm)' },
       { label: 'TeX', text: '\\left(600\\sqrt{3},\\;600\\right)\\,\\mathrm{mm}' },
       { label: 'x and y', text: '1039.23048454132637611646780490\t600' },
       { label: 'x and y, cut', text: '1039\t600' },
     ]);
-    expect(copyForms(LINE).map(({ label }) => label)).toEqual(['Exact text', 'TeX']);
+    expect(copyForms(LINE).map(({ label }) => label)).toEqual([
+      'Exact text',
+      'TeX',
+      'MathML',
+      'JSON',
+    ]);
   });
 });

@@ -19,6 +19,10 @@ export function contentOf(...cells: NotebookCell[]): NotebookContent {
 export function memoryStore(full = false) {
   const kept = new Map<string, string>();
   return {
+    get length() {
+      return kept.size;
+    },
+    key: (index: number) => [...kept.keys()][index] ?? null,
     getItem: (key: string) => kept.get(key) ?? null,
     setItem: (key: string, value: string) => {
       if (full) throw new DOMException('full', 'QuotaExceededError');

@@ -1,7 +1,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { copyForms } from '@/components/sheet/copy-menu';
+import { copyForms } from '@/components/sheet/copy-forms';
+import { reachCompartments, sayGuarantee } from '@/components/sheet/proof/say-proof';
 import { sayDecimal, shorten } from '@/components/sheet/say-number';
+import { polynomialTex } from '@/components/sheet/value-tex';
 import {
   compartmentsOf,
   sayBriefly,
@@ -225,12 +227,57 @@ describe('a result in words', () => {
     expect(sayBriefly(errorResult(1, 'R', 0, 1))).toBe('error');
   });
 
-  it('leaves the sheet as exact text, TeX, decimal and cut size, whole', () => {
-    expect(copyForms(SUM_OF_ROOTS).map(({ text }) => text)).toEqual([
-      'sqrt(2)+sqrt(3)',
-      '\\sqrt{2}+\\sqrt{3}',
-      '3.14626436994197234232913506571',
-    ]);
+  it('leaves the sheet as exact text, TeX, MathML, decimal, cut size and JSON, whole', async () => {
+    const forms = new Map(copyForms(SUM_OF_ROOTS).map(({ label, text }) => [label, text]));
+    expect([...forms.keys()]).toEqual(['Exact text', 'TeX', 'MathML', 'Decimal', 'JSON']);
+    expect(forms.get('Exact text')).toBe('sqrt(2)+sqrt(3)');
+    expect(forms.get('TeX')).toBe('\\sqrt{2}+\\sqrt{3}');
+    expect(forms.get('Decimal')).toBe('3.14626436994197234232913506571');
+    expect(JSON.parse(String(forms.get('JSON')))).toEqual(SUM_OF_ROOTS);
+    const mathMl = forms.get('MathML');
+    const written = typeof mathMl === 'function' ? await mathMl() : '';
+    expect(written).toMatch(/^<math [^>]*Math\/MathML/);
+    expect(written.match(/<msqrt>/g)).toHaveLength(2);
+    expect(written).toMatch(/<\/math>$/);
     expect(copyForms(errorResult(1, 'R', 0, 1))).toEqual([]);
+    expect(copyForms(DECIDED).map(({ label }) => label)).toEqual(['JSON']);
+  });
+});
+
+describe('the guarantee of a cut size', () => {
+  const cut = { value: '551', step: '0.5 mm' } as const;
+
+  it('says on which side the size lies and by how much at most', () => {
+    expect(sayGuarantee({ ...cut, rounding: 'half-even', direction: 'down' })).toBe(
+      'Rounded down: the cut size is smaller than the exact value, by at most half a step of 0.5 mm.',
+    );
+    expect(sayGuarantee({ ...cut, rounding: 'up', direction: 'up' })).toBe(
+      'Rounded up: the cut size is larger than the exact value, by less than a step of 0.5 mm.',
+    );
+    expect(sayGuarantee({ ...cut, rounding: 'up', direction: 'exact' })).toContain('whole number');
+  });
+});
+
+describe('the verdict tool by tool', () => {
+  it('counts the straightedge and compass among the tools beside the trisector', () => {
+    const say = (straightedgeAndCompass: boolean | null, withTrisector: boolean | null) =>
+      reachCompartments({ straightedgeAndCompass, withTrisector, reason: '' }).map(
+        ({ value }) => value,
+      );
+    expect(say(true, null)).toEqual(['reach it', 'reach it']);
+    expect(say(false, true)).toEqual(['do not reach it', 'reach it']);
+    expect(say(false, false)).toEqual(['do not reach it', 'do not reach it']);
+    expect(say(null, null)).toEqual(['not decided', 'not decided']);
+  });
+});
+
+describe('a polynomial', () => {
+  it.each([
+    [['1', '0', '-10', '0', '1'], 'x^{4}-10x^{2}+1'],
+    [['8', '4', '-4', '-1'], '8x^{3}+4x^{2}-4x-1'],
+    [['1', '-5'], 'x-5'],
+    [['-1', '0'], '-x'],
+  ])('of coefficients %j is written %s', (coefficients, tex) => {
+    expect(polynomialTex(coefficients)).toBe(tex);
   });
 });

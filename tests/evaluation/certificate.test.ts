@@ -18,7 +18,7 @@ const CELLS = [
 ];
 const certificateOf = (cell: string, line: number) => certify({ cells: CELLS, at: { cell, line } });
 
-/** The side of the 34-gon has degree 16 (DLMF 4.17, and φ(68)/2 = 16 for its sine). */
+/** 2 sin(π/17), the chord of a seventeenth, has degree φ(17) = 16. */
 describe('the certificate of a line', () => {
   it.each([
     ['a', 1, 1, 'mm'],

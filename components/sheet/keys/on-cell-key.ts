@@ -27,6 +27,13 @@ function openCopies({ target }: KeyPlace): boolean {
   return button !== null && button !== undefined;
 }
 
+/** Opens the proof of the figure in whose row the focus is. */
+function openProof({ target }: KeyPlace): boolean {
+  const button = target.closest('[data-row]')?.querySelector<HTMLElement>('[data-proof]');
+  button?.click();
+  return button !== null && button !== undefined;
+}
+
 function focusEnd(by: -1 | 1): boolean {
   const entries = [...document.querySelectorAll<HTMLElement>('[data-entry]')];
   const end = by < 0 ? entries[0] : entries.at(-1);
@@ -46,6 +53,7 @@ export const CELL_COMMANDS: Record<CellCommand, Run> = {
   duplicate: always(({ id }, actions) => actions.duplicate(id)),
   fold: always(({ id }, actions) => actions.fold(id)),
   copy: openCopies,
+  proof: openProof,
   remove: always(({ id }, actions) => actions.remove(id)),
   cellBefore: ({ id }, actions) => actions.jump(id, -1, 'cell'),
   cellAfter: ({ id }, actions) => actions.jump(id, 1, 'cell'),

@@ -15,24 +15,33 @@ export interface Draft {
 }
 
 export type Shelf = 'typing' | 'aside';
-export type Store = Pick<Storage, 'getItem' | 'setItem' | 'removeItem'>;
+export type Store = Pick<Storage, 'getItem' | 'setItem' | 'removeItem' | 'key' | 'length'>;
+
+/** Whose draft: of a notebook, on a shelf. What is typed is of one tab, so that two never overwrite each other. */
+export interface DraftPlace {
+  notebook: string;
+  shelf: Shelf;
+  /** Empty for what belongs to no tab. */
+  tab: string;
+}
 
 const FORM = 1;
-const keyOf = (notebookId: string, shelf: Shelf) => `surdwork:${shelf}:${notebookId}`;
+const keyOf = ({ notebook, shelf, tab }: DraftPlace) =>
+  `surdwork:${shelf}:${notebook}${tab === '' ? '' : `:${tab}`}`;
 
 /** @returns whether the browser took it; a full or forbidden store says no instead of throwing. */
-export function keepDraft(store: Store, notebookId: string, draft: Draft, shelf: Shelf = 'typing') {
+export function keepDraft(store: Store, place: DraftPlace, draft: Draft): boolean {
   try {
-    store.setItem(keyOf(notebookId, shelf), JSON.stringify({ form: FORM, ...draft }));
+    store.setItem(keyOf(place), JSON.stringify({ form: FORM, ...draft }));
     return true;
   } catch {
     return false;
   }
 }
 
-export function findDraft(store: Store, notebookId: string, shelf: Shelf = 'typing'): Draft | null {
+export function findDraft(store: Store, place: DraftPlace): Draft | null {
   try {
-    const text = store.getItem(keyOf(notebookId, shelf));
+    const text = store.getItem(keyOf(place));
     const kept: unknown = text === null ? null : JSON.parse(text);
     return isDraft(kept)
       ? { base: kept.base, from: kept.from, content: kept.content, at: kept.at }
@@ -42,12 +51,45 @@ export function findDraft(store: Store, notebookId: string, shelf: Shelf = 'typi
   }
 }
 
-export function dropDraft(store: Store, notebookId: string, shelf: Shelf = 'typing') {
+export function dropDraft(store: Store, place: DraftPlace) {
   try {
-    store.removeItem(keyOf(notebookId, shelf));
+    store.removeItem(keyOf(place));
   } catch {
     // A store that cannot be written holds nothing to drop.
   }
+}
+
+/** The tabs that have something typed in a notebook, the latest first. */
+export function listTyping(store: Store, notebook: string): { tab: string; draft: Draft }[] {
+  const whole = keyOf({ notebook, shelf: 'typing', tab: '' });
+  const found: { tab: string; draft: Draft }[] = [];
+  for (let index = 0; index < store.length; index += 1) {
+    const key = store.key(index);
+    if (key !== whole && !key?.startsWith(`${whole}:`)) continue;
+    const tab = key.slice(whole.length + 1);
+    const draft = findDraft(store, { notebook, shelf: 'typing', tab });
+    if (draft) found.push({ tab, draft });
+  }
+  return found.sort((a, b) => (a.draft.at < b.draft.at ? 1 : -1));
+}
+
+/**
+ * The draft that a tab goes on with: its own, or else the latest of a tab that is closed, which becomes
+ * its own. Drafts of tabs that are open stay theirs; others that are left over wait for their turn.
+ */
+export function takeUpDraft(
+  store: Store,
+  notebook: string,
+  tab: string,
+  open: ReadonlySet<string>,
+): Draft | null {
+  const own: DraftPlace = { notebook, shelf: 'typing', tab };
+  const mine = findDraft(store, own);
+  if (mine) return mine;
+  const left = listTyping(store, notebook).find((other) => !open.has(other.tab));
+  if (!left) return null;
+  if (keepDraft(store, own, left.draft)) dropDraft(store, { ...own, tab: left.tab });
+  return left.draft;
 }
 
 function isDraft(value: unknown): value is Draft & { form: number } {

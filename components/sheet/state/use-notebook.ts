@@ -5,8 +5,17 @@ import type { NotebookContent } from '@/lib/notebooks/content';
 import type { StaleHead } from '@/lib/notebooks/types';
 import { ask, Refusal, sayFault } from '@/components/ui/ask';
 import { sameContent, type Change } from './changes';
-import { dropDraft, findDraft, keepDraft, type Draft } from './draft';
+import {
+  dropDraft,
+  findDraft,
+  keepDraft,
+  listTyping,
+  takeUpDraft,
+  type Draft,
+  type DraftPlace,
+} from './draft';
 import { beginHistory, historyReducer } from './history';
+import { claimTab, listOpenTabs } from './tab';
 
 /** A version the server has acknowledged, which the sheet on the screen builds on. */
 export interface Kept {
@@ -21,6 +30,8 @@ export type KeepState = { kind: 'idle' } | { kind: 'keeping' } | { kind: 'failed
 /** Milliseconds after the last change before the draft is written to the browser's store. */
 const DRAFT_PAUSE = 200;
 
+const asideOf = (notebook: string): DraftPlace => ({ notebook, shelf: 'aside', tab: '' });
+
 /** The notebook on the screen: its history, what the server has of it, and its draft. */
 export function useNotebook(id: string, first: Kept, readOnly: boolean) {
   const [history, act] = useReducer(historyReducer, first.content, beginHistory);
@@ -30,6 +41,7 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
   const [found, setFound] = useState<Draft | null>(null);
   const [aside, setAside] = useState<Draft | null>(null);
   const [ready, setReady] = useState(false);
+  const [elsewhere, setElsewhere] = useState(false);
   const [storeFull, setStoreFull] = useState(false);
   const { present } = history;
   const dirty = !readOnly && !sameContent(present, kept.content);
@@ -41,12 +53,23 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
   const undo = useCallback(() => act({ kind: 'undo' }), []);
   const redo = useCallback(() => act({ kind: 'redo' }), []);
 
+  /** Where this tab keeps what is typed; null until the tab has its name. */
+  const typing = useRef<DraftPlace | null>(null);
+
   // The store is known only in the browser; what it holds replaces what the server sent.
   useEffect(() => {
     if (readOnly) return;
-    const timer = setTimeout(() => {
-      const draft = findDraft(localStorage, id);
-      setAside(findDraft(localStorage, id, 'aside'));
+    let gone = false;
+    const begin = async () => {
+      const tab = await claimTab();
+      const open = await listOpenTabs();
+      if (gone) return;
+      const draft = takeUpDraft(localStorage, id, tab, open);
+      typing.current = { notebook: id, shelf: 'typing', tab };
+      setAside(findDraft(localStorage, asideOf(id)));
+      setElsewhere(
+        listTyping(localStorage, id).some((other) => other.tab !== tab && open.has(other.tab)),
+      );
       if (draft && !sameContent(draft.content, first.content)) {
         act({ kind: 'change', change: { kind: 'replace', content: draft.content }, at: 0 });
         setFound(draft);
@@ -57,8 +80,11 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
         }
       }
       setReady(true);
-    });
-    return () => clearTimeout(timer);
+    };
+    void begin();
+    return () => {
+      gone = true;
+    };
   }, [id, first, readOnly]);
 
   const latest = useRef({ present, kept, dirty });
@@ -68,11 +94,16 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
 
   const writeDraft = useCallback(() => {
     const now = latest.current;
-    if (!now.dirty) return dropDraft(localStorage, id);
+    const place = typing.current;
+    if (place === null) return;
+    if (!now.dirty) {
+      dropDraft(localStorage, place);
+      return;
+    }
     const { number: base, content: from } = now.kept;
     const at = new Date().toISOString();
-    setStoreFull(!keepDraft(localStorage, id, { base, from, content: now.present, at }));
-  }, [id]);
+    setStoreFull(!keepDraft(localStorage, place, { base, from, content: now.present, at }));
+  }, []);
 
   useEffect(() => {
     if (!ready || readOnly) return;
@@ -113,7 +144,9 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
         );
         setKept({ number: saved.number, content, savedAt: saved.savedAt, savedBy: keptBy });
         // At once, for who leaves the page now: this text is no draft any more.
-        if (sameContent(latest.current.present, content)) dropDraft(localStorage, id);
+        if (typing.current && sameContent(latest.current.present, content)) {
+          dropDraft(localStorage, typing.current);
+        }
         setKeepState({ kind: 'idle' });
         setConflict(null);
         setFound(null);
@@ -136,7 +169,7 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
         content: present,
         at: new Date().toISOString(),
       };
-      keepDraft(localStorage, id, draft, 'aside');
+      keepDraft(localStorage, asideOf(id), draft);
       setAside(draft);
       setKept(onto);
       setConflict(null);
@@ -149,7 +182,7 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
   const bringBack = useCallback(() => {
     if (!aside) return;
     dispatch({ kind: 'replace', content: aside.content });
-    dropDraft(localStorage, id, 'aside');
+    dropDraft(localStorage, asideOf(id));
     setAside(null);
   }, [aside, dispatch, id]);
 
@@ -170,6 +203,7 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
     aside,
     putAside,
     bringBack,
+    elsewhere,
     storeFull,
   };
 }

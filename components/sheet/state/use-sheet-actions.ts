@@ -9,6 +9,7 @@ import { blocksOf, hiddenBy, placeBeyond, type Folds } from './blocks';
 import { newCellId } from './changes';
 import { copiesOf } from './copies';
 import type { Shown } from './shown';
+import type { Place } from './uses';
 
 export interface Sheeted {
   content: NotebookContent;
@@ -17,6 +18,7 @@ export interface Sheeted {
   dispatch: CellActions['dispatch'];
   setFold: (id: string, folded: boolean) => void;
   setHand: (hand: Hand | null) => void;
+  setDetails: (line: Place | null) => void;
   /** Tells whoever listens what has just been done. */
   say: (words: string) => void;
 }
@@ -142,6 +144,14 @@ function makeActions(first: Sheeted): {
       now().setHand(null);
       requestAnimationFrame(() => {
         if (next) focusEntry(next.id);
+      });
+    },
+    details: (id, line) => now().setDetails({ id, line }),
+    showLine(id, line) {
+      reveal(id);
+      requestAnimationFrame(() => {
+        document.getElementById(cellAnchor(id))?.scrollIntoView({ block: 'center' });
+        focusEntry(id, line);
       });
     },
   };
