@@ -1,6 +1,6 @@
 import type { KeyboardEvent } from 'react';
 import type { CellCommand, EntryCommand } from '../cell-keys';
-import { AT_END, focusNeighbour, lineOfEntry, type SheetActions } from '../cells';
+import { AT_END, cellAnchor, focusNeighbour, lineOfEntry, type SheetActions } from '../cells';
 import { findCommand } from './chord';
 
 /** The cell and the element in which a key was pressed. */
@@ -27,11 +27,14 @@ function openCopies({ target }: KeyPlace): boolean {
   return button !== null && button !== undefined;
 }
 
-/** Opens the proof of the figure in whose row the focus is. */
-function openProof({ target }: KeyPlace): boolean {
-  const button = target.closest('[data-row]')?.querySelector<HTMLElement>('[data-proof]');
-  button?.click();
-  return button !== null && button !== undefined;
+/** The line, from 0, in which a key was pressed: its entry says so, an open source stands in its row. */
+function lineOf({ id, target }: KeyPlace): number {
+  if (target.dataset.entry === id) return lineOfEntry(target);
+  const rows = [...document.querySelectorAll(`#${cellAnchor(id)} [data-row]`)];
+  return Math.max(
+    0,
+    rows.findIndex((row) => row.contains(target)),
+  );
 }
 
 function focusEnd(by: -1 | 1): boolean {
@@ -53,7 +56,7 @@ export const CELL_COMMANDS: Record<CellCommand, Run> = {
   duplicate: always(({ id }, actions) => actions.duplicate(id)),
   fold: always(({ id }, actions) => actions.fold(id)),
   copy: openCopies,
-  proof: openProof,
+  proof: always((place, actions) => actions.details(place.id, lineOf(place))),
   remove: always(({ id }, actions) => actions.remove(id)),
   cellBefore: ({ id }, actions) => actions.jump(id, -1, 'cell'),
   cellAfter: ({ id }, actions) => actions.jump(id, 1, 'cell'),
