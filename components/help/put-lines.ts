@@ -1,7 +1,8 @@
 import type { NotebookContent } from '@/lib/notebooks/content';
 import type { OpenNotebook } from '@/lib/notebooks/types';
 import { newCellId } from '@/components/sheet/state/changes';
-import { findDraft, keepDraft, type Store } from '@/components/sheet/state/draft';
+import { keepDraft, listTyping, type Store } from '@/components/sheet/state/draft';
+import { claimTab, listOpenTabs } from '@/components/sheet/state/tab';
 import { ask, Refusal } from '@/components/ui/ask';
 
 /** The mark that a line defines, or null. */
@@ -43,11 +44,13 @@ export type PutAnswer =
  * @throws Refusal
  */
 export async function putLines(id: string, lines: string, store: Store): Promise<PutAnswer> {
-  const draft = findDraft(store, id);
-  if (draft) {
+  const waiting = await findWaiting(store, id);
+  if (waiting) {
+    const { tab, draft } = waiting;
     const content = withLines(draft.content, lines);
     if (content === null) return { kind: 'nothing' };
-    if (keepDraft(store, id, { ...draft, content })) return { kind: 'draft' };
+    const place = { notebook: id, shelf: 'typing', tab } as const;
+    if (keepDraft(store, place, { ...draft, content })) return { kind: 'draft' };
   }
   try {
     return await append(id, lines);
@@ -55,6 +58,12 @@ export async function putLines(id: string, lines: string, store: Store): Promise
     if (fault instanceof Refusal && fault.code === 'stale-version') return append(id, lines);
     throw fault;
   }
+}
+
+/** A draft that no sheet on the screen goes on with: of this tab, which shows another page, or of a closed one. */
+async function findWaiting(store: Store, id: string) {
+  const [own, open] = [await claimTab(), await listOpenTabs()];
+  return listTyping(store, id).find(({ tab }) => tab === own || !open.has(tab));
 }
 
 async function append(id: string, lines: string): Promise<PutAnswer> {

@@ -4,7 +4,7 @@ import { beforeEach, describe, expect, it, vi } from 'vitest';
 import { GROUPS } from '@/components/help/entries';
 import { Filter, Filtered, answersFilter } from '@/components/help/filter';
 import { putLines, withLines } from '@/components/help/put-lines';
-import { findDraft, keepDraft } from '@/components/sheet/state/draft';
+import { findDraft, keepDraft, type DraftPlace } from '@/components/sheet/state/draft';
 import { evaluateCells } from '@/lib/language';
 import { CONSTANTS, FUNCTIONS, UNITS } from '@/lib/language/names';
 import type { NotebookContent } from '@/lib/notebooks/content';
@@ -92,9 +92,10 @@ describe('putting lines in', () => {
       content: content('a = 1'),
       at: '2026-01-01T00:00:00Z',
     };
-    keepDraft(localStorage, 'n1', draft);
+    const place: DraftPlace = { notebook: 'n1', shelf: 'typing', tab: '' };
+    keepDraft(localStorage, place, draft);
     expect(await putLines('n1', 'b = 2', localStorage)).toEqual({ kind: 'draft' });
-    const kept = findDraft(localStorage, 'n1');
+    const kept = findDraft(localStorage, place);
     expect(sourcesOf(kept?.content ?? null)).toEqual(['a = 1', 'b = 2']);
     expect(kept).toMatchObject({ base: 3, from: content() });
     expect(asked).not.toHaveBeenCalled();
