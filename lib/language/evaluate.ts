@@ -15,7 +15,7 @@ import { type Settings, completeSettings } from './settings';
 import type { Statement } from './syntax';
 import { typesetStatement } from './typeset';
 import type { LineValue } from './values';
-import { findNearest } from './words';
+import { failUnknown } from './unknown-name';
 
 /** A line by the position of its cell and its 1-based number there. */
 export interface LinePlace {
@@ -278,12 +278,13 @@ class Evaluation {
 
   private findMark(name: string, at: Span, use: 'mark' | 'function'): LineValue {
     const [definition, second] = this.graph.definitions.get(name) ?? [];
-    if (definition === undefined) return failUnknown(name, at, use, this.graph.definitions.keys());
-    const value = this.values.get(definition);
-    if (second === undefined && value !== undefined) return value;
     const reader = this.graph.lines.find((line) =>
       line.reads.includes(at as (typeof line.reads)[number]),
     );
+    if (definition === undefined)
+      return failUnknown(name, at, use, this.graph.definitions.keys(), reader);
+    const value = this.values.get(definition);
+    if (second === undefined && value !== undefined) return value;
     const place = second === undefined ? this.describePlace(definition, reader) : 'more than once';
     const message =
       second === undefined
@@ -299,19 +300,4 @@ class Evaluation {
       ? `in line ${line.line} of this cell`
       : `in line ${line.line} of another cell`;
   }
-}
-
-function failUnknown(
-  name: string,
-  at: Span,
-  use: 'mark' | 'function',
-  marks: Iterable<string>,
-): never {
-  const nearest = findNearest(name, marks);
-  const exponent = /^[eE]\d*$/.test(name) ? ' (a power of ten is written `10^3`)' : '';
-  const hint = nearest === null ? exponent : `; did you mean \`${nearest}\`?`;
-  const stop = hint.endsWith('?') ? '' : '.';
-  const none =
-    use === 'mark' ? `No mark \`${name}\` is defined` : `There is no function \`${name}\``;
-  return fail('unknown-name', none + hint + stop, at);
 }

@@ -102,13 +102,22 @@ export class Evaluator {
   }
 
   value(node: Expression): Value {
+    this.begin();
+    this.at = node;
+    const value = this.valueOf(node);
+    this.end();
+    return value;
+  }
+
+  /** Counts an operation that may do others before its `end`; fails beyond the limits on their number and depth. */
+  begin(): void {
     this.operations += 1;
     this.depth += 1;
     this.checkWork();
-    this.at = node;
-    const value = this.valueOf(node);
+  }
+
+  end(): void {
     this.depth -= 1;
-    return value;
   }
 
   private checkWork(): void {
@@ -156,7 +165,7 @@ export class Evaluator {
       case 'each':
         return this.each(node);
       case 'list': {
-        const items = node.items.map((item) => this.value(item));
+        const items = this.values(node.items);
         this.at = node;
         return list(items);
       }
@@ -174,13 +183,20 @@ export class Evaluator {
     }
   }
 
+  /** A loop and no `map`: each frame counts when functions call one another. */
+  private values(nodes: readonly Expression[]): Value[] {
+    const values: Value[] = [];
+    for (const node of nodes) values.push(this.value(node));
+    return values;
+  }
+
   /** Evaluates the parts and then applies an action, item by item where lists stand among them. */
   private join(
     node: Expression,
     parts: readonly Expression[],
     action: (values: readonly Single[]) => Value,
   ): Value {
-    const values = parts.map((part) => this.value(part));
+    const values = this.values(parts);
     this.at = node;
     return itemByItem(values, action);
   }
@@ -271,7 +287,7 @@ export class Evaluator {
     if (action === undefined)
       throw new Error(`The function "${node.name}" of the name table has no action.`);
     if (word.itemByItem) return this.join(node, node.args, (values) => action(this.engine, values));
-    const values = node.args.map((arg) => this.value(arg));
+    const values = this.values(node.args);
     this.at = node;
     return action(this.engine, values);
   }
@@ -291,25 +307,34 @@ export class Evaluator {
     return list(items);
   }
 
-  /** Parameters take the values of the arguments; the names of the calling line are not seen inside. */
   private application(node: ApplicationNode): Value {
-    const definition = this.functionOf(node);
-    const args = node.args.map((arg) => this.value(arg));
-    this.at = node;
+    const { parameters, where, value } = this.functionOf(node);
+    const args = this.values(node.args);
+    const outer = this.enter(node);
+    this.locals = new Map(parameters.map(({ name }, index) => [name, args[index] as Value]));
+    this.define(where);
+    const result = this.value(value);
+    this.leave(node, outer);
+    return result;
+  }
+
+  /** Goes into a function of the notebook, where the local names of the calling line are not seen; gives these names. */
+  enter(node: ApplicationNode): ReadonlyMap<string, Value> {
     const outer = this.locals;
+    this.at = node;
     this.calls.push(node.callee.name);
-    this.locals = new Map(
-      definition.parameters.map(({ name }, index) => [name, args[index] as Value]),
-    );
-    this.define(definition.where);
-    const value = this.value(definition.value);
+    this.locals = new Map();
+    return outer;
+  }
+
+  leave(node: ApplicationNode, outer: ReadonlyMap<string, Value>): void {
     this.calls.pop();
     this.locals = outer;
     this.at = node;
-    return value;
   }
 
-  private functionOf(node: ApplicationNode): FunctionStatement {
+  /** The definition of a function that is called with as many arguments as it has parameters. */
+  functionOf(node: ApplicationNode): FunctionStatement {
     const { name } = node.callee;
     const found = this.findMark(name, node.callee, 'function');
     if (found.kind !== 'function')

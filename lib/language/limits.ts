@@ -13,9 +13,9 @@ export const LANGUAGE_LIMITS = {
   /** Lists inside one another. */
   listDepth: 8,
   /** Operations of one line, those of the functions that it calls included. */
-  operations: 200_000,
-  /** Operations inside one another, through all the functions that are called. */
-  depth: 1_500,
+  operations: 50_000,
+  /** Operations inside one another, through all the functions that are called: the deepest line alone has 600. */
+  depth: 700,
 } as const;
 
 export type LanguageLimits = { readonly [name in keyof typeof LANGUAGE_LIMITS]: number };

@@ -1,7 +1,7 @@
 import type { Engine, Num } from '../engine/index';
 import type { Evaluator } from './evaluator';
 import { fail } from './failure';
-import type { Expression } from './syntax';
+import { type ApplicationNode, type Expression, namesBoundIn, partsOf } from './syntax';
 import { needAlgebraic } from './values';
 
 /** Coefficients of a polynomial in x, lowest power first, without a leading zero; the empty list is 0. */
@@ -9,21 +9,48 @@ export type Polynomial = readonly Num[];
 
 const LARGEST_DEGREE = 64;
 
+/** Names that stand for polynomials: `x`, and inside a function of the notebook its parameters. */
+type Variables = ReadonlyMap<string, Polynomial>;
+
 /**
  * Reads an expression as a polynomial in `x` whose coefficients are plain algebraic values.
- * Inside it `x` is the variable, whatever marks there are. Division by x, and x under a root, in an exponent or inside
- * a function, are refused.
+ * Inside it `x` is the variable, whatever marks there are, and functions of the notebook may be called with it. Division
+ * by x, and x under a root, in an exponent or inside a function of the language, are refused.
  */
 export function readPolynomial(engine: Engine, evaluator: Evaluator, node: Expression): Polynomial {
-  const read = (part: Expression): Polynomial => readPolynomial(engine, evaluator, part);
-  if (!mentionsX(node)) {
+  const x: Polynomial = [engine.integer(0n), engine.integer(1n)];
+  return readIn(engine, evaluator, node, new Map([['x', x]]));
+}
+
+function readIn(
+  engine: Engine,
+  evaluator: Evaluator,
+  node: Expression,
+  variables: Variables,
+): Polynomial {
+  evaluator.begin();
+  const polynomial = readNode(engine, evaluator, node, variables);
+  evaluator.end();
+  return polynomial;
+}
+
+function readNode(
+  engine: Engine,
+  evaluator: Evaluator,
+  node: Expression,
+  variables: Variables,
+): Polynomial {
+  const read = (part: Expression): Polynomial => readIn(engine, evaluator, part, variables);
+  if (!mentions(node, variables)) {
     const value = evaluator.value(node);
     evaluator.at = node;
     return trim(engine, [needAlgebraic(engine, value, 'A coefficient is a plain number')]);
   }
   switch (node.kind) {
     case 'mark':
-      return [engine.integer(0n), engine.integer(1n)];
+      return variables.get(node.name) ?? [];
+    case 'application':
+      return readCall(engine, evaluator, node, read);
     case 'group':
       return read(node.value);
     case 'negative':
@@ -82,28 +109,32 @@ function tooHigh(degree: number, at: Expression | null): never {
   );
 }
 
-function mentionsX(node: Expression): boolean {
-  switch (node.kind) {
-    case 'mark':
-      return node.name === 'x';
-    case 'sum':
-      return node.terms.some((term) => mentionsX(term.value));
-    case 'product':
-      return node.factors.some((factor) => mentionsX(factor.value));
-    case 'power':
-      return mentionsX(node.base) || mentionsX(node.exponent);
-    case 'call':
-      // An inner `root` has an x of its own.
-      return node.args.some(
-        (arg, index) => !(node.name === 'root' && index === 0) && mentionsX(arg),
-      );
-    case 'negative':
-    case 'group':
-    case 'root':
-      return mentionsX(node.value);
-    default:
-      return false;
-  }
+/** A function of the notebook with polynomials as its arguments: its value, with these in place of the parameters. */
+function readCall(
+  engine: Engine,
+  evaluator: Evaluator,
+  node: ApplicationNode,
+  read: (part: Expression) => Polynomial,
+): Polynomial {
+  const { parameters, where, value } = evaluator.functionOf(node);
+  const variables = new Map<string, Polynomial>();
+  for (const [index, { name }] of parameters.entries())
+    variables.set(name, read(node.args[index] as Expression));
+  const outer = evaluator.enter(node);
+  for (const local of where)
+    variables.set(local.name, readIn(engine, evaluator, local.value, variables));
+  const polynomial = readIn(engine, evaluator, value, variables);
+  evaluator.leave(node, outer);
+  return polynomial;
+}
+
+function mentions(node: Expression, variables: { has(name: string): boolean }): boolean {
+  if (node.kind === 'mark') return variables.has(node.name);
+  return partsOf(node).some((part, index) => {
+    const bound = namesBoundIn(node, index);
+    const free = { has: (name: string) => !bound.includes(name) && variables.has(name) };
+    return mentions(part, bound.length === 0 ? variables : free);
+  });
 }
 
 function trim(engine: Engine, coefficients: readonly Num[]): Polynomial {
