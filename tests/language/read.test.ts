@@ -116,6 +116,14 @@ describe('readLine', () => {
       '\u0000',
       '𝟙',
       ' ',
+      '[',
+      ']',
+      '/',
+      "'",
+      '"',
+      'ft',
+      'in',
+      ' where ',
     ];
     for (let first = 0; first < characters.length; first += 1)
       for (let second = 0; second < characters.length; second += 1)
