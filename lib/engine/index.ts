@@ -157,6 +157,13 @@ class ExactEngine implements Engine {
     checkIndex(index);
     return this.seal(this.beyond.principalRoot(this.open(a), index));
   }
+  roots(coefficients: readonly Num[]): Num[] {
+    const [leading, ...others] = coefficients.map((c) => this.open(c));
+    if (leading === undefined || others.length === 0 || this.isZero(coefficients[0] as Num))
+      throw new RangeError('roots() takes a polynomial of positive degree.');
+    this.budget.within('degree', others.length);
+    return this.beyond.allRoots([leading, ...others].reverse()).map((root) => this.seal(root));
+  }
   nearestRoot(polynomial: readonly bigint[], near: Num): Num {
     const f = [...polynomial].reverse();
     while (f.length > 0 && f[f.length - 1] === 0n) f.pop();

@@ -187,6 +187,8 @@ export interface Engine {
   nearestRoot(polynomial: readonly bigint[], near: Num): Num;
   /** The same for a polynomial with any coefficients, highest power first, the first one not 0. */
   nearestRootOf(coefficients: readonly Num[], near: Num): Num;
+  /** All roots of a polynomial of positive degree, highest power first, each once; those reached by square roots as such. */
+  roots(coefficients: readonly Num[]): Num[];
 
   re(a: Num): Num;
   im(a: Num): Num;

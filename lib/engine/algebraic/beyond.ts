@@ -20,7 +20,7 @@ import { algebraicCosine } from './cosine';
 import { CyclotomicFields, type Cyclotomic } from './cyclotomic';
 import { isolate } from './newton';
 import { Naming } from './naming';
-import { nearestOf, rootsOf, type Isolated } from './near';
+import { nearestOf, rootOf, rootsOf, type Isolated } from './near';
 import { rootsOverField } from './norm';
 import * as operations from './operations';
 import { rationalPart, type RealPart } from './real-part';
@@ -268,6 +268,15 @@ export class Beyond {
 
   private sign(a: Value): -1 | 0 | 1 {
     return isAlgebraic(a) ? this.signOf(a) : signEl(a.re);
+  }
+
+  /** All roots of a polynomial with any coefficients, constant term first, the last one not 0. */
+  allRoots(coefficients: readonly Value[]): Value[] {
+    const roots = rootsOverField(
+      coefficients.map((c) => this.rootOf(c)),
+      this.budget,
+    );
+    return roots.map((root) => this.naming.root(this.settle(rootOf(root, this.budget))));
   }
 
   /** The nearest root of an integer polynomial of positive degree, constant term first. */

@@ -80,11 +80,14 @@ export function nearestOf(
   }
   const [only] = left;
   if (only === undefined) throw new RangeError('the polynomial has no root');
-  if (degreeOf(only.poly) === 1) {
-    return { n: -(only.poly[0] as bigint), d: only.poly[1] as bigint };
-  }
-  const isReal = only.box.im.low === 0n && only.box.im.high === 0n;
-  return new Algebraic(only.poly, isReal, refining(only.poly, only.box, only.precision, budget));
+  return rootOf(only, budget);
+}
+
+/** An isolated root as a number of its own. */
+export function rootOf({ poly, box, precision }: Isolated, budget: Budget): Root {
+  if (degreeOf(poly) === 1) return { n: -(poly[0] as bigint), d: poly[1] as bigint };
+  const isReal = box.im.low === 0n && box.im.high === 0n;
+  return new Algebraic(poly, isReal, refining(poly, box, precision, budget));
 }
 
 /** Decimal text of n/2^P to `digits` places, cut towards zero. */
