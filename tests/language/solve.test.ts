@@ -59,10 +59,7 @@ describe('solving an equation', () => {
       fc.property(coefficient, coefficient, (r, s) => {
         const equation = `x^2 + ${r} * ${s} == (${r} + ${s}) x`;
         if (holds([`${r} == ${s}`])) return holds([`solve(${equation}, x) == ${r}`]);
-        return holds([
-          `L = solve(${equation}, x)`,
-          `L == [min(${r}, ${s}), max(${r}, ${s})]`,
-        ]);
+        return holds([`L = solve(${equation}, x)`, `L == [min(${r}, ${s}), max(${r}, ${s})]`]);
       }),
       { numRuns: 60 },
     );
@@ -105,12 +102,20 @@ describe('solving an equation', () => {
   it('solves polynomials of higher degree with roots beyond square roots', () => {
     expect(textsOf(solveLine('solve(x^3 == 8, x)'))).toEqual(['2']);
     expect(holds(['t = solve(x^3 + x^2 == 2 x + 1, x)', 't[3] == 2 cos(turn/7)'])).toBe(true);
-    expect(holds(['t = solve(x^4 == sqrt(2) x^2 + 1, x)', 't[1]^4 == sqrt(2) t[1]^2 + 1'])).toBe(true);
+    expect(holds(['t = solve(x^4 == sqrt(2) x^2 + 1, x)', 't[1]^4 == sqrt(2) t[1]^2 + 1'])).toBe(
+      true,
+    );
   });
 
   it('reads marks and functions of the notebook, and its unknown is a local name', () => {
     expect(
-      holds(['h = 7 mm', 'R = 100 mm', 'f(x) = x^2', 'r = solve(f(h) + f(R) == f(2 R), h)', 'r[2] == sqrt(3) R']),
+      holds([
+        'h = 7 mm',
+        'R = 100 mm',
+        'f(x) = x^2',
+        'r = solve(f(h) + f(R) == f(2 R), h)',
+        'r[2] == sqrt(3) R',
+      ]),
     ).toBe(true);
   });
 
@@ -147,17 +152,23 @@ describe('the search', () => {
   it('shows nothing that does not satisfy the equation exactly', () => {
     const lies = ['131836323/93222358', 'asin(1)', '1', 'nonsense(', 'x', '', 'k9', '0.5236'];
     expect(codeOf(solveLine('solve(sin(a) == 1/2, a)', () => lies))).toBe('not-exact');
-    expect(textsOf(solveLine('solve(sin(a) == 1/2, a)', () => [...lies, 'pi/6']))).toEqual(['30 deg']);
+    expect(textsOf(solveLine('solve(sin(a) == 1/2, a)', () => [...lies, 'pi/6']))).toEqual([
+      '30 deg',
+    ]);
   });
 
   it('says that there may be more solutions', () => {
     const result = solveLine('solve(cos(a) == 1/2, a)', () => ['acos(k1)']);
     expect(result.kind).toBe('angle');
-    expect('notices' in result && result.notices.map(({ message }) => message).join()).toMatch(/may be others/);
+    expect('notices' in result && result.notices.map(({ message }) => message).join()).toMatch(
+      /may be others/,
+    );
   });
 
   it('proposes for circular functions, sizes and powers', () => {
-    expect(textsOf(solveLine('solve(100 mm (1 - cos(a/2)) == 50 mm, a)', proposeSolutions))).toEqual(['120 deg']);
+    expect(
+      textsOf(solveLine('solve(100 mm (1 - cos(a/2)) == 50 mm, a)', proposeSolutions)),
+    ).toEqual(['120 deg']);
     expect(textsOf(solveLine('solve(2^n == 32, n)', proposeSolutions))).toEqual(['5']);
     expect(codeOf(solveLine('solve(cos(x) == x, x)', proposeSolutions))).toBe('not-exact');
   });

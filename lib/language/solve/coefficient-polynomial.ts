@@ -79,11 +79,7 @@ export function areEqualPolynomials(
   return addPolynomials(engine, a, negatePolynomial(engine, b)).length === 0;
 }
 
-export function dividedBy(
-  engine: Engine,
-  a: UnknownPolynomial,
-  divisor: PiSum,
-): UnknownPolynomial {
+export function dividedBy(engine: Engine, a: UnknownPolynomial, divisor: PiSum): UnknownPolynomial {
   return a.map((coefficient) => divideSums(engine, coefficient, divisor));
 }
 

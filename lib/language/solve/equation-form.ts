@@ -1,8 +1,15 @@
 import type { Engine } from '../../engine/index';
 import { fail } from '../failure';
 import { fromNum } from '../pi-sum';
-import type { Expression, PowerNode, ProductNode, SumNode } from '../syntax';
 import { mentions } from '../names-in';
+import type {
+  ApplicationNode,
+  Expression,
+  FunctionStatement,
+  PowerNode,
+  ProductNode,
+  SumNode,
+} from '../syntax';
 import { type Value, needAlgebraic } from '../values';
 import { type RadicalForm, RadicalForms } from './radical-form';
 
@@ -13,6 +20,20 @@ export type Dimension = number | 'angle';
 export interface Formed {
   readonly form: RadicalForm;
   readonly dimension: Dimension;
+}
+
+/** A name that stands for a value, or for one that depends on the unknown. */
+type Meaning = { readonly value: Value } | { readonly formed: Formed };
+
+/** The evaluation around an equation. */
+export interface Surroundings {
+  readonly engine: Engine;
+  /** Local names of the line, which are seen in the equation. */
+  readonly locals: ReadonlyMap<string, Value>;
+  /** The value of an expression with these local names and no others. */
+  readonly valueIn: (locals: ReadonlyMap<string, Value>, node: Expression) => Value;
+  /** The function of the notebook that is called; fails where there is none, or with the wrong count of arguments. */
+  readonly functionOf: (node: ApplicationNode) => FunctionStatement;
 }
 
 /** Thrown where the unknown stands in a place that fractions and square roots do not cover. */
@@ -27,21 +48,33 @@ const LARGEST_EXPONENT = 64n;
  */
 export class FormReader {
   readonly forms: RadicalForms;
+  private names: ReadonlyMap<string, Meaning>;
 
   constructor(
-    private readonly engine: Engine,
-    private readonly evaluate: (node: Expression) => Value,
-    private readonly unknown: string,
+    private readonly around: Surroundings,
+    unknown: string,
     private readonly dimension: Dimension,
   ) {
-    this.forms = new RadicalForms(engine);
+    this.forms = new RadicalForms(around.engine);
+    const names = new Map<string, Meaning>();
+    for (const [name, value] of around.locals) names.set(name, { value });
+    names.set(unknown, { formed: { form: this.forms.unknown(), dimension } });
+    this.names = names;
+  }
+
+  private get engine(): Engine {
+    return this.around.engine;
   }
 
   read(node: Expression): Formed {
-    if (!mentions(node, this.unknown)) return this.known(node);
+    if (this.isKnown(node)) return this.formOf(this.evaluate(node));
     switch (node.kind) {
-      case 'mark':
-        return { form: this.forms.unknown(), dimension: this.dimension };
+      case 'mark': {
+        const meaning = this.names.get(node.name);
+        if (meaning === undefined || 'value' in meaning)
+          throw new Error(`\`${node.name}\` does not depend on the unknown.`);
+        return meaning.formed;
+      }
       case 'group':
         return this.read(node.value);
       case 'negative': {
@@ -66,9 +99,39 @@ export class FormReader {
         }
         throw new OutsideForms();
       }
+      case 'application':
+        return this.application(node);
       default:
         throw new OutsideForms();
     }
+  }
+
+  private isKnown(node: Expression): boolean {
+    for (const [name, meaning] of this.names)
+      if ('formed' in meaning && mentions(node, name)) return false;
+    return true;
+  }
+
+  private evaluate(node: Expression): Value {
+    const locals = new Map<string, Value>();
+    for (const [name, meaning] of this.names)
+      if ('value' in meaning) locals.set(name, meaning.value);
+    return this.around.valueIn(locals, node);
+  }
+
+  /** Reads the body of a function of the notebook, whose parameters stand for what the arguments are worth. */
+  private application(node: ApplicationNode): Formed {
+    const { parameters, where, value } = this.around.functionOf(node);
+    const meaningOf = (part: Expression): Meaning =>
+      this.isKnown(part) ? { value: this.evaluate(part) } : { formed: this.read(part) };
+    const args = node.args.map(meaningOf);
+    const outer = this.names;
+    this.names = new Map(parameters.map(({ name }, index) => [name, args[index] as Meaning]));
+    for (const local of where)
+      this.names = new Map(this.names).set(local.name, meaningOf(local.value));
+    const formed = this.read(value);
+    this.names = outer;
+    return formed;
   }
 
   /** The difference of two sides, which must be of one kind. */
@@ -76,8 +139,7 @@ export class FormReader {
     return this.add(a, { form: this.forms.negate(b.form), dimension: b.dimension });
   }
 
-  private known(node: Expression): Formed {
-    const value = this.evaluate(node);
+  private formOf(value: Value): Formed {
     switch (value.kind) {
       case 'number':
         return { form: this.forms.constant(value.sum), dimension: value.length };
@@ -153,7 +215,7 @@ export class FormReader {
   }
 
   private power(node: PowerNode): Formed {
-    if (mentions(node.exponent, this.unknown)) throw new OutsideForms();
+    if (!this.isKnown(node.exponent)) throw new OutsideForms();
     const exact = needAlgebraic(
       this.engine,
       this.evaluate(node.exponent),

@@ -27,11 +27,7 @@ const FUNCTIONS = new Set([
 ]);
 
 /** Null where the unknown stands in a form that a proposer does not know. */
-export function questionOf(
-  left: Expression,
-  right: Expression,
-  unknown: string,
-): Question | null {
+export function questionOf(left: Expression, right: Expression, unknown: string): Question | null {
   const parts = new Map<string, Expression>();
   const write = (node: Expression): string | null => {
     if (!mentions(node, unknown)) {
@@ -39,7 +35,10 @@ export function questionOf(
       parts.set(name, node);
       return name;
     }
-    const all = (nodes: readonly Expression[], join: (texts: string[]) => string): string | null => {
+    const all = (
+      nodes: readonly Expression[],
+      join: (texts: string[]) => string,
+    ): string | null => {
       const texts = nodes.map(write);
       return texts.every((text) => text !== null) ? join(texts) : null;
     };

@@ -12,7 +12,13 @@ import {
   isZeroValue,
   number,
 } from '../values';
-import { type Dimension, FormReader, OutsideForms, sayDimension } from './equation-form';
+import {
+  type Dimension,
+  FormReader,
+  OutsideForms,
+  type Surroundings,
+  sayDimension,
+} from './equation-form';
 import { type Proposer, questionOf } from './proposal';
 import { rootsOf } from './roots';
 
@@ -22,14 +28,6 @@ export interface Equation {
   readonly right: Expression;
   readonly unknown: string;
   readonly at: Span;
-}
-
-/** The evaluation around an equation. */
-export interface Surroundings {
-  readonly engine: Engine;
-  /** The value of an expression while these names stand for these values. */
-  valueWith: (names: ReadonlyMap<string, Value>, node: Expression) => Value;
-  readonly propose: Proposer | null;
 }
 
 export interface Solutions {
@@ -50,15 +48,23 @@ const DIMENSIONS: readonly Dimension[] = [0, 1, 'angle', 2, 3, -1, -2];
  * are exactly equal with it. Fails with `domain` when nothing satisfies the equation or everything does, and with
  * `not-exact` when no exact solution was found.
  */
-export function solve(equation: Equation, around: Surroundings): Solutions {
+export function solve(
+  equation: Equation,
+  around: Surroundings,
+  propose: Proposer | null,
+): Solutions {
   const candidates = candidatesByForms(equation, around);
-  if (candidates === null) return search(equation, around);
+  if (candidates === null) return search(equation, around, propose);
   const verified = candidates.filter((value) => satisfies(equation, value, around));
   const { engine } = around;
   const real = verified.filter((value) => isRealValue(engine, value));
   const [first] = verified;
   if (first === undefined) {
-    return fail('domain', `No value of \`${equation.unknown}\` makes both sides equal.`, equation.at);
+    return fail(
+      'domain',
+      `No value of \`${equation.unknown}\` makes both sides equal.`,
+      equation.at,
+    );
   }
   if (real.length > 0) return { values: inOrder(engine, real), complete: true };
   if (first.kind === 'number' && first.length !== 0) {
@@ -76,8 +82,7 @@ function candidatesByForms(equation: Equation, around: Surroundings): Value[] | 
   const { engine } = around;
   let mismatch: Failure | null = null;
   for (const dimension of DIMENSIONS) {
-    const evaluate = (node: Expression): Value => around.valueWith(new Map(), node);
-    const reader = new FormReader(engine, evaluate, equation.unknown, dimension);
+    const reader = new FormReader(around, equation.unknown, dimension);
     try {
       const { form } = reader.subtract(reader.read(equation.left), reader.read(equation.right));
       const norm = reader.forms.norm(form);
@@ -105,10 +110,14 @@ function failUndetermined({ unknown, at }: Equation): never {
 }
 
 /** Exactly equal sides; a value for which a side does not exist is no solution. */
-function satisfies({ left, right, unknown }: Equation, value: Value, around: Surroundings): boolean {
-  const names = new Map([[unknown, value]]);
+function satisfies(
+  { left, right, unknown }: Equation,
+  value: Value,
+  around: Surroundings,
+): boolean {
+  const names = new Map(around.locals).set(unknown, value);
   try {
-    const [a, b] = [around.valueWith(names, left), around.valueWith(names, right)];
+    const [a, b] = [around.valueIn(names, left), around.valueIn(names, right)];
     return isZeroValue(around.engine, differenceForDecision(around.engine, a, b));
   } catch (error) {
     if (error instanceof Failure && OUTSIDE.has(error.code)) return false;
@@ -116,15 +125,20 @@ function satisfies({ left, right, unknown }: Equation, value: Value, around: Sur
   }
 }
 
-const OUTSIDE: ReadonlySet<string> = new Set(['domain', 'division-by-zero', 'unit-mismatch', 'not-exact']);
+const OUTSIDE: ReadonlySet<string> = new Set([
+  'domain',
+  'division-by-zero',
+  'unit-mismatch',
+  'not-exact',
+]);
 
 function inOrder(engine: Engine, values: readonly Value[]): Value[] {
   return [...values].sort((a, b) => compareValues(engine, a, b));
 }
 
 /** Asks the proposer and keeps what satisfies the equation exactly. */
-function search(equation: Equation, around: Surroundings): Solutions {
-  const { engine, propose } = around;
+function search(equation: Equation, around: Surroundings, propose: Proposer | null): Solutions {
+  const { engine } = around;
   const question = questionOf(equation.left, equation.right, equation.unknown);
   if (question === null || propose === null) {
     return fail(
@@ -134,7 +148,7 @@ function search(equation: Equation, around: Surroundings): Solutions {
     );
   }
   const parts = new Map<string, Value>();
-  for (const [name, node] of question.parts) parts.set(name, around.valueWith(new Map(), node));
+  for (const [name, node] of question.parts) parts.set(name, around.valueIn(around.locals, node));
   const verified: Value[] = [];
   for (const text of propose(question.equation)) {
     for (const value of readCandidate(text, parts, around)) {
@@ -165,7 +179,7 @@ function readCandidate(
   const reading = readLine(text);
   if (reading.kind !== 'statement' || reading.statement.kind !== 'value') return [];
   try {
-    const value = around.valueWith(parts, reading.statement.value);
+    const value = around.valueIn(parts, reading.statement.value);
     const inTurns = asTurns(around.engine, value);
     return inTurns === null ? [value] : [inTurns, value];
   } catch (error) {
