@@ -21,6 +21,7 @@ function run(job: Job): void {
     ) => report({ kind: 'finished', job: job.job, cell, line, result }),
     valued: ({ cell, line }: { cell: number; line: number }) =>
       report({ kind: 'valued', job: job.job, cell, line }),
+    propose: proposeSolutions,
     known: new Map(job.known),
     refused: new Map(job.refused),
     brief: new Map(job.brief),

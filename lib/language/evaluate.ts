@@ -12,6 +12,7 @@ import { type CellSource, type LineGraph, type SourceLine, readCells } from './l
 import { noticesOf } from './notices';
 import type { Result } from './result';
 import { type Settings, completeSettings } from './settings';
+import type { Proposer } from './solve/proposal';
 import type { Statement } from './syntax';
 import { typesetStatement } from './typeset';
 import type { LineValue } from './values';
@@ -32,6 +33,8 @@ export interface EvaluationOptions {
   readonly valued?: (place: LinePlace) => void;
   /** Called with each result as soon as it is there; not for those in `known`. */
   readonly finished?: (place: LinePlace, result: Result) => void;
+  /** Asked for what an equation that is not solved exactly might have as solutions. */
+  readonly propose?: Proposer;
   /** Results of an earlier run, by `keyOf` their place: the line is evaluated again only if another line reads it. */
   readonly known?: ReadonlyMap<string, Result>;
   /** Lines whose degree, polynomial and tower are to be left out, with the reason, by `keyOf` their place. */
@@ -115,7 +118,11 @@ class Evaluation {
     private readonly options: EvaluationOptions,
   ) {
     this.engine = createEngine(options.engineLimits);
-    this.evaluator = new Evaluator(this.engine, (name, at, use) => this.findMark(name, at, use));
+    this.evaluator = new Evaluator(
+      this.engine,
+      (name, at, use) => this.findMark(name, at, use),
+      options.propose ?? null,
+    );
   }
 
   run(): Result[][] {
@@ -198,7 +205,7 @@ class Evaluation {
       return {
         ...common,
         typeset: typeset ?? '',
-        notices: noticesOf(statement, line.source),
+        notices: [...noticesOf(statement, line.source), ...this.evaluator.notices],
         ...given,
       };
     } catch (failure) {

@@ -1,15 +1,18 @@
 import type { Engine, Num } from '../engine/index';
 import { fractionOfLiteral } from './decimals';
-import { type Failure, type Problem, type Span, fail } from './failure';
+import { Failure, type Problem, type Span, fail } from './failure';
 import { ACTIONS } from './functions/index';
 import { nearestRoot } from './functions/polynomial-root';
 import { raise } from './functions/roots';
+import { solveCall } from './functions/solve';
 import { LANGUAGE_LIMITS } from './limits';
 import { countsBetween, itemByItem, itemOf, list } from './lists';
 import { findDegreePart, findFunction, findUnit } from './names';
 import { fromNum, pi } from './pi-sum';
 import { readPolynomial } from './polynomial';
 import { signatureOf } from './print';
+import type { Notice } from './result';
+import type { Proposer } from './solve/proposal';
 import {
   type ApplicationNode,
   type CallNode,
@@ -58,11 +61,19 @@ export class Evaluator {
   private operations = 0;
   private depth = 0;
   private readonly calls: string[] = [];
+  private remarks: Notice[] = [];
 
+  /** `propose` is asked for what equations that are not solved here might have as solutions. */
   constructor(
     private readonly engine: Engine,
     private readonly findMark: MarkLookup,
+    private readonly propose: Proposer | null = null,
   ) {}
+
+  /** What a reader must know of values that came up since the line was opened. */
+  get notices(): readonly Notice[] {
+    return this.remarks;
+  }
 
   get at(): Span {
     return this.place;
@@ -75,6 +86,7 @@ export class Evaluator {
   /** Begins the evaluation of a line: its local names first. */
   open(statement: Statement): void {
     this.calls.length = 0;
+    this.remarks = [];
     this.operations = 0;
     this.depth = 0;
     this.place = statement;
@@ -283,6 +295,7 @@ export class Evaluator {
       this.at = node;
       return number(fromNum(this.engine, nearestRoot(this.engine, polynomial, near)));
     }
+    if (node.name === 'solve') return this.solve(node);
     const action = ACTIONS.get(node.name);
     if (action === undefined)
       throw new Error(`The function "${node.name}" of the name table has no action.`);
@@ -290,6 +303,36 @@ export class Evaluator {
     const values = this.values(node.args);
     this.at = node;
     return action(this.engine, values);
+  }
+
+  private solve(node: CallNode): Value {
+    const around = {
+      engine: this.engine,
+      locals: this.locals,
+      valueIn: (locals: ReadonlyMap<string, Value>, part: Expression) => this.valueIn(locals, part),
+      functionOf: (called: ApplicationNode) => this.functionOf(called),
+    };
+    const { value, notice } = solveCall(node, around, this.propose);
+    this.at = node;
+    if (notice !== null) this.remarks.push({ message: notice, from: node.from, to: node.to });
+    return value;
+  }
+
+  /** Restores the names and the depth even when it fails, as a failure may be one of several tries. */
+  private valueIn(locals: ReadonlyMap<string, Value>, node: Expression): Value {
+    const outer = { locals: this.locals, depth: this.depth, calls: this.calls.length };
+    this.locals = locals;
+    try {
+      return this.value(node);
+    } catch (error) {
+      if (!(error instanceof Failure) || this.calls.length === outer.calls) throw error;
+      const { code, message, from, to } = this.problemOf(error);
+      throw new Failure(code, message, { from, to });
+    } finally {
+      this.locals = outer.locals;
+      this.depth = outer.depth;
+      this.calls.length = outer.calls;
+    }
   }
 
   private each(node: EachNode): Value {

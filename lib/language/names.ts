@@ -7,6 +7,7 @@
 /** Groups in the order in which a reference shows them. */
 export const GROUPS = [
   { name: 'roots', title: 'Roots and size' },
+  { name: 'equations', title: 'Equations' },
   { name: 'angles', title: 'Angles' },
   { name: 'rounding', title: 'Rounding and order' },
   { name: 'lists', title: 'Lists' },
@@ -100,6 +101,23 @@ export const FUNCTIONS: readonly FunctionWord[] = [
       parameters: {
         p: 'A polynomial; `x` in it is its variable, whatever marks there are.',
         near: 'A plain number nearer to the root that is meant than to any other.',
+      },
+    },
+  ),
+  word(
+    'equations',
+    'solve(equation, unknown, near)',
+    'The value of the unknown, or the list of its values when there are several: the real ones, rising. Each is checked exactly.',
+    'solve(10025 mm == (2000 mm)^2/(8 h) + h/2, h)',
+    {
+      ...WHOLE,
+      least: 2,
+      most: 3,
+      equation: true,
+      parameters: {
+        equation: 'Two sides with `==` between them.',
+        unknown: 'A name; in the equation it is the unknown, whatever marks there are.',
+        near: 'Left out, all values are given; else the one nearest to this.',
       },
     },
   ),

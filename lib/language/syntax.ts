@@ -212,8 +212,12 @@ export function partsOf(node: Expression): readonly Expression[] {
 /** Names that a node gives a meaning of its own inside its part of this position. */
 export function namesBoundIn(node: Expression, part: number): readonly string[] {
   if (node.kind === 'each') return part === 2 ? [node.counter.name] : [];
+  if (node.kind !== 'call') return [];
   // The polynomial of `root` is in x.
-  return node.kind === 'call' && node.name === 'root' && part === 0 ? ['x'] : [];
+  if (node.name === 'root') return part === 0 ? ['x'] : [];
+  // The unknown of an equation is named by the second argument.
+  const unknown = node.name === 'solve' && part < 2 ? node.args[1] : undefined;
+  return unknown?.kind === 'mark' ? [unknown.name] : [];
 }
 
 /** The expressions that a statement consists of, left to right, local ones last. */

@@ -1,5 +1,5 @@
 import type { Engine } from '../../engine/index';
-import { fail } from '../failure';
+import { Failure, fail } from '../failure';
 import { fromNum } from '../pi-sum';
 import { mentions } from '../names-in';
 import type {
@@ -127,11 +127,17 @@ export class FormReader {
     const args = node.args.map(meaningOf);
     const outer = this.names;
     this.names = new Map(parameters.map(({ name }, index) => [name, args[index] as Meaning]));
-    for (const local of where)
-      this.names = new Map(this.names).set(local.name, meaningOf(local.value));
-    const formed = this.read(value);
-    this.names = outer;
-    return formed;
+    try {
+      for (const local of where)
+        this.names = new Map(this.names).set(local.name, meaningOf(local.value));
+      return this.read(value);
+    } catch (error) {
+      // Places in the body are places in another line.
+      if (!(error instanceof Failure)) throw error;
+      throw new Failure(error.code, `In \`${node.callee.name}\`: ${error.message}`, node);
+    } finally {
+      this.names = outer;
+    }
   }
 
   /** The difference of two sides, which must be of one kind. */

@@ -26,11 +26,20 @@ const FUNCTIONS = new Set([
   'atan',
 ]);
 
-/** Null where the unknown stands in a form that a proposer does not know. */
-export function questionOf(left: Expression, right: Expression, unknown: string): Question | null {
+/**
+ * The equation with a name for every known part, or, with `whole`, with its whole numbers as they are: exponents are
+ * found only from numbers. Null where the unknown stands in a form that a proposer does not know.
+ */
+export function questionOf(
+  left: Expression,
+  right: Expression,
+  unknown: string,
+  whole: boolean,
+): Question | null {
   const parts = new Map<string, Expression>();
   const write = (node: Expression): string | null => {
     if (!mentions(node, unknown)) {
+      if (whole && node.kind === 'number' && !node.text.includes('.')) return node.text;
       const name = `k${parts.size + 1}`;
       parts.set(name, node);
       return name;

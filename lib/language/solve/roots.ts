@@ -1,4 +1,4 @@
-import type { Engine, Num } from '../../engine/index';
+import type { Engine } from '../../engine/index';
 import { fail } from '../failure';
 import {
   type PiSum,
@@ -15,7 +15,6 @@ import {
   algebraicCoefficients,
   commonDivisor,
   exactQuotient,
-  fromCoefficients,
 } from './coefficient-polynomial';
 
 /**

@@ -4,6 +4,7 @@ import { asAlgebraic } from '../pi-sum';
 import { readLine } from '../read';
 import type { Expression } from '../syntax';
 import {
+  type Magnitude,
   type Value,
   angle,
   compareValues,
@@ -32,7 +33,7 @@ export interface Equation {
 
 export interface Solutions {
   /** Each verified exactly by substitution; real ones rising, and others only where there is no real one. */
-  readonly values: readonly Value[];
+  readonly values: readonly Magnitude[];
   /** Whether these are all; a search can miss some. */
   readonly complete: boolean;
 }
@@ -78,7 +79,7 @@ export function solve(
 }
 
 /** Values among which all solutions are; null when the unknown stands where forms do not reach. */
-function candidatesByForms(equation: Equation, around: Surroundings): Value[] | null {
+function candidatesByForms(equation: Equation, around: Surroundings): Magnitude[] | null {
   const { engine } = around;
   let mismatch: Failure | null = null;
   for (const dimension of DIMENSIONS) {
@@ -87,7 +88,7 @@ function candidatesByForms(equation: Equation, around: Surroundings): Value[] | 
       const { form } = reader.subtract(reader.read(equation.left), reader.read(equation.right));
       const norm = reader.forms.norm(form);
       if (norm.length === 0) return failUndetermined(equation);
-      return rootsOf(engine, norm).flatMap((root) => {
+      return rootsOf(engine, norm).flatMap((root): Magnitude[] => {
         if (dimension !== 'angle') return [number(root, dimension)];
         const turns = asAlgebraic(engine, root);
         return turns !== null && engine.isReal(turns) ? [angle(turns)] : [];
@@ -118,12 +119,16 @@ function satisfies(
   const names = new Map(around.locals).set(unknown, value);
   try {
     const [a, b] = [around.valueIn(names, left), around.valueIn(names, right)];
+    if (!isMagnitude(a) || !isMagnitude(b)) return false;
     return isZeroValue(around.engine, differenceForDecision(around.engine, a, b));
   } catch (error) {
     if (error instanceof Failure && OUTSIDE.has(error.code)) return false;
     throw error;
   }
 }
+
+const isMagnitude = (value: Value): value is Magnitude =>
+  value.kind === 'number' || value.kind === 'angle';
 
 const OUTSIDE: ReadonlySet<string> = new Set([
   'domain',
@@ -132,32 +137,28 @@ const OUTSIDE: ReadonlySet<string> = new Set([
   'not-exact',
 ]);
 
-function inOrder(engine: Engine, values: readonly Value[]): Value[] {
+function inOrder(engine: Engine, values: readonly Magnitude[]): Magnitude[] {
   return [...values].sort((a, b) => compareValues(engine, a, b));
 }
 
 /** Asks the proposer and keeps what satisfies the equation exactly. */
 function search(equation: Equation, around: Surroundings, propose: Proposer | null): Solutions {
   const { engine } = around;
-  const question = questionOf(equation.left, equation.right, equation.unknown);
-  if (question === null || propose === null) {
-    return fail(
-      'not-exact',
-      `\`${equation.unknown}\` stands inside a function that solve cannot undo; sums, products, quotients, powers, square roots and the circular functions were expected.`,
-      equation.at,
-    );
-  }
-  const parts = new Map<string, Value>();
-  for (const [name, node] of question.parts) parts.set(name, around.valueIn(around.locals, node));
-  const verified: Value[] = [];
-  for (const text of propose(question.equation)) {
-    for (const value of readCandidate(text, parts, around)) {
-      const isNew = verified.every((other) => !areEqual(engine, value, other));
-      if (isNew && satisfies(equation, value, around)) {
-        verified.push(value);
-        break;
-      }
+  const { left, right, unknown } = equation;
+  let verified: Magnitude[] = [];
+  for (const whole of [false, true]) {
+    const question = questionOf(left, right, unknown, whole);
+    if (question === null || propose === null) {
+      return fail(
+        'not-exact',
+        `\`${unknown}\` stands inside a function that solve cannot undo; sums, products, quotients, powers, square roots and the circular functions were expected.`,
+        equation.at,
+      );
     }
+    const parts = new Map<string, Value>();
+    for (const [name, node] of question.parts) parts.set(name, around.valueIn(around.locals, node));
+    verified = verifiedAmong(propose(question.equation), parts, equation, around);
+    if (verified.length > 0) break;
   }
   if (verified.length === 0) {
     return fail(
@@ -170,16 +171,37 @@ function search(equation: Equation, around: Surroundings, propose: Proposer | nu
   return { values: real ? inOrder(engine, verified) : verified, complete: false };
 }
 
+/** The different ones among proposed texts that satisfy the equation exactly. */
+function verifiedAmong(
+  texts: readonly string[],
+  parts: ReadonlyMap<string, Value>,
+  equation: Equation,
+  around: Surroundings,
+): Magnitude[] {
+  const verified: Magnitude[] = [];
+  for (const text of texts) {
+    for (const value of readCandidate(text, parts, around)) {
+      const isNew = verified.every((other) => !areEqual(around.engine, value, other));
+      if (isNew && satisfies(equation, value, around)) {
+        verified.push(value);
+        break;
+      }
+    }
+  }
+  return verified;
+}
+
 /** A proposed text as values: as it stands, and a plain number also as an angle in radians. */
 function readCandidate(
   text: string,
   parts: ReadonlyMap<string, Value>,
   around: Surroundings,
-): Value[] {
+): Magnitude[] {
   const reading = readLine(text);
   if (reading.kind !== 'statement' || reading.statement.kind !== 'value') return [];
   try {
     const value = around.valueIn(parts, reading.statement.value);
+    if (!isMagnitude(value)) return [];
     const inTurns = asTurns(around.engine, value);
     return inTurns === null ? [value] : [inTurns, value];
   } catch (error) {
@@ -189,14 +211,14 @@ function readCandidate(
 }
 
 /** A plain multiple of π as an angle. */
-function asTurns(engine: Engine, value: Value): Value | null {
+function asTurns(engine: Engine, value: Magnitude): Magnitude | null {
   if (value.kind !== 'number' || value.length !== 0 || value.sum.size !== 1) return null;
   const multiple = value.sum.get(1);
   if (multiple === undefined || !engine.isReal(multiple)) return null;
   return angle(engine.div(multiple, engine.integer(2n)));
 }
 
-function areEqual(engine: Engine, a: Value, b: Value): boolean {
+function areEqual(engine: Engine, a: Magnitude, b: Magnitude): boolean {
   if (a.kind !== b.kind || (a.kind === 'number' && b.kind === 'number' && a.length !== b.length))
     return false;
   return isZeroValue(engine, differenceForDecision(engine, a, b));
