@@ -1,6 +1,7 @@
 import { writeSync } from 'node:fs';
 import { certifyLine, evaluateCells, evaluateExpression } from '@/lib/language/index';
 import type { CertifyJob, Job, Refusal, Report } from './messages';
+import { proposeSolutions } from './propose';
 
 /**
  * The program of a child process: takes one job after another and reports line by line.
