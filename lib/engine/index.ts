@@ -31,6 +31,7 @@ import { degreeOf, minimalPolynomialOf } from './minimal-polynomial';
 import { certificateOf } from './certificate';
 import { roundTo } from './rounding';
 import { Field, type El } from './tower';
+import { cosineEnclosure, isLongCosine, nameOfCosine } from './long-cosine';
 import { Cosine, isConstructibleDivision } from './turn';
 import type {
   Certificate,
@@ -48,6 +49,7 @@ import type {
 import { towerOf, writeValue } from './write';
 
 export { DEFAULT_LIMITS } from './limits';
+export { boundsOfPi } from './pi';
 export type * from './types';
 
 export const ENGINE_VERSION = '0.1.0';
@@ -128,13 +130,22 @@ class ExactEngine implements Engine {
   }
   mul(a: Num, b: Num): Num {
     const [x, y] = [this.open(a), this.open(b)];
+    const multiple = this.multipleOf(x, b) ?? this.multipleOf(y, a);
+    if (multiple !== null) return this.seal(multiple);
     return this.seal(isAlgebraic(x) || isAlgebraic(y) ? this.beyond.multiply(x, y) : mulCx(x, y));
+  }
+  /** A cosine that is too long to be built, times a rational other than 0. */
+  private multipleOf(x: Value, factor: Num): Cosine | null {
+    if (!isLongCosine(x)) return null;
+    const rational = this.asRational(factor);
+    return rational === null || rational.n === 0n ? null : x.times(rational.n, rational.d);
   }
   div(a: Num, b: Num): Num {
     return this.mul(a, this.inverse(b));
   }
   neg(a: Num): Num {
     const x = this.open(a);
+    if (isLongCosine(x)) return this.seal(x.times(-1n, 1n));
     return this.seal(isAlgebraic(x) ? this.beyond.negate(x) : negCx(x));
   }
   inverse(a: Num): Num {
@@ -180,6 +191,7 @@ class ExactEngine implements Engine {
   }
   re(a: Num): Num {
     const x = this.open(a);
+    if (isLongCosine(x)) return a;
     return this.seal(isAlgebraic(x) ? this.beyond.re(x) : real(x.re));
   }
   im(a: Num): Num {
@@ -188,48 +200,78 @@ class ExactEngine implements Engine {
   }
   conj(a: Num): Num {
     const x = this.open(a);
+    if (isLongCosine(x)) return a;
     return this.seal(isAlgebraic(x) ? this.beyond.conjugate(x) : conjCx(x));
   }
   abs(a: Num): Num {
     const x = this.open(a);
+    if (isLongCosine(x)) return this.sign(a) < 0 ? this.neg(a) : a;
     return this.seal(isAlgebraic(x) ? this.beyond.abs(x) : real(absCx(x)));
   }
 
   isZero(a: Num): boolean {
     const x = this.open(a);
-    return !isAlgebraic(x) && isZeroCx(x);
+    return !isAlgebraic(x) && !isLongCosine(x) && isZeroCx(x);
   }
   isReal(a: Num): boolean {
     const x = this.open(a);
     return isAlgebraic(x) ? x.isReal : isRealCx(x);
   }
   isRational(a: Num): boolean {
-    const x = this.open(a);
-    return !isAlgebraic(x) && isRealCx(x) && isRationalEl(x.re);
+    return this.asRational(a) !== null;
   }
   isInteger(a: Num): boolean {
-    const x = this.open(a);
-    return !isAlgebraic(x) && isRealCx(x) && isRationalEl(x.re) && x.re.den === 1;
+    return this.asRational(a)?.d === 1n;
   }
   equal(a: Num, b: Num): boolean {
     const [x, y] = [this.open(a), this.open(b)];
+    if (x === y) return true;
+    if (isLongCosine(x) && this.isRational(b)) return false;
+    if (isLongCosine(y) && this.isRational(a)) return false;
     return isAlgebraic(x) || isAlgebraic(y) ? this.beyond.equal(x, y) : equalCx(x, y);
   }
   sign(a: Num): -1 | 0 | 1 {
+    const long = this.long(a);
+    if (long !== null) return isNegative(long) ? -1 : 1;
     const x = this.realValue(a, 'sign');
     return isAlgebraic(x) ? this.beyond.signOf(x) : signEl(x);
   }
   compare(a: Num, b: Num): -1 | 0 | 1 {
+    const order = this.compareLong(a, b);
+    if (order !== null) return order;
     const [x, y] = [this.realValue(a, 'order'), this.realValue(b, 'order')];
     if (!isAlgebraic(x) && !isAlgebraic(y)) return signEl(subEl(x, y));
     return this.beyond.compare(this.open(a), this.open(b));
   }
+  /** Enclosures of a cosine that is too long to be built; null for any other number. */
+  private long(a: Num): ((P: number) => Enclosure) | null {
+    const x = this.open(a);
+    return isLongCosine(x) ? (P) => cosineEnclosure(x, P, this.budget) : null;
+  }
+  /** The order of such a cosine and a rational, which are never equal. */
+  private compareLong(a: Num, b: Num): -1 | 1 | null {
+    const [x, y] = [this.open(a), this.open(b)];
+    if (isLongCosine(y) && !isLongCosine(x)) {
+      const order = this.compareLong(b, a);
+      return order === null ? null : order === 1 ? -1 : 1;
+    }
+    const rational = isLongCosine(x) ? this.asRational(b) : null;
+    if (!isLongCosine(x) || rational === null) return null;
+    for (let P = 64; ; P *= 2) {
+      const { low, high } = cosineEnclosure(x, P, this.budget);
+      const border = rational.n << BigInt(P);
+      if (low * rational.d > border) return 1;
+      if (high * rational.d < border) return -1;
+    }
+  }
   asRational(a: Num): { n: bigint; d: bigint } | null {
     const x = this.open(a);
-    if (isAlgebraic(x) || !isRealCx(x) || !isRationalEl(x.re)) return null;
+    if (isAlgebraic(x) || isLongCosine(x) || !isRealCx(x) || !isRationalEl(x.re)) return null;
     return { n: BigInt(numerator(x.re)), d: BigInt(x.re.den) };
   }
   floor(a: Num): bigint {
+    const long = this.long(a);
+    if (long !== null) return floorOfIrrational(long);
     const x = this.realValue(a, 'floor');
     return isAlgebraic(x) ? floorOfIrrational((P) => x.box(P).re) : floorEl(x);
   }
@@ -318,6 +360,8 @@ class ExactEngine implements Engine {
   }
   private part(a: Num, digits: number): Part {
     const x = this.open(a);
+    const long = this.long(a);
+    if (long !== null) return irrationalDecimal(long, digits, isNegative(long));
     return isAlgebraic(x)
       ? decimalOfAlgebraic(x, digits, this.beyond.signOf(x) < 0)
       : decimalOf(x.re, digits);
@@ -325,6 +369,8 @@ class ExactEngine implements Engine {
 
   roundToMultiple(a: Num, step: { n: bigint; d: bigint }, rounding: Rounding): Multiple {
     if (step.n <= 0n || step.d <= 0n) throw new RangeError('A step must be positive.');
+    const long = this.long(a);
+    if (long !== null) return roundIrrational(long, step.d, step.n, rounding);
     const x = this.realValue(a, 'nearest multiple');
     if (isAlgebraic(x)) return roundIrrational((P) => x.box(P).re, step.d, step.n, rounding);
     return roundTo(scaleEl(x, Z.small(step.d), Z.small(step.n)), rounding);
@@ -332,6 +378,7 @@ class ExactEngine implements Engine {
 
   write(a: Num): Written {
     const x = this.open(a);
+    if (isLongCosine(x)) return nameOfCosine(x);
     return isAlgebraic(x) ? this.beyond.write(x) : writeValue(x);
   }
   tower(a: Num): TowerStep[] | null {

@@ -34,9 +34,10 @@ export class OverLimit extends Error {
     readonly limit: keyof Limits,
     readonly allowed: number,
     met: number,
+    message?: string,
   ) {
     const whole = Math.min(Math.ceil(met), Number.MAX_SAFE_INTEGER);
-    super(describe(limit, allowed, whole));
+    super(message ?? describe(limit, allowed, whole));
     this.code = CODES[limit];
     this.met = whole;
   }

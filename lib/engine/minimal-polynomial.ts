@@ -27,15 +27,15 @@ import {
   zeros,
 } from './dense';
 import { powerRoot, squarefreeModulo } from './polynomial';
-import { cosinePolynomial, totient } from './cosine-polynomial';
+import { multiplyRoots } from './algebraic/composed';
+import { cosinePolynomial } from './cosine-polynomial';
 import type { Cx } from './complex';
 import { Cosine } from './turn';
 import type { El, Field, Gen, Tower } from './tower';
 
 /** Degree over the rationals. `degree` where a nested value lies in a field above the limit. */
 export function degreeOf(x: Cx): number {
-  const parts = x instanceof Cosine ? x.parts : 0n;
-  if (parts > 2n) return Number(totient(parts) / 2n);
+  if (x instanceof Cosine && x.n > 2n) return x.degree;
   const flat = rankDegree(x);
   if (flat !== null) return flat;
   return characteristic(x).minimal.length - 1;
@@ -43,11 +43,12 @@ export function degreeOf(x: Cx): number {
 
 /** Coefficients from the highest power down, primitive, leading one positive. */
 export function minimalPolynomialOf(x: Cx): bigint[] {
-  if (x instanceof Cosine && x.parts > 2n) {
-    const degree = Number(totient(x.parts) / 2n);
+  if (x instanceof Cosine && x.n > 2n) {
+    const { degree, scale } = x;
     x.im.t.field.budget.within('degree', degree);
     x.im.t.field.budget.charge(degree * degree);
-    return cosinePolynomial(x.parts);
+    const f = cosinePolynomial(x.n);
+    return [...multiplyRoots(f.reverse(), scale.n, scale.d)].reverse();
   }
   if (isRationalEl(x.re) && isZeroEl(x.im)) {
     return [BigInt(x.re.den), -BigInt(numerator(x.re))];

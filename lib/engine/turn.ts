@@ -11,9 +11,14 @@
 import { addEl, integerEl, mulEl, negEl, scaleEl, subEl } from './element';
 import { sqrtReal } from './real-root';
 import type { Cx } from './complex';
+import { totient } from './cosine-polynomial';
+import { OverLimit } from './limits';
 import type { El, Field } from './tower';
 
-const FERMAT = [3n, 5n, 17n, 257n];
+const FERMAT = [3n, 5n, 17n, 257n, 65537n];
+
+/** Divisions with the factor 257 are built in square roots up to this degree of their cosine; all with 65537 lie above it. */
+const BUILT_DEGREE = 1024;
 
 /** cos(2πk/n), n > 0. */
 export function cosineOf(f: Field, k: bigint, n: bigint): El {
@@ -37,7 +42,7 @@ function sineOf(f: Field, k: bigint, n: bigint): El {
   return cosineOf(f, 4n * k - n, 4n * n);
 }
 
-/** Whether n is a power of two times distinct Fermat primes up to 257, so that `cosineOf` covers it. */
+/** Whether n is a power of two times distinct Fermat primes. */
 export function isConstructibleDivision(n: bigint): boolean {
   let rest = n;
   while (rest % 2n === 0n) rest /= 2n;
@@ -45,26 +50,57 @@ export function isConstructibleDivision(n: bigint): boolean {
   return rest === 1n;
 }
 
-/** cos(2πk/n) as a number that builds its tower only when it is asked for more than its degree and polynomial. */
+/**
+ * A rational multiple of cos(2πk/n) as a number that builds its tower only when it is asked for more than its degree and
+ * polynomial. Where the square roots would be too long, it never does: its digits and order come from enclosures.
+ */
 export class Cosine implements Cx {
   private made: El | null = null;
   readonly im: El;
+  /** The angle in lowest terms, 0 ≤ k/n ≤ 1/2. */
+  readonly k: bigint;
+  readonly n: bigint;
 
-  /** n in lowest terms is a constructible division. */
+  /** n in lowest terms is a constructible division; the scale is 1 unless the square roots are too long. */
   constructor(
     private readonly f: Field,
-    private readonly k: bigint,
-    private readonly n: bigint,
+    k: bigint,
+    n: bigint,
+    readonly scale: { readonly n: bigint; readonly d: bigint } = { n: 1n, d: 1n },
   ) {
     this.im = f.zero;
+    const g = gcd(k < 0n ? -k : k, n);
+    this.n = n / g;
+    const u = mod(k / g, this.n);
+    this.k = 2n * u > this.n ? this.n - u : u;
   }
 
-  /** n in lowest terms. */
-  get parts(): bigint {
-    return this.n / gcd(this.k < 0n ? -this.k : this.k, this.n);
+  /** Degree of the cosine where that is above 1. */
+  get degree(): number {
+    return Number(totient(this.n) / 2n);
+  }
+
+  /** Whether the square roots are too long to be built. Such a cosine is irrational. */
+  get isTooLong(): boolean {
+    return (this.n % 257n === 0n || this.n % 65537n === 0n) && this.degree > BUILT_DEGREE;
+  }
+
+  /** The multiple of a cosine that is too long by n/d ≠ 0. */
+  times(n: bigint, d: bigint): Cosine {
+    const [top, bottom] = [this.scale.n * n, this.scale.d * d];
+    const g = gcd(top < 0n ? -top : top, bottom);
+    return new Cosine(this.f, this.k, this.n, { n: top / g, d: bottom / g });
   }
 
   get re(): El {
+    if (this.isTooLong) {
+      throw new OverLimit(
+        'degree',
+        BUILT_DEGREE,
+        this.degree,
+        `The cosine of ${this.k}/${this.n} of a turn takes square roots too long to be written out or reckoned with (degree ${this.degree}, the limit is ${BUILT_DEGREE}); the division page gives its chain of quadratics, and its digits and rational multiples are to be had here.`,
+      );
+    }
     this.made ??= cosineOf(this.f, this.k, this.n);
     return this.made;
   }

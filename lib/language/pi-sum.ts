@@ -1,4 +1,4 @@
-import type { Engine, Num } from '../engine/index';
+import { boundsOfPi, type Engine, type Num } from '../engine/index';
 import { fail } from './failure';
 
 /**
@@ -210,34 +210,4 @@ export function signOfSum(engine: Engine, sum: PiSum): -1 | 0 | 1 {
     const sign = engine.sign(low);
     return sign === engine.sign(high) && sign !== 0 ? sign : null;
   });
-}
-
-const cachedBounds = new Map<number, { low: bigint; high: bigint }>();
-
-/**
- * π between low/2^bits and high/2^bits with high - low = 2, by Machin's formula π = 16 arctan(1/5) - 4 arctan(1/239)
- * (1706) in integers with guard bits. Each truncated division errs by less than one unit and the series alternates, so
- * the guard bits cover the whole error.
- */
-export function boundsOfPi(bits: number): { low: bigint; high: bigint } {
-  const known = cachedBounds.get(bits);
-  if (known !== undefined) return known;
-  const guard = BigInt(16 + Math.ceil(Math.log2(bits + 2)));
-  const one = 1n << (BigInt(bits) + guard);
-  const scaled = 16n * arctanOfInverse(5n, one) - 4n * arctanOfInverse(239n, one);
-  const middle = scaled >> guard;
-  const bounds = { low: middle - 1n, high: middle + 1n };
-  if (cachedBounds.size > 16) cachedBounds.clear();
-  cachedBounds.set(bits, bounds);
-  return bounds;
-}
-
-function arctanOfInverse(x: bigint, one: bigint): bigint {
-  let power = one / x;
-  let sum = power;
-  for (let k = 3n, sign = -1n; power !== 0n; k += 2n, sign = -sign) {
-    power /= x * x;
-    sum += (sign * power) / k;
-  }
-  return sum;
 }

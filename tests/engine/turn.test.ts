@@ -90,9 +90,47 @@ describe('parts of a turn', () => {
 
   it('a division beyond the closed forms is a named limit', () => {
     const e = createEngine();
-    expect(e.attempt(() => e.cosTurn(1n, 65537n))).toMatchObject({
+    expect(e.attempt(() => e.cosTurn(1n, 65539n))).toMatchObject({
       kind: 'over-limit',
       limit: 'degree',
+    });
+  });
+
+  describe('of a division whose square roots are too long to be written', () => {
+    const e = createEngine();
+    const long = e.cosTurn(1n, 65537n);
+
+    it('has its degree, its reach, its digits and its order at once', () => {
+      // PARI/GP 2.15.2: cos(2*Pi/65537), sin(2*Pi/4369), cos(2*Pi/65535), 800*sin(Pi/65537).
+      expect(e.decimal(long, 30).re).toBe('0.999999995404247565194868824412');
+      expect(e.decimal(e.sinTurn(1n, 4369n), 30).re).toBe('0.00143812843702227238382300242995');
+      expect(e.decimal(e.cosTurn(1n, 65535n), 30).re).toBe('0.999999995403967054166687135828');
+      expect(e.degree(long)).toBe(32768);
+      expect(e.reach(long)).toEqual({ kind: 'constructible' });
+      expect([e.isZero(long), e.isReal(long), e.isRational(long)]).toEqual([false, true, false]);
+      expect(e.compare(long, e.integer(1))).toBe(-1);
+      expect(e.compare(e.rational(1n, 2n), long)).toBe(-1);
+      expect(e.floor(e.neg(long))).toBe(-1n);
+    });
+
+    it('is taken times a rational number, and written by its name', () => {
+      const chord = e.mul(e.integer(-2400), e.sinTurn(1n, 131074n));
+      expect(e.write(chord).text).toBe('-2400*sin(pi/65537)');
+      expect(e.decimal(e.div(chord, e.integer(-3)), 15).re).toBe('0.0383489345241513');
+      expect(e.roundToMultiple(e.abs(chord), { n: 1n, d: 10n }, 'up').multiple).toBe(2n);
+    });
+
+    it('names the limit, and where its quadratics stand, when more is asked', () => {
+      for (const ask of [
+        () => e.add(long, e.integer(1)),
+        () => e.sqrt(long),
+        () => e.tower(long),
+      ]) {
+        const outcome = e.attempt<unknown>(ask);
+        expect(outcome).toMatchObject({ kind: 'over-limit', code: 'limit-size', limit: 'degree' });
+        if (outcome.kind !== 'over-limit') continue;
+        expect(outcome.message).toContain('the division page gives its chain of quadratics');
+      }
     });
   });
 

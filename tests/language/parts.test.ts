@@ -3,7 +3,7 @@ import { terminatingDecimal } from '@/lib/language/decimals';
 import { orderByDependence } from '@/lib/language/graph';
 import { ACTIONS } from '@/lib/language/functions/index';
 import { FUNCTIONS } from '@/lib/language/names';
-import { boundsOfPi } from '@/lib/language/pi-sum';
+import { boundsOfPi } from '@/lib/engine/pi';
 import { noticesOf } from '@/lib/language/notices';
 import { readLine } from '@/lib/language/read';
 import { readStep } from '@/lib/language/settings';

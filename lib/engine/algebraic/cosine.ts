@@ -4,23 +4,8 @@
  */
 import type { Budget } from '../limits';
 import { cosinePolynomial } from '../cosine-polynomial';
+import { boundsOfPi } from '../pi';
 import { Algebraic } from './algebraic';
-
-function arctanOfInverse(x: bigint, one: bigint): bigint {
-  let power = one / x;
-  let sum = power;
-  for (let k = 3n, sign = -1n; power !== 0n; k += 2n, sign = -sign) {
-    power /= x * x;
-    sum += (sign * power) / k;
-  }
-  return sum;
-}
-
-/** π·2^P within P units: Machin's formula (1706), each truncation costs at most one unit of sixteen. */
-function scaledPi(P: number): bigint {
-  const one = 1n << BigInt(P + 8);
-  return (16n * arctanOfInverse(5n, one) - 4n * arctanOfInverse(239n, one)) >> 8n;
-}
 
 /** cos(2πk/n)·2^P between two integers, 0 ≤ k/n ≤ 1/2. */
 export function encloseCosine(
@@ -36,7 +21,7 @@ export function encloseCosine(
   const working = P + 40;
   const w = BigInt(working);
   budget.charge((working >> 2) * (1 + (working >> 10)));
-  const x = (2n * k * scaledPi(working)) / n;
+  const x = (2n * k * boundsOfPi(working).low) / n;
   const square = (x * x) >> w;
   let term = 1n << w;
   let sum = term;

@@ -162,7 +162,7 @@ const partOfHalfTurn = (k: bigint, n: bigint): Angle =>
   n % 2n === 0n ? { top: k, bottom: n / 2n } : { top: 2n * k, bottom: n };
 
 /** As a sine where the complement has half the parts. */
-function writeCosine(k: bigint, n: bigint): Name {
+export function writeCosine(k: bigint, n: bigint): Name {
   const angle = partOfHalfTurn(k, n);
   if (angle.bottom % 4n !== 2n) return call('cos', angle);
   const half = angle.bottom / 2n;
