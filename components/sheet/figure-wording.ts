@@ -52,6 +52,8 @@ export function figureCompartments(result: FigureResult, full: boolean): Compart
     const decimal = { label, value: withUnit(sayDecimal(part, full), part.unit), figures: true };
     if (!part.cut) return [decimal];
     const cut = `${withUnit(part.cut.value, part.unit)}, ${DIRECTIONS[part.cut.direction]}`;
+    // What is cut exactly is said once.
+    if (part.cut.direction === 'exact') return [{ ...decimal, value: cut }];
     return [decimal, { label: `${label}, cut`, value: cut, figures: true }];
   });
   items.push(reachCompartment(result.reach));
