@@ -254,6 +254,17 @@ export const FUNCTIONS: readonly FunctionWord[] = [
   ),
   word(
     'geometry',
+    'ring(C, R, n, angle)',
+    'The list of n points that divide the circle about C with the radius R equally, anticlockwise from the top.',
+    'ring(point(0, 0), 450 mm, 5)',
+    {
+      least: 3,
+      most: 4,
+      parameters: { angle: 'Where the first point lies instead, measured from the x-axis.' },
+    },
+  ),
+  word(
+    'geometry',
     'meet(g, h, which)',
     'Where two lines or circles meet.',
     'meet(circle(point(0, 0), 5), line(0, 1, -3), 2)',

@@ -34,6 +34,13 @@ describe('the window of seventeen lights', () => {
     expect(figure(`${window}dist(T, rotate(T, ${k} turn/17, O))`, 12)).toBe(expected);
   });
 
+  it('all chords from the top stand in one list, and the ring closes', () => {
+    const ring = 'W = ring(point(0, 0), 1500 mm, 17)\n';
+    expect(figure(`${ring}dist(W[1], W)[9]`, 12)).toBe('2987.20252889');
+    const sides = 'sum(each(k, 1, 16, dist(W[k], W[k + 1]))) + dist(W[17], W[1])';
+    expect(holds(`${ring}${sides} == 17 chord(1500 mm, turn/17)`)).toBe(true);
+  });
+
   it('the foils leave room for a mullion of 60', () => {
     const foil = `${window}M = mid(T, rotate(T, turn/17))\ndist(M, T) - 30 mm`;
     expect(figure(foil, 12)).toBe('245.624276725');

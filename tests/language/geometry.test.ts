@@ -196,6 +196,32 @@ describe('points as vectors', () => {
   });
 });
 
+describe('rings', () => {
+  it('are lists of points, anticlockwise from the top or from the angle that is given', () => {
+    expect(get('list', 'ring(point(0, 0), 1, 4)').exact.text).toBe(
+      '[point(0, 1), point(-1, 0), point(0, -1), point(1, 0)]',
+    );
+    expect(holds('ring(point(0, 0), 2 mm, 3, 0)[1] == point(2 mm, 0)')).toBe(true);
+    expect(holds('ring(point(1, 1), 1, 6) == ring(point(0, 0), 1, 6) + point(1, 1)')).toBe(true);
+    expect(holds('ring(point(0, 0), 1, 5)[2] == rotate(point(0, 1), turn/5)')).toBe(true);
+    expect(holds('count(ring(point(0, 0), 1, 12)) == 12')).toBe(true);
+  });
+
+  it.each([
+    ['ring(point(0, 0), 0, 4)', 'domain'],
+    ['ring(point(0, 0), 1, 0)', 'domain'],
+    ['ring(point(0, 0), 1, 5/2)', 'domain'],
+    ['ring(point(0, 0), 1, 3 mm)', 'domain'],
+    ['ring(point(0, 0), 1, 1001)', 'limit-size'],
+    ['ring(point(1, 0), 1 mm, 4)', 'unit-mismatch'],
+    ['ring(1, 1, 4)', 'unit-mismatch'],
+    ['ring(point(0, 0), 1, 4, 1)', 'not-exact'],
+    ['ring(point(0, 0), 1)', 'syntax'],
+  ])('`%s` fails with %s', (source, code) => {
+    expect(codeOf(source)).toBe(code);
+  });
+});
+
 describe('sentences of the constructions', () => {
   it('tell which point is asked for and how far figures miss each other', () => {
     const c = 'circle(point(0, 0), 5 mm)';

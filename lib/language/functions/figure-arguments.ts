@@ -51,6 +51,14 @@ export function needCoordinate(
   return { ...value, num };
 }
 
+/** A plain whole number, or null. */
+export function findWhole(engine: Engine, value: Value): bigint | null {
+  const plain =
+    value.kind === 'number' && value.length === 0 ? asAlgebraic(engine, value.sum) : null;
+  const rational = plain === null ? null : engine.asRational(plain);
+  return rational?.d === 1n ? rational.n : null;
+}
+
 /**
  * The one unit of all parts of a figure: all lengths, or all plain numbers. What is 0 or passes through the origin
  * fits both, so `point(0, 0)` goes with lengths.

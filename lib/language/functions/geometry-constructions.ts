@@ -14,7 +14,6 @@ import {
   rotate,
 } from '../../geometry/index';
 import { fail } from '../failure';
-import { asAlgebraic } from '../pi-sum';
 import type { Value } from '../values';
 import {
   type CircleFigure,
@@ -26,6 +25,7 @@ import { partOfTurn } from './circular';
 import {
   commonLength,
   failKind,
+  findWhole,
   needFigure,
   needLine,
   needPoint,
@@ -55,11 +55,9 @@ function needCurve(value: Value | undefined): LineFigure | CircleFigure {
 
 function whichMeet(engine: Engine, value: Value): 1 | 2 | Point {
   if (value.kind === 'point') return value.figure;
-  const count =
-    value.kind === 'number' && value.length === 0 ? asAlgebraic(engine, value.sum) : null;
-  const whole = count === null ? null : engine.asRational(count);
-  if (whole?.d === 1n && whole.n === 1n) return 1;
-  if (whole?.d === 1n && whole.n === 2n) return 2;
+  const whole = findWhole(engine, value);
+  if (whole === 1n) return 1;
+  if (whole === 2n) return 2;
   return fail(
     'domain',
     'meet takes 1, 2 or a point as its third argument, to say which point of meeting it is.',

@@ -7,12 +7,23 @@ import {
   makeLine,
   makePoint,
   polar,
+  ring,
 } from '../../geometry/index';
-import { type NumberValue, type Value, number } from '../values';
+import { fail } from '../failure';
+import { LANGUAGE_LIMITS } from '../limits';
+import { list } from '../lists';
+import { type NumberValue, type Single, type Value, number } from '../values';
 import { fromNum } from '../pi-sum';
 import { figureValue } from '../values-geometry';
 import { partOfTurn } from './circular';
-import { commonLength, needCircle, needCoordinate, needPoint, settle } from './figure-arguments';
+import {
+  commonLength,
+  findWhole,
+  needCircle,
+  needCoordinate,
+  needPoint,
+  settle,
+} from './figure-arguments';
 
 type Arguments = readonly Value[];
 
@@ -72,6 +83,32 @@ export function circle(engine: Engine, [first, second, third]: Arguments): Value
   );
   const length = commonLength(engine, 'circle', [p, radius]);
   return figureValue(settle(engine, makeCircle(engine, p.figure, radius.num), length), length);
+}
+
+/** Where a ring begins: at the top, a quarter turn from the x-axis. */
+const TOP = { k: 1n, n: 4n };
+
+/**
+ * `ring(C, R, n)`: the n points that divide the circle about C equally, anticlockwise from the top; `ring(C, R, n, angle)`
+ * begins at another angle, measured as in `polar`. A list, so that its first item is the point that the trade calls 0.
+ */
+export function ringOfPoints(engine: Engine, args: Arguments): Value {
+  const [first, second, third, fourth] = args;
+  const middle = needPoint(first, 'ring needs a centre');
+  const reach = needCoordinate(engine, second, 'ring needs a radius');
+  const length = commonLength(engine, 'ring', [middle, reach]);
+  const { radius: size } = settle(engine, makeCircle(engine, middle.figure, reach.num), length);
+  const parts = third === undefined ? null : findWhole(engine, third);
+  if (parts === null || parts < 1n)
+    return fail('domain', 'ring needs a whole number of parts, 1 or more, as its third argument.');
+  if (parts > BigInt(LANGUAGE_LIMITS.listItems))
+    fail(
+      'limit-size',
+      `The ring would have ${parts} points; the limit is ${LANGUAGE_LIMITS.listItems}.`,
+    );
+  const start = fourth === undefined ? TOP : partOfTurn(engine, fourth as Single);
+  const points = ring(engine, middle.figure, size, Number(parts), start);
+  return list(points.map((each) => figureValue(each, length)));
 }
 
 export function abscissa(engine: Engine, [value]: Arguments): NumberValue {

@@ -30,6 +30,7 @@ import {
   point,
   polarPoint,
   radius,
+  ringOfPoints,
 } from './geometry-figures';
 import { angleBetween, dist } from './geometry-measures';
 import { countOf, flatten, sumOf } from './lists';
@@ -86,6 +87,7 @@ export const ACTIONS: ReadonlyMap<string, Action> = new Map<string, Action>([
   ['polar', polarPoint],
   ['line', line],
   ['circle', circle],
+  ['ring', ringOfPoints],
   ['meet', meet],
   ['mid', mid],
   ['foot', foot],
