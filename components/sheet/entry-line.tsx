@@ -156,7 +156,7 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
         </div>
       </div>
       {dimension && (
-        <div className="w-44 print:group-data-wide/row:col-start-2 print:group-data-wide/row:row-start-auto print:col-start-3 print:row-start-1 max-sm:col-start-2 max-sm:row-start-1 max-sm:justify-self-end sm:col-start-2 lg:col-start-3 lg:row-start-1 lg:w-full">
+        <div className="w-44 print:w-40 print:group-data-wide/row:col-start-2 print:group-data-wide/row:row-start-auto print:col-start-3 print:row-start-1 max-sm:col-start-2 max-sm:row-start-1 max-sm:justify-self-end sm:col-start-2 lg:col-start-3 lg:row-start-1 lg:not-print:w-full">
           <DimensionLine {...dimension} greyed={dim} />
         </div>
       )}

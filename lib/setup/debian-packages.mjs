@@ -7,7 +7,11 @@ export const SERVER_PACKAGES = {
 };
 
 /** What the tests need besides. */
-export const TEST_PACKAGES = { chromium: 'chromium', 'texlive-latex-base': 'pdflatex' };
+export const TEST_PACKAGES = {
+  chromium: 'chromium',
+  'texlive-latex-base': 'pdflatex',
+  'poppler-utils': 'pdftotext',
+};
 
 /**
  * Installs the packages whose program is missing. None of them brings a system service.

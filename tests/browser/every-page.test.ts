@@ -4,7 +4,8 @@ import { IDA, useBrowser, type Visitor } from './support/browser';
 
 const { newVisitor } = useBrowser();
 const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
-const WIDTHS = [380, 390, 820, 1440] as const;
+/** 320 is what is left of 1280 at 400 %, 640 at 200 %. */
+const WIDTHS = [320, 390, 640, 820, 1440] as const;
 
 let ida: Visitor;
 let paths: Record<string, string>;
@@ -34,6 +35,8 @@ beforeAll(async () => {
     divide: '/divide?n=17&radius=1200+mm',
     'divide not reached': '/divide?n=7&radius=450+mm',
     'not found': '/client/nothing',
+    'no such page': '/no/such/page',
+    'front with a slip': '/?lines=R%20%3D%201200%20mm%0AR%20%2B%203%20deg',
   };
 });
 
@@ -50,6 +53,8 @@ const PAGES = [
   'divide',
   'divide not reached',
   'not found',
+  'no such page',
+  'front with a slip',
 ] as const;
 
 async function faultsOf(visitor: Visitor) {
@@ -80,6 +85,38 @@ describe.each(['light', 'dark'] as const)('in %s', (colorScheme) => {
       await visitor.context.close();
     },
   );
+
+  it('signing up with every field wrong, and signing in in vain, have none', async () => {
+    const visitor = await newVisitor({ colorScheme });
+    const { page } = visitor;
+    await visitor.open('/sign-up');
+    await page.getByLabel('Your name').fill(' ');
+    await page.getByLabel('Workshop').fill(' ');
+    await page.getByLabel('E-mail address').fill('name@example');
+    await page.getByLabel('Password').fill('short');
+    await page.getByRole('button', { name: 'Make an account' }).click();
+    await page.getByText('The password has fewer than 10 characters.').waitFor();
+    expect(await page.getByLabel('Password').getAttribute('aria-invalid')).toBe('true');
+    expect(await faultsOf(visitor)).toEqual([]);
+    await visitor.open('/sign-in?error=too-many');
+    await page.getByRole('alert').filter({ hasText: 'Too many attempts' }).waitFor();
+    expect(await faultsOf(visitor)).toEqual([]);
+    await visitor.context.close();
+  });
+
+  it('beginning a notebook and choosing where a sample goes have none', async () => {
+    const { page } = ida;
+    await page.emulateMedia({ colorScheme });
+    await ida.open('/notebooks');
+    await page.getByRole('button', { name: 'New notebook' }).click();
+    await page.getByRole('radio', { name: 'A traceried circle' }).check();
+    expect(await faultsOf(ida)).toEqual([]);
+    await ida.open('/help');
+    await page.getByRole('button', { name: /^Put chord/ }).click();
+    await page.getByRole('dialog').getByLabel('Notebook').waitFor();
+    expect(await faultsOf(ida)).toEqual([]);
+    await page.keyboard.press('Escape');
+  });
 
   it('a sheet in hand and its dialogs have none either', async () => {
     const { page } = ida;
@@ -115,6 +152,46 @@ describe.each(WIDTHS)('at %i pixels', (width) => {
       if (over > 0) wide.push(`${name}: ${over}`);
     }
     expect(wide).toEqual([]);
+  });
+});
+
+describe('by keyboard', () => {
+  it.each(['front', 'notebooks', 'sheet', 'help', 'divide', 'settings'] as const)(
+    'whatever has the focus on “%s” is seen to have it',
+    async (name) => {
+      const { page } = ida;
+      await page.setViewportSize({ width: 1280, height: 900 });
+      await ida.open(String(paths[name]));
+      for (let stop = 0; stop < 14; stop += 1) {
+        await page.keyboard.press('Tab');
+        const unseen = await page.evaluate(() => {
+          const { activeElement } = document;
+          if (activeElement === null || activeElement === document.body) return null;
+          const shows = (element: Element) => getComputedStyle(element).outlineStyle !== 'none';
+          // The radio buttons of pictures and the source editor show it on what surrounds them.
+          const around = activeElement.closest('label, form, section');
+          return shows(activeElement) || (around !== null && shows(around))
+            ? null
+            : activeElement.outerHTML.slice(0, 200);
+        });
+        expect(unseen).toBeNull();
+      }
+    },
+  );
+
+  it('nothing moves of itself where motion is not wanted', async () => {
+    for (const name of ['front', 'sheet', 'help'] as const) {
+      await ida.open(String(paths[name]));
+      const moving = await ida.page.evaluate(() =>
+        [...document.querySelectorAll('body, body *')]
+          .filter((element) => {
+            const { animationName, transitionDuration } = getComputedStyle(element);
+            return animationName !== 'none' || !/^0s(, 0s)*$/.test(transitionDuration);
+          })
+          .map((element) => element.outerHTML.slice(0, 120)),
+      );
+      expect(moving).toEqual([]);
+    }
   });
 });
 
