@@ -1,6 +1,14 @@
-import { CONSTANTS, FUNCTIONS, UNITS } from '@/lib/language/names';
-import { SAMPLES } from './samples';
-import { FORMS } from './text';
+import {
+  CONSTANTS,
+  DEGREE_PARTS,
+  FORMS,
+  FUNCTIONS,
+  GROUPS as FUNCTION_GROUPS,
+  UNITS,
+  type FormWord,
+  type FunctionWord,
+} from '@/lib/language/names';
+import { MORE_FORMS } from './text';
 
 /** One word or form of the cell language as the reference shows it. */
 export interface Entry {
@@ -10,8 +18,8 @@ export interface Entry {
   form: string;
   meaning: string;
   parameters: readonly (readonly [name: string, meaning: string])[];
-  /** Lines that show it at work, or null. */
-  sample: string | null;
+  /** Lines that show it at work. */
+  sample: string;
 }
 
 export interface Group {
@@ -20,38 +28,54 @@ export interface Group {
   entries: readonly Entry[];
 }
 
-interface Word {
-  name: string;
-  meaning: string;
-  signature?: string;
-  parameters?: Readonly<Record<string, string>>;
-}
-
-const entryOf = (word: Word): Entry => ({
-  id: word.name,
-  form: word.signature ?? word.name,
-  meaning: word.meaning,
-  parameters: Object.entries(word.parameters ?? {}),
-  sample: SAMPLES[word.name] ?? null,
+/** Forms stand apart from the words, whose anchors are the words themselves. */
+const formEntry = ({ name, form, meaning, example }: FormWord): Entry => ({
+  id: `form-${name.replace(/[^A-Za-z0-9]+/g, '-')}`,
+  form,
+  meaning,
+  parameters: [],
+  sample: example,
 });
 
-/** An anchor for a form, apart from those of the words, which are the words themselves. */
-const anchorOf = (name: string) => `form-${name.replace(/[^A-Za-z0-9]+/g, '-')}`;
+const functionEntry = ({ name, signature, meaning, parameters, example }: FunctionWord): Entry => ({
+  id: name,
+  form: signature,
+  meaning,
+  parameters: Object.entries(parameters),
+  sample: example,
+});
+
+const nameEntry = (word: { name: string; meaning: string; example: string }): Entry => ({
+  id: word.name,
+  form: word.name,
+  meaning: word.meaning,
+  parameters: [],
+  sample: word.example,
+});
 
 /** Everything that can be written in a dimension cell, in the order of the page. */
 export const GROUPS: readonly Group[] = [
   {
     id: 'forms',
     title: 'How a line is written',
-    entries: FORMS.map(({ name, form, meaning, example }) => ({
-      id: anchorOf(name),
-      form,
-      meaning,
-      parameters: [],
-      sample: example,
-    })),
+    entries: [...FORMS, ...MORE_FORMS].map(formEntry),
   },
-  { id: 'functions', title: 'Functions', entries: FUNCTIONS.map(entryOf) },
-  { id: 'units', title: 'Units', entries: UNITS.map(entryOf) },
-  { id: 'constants', title: 'Constants', entries: CONSTANTS.map(entryOf) },
+  ...FUNCTION_GROUPS.map(({ name, title }) => ({
+    id: name,
+    title,
+    entries: FUNCTIONS.filter(({ group }) => group === name).map(functionEntry),
+  })),
+  {
+    id: 'units',
+    title: 'Units',
+    entries: [
+      ...UNITS.map(nameEntry),
+      ...DEGREE_PARTS.map((part) => ({
+        ...nameEntry(part),
+        id: `part-${part.name}`,
+        form: `${part.name}, ${part.sign}`,
+      })),
+    ],
+  },
+  { id: 'constants', title: 'Constants', entries: CONSTANTS.map(nameEntry) },
 ];

@@ -44,11 +44,11 @@ export function EntryText({ entry, results, signedIn }: EntryTextProps) {
       id={id}
       className="border-t border-hairline py-3 target:bg-snapline-wash [break-inside:avoid]"
     >
-      <h4 className="font-mono text-source font-medium [overflow-wrap:anywhere]">
+      <h3 className="font-mono text-source font-medium [overflow-wrap:anywhere]">
         <a href={`#${id}`} className="underline-offset-4 hover:underline">
           {form}
         </a>
-      </h4>
+      </h3>
       <p className="max-w-prose">
         <Sentence text={meaning} />
       </p>
@@ -64,27 +64,25 @@ export function EntryText({ entry, results, signedIn }: EntryTextProps) {
           ))}
         </dl>
       )}
-      {sample !== null && (
-        <div className="mt-2 border-l-2 border-rule pl-3">
-          <div className="flex flex-wrap items-baseline justify-between gap-x-4">
-            <pre className="whitespace-pre-wrap font-mono text-source [overflow-wrap:anywhere]">
-              {sample}
-            </pre>
-            <div className="-ml-1.5 flex flex-wrap items-baseline gap-x-2">
-              {signedIn && <PutIn lines={sample} name={form} />}
-              <CopyButton
-                look="quiet"
-                text={sample}
-                label="Copy"
-                name={`Copy the sample of ${form}`}
-              />
-            </div>
+      <div className="mt-2 border-l-2 border-rule pl-3">
+        <div className="flex flex-wrap items-baseline justify-between gap-x-4">
+          <pre className="whitespace-pre-wrap font-mono text-source [overflow-wrap:anywhere]">
+            {sample}
+          </pre>
+          <div className="-ml-1.5 flex flex-wrap items-baseline gap-x-2">
+            {signedIn && <PutIn lines={sample} name={form} />}
+            <CopyButton
+              look="quiet"
+              text={sample}
+              label="Copy"
+              name={`Copy the sample of ${form}`}
+            />
           </div>
-          {results.map((result) => (
-            <SampleResult key={result.line} result={result} />
-          ))}
         </div>
-      )}
+        {results.map((result) => (
+          <SampleResult key={result.line} result={result} />
+        ))}
+      </div>
     </article>
   );
 }

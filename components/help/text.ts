@@ -1,42 +1,24 @@
+import type { FormWord } from '@/lib/language/names';
+
 /** What the reference says beside the language's own words, as data: the page only sets it. */
-export const FORMS = [
-  {
-    name: 'mark',
-    form: 'mark = value',
-    meaning:
-      'Gives a value a mark that other lines read, wherever they stand on the sheet. A mark is given once; names of units and functions cannot be marks.',
-    example: 'R = 1200 mm\ns = 2 R sin(turn/34)',
-  },
+export const MORE_FORMS: readonly FormWord[] = [
   {
     name: 'value',
-    form: 'value',
+    form: '(1 + sqrt(5))/2, 0.1',
     meaning:
       'Sums, differences, products, quotients and square roots of whole numbers, fractions and exact decimals: `0.1` is one tenth.',
     example: '(1 + sqrt(5))/2',
   },
   {
-    name: 'decision',
-    form: 'a == b, a != b, a < b, a <= b, a > b, a >= b',
-    meaning: 'A statement. It is decided exactly, never by decimals.',
-    example: 'sqrt(2) + sqrt(3) == sqrt(5 + 2 sqrt(6))',
-  },
-  {
-    name: 'product',
-    form: '2R, 3 sqrt(2), 1/2 R',
-    meaning:
-      'A number before a name or a bracket multiplies. Multiplying and dividing go from left to right, so `1/2 R` is half of R; brackets say otherwise.',
-    example: 'R = 3\n1/2 R == (1/2) * R',
-  },
-  {
     name: 'signs',
     form: '× ÷ · − π ° ² ³ √',
     meaning:
-      'Are read as typed; on a keyboard `*` `/` `-` `pi` `deg` `^2` `^3` `sqrt()` mean the same. `√` takes the next number, name or bracket.',
+      'Are read as typed; on a keyboard `*` `/` `-` `pi` `deg` `^2` `^3` `sqrt()` mean the same.',
     example: '√(5 + 2√6)',
   },
   {
     name: 'quantity',
-    form: '1200 mm, 3/4 in, 15°',
+    form: '1200 mm',
     meaning:
       'A number with a unit. Units are checked: a length plus an angle is an error that says so. The root of an area is a length.',
     example: 'sqrt((250 mm)^2 + (300 mm)^2)',
@@ -49,19 +31,13 @@ export const FORMS = [
     example: 'turn/24 == 15°',
   },
   {
-    name: 'remark',
-    form: '# remark',
-    meaning: 'Whatever follows `#` is not read.',
-    example: 'R = 1200 mm   # from drawing 14',
-  },
-  {
-    name: 'point',
+    name: 'coordinates',
     form: 'point(x, y), A + B, 2 A',
     meaning:
       'Points, lines and circles: x runs to the right and y upwards, angles anticlockwise from the x-axis. A coordinate 0 needs no unit. Points are added and scaled as vectors, and have cut sizes.',
     example: 'A = point(0, 0)\nB = point(300 mm, 400 mm)\n(A + B)/2 == mid(A, B)',
   },
-] as const;
+];
 
 export const WORDS = [
   { name: 'mark', meaning: 'The name a line gives to a value: the letter on a drawing.' },

@@ -6,7 +6,7 @@ import { Filter, Filtered, answersFilter } from '@/components/help/filter';
 import { putLines, withLines } from '@/components/help/put-lines';
 import { findDraft, keepDraft, type DraftPlace } from '@/components/sheet/state/draft';
 import { evaluateCells } from '@/lib/language';
-import { CONSTANTS, FUNCTIONS, UNITS } from '@/lib/language/names';
+import { CONSTANTS, DEGREE_PARTS, FORMS, FUNCTIONS, UNITS } from '@/lib/language/names';
 import type { NotebookContent } from '@/lib/notebooks/content';
 
 const entries = GROUPS.flatMap((group) => [...group.entries]);
@@ -18,14 +18,22 @@ describe('the reference', () => {
     for (const word of [...FUNCTIONS, ...UNITS, ...CONSTANTS]) {
       const entry = entries.find(({ id }) => id === word.name);
       expect(entry, word.name).toMatchObject({ meaning: word.meaning });
-      expect(entry?.sample, word.name).toMatch(/\S/);
+      expect(entry?.sample, word.name).toBe(word.example);
+    }
+    for (const { form, meaning } of FORMS) {
+      expect(
+        entries.filter((entry) => entry.form === form && entry.meaning === meaning),
+      ).toHaveLength(1);
+    }
+    for (const { meaning, example } of DEGREE_PARTS) {
+      expect(entries).toContainEqual(expect.objectContaining({ meaning, sample: example }));
     }
     for (const { name, signature } of FUNCTIONS) {
       expect(entries.find(({ id }) => id === name)?.form).toBe(signature);
     }
   });
 
-  it.each(entries.map(({ form, sample }) => [form, sample ?? '']))(
+  it.each(entries.map(({ form, sample }) => [form, sample]))(
     'the sample of “%s” evaluates, and every statement in it is true',
     (_, sample) => {
       const results = evaluateCells([{ id: 'sample', source: sample }]).flatMap(

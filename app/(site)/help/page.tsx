@@ -22,7 +22,7 @@ const keys = KEYS.map(({ keys: pressed, does }) => ({
   meaning: does,
 }));
 
-const textOf = ({ form, meaning, sample }: Entry) => `${form} ${meaning} ${sample ?? ''}`;
+const textOf = ({ form, meaning, sample }: Entry) => `${form} ${meaning} ${sample}`;
 const pairText = ({ name, meaning }: { name: string; meaning: string }) => `${name} ${meaning}`;
 const pairs = [
   { id: 'keys', title: 'Keys', about: 'On a Mac, Cmd stands for Ctrl.', items: keys, mono: true },
@@ -57,7 +57,7 @@ async function sheetBehind(asked: string | string[] | undefined) {
 }
 
 export default async function HelpPage({ searchParams }: PageProps) {
-  const samples = GROUPS.flatMap(({ entries }) => entries.flatMap(({ sample }) => sample ?? []));
+  const samples = GROUPS.flatMap(({ entries }) => entries.map(({ sample }) => sample));
   const [{ signedIn, from }, answers] = await Promise.all([
     sheetBehind((await searchParams).from),
     answersTo(samples),
@@ -80,9 +80,9 @@ export default async function HelpPage({ searchParams }: PageProps) {
           </ul>
           <div className="mt-5 flex flex-wrap gap-x-2.5 gap-y-0.5 font-mono text-small">
             {GROUPS.filter(({ id }) => id !== 'forms').flatMap(({ entries }) =>
-              entries.map(({ id }) => (
+              entries.map(({ id, form }) => (
                 <a key={id} href={`#${id}`} className="py-0.5 text-snapline hover:underline">
-                  {id}
+                  {form.replace(/[(,].*/, '')}
                 </a>
               )),
             )}
@@ -115,7 +115,7 @@ export default async function HelpPage({ searchParams }: PageProps) {
                     <Filtered key={entry.id} texts={[textOf(entry)]}>
                       <EntryText
                         entry={entry}
-                        results={(entry.sample && answers.get(entry.sample)) || []}
+                        results={answers.get(entry.sample) ?? []}
                         signedIn={signedIn}
                       />
                     </Filtered>
