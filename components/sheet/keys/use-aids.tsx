@@ -19,6 +19,7 @@ import { showPlace, usePlaces } from './use-places';
 
 const loadFind = async () => (await import('../find/find-bar')).FindBar;
 const loadRename = async () => (await import('../rename/rename-dialog')).RenameDialog;
+const loadRestWords = async () => (await import('../editor/rest-words')).watchWords;
 const loadKeys = async () => (await import('./keys-dialog')).KeysDialog;
 
 /** A part that is not here while the connection is down must not take the sheet with it. */
@@ -60,7 +61,7 @@ export function useAids({
   content,
   hand,
   mayWrite,
-  actions: { dispatch, take, reveal },
+  actions: { dispatch, take, reveal, marks },
 }: AidsOptions) {
   const places = usePlaces(content, hand, take);
   const [finding, setFinding] = useState<FindRequest | null>(null);
@@ -96,6 +97,22 @@ export function useAids({
     }),
     [goTo, jump, isDefined, markOf, mayWrite],
   );
+
+  // Names in sources at rest answer to the pointer once this has been loaded; nothing waits for it.
+  useEffect(() => {
+    let stop: (() => void) | null = null;
+    let gone = false;
+    loadRestWords().then(
+      (watchWords) => {
+        if (!gone) stop = watchWords({ marks, goTo: actions.goTo, rename: actions.rename });
+      },
+      () => null,
+    );
+    return () => {
+      gone = true;
+      stop?.();
+    };
+  }, [actions, marks]);
 
   const stopFinding = () => {
     setFinding(null);
