@@ -57,6 +57,7 @@ export const theme = EditorView.theme({
     padding: '0.0625rem 0.5rem',
     color: 'var(--soft)',
   },
+  '&:not(.cm-focused) .cm-tooltip.signature-line': { display: 'none' },
   '.cm-tooltip.signature-line b': {
     fontWeight: '600',
     color: 'var(--ink)',

@@ -77,7 +77,8 @@ const dimensionExtensions = (names: SheetNames) => [
     icons: false,
     // Enter ends the line unless a name has been chosen with the arrows.
     selectOnOpen: false,
-    defaultKeymap: true,
+    // So nothing can be taken by mistake either, and the arrows may be pressed at once.
+    interactionDelay: 0,
   }),
   signatureHelp((name) => findFunction(name)?.signature ?? null),
   aboutWords(names.marks),
