@@ -115,6 +115,7 @@ function refused(
 
 /** The parser is asked, so that what it would not read as a mark is never put in a sheet. */
 function isName(name: string): boolean {
+  if (/\s/.test(name)) return false;
   const reading = readLine(`${name} = 1`);
   return (
     reading.kind === 'statement' &&
@@ -168,28 +169,33 @@ function placesInLine(text: string, mark: string): Place[] {
   const places: Place[] = marksReadBy(statement)
     .filter(({ name }) => name === mark)
     .map(({ from, to }) => ({ from, to, defines: false }));
-  if (statement.kind === 'definition' && statement.mark === mark) {
+  const defines = statement.kind === 'definition' || statement.kind === 'function';
+  if (defines && statement.mark === mark) {
     places.unshift({ ...statement.markSpan, defines: true });
   }
   return places;
 }
 
+const DEFINING = new Set(['Target', 'FunctionTarget']);
+
 function placesInBrokenLine(text: string, mark: string): Place[] {
   const places: Place[] = [];
+  let isLocal = false;
   parser.parse(text).iterate({
     enter: ({ node, name, type, from, to }) => {
-      const names = name === 'Mark' || name === 'Target' || type.isError;
-      if (!names || text.slice(from, to) !== mark || isUnknown(node, text, mark)) return;
-      places.push({ from, to, defines: name === 'Target' });
+      const named = name === 'Mark' || name === 'Parameter' || DEFINING.has(name) || type.isError;
+      if (!named || text.slice(from, to) !== mark || isUnknown(node, text, mark)) return;
+      if (name === 'Parameter' || node.parent?.name === 'Local') isLocal = true;
+      else places.push({ from, to, defines: DEFINING.has(name) });
       return false;
     },
   });
-  if (markOfLine(text) === mark) {
-    const from = text.indexOf(mark);
-    const rest = places.filter((place) => place.from !== from);
-    return [{ from, to: from + mark.length, defines: true }, ...rest];
-  }
-  return places;
+  // Where the line has a name of its own that reads the same, only what it defines is the sheet's.
+  const own = isLocal ? places.filter(({ defines }) => defines) : places;
+  if (markOfLine(text) !== mark) return own;
+  const from = text.indexOf(mark);
+  const rest = own.filter((place) => place.from !== from);
+  return [{ from, to: from + mark.length, defines: true }, ...rest];
 }
 
 /** Whether a node is the unknown of a polynomial: an `x` in the first place of `root`. */

@@ -207,8 +207,8 @@ describe('the sheet of keys', () => {
     render(<KeysDialog onClose={() => undefined} />);
     const listed: readonly Key[] = KEYS;
     for (const { does, group } of listed) {
-      expect(screen.getByText(does)).toBeInTheDocument();
-      expect(screen.getByRole('region', { name: group, hidden: true })).toBeInTheDocument();
+      const part = document.querySelector(`section[aria-label="${group}"]`);
+      expect(part?.textContent).toContain(does);
     }
   });
 });

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { callAt, parameterOf, parametersOf } from '@/components/sheet/editor/call-at';
 import { findDefinition, knownMarks, markDefinedBy } from '@/components/sheet/editor/names';
-import { findFacts, sayFacts, wordAt } from '@/components/sheet/editor/word-at';
+import { findFacts, findSignature, sayFacts, wordAt } from '@/components/sheet/editor/word-at';
 import { drawWordCard } from '@/components/sheet/editor/word-card';
 import { foldAnswer } from '@/components/sheet/state/shown';
 import { FUNCTIONS } from '@/lib/language/names';
@@ -129,6 +129,37 @@ describe('what is known of a name', () => {
     expect(sayFacts(facts)).toContain('A closing bracket was expected here.');
   });
 
+  it('is the signature of a function of the notebook, as it is called', () => {
+    const made = knownMarks(
+      [{ id: 'f' }],
+      foldAnswer(new Map(), [
+        {
+          id: 'f',
+          results: [
+            {
+              kind: 'function',
+              line: 1,
+              source: 'half(x) = x/2',
+              mark: 'half',
+              typeset: '\\mathrm{half}(x)=\\frac{x}{2}',
+              notices: [],
+              signature: 'half(x)',
+              parameters: ['x'],
+              reads: [],
+            },
+          ],
+        },
+      ]),
+    );
+    expect(findSignature('half', made)).toBe('half(x)');
+    expect(findSignature('chord', made)).toBe('chord(R, angle)');
+    expect(findSignature('R', marks)).toBeNull();
+    const facts = findFacts('half', made);
+    if (!facts) throw new Error('half is known.');
+    expect(sayFacts(facts)).toBe('half(x), defined in cell 1, line 1');
+    expect(drawWordCard(facts).querySelector('math')).not.toBeNull();
+  });
+
   it('is a signature and a meaning for every word of the language, and nothing for a stranger', () => {
     for (const { name, signature, meaning } of FUNCTIONS) {
       expect(findFacts(name, marks)).toMatchObject({ signature, meaning });
@@ -160,6 +191,7 @@ describe('the line that defines a name', () => {
 
   it('is told from its beginning', () => {
     expect(markDefinedBy('  R_1 = (')).toBe('R_1');
+    expect(markDefinedBy('f(x, y) = x + y')).toBe('f');
     expect(markDefinedBy('R == 1')).toBeNull();
     expect(markDefinedBy('2R = 1')).toBeNull();
   });

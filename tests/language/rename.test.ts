@@ -104,6 +104,22 @@ describe('renaming a mark', () => {
     );
   });
 
+  it('renames a function where it is defined and called, and leaves parameters and local names alone', () => {
+    const cells = [
+      cell('a', 'f(r) = 2r + k', 'r = 600 mm', 'f(r) + f(2r)'),
+      cell('b', 's = r + h where h = r/2', 't = r where r = 5 mm', 't = (r where r = 5 mm'),
+    ];
+    expect(renamed(cells, 'f', 'girth').cells[0]?.source).toBe(
+      'girth(r) = 2r + k\nr = 600 mm\ngirth(r) + girth(2r)',
+    );
+    expect(renamed(cells, 'r', 'w').cells.map(({ source }) => source)).toEqual([
+      'f(r) = 2r + k\nw = 600 mm\nf(w) + f(2w)',
+      's = w + h where h = w/2\nt = r where r = 5 mm\nt = (r where r = 5 mm',
+    ]);
+    expect(refused(cells, 'r', 'h')).toMatchObject({ reason: 'captured' });
+    expect(refused(cells, 'k', 'r')).toMatchObject({ reason: 'taken' });
+  });
+
   it('does not take the unknown of an unfinished polynomial for a mark', () => {
     const cells = [cell('a', 'x = 1', 'root(x^2 - 2')];
     expect(renamed(cells, 'x', 'w').cells[0]?.source).toBe('w = 1\nroot(x^2 - 2');

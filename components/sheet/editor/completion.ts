@@ -72,12 +72,13 @@ export function completeFrom(marks: () => readonly KnownMark[]) {
     if (!explicit && word.length < (afterNumber ? 1 : SHORTEST)) return null;
     const known = marks();
     const offered: Completion[] = [
-      ...known.map(({ name, size }) => ({
+      ...known.map(({ name, signature, size }) => ({
         label: name,
-        detail: size,
+        detail: signature === null ? size : signature.slice(name.length),
         type: 'mark',
         boost: 10,
         info: infoOf(name, known),
+        ...(signature === null ? {} : { apply: applyCall }),
       })),
       ...boosted(unitWords, afterNumber ? 50 : -5),
       ...otherWords,

@@ -12,7 +12,6 @@ import { setDiagnostics, type Diagnostic } from '@codemirror/lint';
 import { Annotation, EditorState, Prec } from '@codemirror/state';
 import { EditorView, keymap, placeholder, type Command } from '@codemirror/view';
 import { documentNonce } from '@/components/ui/nonce';
-import { findFunction } from '@/lib/language/names';
 import { parser } from '@/lib/language/parser/cell.parser';
 import type { SourceCommand } from '../cell-keys';
 import { editorKeys } from '../keys/chord';
@@ -21,6 +20,7 @@ import { completeFrom } from './completion';
 import { highlighting, theme } from './look';
 import { markDefinedBy, type SheetNames } from './names';
 import { signatureHelp } from './signature';
+import { findSignature } from './word-at';
 
 export interface EditorOptions {
   parent: HTMLElement;
@@ -80,7 +80,7 @@ const dimensionExtensions = (names: SheetNames) => [
     // So nothing can be taken by mistake either, and the arrows may be pressed at once.
     interactionDelay: 0,
   }),
-  signatureHelp((name) => findFunction(name)?.signature ?? null),
+  signatureHelp((name) => findSignature(name, names.marks())),
   aboutWords(names.marks),
   EditorView.domEventHandlers({
     mousedown(event, view) {

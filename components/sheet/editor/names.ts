@@ -7,6 +7,8 @@ import { sayBriefly, sayDimension } from '../wording';
 /** A mark of the sheet, as completion and the card of a name show it. */
 export interface KnownMark {
   name: string;
+  /** Of a function of the notebook, as it is called: `f(x, y)`; null for a value. */
+  signature: string | null;
   /** In a few characters, as the index of marks shows it. */
   size: string;
   /** The exact value as TeX; null where there is none. */
@@ -53,6 +55,7 @@ export function knownMarks(cells: readonly { id: string }[], shown: Shown): Know
         : [
             {
               name: result.mark,
+              signature: result.kind === 'function' ? result.signature : null,
               size: sayBriefly(result),
               tex: result.kind === 'error' ? null : valueTex(result),
               decimal: decimalOf(result),
@@ -67,7 +70,7 @@ export function knownMarks(cells: readonly { id: string }[], shown: Shown): Know
 
 /** The mark that a line means to define, told from its beginning, so that it need not parse. */
 export const markDefinedBy = (line: string): string | null =>
-  /^\s*(\p{L}[\p{L}\p{N}_]*)\s*=(?!=)/u.exec(line)?.[1] ?? null;
+  /^\s*(\p{L}[\p{L}\p{N}_]*)\s*(?:\([^()]*\)\s*)?=(?!=)/u.exec(line)?.[1] ?? null;
 
 export interface LinePlace {
   id: string;

@@ -46,10 +46,18 @@ export function findFacts(name: string, marks: readonly KnownMark[]): WordFacts 
   return null;
 }
 
+/** The signature of a function by its name, the language's or the notebook's; null for what is none. */
+export const findSignature = (name: string, marks: readonly KnownMark[]): string | null =>
+  FUNCTIONS.find((one) => one.name === name)?.signature ??
+  marks.find((one) => one.name === name)?.signature ??
+  null;
+
 /** The facts as one text, for whoever listens. */
 export function sayFacts(facts: WordFacts): string {
   if (facts.kind === 'word') return `${facts.signature}: ${facts.meaning}`;
-  const { name, fault, decimal, cut, size, where } = facts.mark;
+  const { name, signature, fault, decimal, cut, size, where } = facts.mark;
   const value = fault ?? [decimal ?? size, cut && `cut size ${cut}`].filter(Boolean).join(', ');
-  return `${name}, defined in ${where}: ${value}`;
+  return signature === null
+    ? `${name}, defined in ${where}: ${value}`
+    : `${signature}, defined in ${where}`;
 }

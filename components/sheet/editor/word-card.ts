@@ -38,9 +38,9 @@ export function drawWordCard(facts: WordFacts): HTMLElement {
     card.append(sentence('word-card-text', facts.meaning));
     return card;
   }
-  const { name, size, tex, decimal, cut, fault, where } = facts.mark;
+  const { name, signature, size, tex, decimal, cut, fault, where } = facts.mark;
   head.append(
-    element('span', 'word-card-name', name),
+    element('span', 'word-card-name', signature ?? name),
     element('span', 'word-card-note', `defined in ${where}`),
   );
   if (fault !== null) card.append(sentence('word-card-fault', fault));
@@ -60,7 +60,8 @@ export function drawWordCard(facts: WordFacts): HTMLElement {
   if (decimal !== null) figures.append(compartment('Decimal', decimal));
   if (cut !== null) figures.append(compartment('Cut size', cut));
   // A point or a circle has no single decimal: what the index says of it stands here.
-  if (decimal === null && fault === null) figures.append(compartment('Value', size));
+  if (decimal === null && fault === null && signature === null)
+    figures.append(compartment('Value', size));
   if (figures.hasChildNodes()) card.append(figures);
   return card;
 }
