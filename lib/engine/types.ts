@@ -140,8 +140,8 @@ export type Reach =
     ) & {
       /**
        * Whether an angle trisector helps, and what tells: the division, an order in the Galois group, real roots of cubics.
-       * Not decided where a cubic has coefficients that are not real, where a step of degree 9 or more has no fields between, and
-       * where the search for subfields is too long.
+       * Not decided where a cubic has coefficients that are not real (in a degree above 9), where a step of degree 16 or more, or of 9 over
+       * a larger field, has no fields between, and where the search for subfields is too long.
        */
       trisector:
         | { reaches: boolean; by: 'division' | 'order' | 'cubic' }

@@ -143,6 +143,27 @@ for (const [what, polynomial] of [
   row(what, cost(asked((e) => e.nearestRoot(polynomial, e.integer(100)))));
 }
 row(
+  'root of degree 32, yes: √(7+√(5+√(3+√(2+√2))))',
+  cost(
+    asked((e) => {
+      const nest = [2, 3, 5, 7].reduce<Num>(
+        (inner, a) => e.sqrt(e.add(e.integer(a), inner)),
+        e.sqrt(e.integer(2)),
+      );
+      return e.nearestRoot(e.minimalPolynomial(nest), e.integer(100));
+    }),
+    3,
+  ),
+);
+row(
+  'trisector, degree 12, yes: √61 + sin of a 14th of a turn',
+  cost(asked((e) => e.add(e.sqrt(e.integer(61)), e.sinTurn(1n, 14n)))),
+);
+row(
+  'trisector, degree 9 with an affine group: no',
+  cost(asked((e) => e.nearestRoot([1n, -3n, 0n, 1n, 15n, -13n, -3n, 0n, 4n, -1n], e.integer(0)))),
+);
+row(
   'verdict for n below 10⁶, mean of 1 000',
   cost(() => {
     for (let n = 999_000n; n < 1_000_000n; n++) decideDivision(n);

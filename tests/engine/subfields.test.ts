@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { createEngine, type Num, type Reach } from '../../lib/engine/index';
+import { hasAffineGroup } from '../../lib/engine/subfields/affine-nine';
 import { makeIntegral } from '../../lib/engine/subfields/integral';
 import {
   countPartitions,
@@ -92,13 +93,13 @@ describe('against PARI/GP', () => {
   );
 });
 
-describe('the trisector chain', () => {
-  const trisectors = (coefficients: readonly bigint[]) =>
-    verdicts(coefficients).map(({ isReal, reach }) => {
-      if (reach.kind === 'constructible') throw new Error('a cubic was left out');
-      return { isReal, trisector: reach.trisector };
-    });
+const trisectors = (coefficients: readonly bigint[]) =>
+  verdicts(coefficients).map(({ isReal, reach }) => {
+    if (reach.kind === 'constructible') throw new Error('a cubic was left out');
+    return { isReal, trisector: reach.trisector };
+  });
 
+describe('the trisector chain', () => {
   it('tells conjugates apart: x³ − 3x + 1 ± √2 has three real roots for one sign and one for the other', () => {
     // (x³ − 3x + 1)² − 2; the discriminant 108 − 27·(1 ± √2)² is positive for the lower sign only.
     const engine = createEngine();
@@ -130,6 +131,43 @@ describe('the trisector chain', () => {
     // No subfields by PARI/GP, see the reference.
     for (const { trisector } of trisectors([1n, -4n, 7n, -7n, 7n, -7n, 7n, 5n, 1n])) {
       expect(trisector).toEqual({ reaches: false, by: 'order' });
+    }
+  });
+});
+
+describe('a number that is not real', () => {
+  it('is reached by a trisector exactly when its parts are: cube roots on the unit circle, and no others', () => {
+    // ∛((3+4i)/5) is a third of an angle; ∛(1+2i) has the absolute value ∛√5.
+    const verdict = (f: bigint[]): boolean | null => {
+      const engine = createEngine();
+      const reach = engine.reach(engine.nearestRoot(f, engine.add(engine.integer(1), engine.i)));
+      if (reach.kind === 'constructible') throw new Error('a cubic was left out');
+      return reach.trisector.reaches;
+    };
+    expect(verdict([5n, 0n, 0n, -6n, 0n, 0n, 5n])).toBe(true);
+    expect(verdict([1n, 0n, 0n, -2n, 0n, 0n, 5n])).toBe(false);
+  });
+});
+
+describe('polynomials of degree 9 without subfields', () => {
+  const isAffine = (f: readonly bigint[]): boolean => {
+    const { monic } = makeIntegral([...f].reverse());
+    const survey = surveySplittings(monic, [2, 3, 5, 7], 24, free);
+    if (survey.kind !== 'splittings') throw new Error('a degree above 9 was met');
+    return hasAffineGroup(monic, survey.splittings, free);
+  };
+
+  it('have an affine group when they divide a point of an elliptic curve by 3, and not when it is S9', () => {
+    // First coordinates of the points R with 3R = (0, 0) on y² + y = x³ − x, and 3R = (1, 2) on y² = x³ − 7x + 10
+    // (division polynomials of PARI/GP 2.15.2, ellxn); xⁿ − x − 1 has the group S_n (Selmer 1956 with Jordan's theorem).
+    expect(isAffine([1n, 0n, 12n, -24n, 30n, 6n, -33n, 12n, 3n, -1n])).toBe(true);
+    expect(isAffine([1n, -9n, 84n, -708n, 750n, 210n, 2532n, 5004n, -33831n, 34159n])).toBe(true);
+    expect(isAffine([1n, 0n, 0n, 0n, 0n, 0n, 0n, 0n, -1n, -1n])).toBe(false);
+  });
+
+  it('are refused to a trisector when the group is affine and some of the roots are not real', () => {
+    for (const { trisector } of trisectors([1n, 0n, 12n, -24n, 30n, 6n, -33n, 12n, 3n, -1n])) {
+      expect(trisector).toEqual({ reaches: false, by: 'cubic' });
     }
   });
 });

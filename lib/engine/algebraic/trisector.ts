@@ -15,16 +15,22 @@
  *   only real conjugates. A non-real root would give γ by Vieta's formulas.
  * - Degree 4 over a real field, without a field between: the group is A4 or S4, and a chain of subgroups of index 2 and 3 has to pass
  *   through the resolvent cubic. It has three real roots iff the quartic has four or none.
+ * - Degree 9 over the rationals, without a field between and with an affine group: reached iff all nine roots are real. A chain
+ *   of subgroups has to leave the plane of translations by steps of index 3 on which complex conjugation acts
+ *   trivially, so that it commutes with all translations and is trivial; conversely a solvable group has
+ *   a composition series, of real fields here. With another group an order has the factor 5 or 7.
  * - One step that is not reached refuses the number, whatever lies below it.
  * Divisions of the circle: n = 2^a·3^b times distinct Pierpont primes (Gleason 1988).
  */
 import type { Budget } from '../limits';
 import { degreeOf, type IntegerPoly } from '../polynomials/integer-poly';
+import { hasAffineGroup } from '../subfields/affine-nine';
 import { makeIntegral } from '../subfields/integral';
 import { isMadeOf, surveySplittings, type Splitting } from '../subfields/splitting';
 import { TooManyPartitions, findSubfield, type Subfield } from '../subfields/subfield';
-import type { Algebraic } from './algebraic';
+import { isFraction, type Algebraic } from './algebraic';
 import { countFibre, integralBox, lowerBox, type BoxAt } from './lower-box';
+import { add, conjugate, multiply, negate } from './operations';
 
 /** n/2^a·3^b and squarefree in Pierpont primes; n > 0 small enough for trial division. */
 export function trisectorDivides(n: bigint): boolean {
@@ -44,12 +50,14 @@ export function trisectorDivides(n: bigint): boolean {
 const SMOOTH = [2, 3];
 const PRIMES_AT_FIRST = 40;
 const PRIMES_BELOW = 10;
+/** A number that is not real is decided by its parts up to this degree; theirs is up to half its square. */
+const LARGEST_WITH_PARTS = 9;
 /** Fields of a larger degree are not searched for subfields. */
 const LARGEST_DEGREE = 36;
 
 /**
- * The answer and what it rests on. `open` where it is not decided: a cubic over a field that is not real (`coefficients`), a step
- * of degree 9, 16, 27 … without fields between (`step`), or a search that is too long (`limit`).
+ * The answer and what it rests on. `open` where it is not decided: a cubic over a field that is not real, in a degree above 9 (`coefficients`), a
+ * step of degree 16, 27 … or of degree 9 over a larger field, without fields between (`step`), or a search that is too long (`limit`).
  */
 export type Trisector =
   | { readonly reaches: boolean; readonly by: 'division' | 'order' | 'cubic' }
@@ -67,6 +75,7 @@ interface Step {
   readonly polynomial: IntegerPoly;
   readonly index: number;
   readonly field: Subfield | null;
+  readonly splittings: readonly Splitting[];
 }
 
 function leastSubfield(
@@ -97,18 +106,24 @@ function stepsDown(f: IntegerPoly, charge: (work: number) => void): Step[] | 'or
     const field = leastSubfield(current, survey.splittings, charge);
     const index = field?.index ?? degreeOf(current);
     if (!isPrimitiveDegree(index)) return 'order';
-    steps.push({ polynomial: current, index, field });
+    steps.push({ polynomial: current, index, field, splittings: survey.splittings });
     if (field === null) break;
     current = field.lower;
   }
   return steps;
 }
 
-type StepVerdict = 'reached' | 'refused' | 'coefficients' | 'step';
+type StepVerdict = 'reached' | 'refused' | 'order' | 'coefficients' | 'step';
 
 /** One step; `box` closes in on the generator of its upper field. */
-function decideStep({ polynomial, index, field }: Step, box: BoxAt, budget: Budget): StepVerdict {
+function decideStep(step: Step, box: BoxAt, budget: Budget): StepVerdict {
+  const { polynomial, index, field, splittings } = step;
   if (index === 2) return 'reached';
+  if (index === 9 && field === null) {
+    const isAffine = hasAffineGroup(polynomial, splittings, (work) => budget.charge(work));
+    if (!isAffine) return 'order';
+    return countFibre(polynomial, null, box, budget).real === 9 ? 'reached' : 'refused';
+  }
   if (index > 4) return 'step';
   const { real, isLowerReal } = countFibre(polynomial, field, box, budget);
   if (!isLowerReal) return 'coefficients';
@@ -140,9 +155,11 @@ export function trisectorReaches(a: Algebraic, budget: Budget): Trisector {
     for (const step of steps) {
       const verdict = decideStep(step, box, budget);
       if (verdict === 'refused') return BY_CUBIC;
+      if (verdict === 'order') return BY_ORDER;
       if (verdict !== 'reached') open = verdict;
       if (step.field !== null) box = lowerBox(step.field, box);
     }
+    if (open === 'coefficients' && a.degree <= LARGEST_WITH_PARTS) return byParts(a, budget);
     return open === null
       ? { reaches: true, by: 'cubic' }
       : { reaches: null, by: 'open', why: open };
@@ -150,4 +167,18 @@ export function trisectorReaches(a: Algebraic, budget: Budget): Trisector {
     if (error instanceof TooManyPartitions) return { reaches: null, by: 'open', why: 'limit' };
     throw error;
   }
+}
+
+/** A number that is not real, by α + ᾱ and (α − ᾱ)²: it is reached iff these real numbers are. */
+function byParts(a: Algebraic, budget: Budget): Trisector {
+  const mirror = conjugate(a);
+  const difference = add(a, negate(mirror), budget);
+  let verdict: Trisector = { reaches: true, by: 'cubic' };
+  for (const part of [add(a, mirror, budget), multiply(difference, difference, budget)]) {
+    if (isFraction(part)) continue;
+    const own = trisectorReaches(part, budget);
+    if (own.reaches === false) return own;
+    if (own.reaches === null) verdict = own;
+  }
+  return verdict;
 }

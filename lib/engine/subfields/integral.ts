@@ -16,8 +16,8 @@ function divideRoots(f: IntegerPoly, s: bigint): IntegerPoly | null {
   return divided;
 }
 
-function shiftBy(f: IntegerPoly, shift: bigint): IntegerPoly {
-  // f(x + shift) by Horner's scheme.
+/** f(x + shift). */
+export function shiftBy(f: IntegerPoly, shift: bigint): IntegerPoly {
   const g = [...f];
   for (let k = 0; k < degreeOf(f); k++) {
     for (let j = degreeOf(f) - 1; j >= k; j--) {
