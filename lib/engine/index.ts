@@ -21,6 +21,7 @@ import { enclose, floorEl, signEl, type Enclosure } from './enclosure';
 import * as Z from './int';
 import { bitLength } from './integers';
 import type { Algebraic } from './algebraic/algebraic';
+import type { Cx } from './complex';
 import { Beyond, isAlgebraic, type Value } from './algebraic/beyond';
 import type { RealPart } from './algebraic/real-part';
 import { partOfTurn } from './algebraic/roots-of-unity';
@@ -28,6 +29,7 @@ import { trisectorReaches, type Trisector } from './algebraic/trisector';
 import { decimalOfAlgebraic, floorOfIrrational, roundIrrational } from './algebraic/writing';
 import { Budget, DEFAULT_LIMITS, OutsideDomain, OverLimit } from './limits';
 import { degreeOf, minimalPolynomialOf } from './minimal-polynomial';
+import { PackedNum, packElements, unpackElements } from './packed';
 import { certificateOf } from './certificate';
 import { roundTo } from './rounding';
 import { Field, type El } from './tower';
@@ -49,6 +51,7 @@ import type {
 import { towerOf, writeValue } from './write';
 
 export { DEFAULT_LIMITS } from './limits';
+export { PackedNum } from './packed';
 export { boundsOfPi } from './pi';
 export type * from './types';
 
@@ -394,6 +397,34 @@ class ExactEngine implements Engine {
       );
     }
     return certificateOf(x);
+  }
+
+  holds(x: unknown): x is Num {
+    if (isAlgebraic(x)) return this.algebraic.has(x);
+    return (x as Partial<Cx> | null | undefined)?.im?.t?.field === this.field;
+  }
+  pack(a: Num): PackedNum {
+    const x = this.open(a);
+    const cyclotomic = this.beyond.knownCyclotomic(x);
+    if (isAlgebraic(x)) return new PackedNum(null, this.beyond.pack(x), null, cyclotomic);
+    if (x instanceof Cosine) {
+      const tower = x.known === null ? null : packElements([x.known]);
+      return new PackedNum(tower, null, { k: x.k, n: x.n, scale: x.scale }, cyclotomic);
+    }
+    return new PackedNum(packElements([x.re, x.im]), null, null, cyclotomic);
+  }
+  unpack(packed: PackedNum): Num {
+    const x = this.unpacked(packed);
+    this.beyond.rememberCyclotomic(x, packed.cyclotomic);
+    return this.seal(x);
+  }
+  private unpacked({ tower, algebraic, cosine }: PackedNum): Value {
+    if (algebraic !== null) return this.beyond.unpack(algebraic);
+    const [re, im] = tower === null ? [] : unpackElements(this.field, tower);
+    if (cosine !== null)
+      return new Cosine(this.field, cosine.k, cosine.n, cosine.scale, re ?? null);
+    if (re === undefined || im === undefined) throw new TypeError('A packed number has no parts.');
+    return { re, im };
   }
 
   private realValue(a: Num, what: string): El | Algebraic {

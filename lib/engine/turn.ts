@@ -55,18 +55,21 @@ export function isConstructibleDivision(n: bigint): boolean {
  * polynomial. Where the square roots would be too long, it never does: its digits and order come from enclosures.
  */
 export class Cosine implements Cx {
-  private made: El | null = null;
   readonly im: El;
   /** The angle in lowest terms, 0 ≤ k/n ≤ 1/2. */
   readonly k: bigint;
   readonly n: bigint;
 
-  /** n in lowest terms is a constructible division; the scale is 1 unless the square roots are too long. */
+  /**
+   * n in lowest terms is a constructible division; the scale is 1 unless the square roots are too long; `made` is the
+   * element where it has been built already.
+   */
   constructor(
     private readonly f: Field,
     k: bigint,
     n: bigint,
     readonly scale: { readonly n: bigint; readonly d: bigint } = { n: 1n, d: 1n },
+    private made: El | null = null,
   ) {
     this.im = f.zero;
     const g = gcd(k < 0n ? -k : k, n);
@@ -90,6 +93,11 @@ export class Cosine implements Cx {
     const [top, bottom] = [this.scale.n * n, this.scale.d * d];
     const g = gcd(top < 0n ? -top : top, bottom);
     return new Cosine(this.f, this.k, this.n, { n: top / g, d: bottom / g });
+  }
+
+  /** The element, or null while it has not been asked for. */
+  get known(): El | null {
+    return this.made;
   }
 
   get re(): El {

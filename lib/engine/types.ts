@@ -6,6 +6,8 @@
  * by name and never turned into a guess.
  */
 
+import type { PackedNum } from './packed';
+
 /**
  * What the engine is willing to spend. All limits are counted in steps, bits and counts, never in time, so
  * that every machine stops at the same place.
@@ -238,6 +240,13 @@ export interface Engine {
   tower(a: Num): TowerStep[] | null;
   /** Which tools reach the value, and why not. */
   reach(a: Num): Reach;
+  /** Whether something is a number of this engine. Never fails. */
+  holds(x: unknown): x is Num;
+  /** A number as plain data that outlives the engine. Cost: the length of its coordinates. */
+  pack(a: Num): PackedNum;
+  /** A packed number as one of this engine. Each of its roots is taken anew, and so proven here; a limit may be met. */
+  unpack(packed: PackedNum): Num;
+
   /** A certificate that an independent program can check. */
   certificate(a: Num): Certificate;
 }

@@ -6,6 +6,8 @@ const root = fileURLToPath(new URL('../..', import.meta.url));
 const folder = path.join(root, '.build');
 const SOURCES = [
   'lib/engine',
+  'lib/divisions',
+  'lib/shop',
   'lib/language',
   'lib/evaluation',
   'package-lock.json',

@@ -11,6 +11,7 @@ export function bundlePath(): string {
   return path.join(/* turbopackIgnore: true */ process.cwd(), '.build', 'child.mjs');
 }
 
+const MOST_REMEMBERED = 20_000;
 const PAGE = 4096;
 /** Milliseconds of a clock tick in which Linux counts processor time. */
 const TICK = 10;
@@ -32,6 +33,7 @@ export class EvaluationChild {
   /** Settles when the program has been loaded, or the child has ended before that. */
   readonly ready: Promise<void>;
   private over = false;
+  private readonly remembered = new Set<string>();
 
   constructor(program: string) {
     const limit = `ulimit -t ${EVALUATION_LIMITS.childProcessorTime}; ulimit -c 0; exec "$0" "$@"`;
@@ -82,6 +84,18 @@ export class EvaluationChild {
       listener(report);
     };
     this.child.send(job, () => undefined);
+  }
+
+  /** Notes the values that a job has left in the child, which may have forgotten some of them meanwhile. */
+  remember(values: readonly string[]): void {
+    if (this.remembered.size > MOST_REMEMBERED) this.remembered.clear();
+    for (const value of values) this.remembered.add(value);
+  }
+
+  /** How many of some values the child probably knows; looks at the first few only. */
+  countKnown(values: readonly (string | null)[]): number {
+    return values.slice(0, 100).filter((value) => value !== null && this.remembered.has(value))
+      .length;
   }
 
   /** Ends the work on a job and lets the parent end while this child waits. */

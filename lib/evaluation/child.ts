@@ -1,7 +1,10 @@
 import { writeSync } from 'node:fs';
-import { certifyLine, evaluateCells, evaluateExpression } from '@/lib/language/index';
+import { certifyLine, evaluateCells } from '@/lib/language/index';
+import { KnownValues } from './known-values';
+import { EVALUATION_LIMITS } from './limits';
 import type { CertifyJob, Job, Refusal, Report } from './messages';
 import { proposeSolutions } from './propose';
+import { runJob } from './run-job';
 
 /**
  * The program of a child process: takes one job after another and reports line by line.
@@ -12,27 +15,14 @@ function report(message: Report): void {
   for (let written = 0; written < bytes.length;) written += writeSync(1, bytes, written);
 }
 
+const known = new KnownValues(EVALUATION_LIMITS.childValues);
+
 function run(job: Job): void {
-  const options = {
-    started: ({ cell, line }: { cell: number; line: number }) =>
-      report({ kind: 'started', job: job.job, cell, line }),
-    finished: (
-      { cell, line }: { cell: number; line: number },
-      result: Extract<Report, { kind: 'finished' }>['result'],
-    ) => report({ kind: 'finished', job: job.job, cell, line, result }),
-    valued: ({ cell, line }: { cell: number; line: number }) =>
-      report({ kind: 'valued', job: job.job, cell, line }),
-    propose: proposeSolutions,
-    known: new Map(job.known),
-    refused: new Map(job.refused),
-    brief: new Map(job.brief),
-  };
   try {
-    const result =
-      job.expression === null ? null : evaluateExpression(job.expression, job.settings, options);
-    if (job.expression === null) evaluateCells(job.cells, job.settings, options);
+    const values = job.keep ? known : new KnownValues(EVALUATION_LIMITS.childValues);
+    runJob(job, values, report, proposeSolutions);
     const { user, system } = process.cpuUsage();
-    report({ kind: 'done', job: job.job, result, processorTime: (user + system) / 1e6 });
+    report({ kind: 'done', job: job.job, processorTime: (user + system) / 1e6 });
   } catch (error) {
     report({
       kind: 'fault',
@@ -71,6 +61,7 @@ process.on('message', (message) => {
   if ('certify' in job) certify(job);
   else run(job);
 });
+
 /** Has been compiled and has its tables when the first job comes, so that the job's time is the job's. */
 function warmUp(): void {
   const source = 'a = sqrt(5 + 2 sqrt(6)) mm\nb = chord(a, turn/17)\nb < a\nc = 2 pi a\nd = (a + ';

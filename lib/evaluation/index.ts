@@ -2,81 +2,146 @@ import { createHash } from 'node:crypto';
 import { readFile } from 'node:fs/promises';
 import { ENGINE_VERSION } from '@/lib/engine/index';
 import {
-  type CellResults,
-  type LinePlace,
+  type CellSource,
+  type Outcome,
   type Result,
-  DEFAULT_SETTINGS,
-  keyOf,
-  markOfLine,
+  expressionResult,
+  findExpressionProblem,
+  firstLine,
 } from '@/lib/language/index';
-import type { Refusal } from './messages';
-import { type AnswerStore, MemoryStore, keyOfAnswer, layered } from './cache';
+import { type AnsweredCell, answerCells } from './answer';
 import { type CertificateAnswer, type CertificateRequest, runCertificate } from './certificate';
 import { bundlePath } from './child-process';
 import { EVALUATION_LIMITS } from './limits';
+import type { Task } from './messages';
+import { OutcomeMemory, type OutcomeStore, findOutcomes } from './outcomes';
+import { type Plan, planCells } from './plan';
 import { Pool } from './pool';
 import { EvaluateRequest } from './request';
-import { type Finished, runWork } from './run';
+import { type Fate, type Work, runWork } from './run';
 
 export { EVALUATION_LIMITS } from './limits';
 export { CertificateRequest, type CertificateAnswer } from './certificate';
 export { PoolBusy } from './pool';
 export { EvaluateRequest, SettingsRequest, describeIssues } from './request';
-export { type AnswerStore, MemoryStore } from './cache';
+export type { OutcomeStore } from './outcomes';
+
+/** Results of one cell; with the digest to be echoed when the request spoke of digests. */
+export interface CellAnswer {
+  id: string;
+  results: Result[];
+  digest?: string;
+}
 
 /** The answer to a request, with its `id` when it had one. */
 export type EvaluateAnswer = {
   schema: 1;
   engine: string;
   id?: string | number;
-} & ({ result: Result; cells?: never } | { cells: CellResults[]; result?: never });
+} & ({ result: Result; cells?: never } | { cells: CellAnswer[]; result?: never });
+
+interface Shared {
+  pool: Pool | null;
+  memory: OutcomeMemory;
+  lasting: OutcomeStore | null;
+  program: Promise<string> | null;
+}
 
 /** One pool for the process; kept on `globalThis` because the development server loads modules anew at every change. */
-const holder = globalThis as typeof globalThis & {
-  surdworkEvaluation?: { pool: Pool | null; store: AnswerStore; program: Promise<string> | null };
-};
+const holder = globalThis as typeof globalThis & { surdworkEvaluation?: Shared };
 
-function shared() {
-  holder.surdworkEvaluation ??= { pool: null, store: new MemoryStore(), program: null };
+function shared(): Shared {
+  holder.surdworkEvaluation ??= {
+    pool: null,
+    memory: new OutcomeMemory(EVALUATION_LIMITS.memory),
+    lasting: null,
+    program: null,
+  };
   return holder.surdworkEvaluation;
 }
 
-/** From now on answers are kept in a lasting store as well, behind the one in memory. */
-export function storeAnswersIn(lasting: AnswerStore): void {
-  shared().store = layered(new MemoryStore(), lasting);
+/** From now on outcomes are kept in a lasting store as well, behind the one in memory. */
+export function storeOutcomesIn(lasting: OutcomeStore): void {
+  shared().lasting = lasting;
+}
+
+/** Empties the memory, as that of an instance that has just been started. */
+export function forgetOutcomes(): void {
+  shared().memory = new OutcomeMemory(EVALUATION_LIMITS.memory);
 }
 
 /**
- * Evaluates in a child process, within the time and memory of EVALUATION_LIMITS.
- * Accepts a request that the schema has checked. Every failure of a line is in its result; rejects with `PoolBusy` when
- * too many requests wait, and with an Error when the children cannot run at all (their bundle is missing).
- * With `keep` false nothing of the request is kept: the store is neither read nor written.
+ * Evaluates in child processes, within the time and memory of EVALUATION_LIMITS; only lines whose outcome is not known
+ * from this or any other request are evaluated at all. Accepts a request that the schema has checked. Every failure of
+ * a line is in its result; rejects with `PoolBusy` when too many requests wait, and with an Error when the children
+ * cannot run at all (their bundle is missing). With `keep` false nothing of the request is kept: the stores are neither
+ * read nor written.
  */
 export async function evaluate(
   request: EvaluateRequest,
   { keep = true }: { keep?: boolean } = {},
 ): Promise<EvaluateAnswer> {
-  const { store } = shared();
-  const settings = { ...DEFAULT_SETTINGS, ...request.settings };
-  const cells = request.cells ?? [];
-  const asked = { expression: request.expression ?? null, cells, settings };
-  const key = keyOfAnswer(await programIdentity(), asked);
   const identity = request.id === undefined ? {} : { id: request.id };
   const head = { schema: 1 as const, engine: ENGINE_VERSION, ...identity };
-  const kept = keep ? await store.read(key).catch(() => null) : null;
-  if (kept !== null)
-    return { ...head, ...(JSON.parse(kept) as { result: Result } | { cells: CellResults[] }) };
+  const { expression, settings = {}, have } = request;
+  if (expression !== undefined) {
+    const problem = findExpressionProblem(expression);
+    if (problem !== null) return { ...head, result: expressionResult(expression, problem) };
+    const [cell] = await answer([{ id: '', source: firstLine(expression) }], settings, keep);
+    const [result] = cell?.results ?? [];
+    if (result === undefined) throw new Error('A line that is not blank has a result.');
+    return { ...head, result };
+  }
+  const cells = await answer(request.cells ?? [], settings, keep);
+  if (have === undefined)
+    return { ...head, cells: cells.map(({ id, results }) => ({ id, results })) };
+  // What the client has is left out; its digest covers all that a result says.
+  return { ...head, cells: cells.filter(({ id, digest }) => have[id] !== digest) };
+}
 
-  const finished = await work(asked);
+async function answer(
+  cells: readonly CellSource[],
+  settings: NonNullable<EvaluateRequest['settings']>,
+  keep: boolean,
+): Promise<AnsweredCell[]> {
+  const plan = planCells(await programIdentity(), cells, settings);
+  return answerCells(cells, plan, await findFates(plan, keep));
+}
+
+/** What becomes of every line of a plan, by the name of its outcome. */
+async function findFates(plan: Plan, keep: boolean): Promise<ReadonlyMap<string, Fate>> {
+  const { memory, lasting } = shared();
+  const names = new Set(plan.lines.flatMap((line) => line?.outcome ?? []));
+  const known = keep ? await findOutcomes(names, memory, lasting) : new Map<string, Outcome>();
+  const fates = new Map<string, Fate>();
+  for (const [name, outcome] of known) fates.set(name, { kind: 'outcome', outcome, lasting: true });
+  if (known.size === names.size) return fates;
+
+  const tasks: Task[] = [];
+  const wanted = new Map<number, string>();
+  const asked = new Set(known.keys());
+  for (const index of plan.graph.order) {
+    const line = plan.lines[index];
+    if (line === undefined) continue;
+    const isWanted = !asked.has(line.outcome);
+    if (isWanted) wanted.set(tasks.length, line.outcome);
+    tasks.push(isWanted ? line.task : { ...line.task, settings: null });
+    asked.add(line.outcome);
+  }
+  const finished = await work({ tasks, settings: plan.settings, keep });
   for (const fault of finished.faults) console.error(`evaluation: ${fault}`);
-  const body =
-    request.expression === undefined
-      ? { cells: assemble(cells, finished) }
-      : { result: resultOf(request.expression, finished) };
-  // What the clock or the memory stopped may come out otherwise on a quieter machine, so it is not remembered.
-  if (keep && !finished.stopped)
-    await store.write(key, JSON.stringify(body)).catch(() => undefined);
-  return { ...head, ...body };
+  const fresh = new Map<string, Outcome>();
+  for (const [index, name] of wanted) {
+    const fate = finished.fates.get(index);
+    if (fate === undefined) continue;
+    fates.set(name, fate);
+    // What the clock or the memory stopped may come out otherwise on a quieter machine, so it is not remembered.
+    if (fate.kind === 'outcome' && fate.lasting) fresh.set(name, fate.outcome);
+  }
+  if (!keep) return fates;
+  for (const [name, outcome] of fresh) memory.keep(name, outcome);
+  if (fresh.size > 0) void lasting?.write(fresh).catch(() => undefined);
+  return fates;
 }
 
 /**
@@ -101,7 +166,7 @@ export async function closePool(): Promise<void> {
   await pool?.close();
 }
 
-async function work(asked: Parameters<typeof runWork>[1]): Promise<Finished> {
+async function work(asked: Work): ReturnType<typeof runWork> {
   const pool = (shared().pool ??= new Pool());
   await pool.enter();
   try {
@@ -122,42 +187,3 @@ function programIdentity(): Promise<string> {
   });
   return state.program;
 }
-
-function resultOf(source: string, finished: Finished): Result {
-  return finished.expression ?? lineResult(finished, { cell: 0, line: 1 }, source);
-}
-
-/** Results of each cell in order of its lines; a line that was not come to is answered all the same. */
-function assemble(cells: NonNullable<EvaluateRequest['cells']>, finished: Finished): CellResults[] {
-  return cells.map(({ id, source }, cell) => ({
-    id,
-    results: source
-      .split(/\r\n|\n|\r/)
-      .flatMap((text, index) =>
-        isBlank(text) ? [] : [lineResult(finished, { cell, line: index + 1 }, text)],
-      ),
-  }));
-}
-
-const isBlank = (line: string): boolean => /^[ \t\u00a0\u2009\u202f]*(#|$)/.test(line);
-
-function lineResult(finished: Finished, place: LinePlace, source: string): Result {
-  const key = keyOf(place);
-  const result = finished.results.get(key);
-  if (result !== undefined) return result;
-  const { code, message } = finished.refused.get(key) ?? OUT_OF_TIME;
-  const error = { code, message, from: 0, to: source.length };
-  return {
-    line: place.line,
-    source,
-    mark: markOfLine(source),
-    kind: 'error',
-    typeset: null,
-    error,
-  };
-}
-
-const OUT_OF_TIME: Refusal = {
-  code: 'limit-time',
-  message: `The time of the whole request, ${EVALUATION_LIMITS.requestTime} milliseconds, was used up before this line had an answer.`,
-};

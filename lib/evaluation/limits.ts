@@ -5,14 +5,23 @@ export const EVALUATION_LIMITS = {
   /** Characters of all cells together. */
   totalLength: 1_000_000,
   cells: 2_000,
-  /** Milliseconds for a whole request, restarts included. */
+  /** Milliseconds for a whole request, restarts included, and for each line of it that is to be evaluated. */
   requestTime: 1_800,
+  requestTimePerLine: 10,
+  /** Milliseconds for a request however many lines it has. */
+  longestRequestTime: 15_000,
+  /** Lines that one child is given at a time, so that several can share a large request. */
+  linesPerJob: 60,
   /** Milliseconds for one line; less when little of the request's time is left. */
   lineTime: 800,
   /** Megabytes of memory of a child process, looked at every few milliseconds while it works. */
   childMemory: 224,
   /** Megabytes of heap at which the run time itself ends a child: the stop behind `childMemory`. */
   childHeap: 320,
+  /** Integers in the values that a child keeps for the next request. */
+  childValues: 400_000,
+  /** Characters of outcomes that the server keeps in memory. */
+  memory: 32_000_000,
   /** Milliseconds between two looks at a child's memory. */
   memoryWatch: 40,
   /** Seconds of processor time after which the system ends a child, whatever has become of its parent. */

@@ -2,44 +2,50 @@ import type {
   CellSource,
   Certified,
   CertifiedLine,
-  ErrorCode,
-  Result,
+  Outcome,
+  Refusal,
   Settings,
 } from '@/lib/language/index';
 
-/** What the pool asks a child. Keys name a line by the position of its cell and its number there. */
+export type { Refusal } from '@/lib/language/index';
+
+/** One line to be evaluated, with all that its outcome depends on. */
+export interface Task {
+  readonly source: string;
+  /** Names the value of the line: its text and, in the same way, what it reads. */
+  readonly value: string;
+  /** Each mark and function that the line reads with the name of its value; null for one that has none. */
+  readonly reads: readonly (readonly [mark: string, value: string | null])[];
+  /** Those of them that the notebook defines as functions, whether or not they have a value. */
+  readonly functions: readonly string[];
+  /** Which of the settings of the job; null when only the value is needed, for others that read it. */
+  readonly settings: number | null;
+}
+
+/** What the pool asks a child: lines in an order in which each comes after those that it reads. */
 export interface Job {
   readonly job: number;
-  readonly expression: string | null;
-  readonly cells: readonly CellSource[];
-  readonly settings: Partial<Settings>;
-  readonly known: readonly (readonly [string, Result])[];
-  readonly refused: readonly (readonly [string, Refusal])[];
-  /** Lines that get their value but not its degree, polynomial and tower. */
-  readonly brief: readonly (readonly [string, Refusal])[];
+  readonly tasks: readonly Task[];
+  readonly settings: readonly Settings[];
+  /** Whether values may be kept for later jobs. */
+  readonly keep: boolean;
+  /** Values that are not to be worked out, by their names. */
+  readonly refused: readonly (readonly [value: string, Refusal])[];
+  /** Tasks that get their value but not its degree, polynomial and tower, by their position. */
+  readonly brief: readonly (readonly [task: number, Refusal])[];
 }
 
-/** Why a line is not to be evaluated. */
-export interface Refusal {
-  readonly code: ErrorCode;
-  readonly message: string;
-}
-
-/** What a child reports, one JSON line each, written before it goes on. */
+/** What a child reports, one JSON line each, written before it goes on. Tasks are named by their position in the job. */
 export type Report =
   | { readonly kind: 'ready'; readonly job: 0 }
-  | {
-      readonly kind: 'started' | 'valued';
-      readonly job: number;
-      readonly cell: number;
-      readonly line: number;
-    }
+  | { readonly kind: 'started' | 'valued'; readonly job: number; readonly task: number }
   | {
       readonly kind: 'finished';
       readonly job: number;
-      readonly cell: number;
-      readonly line: number;
-      readonly result: Result;
+      readonly task: number;
+      readonly outcome: Outcome;
+      /** Whether it is the outcome for ever; false when a refusal played a part. */
+      readonly lasting: boolean;
     }
   | {
       readonly kind: 'fault';
@@ -50,8 +56,6 @@ export type Report =
   | {
       readonly kind: 'done';
       readonly job: number;
-      /** Only for an expression. */
-      readonly result: Result | null;
       /** Processor time of the child since its start, in seconds. */
       readonly processorTime: number;
     }

@@ -38,14 +38,28 @@ export class Pool {
     await new Promise<void>((resolve, reject) => this.waiting.push({ resolve, reject }));
   }
 
+  /** Takes a turn only when one is free and nobody waits for it. */
+  enterIfFree(): boolean {
+    if (this.closed || this.working >= this.parallel || this.waiting.length > 0) return false;
+    this.working += 1;
+    this.refill();
+    return true;
+  }
+
   leave(): void {
     const next = this.waiting.shift();
     if (next === undefined) this.working -= 1;
     else next.resolve();
   }
 
-  take(): EvaluationChild {
-    const child = this.idle.shift() ?? this.spawn();
+  /** A child for some work; of those that rest, the one that knows most of the values that the work reads. */
+  take(values: readonly (string | null)[] = []): EvaluationChild {
+    const best = this.idle.reduce<{ child: EvaluationChild; known: number } | null>((so, child) => {
+      const known = child.countKnown(values);
+      return so === null || known > so.known ? { child, known } : so;
+    }, null);
+    if (best !== null) this.idle.splice(this.idle.indexOf(best.child), 1);
+    const child = best?.child ?? this.spawn();
     this.refill();
     return child;
   }

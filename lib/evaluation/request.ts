@@ -20,10 +20,12 @@ export const SettingsRequest = z.strictObject({
 
 const source = z.string().max(EVALUATION_LIMITS.sourceLength);
 
-/** A cell; settings of its own stand before those of the request. */
+const cellId = z.string().max(200);
+
 const CellRequest = z.strictObject({
-  id: z.string().max(200),
+  id: cellId,
   source,
+  /** What is left out is as for all cells. */
   settings: SettingsRequest.optional(),
 });
 
@@ -34,6 +36,8 @@ export const EvaluateRequest = z
     expression: source.optional(),
     cells: z.array(CellRequest).max(EVALUATION_LIMITS.cells).optional(),
     settings: SettingsRequest.optional(),
+    /** Digests of earlier answers by the ids of their cells: cells that still have the same answer are left out. */
+    have: z.record(cellId, z.string().max(40)).optional(),
   })
   .superRefine((request, context) => {
     if ((request.expression === undefined) === (request.cells === undefined)) {
@@ -41,6 +45,11 @@ export const EvaluateRequest = z
         code: 'custom',
         message: 'Either `expression` or `cells` was expected, and not both.',
       });
+    }
+    const had = Object.keys(request.have ?? {}).length;
+    if (had > EVALUATION_LIMITS.cells) {
+      const message = `There are digests of ${had} cells; the limit is ${EVALUATION_LIMITS.cells}.`;
+      context.addIssue({ code: 'custom', path: ['have'], message });
     }
     const total = (request.cells ?? []).reduce((sum, cell) => sum + cell.source.length, 0);
     if (total > EVALUATION_LIMITS.totalLength) {

@@ -1,235 +1,204 @@
-import { type Result, keyOf } from '@/lib/language/index';
-import type { Ending, EvaluationChild } from './child-process';
+import type { Outcome, Settings } from '@/lib/language/index';
+import type { EvaluationChild } from './child-process';
 import { EVALUATION_LIMITS, type EvaluationLimits } from './limits';
-import type { Job, Refusal, Report } from './messages';
+import type { Job, Refusal, Report, Task } from './messages';
 import type { Pool } from './pool';
+import { Watch } from './watch';
 
-/** What is asked of a run: the cells, or the one expression, as the language takes them. */
-export type Work = Pick<Job, 'expression' | 'cells' | 'settings'>;
+/** What is asked of a run: lines, each after those that it reads. Lines without settings are wanted only for others. */
+export interface Work {
+  readonly tasks: readonly Task[];
+  readonly settings: readonly Settings[];
+  /** Whether the children may keep values for later. */
+  readonly keep: boolean;
+}
+
+/** What became of a task, by its position in the work. */
+export type Fate =
+  | { readonly kind: 'outcome'; readonly outcome: Outcome; readonly lasting: boolean }
+  | { readonly kind: 'refused'; readonly refusal: Refusal };
 
 export interface Finished {
-  /** Results by `keyOf` their place. */
-  readonly results: ReadonlyMap<string, Result>;
-  /** Why lines were stopped, by `keyOf` their place; those with a result have it from there. */
-  readonly refused: ReadonlyMap<string, Refusal>;
-  /** The result of an expression. */
-  readonly expression: Result | null;
-  /** Whether time or memory stopped a line; such answers may come out otherwise another time. */
-  readonly stopped: boolean;
+  /** A task that was not come to has no fate. */
+  readonly fates: ReadonlyMap<number, Fate>;
   /** For the log: what the program said of its own mistakes. */
   readonly faults: readonly string[];
 }
 
 type Attempt =
-  | { readonly kind: 'done'; readonly expression: Result | null }
+  | { readonly kind: 'done' }
   | {
       readonly kind: 'refused';
-      readonly line: string | null;
-      /** Whether the line had its value already. */
+      /** The task in hand, by its position in the work; null between two tasks. */
+      readonly task: number | null;
+      /** Whether it had its value already. */
       readonly valued: boolean;
       readonly refusal: Refusal;
       readonly detail: string | null;
     };
 
-/** What is known so far, from all attempts. */
+/** What is known so far, from all attempts of all children. */
 class Progress {
-  readonly results = new Map<string, Result>();
+  readonly fates = new Map<number, Fate>();
   readonly refused = new Map<string, Refusal>();
-  readonly brief = new Map<string, Refusal>();
+  readonly brief = new Map<number, Refusal>();
   readonly faults: string[] = [];
 
+  constructor(private readonly work: Work) {}
+
   /** Takes in how an attempt was stopped; false when that teaches nothing that another attempt could use. */
-  learn({ line, valued, refusal, detail }: Extract<Attempt, { kind: 'refused' }>): boolean {
+  learn({ task, valued, refusal, detail }: Extract<Attempt, { kind: 'refused' }>): boolean {
     if (detail !== null) this.faults.push(detail);
-    if (line === null || this.refused.has(line)) return false;
-    if (valued && !this.brief.has(line)) {
-      this.brief.set(line, refusal);
+    const name = task === null ? undefined : this.work.tasks[task]?.value;
+    if (task === null || name === undefined) return false;
+    if (valued && !this.brief.has(task)) {
+      this.brief.set(task, refusal);
     } else {
-      this.results.delete(line);
-      this.refused.set(line, refusal);
+      this.refused.set(name, refusal);
     }
     return true;
-  }
-
-  finished(expression: Result | null, complete: boolean): Finished {
-    const stopped = !complete || this.refused.size > 0 || this.brief.size > 0;
-    const { results, refused, faults } = this;
-    return { results, refused, expression, stopped, faults };
   }
 }
 
 /**
  * Evaluates within the time of a request. Reports come line by line; when a child is stopped, or ends, the line in hand
- * is refused with the reason and the rest is evaluated again by a fresh child, results that are already there being
+ * is refused with the reason and the rest is evaluated again by a fresh child, outcomes that are already there being
  * kept. A line that had its value keeps it, and only its degree, polynomial and tower are left out. One line gets half
- * of the time that is left at most, so that several bad lines leave something for the others.
+ * of the time that is left at most, so that several bad lines leave something for the others. A large work is cut into
+ * pieces, and a second child takes pieces from the same pile as long as one is free.
  */
 export async function runWork(
   pool: Pool,
   work: Work,
   limits: EvaluationLimits = EVALUATION_LIMITS,
 ): Promise<Finished> {
-  let end = performance.now() + limits.requestTime;
-  const progress = new Progress();
-  for (;;) {
-    const child = pool.take();
-    // A child is warm as a rule; the time of one that still starts is not the request's.
-    const before = performance.now();
-    await child.prepare();
-    end += performance.now() - before;
-    const attempt = await tryOnce(child, work, progress, end, limits);
-    if (attempt.kind === 'done') pool.give(child);
-    else pool.discard(child);
-    if (attempt.kind === 'done') return progress.finished(attempt.expression, true);
-    if (!progress.learn(attempt) || performance.now() >= end) return progress.finished(null, false);
+  const progress = new Progress(work);
+  const pieces = cutIntoPieces(work, limits.linesPerJob);
+  const lines = pieces.reduce((sum, piece) => sum + piece.length, 0);
+  const time = Math.min(
+    limits.requestTime + lines * limits.requestTimePerLine,
+    limits.longestRequestTime,
+  );
+  const clock = { end: performance.now() + Math.max(time, limits.requestTime) };
+  const worker = () => takePieces(pool, work, pieces, progress, clock, limits);
+  const workers = [worker()];
+  for (let more = 1; more < pieces.length + 1 && pool.enterIfFree(); more += 1)
+    workers.push(worker().finally(() => pool.leave()));
+  await Promise.all(workers);
+  for (const [index, { value }] of work.tasks.entries()) {
+    const refusal = progress.refused.get(value);
+    if (refusal !== undefined && !progress.fates.has(index))
+      progress.fates.set(index, { kind: 'refused', refusal });
+  }
+  return { fates: progress.fates, faults: progress.faults };
+}
+
+/** Positions of the tasks that are wanted for themselves, in pieces of at most `most`. */
+function cutIntoPieces({ tasks }: Work, most: number): number[][] {
+  const wanted = tasks.flatMap(({ settings }, index) => (settings === null ? [] : [index]));
+  const pieces: number[][] = [];
+  for (let from = 0; from < wanted.length; from += most)
+    pieces.push(wanted.slice(from, from + most));
+  return pieces;
+}
+
+async function takePieces(
+  pool: Pool,
+  work: Work,
+  pieces: number[][],
+  progress: Progress,
+  clock: { end: number },
+  limits: EvaluationLimits,
+): Promise<void> {
+  for (let piece = pieces.shift(); piece !== undefined; piece = pieces.shift()) {
+    for (;;) {
+      const { job, places } = jobOf(work, piece, progress);
+      const child = pool.take(job.tasks.flatMap(({ reads }) => reads.map(([, value]) => value)));
+      // A child is warm as a rule; the time of one that still starts is not the request's.
+      const before = performance.now();
+      await child.prepare();
+      clock.end += performance.now() - before;
+      const attempt = await tryOnce(child, job, places, progress, clock.end, limits);
+      if (attempt.kind === 'done') {
+        if (work.keep) child.remember(job.tasks.map(({ value }) => value));
+        pool.give(child);
+        break;
+      }
+      pool.discard(child);
+      if (!progress.learn(attempt) || performance.now() >= clock.end) return;
+    }
   }
 }
 
 let jobs = 0;
 
+/** The tasks of a piece that have no fate yet and all that they read, with their positions in the work. */
+function jobOf(
+  work: Work,
+  piece: readonly number[],
+  progress: Progress,
+): { job: Job; places: readonly number[] } {
+  const wanted = new Set(piece.filter((index) => !progress.fates.has(index)));
+  const values = new Set<string>();
+  const chosen: [number, Task][] = [];
+  for (let index = work.tasks.length - 1; index >= 0; index -= 1) {
+    const task = work.tasks[index];
+    if (task === undefined || !(wanted.has(index) || values.has(task.value))) continue;
+    // One line may be there several times; the first that gives the value is enough for those that read it.
+    chosen.push([index, wanted.has(index) ? task : { ...task, settings: null }]);
+    for (const [, value] of task.reads) if (value !== null) values.add(value);
+  }
+  chosen.reverse();
+  const places = chosen.map(([index]) => index);
+  jobs += 1;
+  const job = {
+    job: jobs,
+    tasks: chosen.map(([, task]) => task),
+    settings: work.settings,
+    keep: work.keep,
+    refused: [...progress.refused],
+    brief: places.flatMap((place, index) => {
+      const refusal = progress.brief.get(place);
+      return refusal === undefined ? [] : [[index, refusal] as const];
+    }),
+  };
+  return { job, places };
+}
+
 function tryOnce(
   child: EvaluationChild,
-  work: Work,
+  job: Job,
+  places: readonly number[],
   progress: Progress,
   end: number,
   limits: EvaluationLimits,
 ): Promise<Attempt> {
   const watch = new Watch(child, end, limits);
-  jobs += 1;
-  const job = {
-    job: jobs,
-    ...work,
-    known: [...progress.results],
-    refused: [...progress.refused],
-    brief: [...progress.brief],
-  };
   return new Promise<Attempt>((resolve) => {
     const settle = (outcome: Attempt): void => {
       watch.stop();
       resolve(outcome);
     };
-    const refuse = (refusal: Refusal, detail: string | null): void =>
-      settle({ kind: 'refused', line: watch.line, valued: watch.valued, refusal, detail });
+    const refuse = (refusal: Refusal, detail: string | null): void => {
+      const task = watch.task === null ? null : (places[watch.task] ?? null);
+      settle({ kind: 'refused', task, valued: watch.valued, refusal, detail });
+    };
     watch.start((refusal) => refuse(refusal, null));
     child.start(job, (report) => {
-      take(report, watch, progress.results);
-      if (report.kind === 'done') settle({ kind: 'done', expression: report.result });
+      take(report, watch, places, progress);
+      if (report.kind === 'done') settle({ kind: 'done' });
       if (report.kind === 'fault') refuse(report.refusal, report.detail);
     });
   });
 }
 
-function take(report: Report, watch: Watch, results: Map<string, Result>): void {
-  if (report.kind === 'started') watch.begin(keyOf(report));
-  if (report.kind === 'valued') watch.begin(keyOf(report), true);
+function take(report: Report, watch: Watch, places: readonly number[], { fates }: Progress): void {
+  if (report.kind === 'started') watch.begin(report.task);
+  if (report.kind === 'valued') watch.begin(report.task, true);
   if (report.kind === 'finished') {
-    results.set(keyOf(report), report.result);
+    const { outcome, lasting, task } = report;
+    const place = places[task];
+    if (place !== undefined) fates.set(place, { kind: 'outcome', outcome, lasting });
     watch.begin(null);
-  }
-}
-
-/** With fewer milliseconds left of the request, no line waits for a processor any longer. */
-const LEAST_WAIT = 400;
-
-/** Watches the clock and the child while a job runs, and knows which line is in hand. */
-class Watch {
-  line: string | null = null;
-  valued = false;
-  private timer: NodeJS.Timeout | undefined;
-  private memoryTimer: NodeJS.Timeout | undefined;
-  private refuse: ((refusal: Refusal) => void) | null = null;
-  private allowed = 0;
-  private spentBefore: number | null = null;
-
-  constructor(
-    private readonly child: EvaluationChild,
-    private readonly end: number,
-    private readonly limits: EvaluationLimits,
-  ) {}
-
-  start(refuse: (refusal: Refusal) => void): void {
-    this.refuse = refuse;
-    void this.child.ended.then((ending) => this.refuse?.(this.refusal(ending)));
-    this.memoryTimer = setInterval(() => {
-      const met = this.child.residentMemory();
-      if (met !== null && met > this.limits.childMemory) this.refuse?.(this.refusal('memory'));
-    }, this.limits.memoryWatch);
-    this.begin(null);
-  }
-
-  /** A line starts, or its second part after it has its value, or the time between two lines. */
-  begin(line: string | null, valued = false): void {
-    this.line = line;
-    this.valued = valued;
-    const left = this.left();
-    this.allowed = Math.ceil(line === null ? left : Math.min(this.limits.lineTime, left / 2));
-    this.spentBefore = this.child.processorMilliseconds();
-    this.wait(this.allowed);
-  }
-
-  private left(): number {
-    return Math.max(0, this.end - performance.now());
-  }
-
-  private wait(milliseconds: number): void {
-    clearTimeout(this.timer);
-    this.timer = setTimeout(() => {
-      const missing = this.missingTime();
-      if (missing > 0) this.wait(missing);
-      else this.refuse?.(this.refusal('stopped'));
-    }, milliseconds);
-  }
-
-  /** On a busy machine a line may wait for a processor: what it has not had yet it gets, while the request lasts. */
-  private missingTime(): number {
-    const spent = this.child.processorMilliseconds();
-    if (spent === null || this.spentBefore === null) return 0;
-    const missing = this.allowed - (spent - this.spentBefore);
-    return missing < this.allowed / 4 || this.left() < LEAST_WAIT
-      ? 0
-      : Math.min(missing, this.left() / 2);
-  }
-
-  private refusal(ending: Ending): Refusal {
-    return refusalOf(
-      ending,
-      this.limits,
-      this.allowed,
-      this.valued ? 'The degree of this value' : 'The exact value of this line',
-    );
-  }
-
-  stop(): void {
-    clearTimeout(this.timer);
-    clearInterval(this.memoryTimer);
-    this.refuse = null;
-  }
-}
-
-/** `what` begins the sentence. */
-function refusalOf(
-  ending: Ending,
-  limits: EvaluationLimits,
-  allowed: number,
-  what: string,
-): Refusal {
-  switch (ending) {
-    case 'memory':
-      return {
-        code: 'limit-memory',
-        message: `${what} needs more than ${limits.childMemory} megabytes of memory, which is the limit.`,
-      };
-    case 'stopped':
-    case 'processor-time':
-      return {
-        code: 'limit-time',
-        message: `${what} took more than ${allowed} milliseconds, which was the limit for it.`,
-      };
-    case 'crash':
-      return {
-        code: 'fault',
-        message:
-          'The evaluation of this line ended without an answer through a mistake in the program.',
-      };
   }
 }

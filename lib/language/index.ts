@@ -4,8 +4,19 @@
  */
 export { certifyLine } from './certify';
 export type { Certified, CertifiedLine } from './certify';
-export { evaluateCells, evaluateExpression, keyOf } from './evaluate';
-export type { CellResults, EvaluationOptions, LinePlace } from './evaluate';
+export {
+  evaluateCells,
+  evaluateExpression,
+  expressionResult,
+  findExpressionProblem,
+  firstLine,
+} from './evaluate';
+export type { CellResults, EvaluationOptions } from './evaluate';
+export { evaluateSource } from './evaluate-line';
+export type { LineOptions, Outcome, Refusal } from './evaluate-line';
+export { sizeOfPacked } from './packed-value';
+export type { PackedValue } from './packed-value';
+export { findDefinition, findPlaceProblem, refusedResult, resultOf } from './place';
 export type { ErrorCode, Problem, Span } from './failure';
 export type {
   AngleResult,
@@ -30,8 +41,15 @@ export type {
   Result,
   TruthResult,
 } from './result';
-export { DEFAULT_SETTINGS, LENGTH_UNITS, MOST_DIGITS, ROUNDINGS, readStep } from './settings';
+export {
+  DEFAULT_SETTINGS,
+  LENGTH_UNITS,
+  MOST_DIGITS,
+  ROUNDINGS,
+  completeSettings,
+  readStep,
+} from './settings';
 export type { LengthUnit, Settings } from './settings';
-export { markOfLine } from './lines';
-export type { CellSource } from './lines';
+export { readCells } from './lines';
+export type { CellSource, LineGraph, SourceLine } from './lines';
 export { typesetMark } from './typeset';

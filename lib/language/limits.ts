@@ -5,7 +5,7 @@ export const LANGUAGE_LIMITS = {
   /** Brackets, roots, exponents and signs inside one another. */
   nesting: 200,
   /** Lines that are not blank, in all cells together. */
-  lines: 5_000,
+  lines: 10_000,
   /** Factors of √ in a root exponent such as 1/8. */
   rootIndex: 64,
   /** Values in one list, those of the lists inside it included. */

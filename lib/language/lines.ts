@@ -1,16 +1,15 @@
-import { attachCalls } from './attach-calls';
 import type { Problem } from './failure';
 import { classOfWord } from './names';
 import { orderByDependence } from './graph';
-import { readLine } from './read';
+import { attachOnce, readLineOnce } from './read-once';
 import type { Settings } from './settings';
-import { type MarkNode, type Statement, markDefinedBy, marksReadBy } from './syntax';
+import { type MarkNode, type Statement, markDefinedBy } from './syntax';
 
 export interface CellSource {
   readonly id: string;
   readonly source: string;
   /** In what its results are given, where that differs from the settings of the whole. */
-  readonly settings?: Partial<Settings>;
+  readonly settings?: Partial<Settings> | undefined;
 }
 
 /** A line that is not blank, with what is known of it before any arithmetic. */
@@ -31,6 +30,8 @@ export interface LineGraph {
   readonly lines: readonly SourceLine[];
   /** Lines that define a mark, in order of the page; more than one is an error at each. */
   readonly definitions: ReadonlyMap<string, readonly number[]>;
+  /** Names that some line defines as a function; a bracket after them holds arguments. */
+  readonly functions: ReadonlySet<string>;
   /** Order in which to evaluate. */
   readonly order: readonly number[];
   readonly cycles: ReadonlyMap<number, readonly number[]>;
@@ -38,7 +39,11 @@ export interface LineGraph {
 
 /** Reads all lines of all cells and orders them so that what a line reads comes before it. */
 export function readCells(cells: readonly CellSource[]): LineGraph {
-  const lines = attachCallsIn(cells.flatMap((cell, index) => readCell(cell.source, index)));
+  const plain = cells.flatMap((cell, index) => readCell(cell.source, index));
+  const functions = functionsIn(plain);
+  const lines = plain.map((line) =>
+    line.statement === null ? line : { ...line, ...attachOnce(line.statement, functions) },
+  );
   const definitions = new Map<string, number[]>();
   lines.forEach(({ mark }, index) => {
     if (mark === null) return;
@@ -47,27 +52,19 @@ export function readCells(cells: readonly CellSource[]): LineGraph {
     else known.push(index);
   });
   const reads = lines.map((line) => line.reads.flatMap(({ name }) => definitions.get(name) ?? []));
-  return { lines, definitions, ...orderByDependence(reads) };
+  return { lines, definitions, functions, ...orderByDependence(reads) };
 }
 
-/** Reads products of a name and a bracket as calls where any line defines that name as a function. */
-function attachCallsIn(lines: readonly SourceLine[]): SourceLine[] {
-  const functions = new Set(
+/** Also of lines that do not parse: what such a line means to define is no product elsewhere. */
+function functionsIn(lines: readonly SourceLine[]): Set<string> {
+  return new Set(
     lines.flatMap(({ source, mark }) => (mark !== null && HEAD.test(source) ? [mark] : [])),
   );
-  return lines.map((line) => {
-    if (line.statement === null) return line;
-    const statement = attachCalls(
-      line.statement,
-      (name, several) => several || functions.has(name),
-    );
-    return { ...line, statement, reads: marksReadBy(statement) };
-  });
 }
 
 function readCell(source: string, cell: number): SourceLine[] {
   return source.split(/\r\n|\n|\r/).flatMap((text, index): SourceLine[] => {
-    const reading = readLine(text);
+    const reading = readLineOnce(text);
     const common = { cell, line: index + 1, source: text };
     switch (reading.kind) {
       case 'blank':

@@ -1,4 +1,4 @@
-import { type Span, fail } from './failure';
+import type { Problem, Span } from './failure';
 import type { SourceLine } from './lines';
 import { findNearest } from './words';
 
@@ -14,20 +14,21 @@ const UNIT_WORDS: readonly (readonly [unit: string, words: string])[] = [
 ];
 
 /**
- * Refuses a name that no line defines, with what was probably meant: a word of the language, a mark, a unit written out,
+ * What is said of a name that no line defines, with what was probably meant: a word of the language, a mark, a unit written out,
  * or a definition instead of a decision.
  */
-export function failUnknown(
+export function explainUnknown(
   name: string,
   at: Span,
   use: 'mark' | 'function',
   marks: Iterable<string>,
   line: SourceLine | undefined,
-): never {
+): Problem {
   const none =
     use === 'mark' ? `No mark \`${name}\` is defined` : `There is no function \`${name}\``;
   const hint = hintOf(name, at, marks, line);
-  return fail('unknown-name', `${none}${hint}${hint.endsWith('?') ? '' : '.'}`, at);
+  const message = `${none}${hint}${hint.endsWith('?') ? '' : '.'}`;
+  return { code: 'unknown-name', message, from: at.from, to: at.to };
 }
 
 function hintOf(
@@ -56,6 +57,7 @@ function isMeantAsDefinition(at: Span, line: SourceLine | undefined): boolean {
   return (
     statement?.kind === 'decision' &&
     statement.relations.join() === '==' &&
-    statement.sides[0] === at
+    statement.sides[0]?.from === at.from &&
+    statement.sides[0].to === at.to
   );
 }

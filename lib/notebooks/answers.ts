@@ -3,7 +3,7 @@ import {
   PoolBusy,
   certify,
   evaluate,
-  storeAnswersIn,
+  storeOutcomesIn,
   type CertificateAnswer,
   type CertificateRequest,
   type EvaluateAnswer,
@@ -20,7 +20,7 @@ const holder = globalThis as typeof globalThis & { surdworkAnswersKept?: true };
  */
 export async function answerTo(request: EvaluateRequest): Promise<EvaluateAnswer> {
   if (holder.surdworkAnswersKept === undefined) {
-    storeAnswersIn(databaseStore());
+    storeOutcomesIn(databaseStore());
     holder.surdworkAnswersKept = true;
   }
   return await whenFree(evaluate(request));

@@ -33,27 +33,19 @@ const ACTIONS = {
   },
 };
 
-process.on('message', ({ job, cells, known, refused, brief }) => {
-  const [knownLines, refusedLines, briefLines] = [known, refused, brief].map(
-    (entries) => new Map(entries),
-  );
+process.on('message', ({ job, tasks, refused, brief }) => {
+  const [refusedValues, briefTasks] = [refused, brief].map((entries) => new Map(entries));
   try {
-    cells.forEach(({ source }, cell) =>
-      source.split('\n').forEach((text, index) => {
-        const place = { job, cell, line: index + 1 };
-        const key = `${cell}:${index + 1}`;
-        if (knownLines.has(key)) return;
-        const [action, part] = text.split(' ');
-        report({ kind: 'started', ...place });
-        const refusal = refusedLines.get(key);
-        if (part === 'late') report({ kind: 'valued', ...place });
-        if (refusal === undefined && !briefLines.has(key)) ACTIONS[action]?.();
-        const code =
-          refusal?.code ?? (briefLines.has(key) ? `brief ${briefLines.get(key).code}` : 'fine');
-        report({ kind: 'finished', ...place, result: { line: index + 1, source: text, code } });
-      }),
-    );
-    report({ kind: 'done', job, result: null, processorTime: 0.1 });
+    tasks.forEach(({ source, value }, task) => {
+      if (refusedValues.has(value)) return;
+      const [action, part] = source.split(' ');
+      report({ kind: 'started', job, task });
+      if (part === 'late') report({ kind: 'valued', job, task });
+      if (!briefTasks.has(task)) ACTIONS[action]?.();
+      const code = briefTasks.has(task) ? `brief ${briefTasks.get(task).code}` : 'fine';
+      report({ kind: 'finished', job, task, outcome: { code }, lasting: true });
+    });
+    report({ kind: 'done', job, processorTime: 0.1 });
   } catch (error) {
     const code = error instanceof RangeError ? 'limit-size' : 'fault';
     report({ kind: 'fault', job, refusal: { code, message: 'stopped' }, detail: error.message });

@@ -1,6 +1,6 @@
 import { fileURLToPath } from 'node:url';
 import { afterAll, describe, expect, it } from 'vitest';
-import { EVALUATION_LIMITS } from '@/lib/evaluation/limits';
+import { EVALUATION_LIMITS, type EvaluationLimits as Limits } from '@/lib/evaluation/limits';
 import { Pool } from '@/lib/evaluation/pool';
 import { runWork } from '@/lib/evaluation/run';
 
@@ -8,28 +8,44 @@ import { runWork } from '@/lib/evaluation/run';
 const pool = new Pool(2, fileURLToPath(new URL('./hostile-child.mjs', import.meta.url)));
 afterAll(() => pool.close());
 
+const SETTINGS = { digits: 30, unit: 'mm', step: null, rounding: 'half-even' } as const;
+
 /** What became of each line: the code of the stand-in's results, or `none`. */
 const fates = (...lines: string[]) => fatesWithin(MUCH_TIME, lines);
 
 /** So that what comes out does not depend on how busy the machine is. */
-const MUCH_TIME = { ...EVALUATION_LIMITS, lineTime: 400, requestTime: 30_000 };
+const MUCH_TIME: Limits = {
+  ...EVALUATION_LIMITS,
+  lineTime: 400,
+  requestTime: 30_000,
+  longestRequestTime: 60_000,
+};
 
 /** A small memory and much time, so that memory is what runs out however slow the machine is. */
-const LITTLE_MEMORY = {
+const LITTLE_MEMORY: Limits = {
   ...EVALUATION_LIMITS,
   childMemory: 90,
   lineTime: 15_000,
   requestTime: 60_000,
 };
 
-async function fatesWithin(limits: typeof LITTLE_MEMORY, lines: string[]): Promise<string[]> {
+async function fatesWithin(limits: Limits, lines: string[]): Promise<string[]> {
   await pool.enter();
   try {
-    const cells = [{ id: 'a', source: lines.join('\n') }];
-    const { results } = await runWork(pool, { expression: null, cells, settings: {} }, limits);
+    const tasks = lines.map((source, index) => ({
+      source,
+      value: `value ${index}`,
+      reads: [],
+      functions: [],
+      settings: 0,
+    }));
+    const { fates } = await runWork(pool, { tasks, settings: [SETTINGS], keep: true }, limits);
     return lines.map((_, index) => {
-      const result = results.get(`0:${index + 1}`) as { code?: string } | undefined;
-      return result?.code ?? 'none';
+      const fate = fates.get(index);
+      if (fate === undefined) return 'none';
+      return fate.kind === 'refused'
+        ? fate.refusal.code
+        : (fate.outcome as unknown as { code: string }).code;
     });
   } finally {
     pool.leave();
@@ -77,7 +93,7 @@ describe('a line that brings its child down', () => {
   });
 
   it('ends with the time of the request when no line ever ends, and says what it has', async () => {
-    const limits = { ...MUCH_TIME, requestTime: 1_500 };
+    const limits: Limits = { ...MUCH_TIME, requestTime: 1_500, requestTimePerLine: 1 };
     const all = await fatesWithin(limits, ['fine', ...Array<string>(40).fill('hang')]);
     expect(all[0]).toBe('fine');
     expect(all.at(-1)).toBe('none');

@@ -4,8 +4,11 @@ import {
   type Settings,
   evaluateCells,
   evaluateExpression,
-  keyOf,
+  MOST_DIGITS,
+  completeSettings,
+  evaluateSource,
 } from '@/lib/language/index';
+import { LANGUAGE_LIMITS } from '@/lib/language/limits';
 
 const errorOf = (source: string, settings?: Partial<Settings>) => {
   const result = evaluateExpression(source, settings);
@@ -341,11 +344,25 @@ describe('marks across cells', () => {
   });
 
   it('evaluates lines up to the limit and says so at those beyond', () => {
-    const [cell] = evaluateCells([{ id: 'x', source: Array(5_002).fill('1').join('\n') }], {
-      digits: 1,
-    });
-    expect(cell?.results).toHaveLength(5_002);
-    expect(cell?.results.slice(4_999).map(brief)).toEqual(['1', 'limit-size', 'limit-size']);
+    const [cell] = evaluateCells(
+      [
+        {
+          id: 'x',
+          source: Array(LANGUAGE_LIMITS.lines + 2)
+            .fill('1')
+            .join('\n'),
+        },
+      ],
+      {
+        digits: 1,
+      },
+    );
+    expect(cell?.results).toHaveLength(LANGUAGE_LIMITS.lines + 2);
+    expect(cell?.results.slice(LANGUAGE_LIMITS.lines - 1).map(brief)).toEqual([
+      '1',
+      'limit-size',
+      'limit-size',
+    ]);
   });
 
   it('the variable of a polynomial is no mark, and a mark named x is one elsewhere', () => {
@@ -354,55 +371,71 @@ describe('marks across cells', () => {
   });
 });
 
-describe('what is known from an earlier run', () => {
-  const cells = [{ id: 'x', source: 'a = 2\nb = a + 1\nc = 7' }];
+describe('a line without its place', () => {
+  const NONE = new Set<string>();
+  const settings = completeSettings({ digits: 10 });
+  const value = (source: string) => evaluateSource(source, NONE, null, () => null).value;
 
-  it('is given back as it is and evaluated again only where a line reads it', () => {
-    const [first] = evaluateCells(cells);
-    const known = new Map(
-      (first?.results ?? []).map((result) => [keyOf({ cell: 0, line: result.line }), result]),
+  it('says the same as among all others, from the value alone that it reads', () => {
+    const a = value('a = sqrt(2) + 3 mm/(1 mm)');
+    const { outcome } = evaluateSource('b = a^2', NONE, settings, (name) =>
+      name === 'a' ? a : null,
     );
-    known.delete('0:2');
-    const started: number[] = [];
-    const finished: number[] = [];
-    const [again] = evaluateCells(
-      cells,
-      {},
-      {
-        known,
-        started: ({ line }) => started.push(line),
-        finished: ({ line }) => finished.push(line),
-      },
-    );
-    expect(again).toEqual(first);
-    expect(started).toEqual([1, 2]);
-    expect(finished).toEqual([2]);
+    const [cell] = evaluateCells([{ id: '', source: 'a = sqrt(2) + 3\nb = a^2' }], { digits: 10 });
+    expect({ line: 2, source: 'b = a^2', mark: 'b', ...outcome }).toEqual(cell?.results[1]);
   });
 
-  it('refused lines answer with their refusal and their readers with depends-on-error', () => {
-    const refused = new Map([['0:1', { code: 'limit-time' as const, message: 'Too long.' }]]);
-    expect(evaluateCells(cells, {}, { refused })[0]?.results.map(brief)).toEqual([
-      'limit-time',
-      'depends-on-error',
-      '7',
-    ]);
+  it('names the first mark that has no value, and not the reason', () => {
+    const { outcome, value: none } = evaluateSource('c = 2 p + q', NONE, settings, () => null);
+    expect(outcome).toMatchObject({ kind: 'missing', name: 'p', at: { from: 6, to: 7 } });
+    expect(none).toBeNull();
   });
 
-  it('brief lines keep their value and leave out degree, polynomial and tower, with the reason', () => {
-    const reason = { code: 'limit-time' as const, message: 'Too long.' };
-    const [cell] = evaluateCells(cells, {}, { brief: new Map([['0:3', reason]]) });
-    expect(cell?.results[2]).toMatchObject({
+  it('is worth its value without settings, and none when it fails or decides', () => {
+    expect(value('a = 1/0')).toBeNull();
+    expect(value('1 < 2')).toBeNull();
+    expect(evaluateSource('a = 1', NONE, null, () => null)).toMatchObject({ outcome: null });
+    expect(value('a = 1')).not.toBeNull();
+  });
+
+  it('leaves out degree, polynomial and tower when told so, with the reason, and keeps its value', () => {
+    const brief = { code: 'limit-time' as const, message: 'Too long.' };
+    const { outcome, value: kept } = evaluateSource('c = 7', NONE, settings, () => null, { brief });
+    expect(outcome).toMatchObject({
       exact: { text: '7' },
       degree: null,
       minimalPolynomial: null,
       tower: null,
       reach: { straightedgeAndCompass: true },
       omitted: [
-        { field: 'degree', ...reason },
-        { field: 'minimalPolynomial', ...reason },
-        { field: 'tower', ...reason },
+        { field: 'degree', ...brief },
+        { field: 'minimalPolynomial', ...brief },
+        { field: 'tower', ...brief },
       ],
     });
+    expect(kept).toEqual(value('c = 7'));
+  });
+});
+
+describe('settings of a cell', () => {
+  it('go before those of the notebook, and only for that cell', () => {
+    const cells = [
+      { id: 'a', source: 'R = 1 in', settings: { unit: 'in' as const, step: '1/64 in' } },
+      { id: 'b', source: '2 R' },
+    ];
+    const [a, b] = evaluateCells(cells, { unit: 'mm', digits: 12 }).map(({ results }) => results);
+    expect(a?.[0]).toMatchObject({ unit: 'in', cut: { value: '1' }, decimal: { digits: 12 } });
+    expect(b?.[0]).toMatchObject({ unit: 'mm', exact: { text: '254/5' } });
+    expect(b?.[0]).not.toHaveProperty('cut');
+  });
+
+  it('a mark that cannot be written with them has its value all the same', () => {
+    const cells = [
+      { id: 'a', source: 'a = sqrt(2)', settings: { digits: MOST_DIGITS + 1 } },
+      { id: 'b', source: 'a^2' },
+    ];
+    const all = evaluateCells(cells).flatMap(({ results }) => results.map(brief));
+    expect(all).toEqual(['limit-digits', '2']);
   });
 });
 

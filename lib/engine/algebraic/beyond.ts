@@ -27,6 +27,8 @@ import { rationalPart, type RealPart } from './real-part';
 import { principalRoot, principalSquareRoot, realRoot } from './principal';
 import { TooManyPartitions } from '../subfields/subfield';
 import { quadraticChain, type Chain } from './quadratic-chain';
+import { maxBits } from '../polynomials/integer-poly';
+import type { PackedAlgebraic } from '../packed';
 import { toTower } from './square-roots';
 
 export type Value = Cx | Algebraic;
@@ -144,6 +146,37 @@ export class Beyond {
     ) as [Cyclotomic, Cyclotomic];
     const imaginary = this.fields.multiply(im, this.fields.i);
     return imaginary && this.fields.add(re, imaginary);
+  }
+
+  /** See `packed.ts`. The box is as small as it takes to hold no other root. */
+  pack(a: Algebraic): PackedAlgebraic {
+    const poly = [...a.poly];
+    for (let P = 64 + maxBits(poly); ; P *= 2) {
+      const box = isolate(poly, a.box(P), P);
+      if (box === null) continue;
+      const { isReal, origin } = a;
+      return { poly, isReal, box, precision: P, origin, verdict: this.verdictOf(a) };
+    }
+  }
+
+  unpack({ poly, isReal, box, precision, origin, verdict }: PackedAlgebraic): Algebraic {
+    const root = new Algebraic(
+      [...poly],
+      isReal,
+      refining([...poly], box, precision, this.budget),
+      origin,
+    );
+    this.verdicts.set(root, verdict);
+    return root;
+  }
+
+  /** What is known of a value as an element of a cyclotomic field, to be kept with it. */
+  knownCyclotomic(x: Value): Cyclotomic | null {
+    return this.cyclotomics.get(x) ?? null;
+  }
+
+  rememberCyclotomic(x: Value, element: Cyclotomic | null): void {
+    this.mark(x, element);
   }
 
   add(a: Value, b: Value): Value {
