@@ -33,6 +33,8 @@ const dimension = (id: string, ...lines: string[]): NotebookCell => ({
   source: lines.join('\n'),
 });
 
+const section = (id: string, source: string): NotebookCell => ({ id, kind: 'section', source });
+
 const contentOf = (step: string, cells: NotebookCell[]): NotebookContent =>
   NotebookContent.parse({
     format: 1,
@@ -69,8 +71,10 @@ const windowRing = [
 ];
 
 const windowStones = [
-  note('chords-head', 'Chords from point 0 to every other light, to check the ring across.'),
+  section('chords-section', 'Chords from point 0'),
+  note('chords-head', 'Point 0 to every other light, to check the ring across.'),
   dimension('chords', ...[2, 3, 4, 5, 6, 7, 8].map((k) => `k${k} = chord(R, ${k} turn/17)`)),
+  section('stones-section', 'Stones'),
   note(
     'voussoir-head',
     'Voussoirs between radii of 2050 and 2400 mm with a parallel joint of 4 mm: each bed lies half a',
@@ -87,9 +91,10 @@ const windowStones = [
 ];
 
 const windowClosing = [
+  section('closing-section', 'Closing'),
   note(
     'closing-head',
-    'Closing. Seventeen pitches each rounded to 551 mm fall short by $17p - 17 \\cdot 551$ mm, so the',
+    'Seventeen pitches each rounded to 551 mm fall short by $17p - 17 \\cdot 551$ mm, so the',
     'ring is set out by running dimensions from point 0, never by stepping one pitch round.',
   ),
   dimension('closing', 'round_trip = 17 p', 'short = round_trip - 17*551 mm', 'short > 4 mm'),
