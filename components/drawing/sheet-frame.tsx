@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react';
+import { memo, type ReactNode } from 'react';
 import { ZONE_REM, zoneLetter } from './zones';
 
 interface SheetFrameProps {
@@ -14,6 +14,31 @@ interface SheetFrameProps {
 function Centring({ className }: { className: string }) {
   return <span aria-hidden="true" className={`absolute bg-ink print:hidden ${className}`} />;
 }
+
+/** The letters along both sides; drawn anew only when there are more of them, not at each keystroke. */
+const ZoneStrips = memo(function ZoneStrips({ zones }: { zones: number }) {
+  return (
+    <>
+      {(['left-0', 'right-0'] as const).map((side) => (
+        <div
+          key={side}
+          aria-hidden="true"
+          className={`absolute inset-y-zone w-zone select-none overflow-hidden text-tag tracking-normal text-soft max-sm:hidden print:hidden ${side}`}
+        >
+          {Array.from({ length: zones }, (_, index) => (
+            <span
+              key={index}
+              className="flex items-center justify-center border-b border-hairline"
+              style={{ height: `${ZONE_REM}rem` }}
+            >
+              {zoneLetter(index)}
+            </span>
+          ))}
+        </div>
+      ))}
+    </>
+  );
+});
 
 /**
  * The sheet itself: trimmed edge, zone letters and figures, ruled border with centring marks, and
@@ -39,23 +64,7 @@ export function SheetFrame({ children, foot, zones = 40, short = false }: SheetF
           </span>
         ))}
       </div>
-      {(['left-0', 'right-0'] as const).map((side) => (
-        <div
-          key={side}
-          aria-hidden="true"
-          className={`absolute inset-y-zone w-zone select-none overflow-hidden text-tag tracking-normal text-soft max-sm:hidden print:hidden ${side}`}
-        >
-          {Array.from({ length: zones }, (_, index) => (
-            <span
-              key={index}
-              className="flex items-center justify-center border-b border-hairline"
-              style={{ height: `${ZONE_REM}rem` }}
-            >
-              {zoneLetter(index)}
-            </span>
-          ))}
-        </div>
-      ))}
+      <ZoneStrips zones={zones} />
       <div
         className={`relative flex flex-col border-2 border-ink max-sm:border-x-0 print:static print:table print:w-full print:border-0 ${short ? '' : 'min-h-[60vh] print:min-h-0'}`}
       >

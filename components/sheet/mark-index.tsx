@@ -1,6 +1,15 @@
 'use client';
 
-import { memo, useDeferredValue, useId, useMemo, useState, type MouseEvent } from 'react';
+import {
+  memo,
+  startTransition,
+  useDeferredValue,
+  useEffect,
+  useId,
+  useMemo,
+  useState,
+  type MouseEvent,
+} from 'react';
 import { Mark } from '@/components/drawing/balloon';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { cellAnchor, type SheetActions } from './cells';
@@ -19,12 +28,25 @@ interface MarkIndexProps {
 /** From so many marks on there is something to look for. */
 const FILTER_FROM = 6;
 
+/** Milliseconds without a change before the index follows. */
+const CALM = 300;
+
+/** A value once it has stopped changing for a moment. */
+function useCalm<T>(value: T): T {
+  const [calm, setCalm] = useState(value);
+  useEffect(() => {
+    const timer = setTimeout(() => startTransition(() => setCalm(value)), CALM);
+    return () => clearTimeout(timer);
+  }, [value]);
+  return calm;
+}
+
 /** The marks of the sheet in hand: size, exact value, section and who reads them; and its headings. */
 export function MarkIndex(props: MarkIndexProps) {
-  // Typing does not wait for the index.
+  // Typing does not wait for the index, and the index waits until it pauses.
   return (
     <Listing
-      content={useDeferredValue(props.content)}
+      content={useCalm(props.content)}
       shown={useDeferredValue(props.shown)}
       mayWrite={props.mayWrite}
       actions={props.actions}

@@ -97,7 +97,11 @@ describe('cells on the sheet', () => {
     await page.reload({ waitUntil: 'networkidle' });
     await ida.awaken();
     await page.getByText('2 cells folded').waitFor();
-    await page.getByRole('navigation').getByRole('link', { name: 'q' }).first().click();
+    await page
+      .getByRole('navigation', { name: 'Index of the sheet' })
+      .getByRole('link', { name: /^q/ })
+      .last()
+      .click();
     await expect.poll(() => order(ida)).toBe('Rpq');
     expect(await page.evaluate(() => document.activeElement?.textContent)).toContain('q = p/3');
     const head = await ida.context.request.get(`/api/notebooks/${page.url().split('/').at(-1)}`);
