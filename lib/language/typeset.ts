@@ -264,15 +264,13 @@ function typesetProduct(node: ProductNode): string {
       return typeset(alone ? unwrap(factor.value) : factor.value);
     }
     if (factor.operator === '/') return `\\frac{${before}}{${typeset(unwrap(factor.value))}}`;
+    if (factor.operator === '*') return `${before}\\cdot ${bracketNegative(factor.value)}`;
     const next = typeset(factor.value);
-    if (factor.operator === 'implied') {
-      // A power before the degree sign would be a second superscript.
-      if (next.startsWith('^')) return `{${before}}${next}`;
-      // A letter must not run into the command, or the word, before it.
-      const meets = /[A-Za-z}]$/.test(before) && /^[A-Za-z]/.test(next);
-      return before + (meets ? '\\,' : unitGap(factor.value)) + next;
-    }
-    return `${before}\\cdot ${bracketNegative(factor.value)}`;
+    // A power before the degree sign would be a second superscript.
+    if (next.startsWith('^')) return `{${before}}${next}`;
+    // A letter must not run into the command, or the word, before it.
+    const meets = /[A-Za-z}]$/.test(before) && /^[A-Za-z]/.test(next);
+    return before + (meets ? '\\,' : unitGap(factor.value)) + next;
   }, '');
 }
 

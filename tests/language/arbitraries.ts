@@ -117,6 +117,15 @@ export const values: fc.Arbitrary<string> = fc
   )
   .map(([n, d, k, radicand]) => `(${n}/${d} + ${k} sqrt(${radicand}))`);
 
+/** Exact plain numbers of one small field, for laws that put many of them together. */
+export const fewValues: fc.Arbitrary<string> = fc
+  .tuple(
+    fc.integer({ min: -9, max: 9 }),
+    fc.integer({ min: 1, max: 4 }),
+    fc.integer({ min: -3, max: 3 }),
+  )
+  .map(([n, d, k]) => `(${n}/${d} + ${k} sqrt(2))`);
+
 export const lengthUnits = fc.constantFrom(
   ...UNITS.filter(({ of }) => of === 'length').map(({ name }) => name),
 );
