@@ -10,6 +10,7 @@ import type { Cyclotomic } from './algebraic/cyclotomic';
 import type { Box } from './algebraic/box';
 import type { Origin } from './algebraic/algebraic';
 import type { Verdict } from './algebraic/beyond';
+import type { PackedSum } from './algebraic/packed-name';
 import type { Int } from './int';
 import {
   addEl,
@@ -49,6 +50,7 @@ export interface PackedAlgebraic {
   readonly precision: number;
   readonly origin: Origin;
   readonly verdict: Verdict;
+  readonly name: PackedSum | null;
 }
 
 export interface PackedCosine {
@@ -70,7 +72,7 @@ export class PackedNum {
   /** About how many integers it holds, to bound what is kept. */
   get size(): number {
     const { tower, algebraic } = this;
-    let size = 4 + (algebraic?.poly.length ?? 0);
+    let size = 4 + (algebraic?.poly.length ?? 0) + 20 * (algebraic?.name?.length ?? 0);
     for (const part of tower?.parts ?? []) size += part.coefs.length;
     for (const root of tower?.roots ?? []) size += 'rad' in root ? root.rad.coefs.length : 1;
     return size;

@@ -4,7 +4,7 @@ import { Failure, type FieldFault } from '@/lib/access';
 /** Enough for every request that carries no notebook. */
 export const SMALL_BODY = 16 * 1024;
 /** A notebook at its limits, every character of it escaped, and room to spare. */
-export const NOTEBOOK_BODY = 4 * 1024 * 1024;
+export const NOTEBOOK_BODY = 8 * 1024 * 1024;
 
 /**
  * The JSON body of a request, read no further than `limit` bytes.

@@ -6,11 +6,11 @@ import { z } from 'zod';
  */
 export const CONTENT_LIMITS = {
   /** Cells in a notebook. */
-  cells: 400,
+  cells: 2_000,
   /** UTF-16 units of one cell's source. */
   source: 20_000,
   /** UTF-16 units of all sources together. */
-  total: 400_000,
+  total: 1_000_000,
   /** UTF-16 units of a cell's id. */
   cellId: 40,
   /** Significant digits a notebook may ask its decimals to have. */

@@ -108,7 +108,7 @@ describe('what is sent', () => {
       422,
       'invalid',
     ],
-    ['too many bytes', { title: 'x'.repeat(4_200_000) }, 413, 'too-large'],
+    ['too many bytes', { title: 'x'.repeat(8_500_000) }, 413, 'too-large'],
     [
       'two cells with one id',
       { title: 'x', content: { ...content('1'), cells: [1, 2].map(() => content('1').cells[0]) } },

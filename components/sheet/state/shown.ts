@@ -11,6 +11,8 @@ export type Shown = ReadonlyMap<string, readonly ShownLine[]>;
 export interface CellAnswer {
   id: string;
   results: Result[];
+  /** A word of the server's for these results. */
+  digest?: string;
 }
 
 /**
@@ -29,7 +31,10 @@ export function foldAnswer(shown: Shown, cells: readonly CellAnswer[]): Shown {
 function sameResults(lines: readonly ShownLine[], results: readonly Result[]) {
   return (
     lines.length === results.length &&
-    lines.every((line, index) => JSON.stringify(line.result) === JSON.stringify(results[index]))
+    lines.every(({ result }, index) => {
+      const now = results[index];
+      return result === now || JSON.stringify(result) === JSON.stringify(now);
+    })
   );
 }
 

@@ -5,6 +5,7 @@ import useSWR from 'swr';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { ask, sayFault } from '@/components/ui/ask';
 import { evaluationRequest } from './evaluation-request';
+import { digestsOf, mergeAnswer } from './merge-answer';
 import { foldAnswer, type CellAnswer, type Shown } from './shown';
 
 export interface Evaluation {
@@ -27,11 +28,21 @@ function useSettled(text: string): string {
   return settled;
 }
 
-const fetchAnswer = async ([path, text]: [string, string]) => {
-  const body = JSON.parse(text) as { cells: unknown[] };
+interface Answer {
+  cells: CellAnswer[];
+}
+
+/** Asks for a text and says what is had already, so that of a long notebook only what is different is sent. */
+async function fetchAnswer(
+  path: string,
+  text: string,
+  had: readonly CellAnswer[],
+): Promise<Answer> {
+  const body = JSON.parse(text) as ReturnType<typeof evaluationRequest>;
   if (body.cells.length === 0) return { cells: [] };
-  return ask<{ cells: CellAnswer[] }>(path, { body });
-};
+  const sent = await ask<Answer>(path, { body: { ...body, have: digestsOf(had) } });
+  return { cells: mergeAnswer(body.cells, had, sent.cells) };
+}
 
 /**
  * The notebook evaluated on the server as one types. The answer to an older text never shows: it
@@ -43,24 +54,25 @@ export function useEvaluation(content: NotebookContent, initial: CellAnswer[] | 
   const settled = useSettled(text);
   const [first] = useState(settled);
   const [slow, setSlow] = useState(false);
-  const { data, error, isLoading, isValidating } = useSWR<
-    { cells: CellAnswer[] },
-    unknown,
-    [string, string]
-  >(['/api/evaluate', settled], fetchAnswer, {
-    ...(initial !== null && settled === first ? { fallbackData: { cells: initial } } : {}),
-    keepPreviousData: true,
-    revalidateIfStale: false,
-    revalidateOnMount: initial === null,
-    revalidateOnFocus: false,
-    dedupingInterval: 60_000,
-    loadingTimeout: SLOW,
-    onLoadingSlow: () => setSlow(true),
-    onSuccess: () => setSlow(false),
-    onError: () => setSlow(false),
-  });
+  const [seen, setSeen] = useState<Answer | undefined>(undefined);
+  const had = seen?.cells ?? initial ?? [];
+  const { data, error, isLoading, isValidating } = useSWR<Answer, unknown, [string, string]>(
+    ['/api/evaluate', settled],
+    ([path, asked]) => fetchAnswer(path, asked, had),
+    {
+      ...(initial !== null && settled === first ? { fallbackData: { cells: initial } } : {}),
+      keepPreviousData: true,
+      revalidateIfStale: false,
+      revalidateOnMount: initial === null,
+      revalidateOnFocus: false,
+      dedupingInterval: 60_000,
+      loadingTimeout: SLOW,
+      onLoadingSlow: () => setSlow(true),
+      onSuccess: () => setSlow(false),
+      onError: () => setSlow(false),
+    },
+  );
 
-  const [seen, setSeen] = useState<typeof data>(undefined);
   const [shown, setShown] = useState<Shown>(() => foldAnswer(new Map(), initial ?? []));
   if (data !== undefined && data !== seen) {
     setSeen(data);

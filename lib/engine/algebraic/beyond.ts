@@ -155,11 +155,19 @@ export class Beyond {
       const box = isolate(poly, a.box(P), P);
       if (box === null) continue;
       const { isReal, origin } = a;
-      return { poly, isReal, box, precision: P, origin, verdict: this.verdictOf(a) };
+      return {
+        poly,
+        isReal,
+        box,
+        precision: P,
+        origin,
+        verdict: this.verdictOf(a),
+        name: this.naming.pack(a),
+      };
     }
   }
 
-  unpack({ poly, isReal, box, precision, origin, verdict }: PackedAlgebraic): Algebraic {
+  unpack({ poly, isReal, box, precision, origin, verdict, name }: PackedAlgebraic): Algebraic {
     const root = new Algebraic(
       [...poly],
       isReal,
@@ -167,6 +175,7 @@ export class Beyond {
       origin,
     );
     this.verdicts.set(root, verdict);
+    this.naming.unpack(root, name);
     return root;
   }
 

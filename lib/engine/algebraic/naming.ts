@@ -5,12 +5,13 @@
  */
 import { isRealCx, real, type Cx } from '../complex';
 import { isRationalEl, numerator } from '../element';
-import type { Budget } from '../limits';
+import { OverLimit, type Budget } from '../limits';
 import type { Field } from '../tower';
 import type { Written } from '../types';
 import { Algebraic } from './algebraic';
 import type { WrittenName } from './atoms';
 import { NamedSums, type NamedSum } from './named-sum';
+import { packSum, unpackSum, type PackedSum } from './packed-name';
 import { writeNamedSum, type Name } from './write-named-sum';
 import { writeRoot } from './writing';
 
@@ -35,7 +36,7 @@ export class Naming {
   private readonly sums: NamedSums;
 
   constructor(
-    field: Field,
+    private readonly field: Field,
     private readonly budget: Budget,
   ) {
     this.sums = new NamedSums(field);
@@ -54,6 +55,22 @@ export class Naming {
     this.made.set(outcome, { way, depth: depth % DEEPEST });
     if (depth === DEEPEST) way();
     return outcome;
+  }
+
+  /** How a number is to be written, to be kept with it; null where that is not known or went over a limit. */
+  pack(a: Algebraic): PackedSum | null {
+    try {
+      const sum = this.made.get(a)?.way() ?? null;
+      return sum && packSum(sum);
+    } catch (error) {
+      if (error instanceof OverLimit) return null;
+      throw error;
+    }
+  }
+
+  unpack(a: Algebraic, name: PackedSum | null): void {
+    if (name === null) return;
+    this.leave(a, [], () => unpackSum(this.field, name));
   }
 
   private depthOf(x: Value): number {
