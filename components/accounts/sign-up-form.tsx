@@ -28,7 +28,7 @@ const FIELDS = [
     label: 'Password',
     autoComplete: 'new-password',
     type: 'password',
-    hint: 'At least 10 characters; a few plain words are good.',
+    hint: 'At least 12 characters; a few plain words are good.',
   },
 ] as const;
 

@@ -15,7 +15,7 @@ export function LiveCell({ first }: { first: Trial }) {
     <div className="px-2 pb-5 pt-3 sm:px-3">
       <form
         action="/"
-        className="border border-snapline bg-hand px-3 pb-2 pt-1.5 has-[.cm-focused]:outline-2 has-[.cm-focused]:outline-offset-2 has-[.cm-focused]:outline-snapline"
+        className="border border-snapline bg-hand px-3 pb-2 pt-1.5 has-[.cm-content:focus]:outline-2 has-[.cm-content:focus]:outline-offset-2 has-[.cm-content:focus]:outline-snapline"
       >
         <div className="flex items-baseline justify-between gap-3 text-small text-soft">
           <span aria-hidden="true">Write here, a line for each mark</span>

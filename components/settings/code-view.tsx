@@ -30,7 +30,7 @@ export function CodeView({ text, label }: CodeViewProps) {
 
   return (
     <div className="space-y-2">
-      <div className="border border-rule bg-sheet">
+      <div className="border border-rule bg-sheet has-[.cm-content:focus]:outline-2 has-[.cm-content:focus]:outline-offset-2 has-[.cm-content:focus]:outline-snapline">
         <div ref={parent} />
         {!ready && (
           <pre tabIndex={0} className="overflow-x-auto p-3.5 font-mono text-small">
