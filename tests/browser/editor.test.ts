@@ -1,4 +1,5 @@
-import type { Locator } from 'playwright-core';
+import { AxeBuilder } from '@axe-core/playwright';
+import type { Locator, Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
 import { KEYS } from '@/components/sheet/cell-keys';
 import { IDA, useBrowser, type Visitor } from './support/browser';
@@ -188,6 +189,48 @@ async function isOnScreen(element: Locator): Promise<boolean> {
     return top >= 0 && bottom <= innerHeight;
   });
 }
+
+describe.each(['light', 'dark'] as const)('in %s', (colorScheme) => {
+  it('cards, signature, search, renaming and the sheet of keys have no fault known to axe', async () => {
+    const { ida, page, press, type } = await begin(`Parts in ${colorScheme}`);
+    await page.emulateMedia({ colorScheme });
+    await page.setViewportSize({ width: 390, height: 800 });
+    const faults = async () => {
+      const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
+      const { violations } = await new AxeBuilder({ page }).withTags(tags).analyze();
+      return violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html).join()}`);
+    };
+    await writeCells(ida, ['r = 600 mm sqrt(2)', 's = chord(r']);
+    await page.getByText('Degree', { exact: true }).first().waitFor();
+    await press('Shift+F1');
+    await page.locator('.word-card').waitFor();
+    expect(await faults()).toEqual([]);
+    expect(await overflow(page)).toBeLessThanOrEqual(0);
+
+    await press('Control+f');
+    await page.getByRole('search').getByRole('textbox').waitFor();
+    await type('r');
+    await page.getByRole('button', { name: 'Replace' }).click();
+    expect(await faults()).toEqual([]);
+    expect(await overflow(page)).toBeLessThanOrEqual(0);
+    await page.getByRole('search').getByRole('textbox').first().press('Escape');
+
+    for (const [key, title] of [
+      ['F2', 'Rename the mark r'],
+      ['F1', 'Keys of the sheet'],
+    ] as const) {
+      await press(key);
+      await page.getByRole('dialog', { name: title }).waitFor();
+      expect(await faults()).toEqual([]);
+      await press('Escape');
+      await page.getByRole('dialog').waitFor({ state: 'detached' });
+    }
+  });
+});
+
+/** Pixels by which the page is wider than the screen. */
+const overflow = (page: Page) =>
+  page.evaluate(() => document.documentElement.scrollWidth - innerWidth);
 
 describe('the keys', () => {
   it('are all on a sheet that opens by key and by button and gives the focus back', async () => {
