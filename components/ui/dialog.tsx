@@ -9,10 +9,12 @@ interface DialogProps {
   children: ReactNode;
   /** Wide dialogs hold comparisons; others keep to a column that reads well. */
   wide?: boolean;
+  /** Only read: the text itself takes the focus, so that the arrows move it. */
+  reading?: boolean;
 }
 
 /** The browser's own modal dialog: it holds the focus, closes on Escape and gives the focus back. */
-export function Dialog({ title, onClose, children, wide = false }: DialogProps) {
+export function Dialog({ title, onClose, children, wide = false, reading = false }: DialogProps) {
   const box = useRef<HTMLDialogElement>(null);
   const heading = useId();
   /** What had the focus before; an effect that runs a second time must not take the dialog for it. */
@@ -23,7 +25,7 @@ export function Dialog({ title, onClose, children, wide = false }: DialogProps) 
     const before = (opener.current ??= document.activeElement);
     if (dialog && !dialog.open) dialog.showModal();
     // Of itself the browser would choose the first button, which closes.
-    dialog?.querySelector<HTMLElement>('input, select, textarea')?.focus();
+    dialog?.querySelector<HTMLElement>('input, select, textarea, [data-reading]')?.focus();
     return () => {
       if (before instanceof HTMLElement && before.isConnected) before.focus();
     };
@@ -51,7 +53,14 @@ export function Dialog({ title, onClose, children, wide = false }: DialogProps) 
           Close
         </Button>
       </div>
-      <div className="max-h-[75dvh] space-y-4 overflow-y-auto px-5 py-4">{children}</div>
+      <div
+        className="max-h-[75dvh] space-y-4 overflow-y-auto px-5 py-4"
+        {...(reading
+          ? { tabIndex: 0, role: 'group', 'aria-labelledby': heading, 'data-reading': '' }
+          : {})}
+      >
+        {children}
+      </div>
     </dialog>
   );
 }

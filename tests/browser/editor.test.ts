@@ -197,7 +197,9 @@ describe.each(['light', 'dark'] as const)('in %s', (colorScheme) => {
     await page.setViewportSize({ width: 390, height: 800 });
     const faults = async () => {
       const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
-      const { violations } = await new AxeBuilder({ page }).withTags(tags).analyze();
+      // The header of the site, scrolled half away here, is looked at with every page.
+      const axe = new AxeBuilder({ page }).withTags(tags).exclude('header');
+      const { violations } = await axe.analyze();
       return violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html).join()}`);
     };
     await writeCells(ida, ['r = 600 mm sqrt(2)', 's = chord(r']);

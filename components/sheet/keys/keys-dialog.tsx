@@ -29,7 +29,7 @@ function Chord({ written, mac }: { written: string; mac: boolean }) {
 export function KeysDialog({ onClose }: { onClose: () => void }) {
   const mac = /Mac|iPhone|iPad/.test(navigator.platform);
   return (
-    <Dialog title="Keys of the sheet" onClose={onClose} wide>
+    <Dialog title="Keys of the sheet" onClose={onClose} wide reading>
       <div className="gap-x-10 md:columns-2">
         {KEY_GROUPS.map((group) => (
           <section key={group} className="mb-5 break-inside-avoid" aria-label={group}>
