@@ -1,4 +1,4 @@
-import { createHash } from 'node:crypto';
+import { hash } from 'node:crypto';
 import {
   type CellSource,
   type Outcome,
@@ -37,7 +37,7 @@ export function answerCells(
 }
 
 function digestOf(parts: readonly string[]): string {
-  return createHash('sha256').update(parts.join('\n')).digest('base64url').slice(0, 16);
+  return hash('sha256', parts.join('\n'), 'base64url').slice(0, 16);
 }
 
 /** `name` is there when it tells the whole result but for its place in the cell. */

@@ -1,4 +1,4 @@
-import { createHash } from 'node:crypto';
+import { hash } from 'node:crypto';
 import {
   type CellSource,
   type LineGraph,
@@ -27,8 +27,7 @@ export interface Plan {
   readonly settings: readonly Settings[];
 }
 
-const digest = (parts: unknown): string =>
-  createHash('sha256').update(JSON.stringify(parts)).digest('hex');
+const digest = (text: string): string => hash('sha256', text, 'hex');
 
 /**
  * Reads cells and names the outcome of every line by all that it depends on: the program, the settings of its cell, its
@@ -45,6 +44,7 @@ export function planCells(
   const problems = graph.lines.map((_, index) => findPlaceProblem(graph, index));
   const settings = new DistinctSettings(given);
   const ofCell = cells.map((cell) => settings.indexOf(cell.settings));
+  const heads = settings.all.map((one) => JSON.stringify([program, one]));
   const lines = graph.lines.map((): PlannedLine | undefined => undefined);
   for (const index of graph.order) {
     const line = graph.lines[index];
@@ -59,11 +59,11 @@ export function planCells(
         for (const [inner, value] of read.task.reads) reads.set(inner, value);
     }
     const functions = [...reads.keys()].filter((name) => graph.functions.has(name));
-    const value = digest([line.source, [...reads], functions]);
+    const value = digest(JSON.stringify([line.source, [...reads], functions]));
     const which = ofCell[line.cell] ?? 0;
     lines[index] = {
       task: { source: line.source, value, reads: [...reads], functions, settings: which },
-      outcome: digest([program, settings.all[which], value]),
+      outcome: digest(`${heads[which] ?? ''}${value}`),
     };
   }
   return { graph, problems, lines, settings: settings.all };

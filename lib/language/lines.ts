@@ -58,7 +58,11 @@ export function readCells(cells: readonly CellSource[]): LineGraph {
 /** Also of lines that do not parse: what such a line means to define is no product elsewhere. */
 function functionsIn(lines: readonly SourceLine[]): Set<string> {
   return new Set(
-    lines.flatMap(({ source, mark }) => (mark !== null && HEAD.test(source) ? [mark] : [])),
+    lines.flatMap(({ source, mark, statement }) => {
+      if (mark === null) return [];
+      const isFunction = statement === null ? HEAD.test(source) : statement.kind === 'function';
+      return isFunction ? [mark] : [];
+    }),
   );
 }
 

@@ -53,7 +53,8 @@ export function attachOnce(statement: Statement, functions: ReadonlySet<string>)
     forms = { heads: headsOf(statement), byFunctions: new Map() };
     formsOf.set(statement, forms);
   }
-  const called = forms.heads.filter((head) => functions.has(head)).join(' ');
+  const { heads } = forms;
+  const called = heads.length === 0 ? '' : heads.filter((head) => functions.has(head)).join(' ');
   let attached = forms.byFunctions.get(called);
   if (attached === undefined) {
     const changed = attachCalls(statement, (name, several) => several || functions.has(name));
