@@ -24,8 +24,9 @@ export function valueTex(result: Result): string | null {
   switch (result.kind) {
     case 'number': {
       const { exact, unit } = result;
-      if (unit === null) return exact.tex;
-      const value = isSum(exact.text) ? `\\left(${exact.tex}\\right)` : exact.tex;
+      const tex = stackLeft(exact.tex);
+      if (unit === null) return tex;
+      const value = isSum(exact.text) ? `\\left(${tex}\\right)` : tex;
       return `${value}\\,${unitTex(unit)}`;
     }
     case 'angle':
@@ -56,4 +57,11 @@ export function polynomialTex(coefficients: readonly string[]): string {
     return [`${sign}${size === '1' && x !== '' ? '' : size}${x}`];
   });
   return terms.join('').replace(/^\+/, '') || '0';
+}
+
+/** A stack of lines from the margin on instead of about its middle, so that a narrow row shows how each begins. */
+export function stackLeft(tex: string): string {
+  const stacked = /^\\begin\{gathered\}([\s\S]*)\\end\{gathered\}$/.exec(tex)?.[1];
+  if (stacked === undefined) return tex;
+  return `\\begin{aligned}&${stacked.replaceAll('\\\\', '\\\\&')}\\end{aligned}`;
 }

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { copyForms } from '@/components/sheet/copy-forms';
 import { reachCompartments, sayGuarantee } from '@/components/sheet/proof/say-proof';
 import { sayDecimal, shorten } from '@/components/sheet/say-number';
-import { polynomialTex } from '@/components/sheet/value-tex';
+import { polynomialTex, stackLeft } from '@/components/sheet/value-tex';
 import {
   compartmentsOf,
   sayBriefly,
@@ -279,5 +279,14 @@ describe('a polynomial', () => {
     [['-1', '0'], '-x'],
   ])('of coefficients %j is written %s', (coefficients, tex) => {
     expect(polynomialTex(coefficients)).toBe(tex);
+  });
+});
+
+describe('a stack of lines', () => {
+  it('begins at the margin, and what is no stack stays as it is', () => {
+    expect(stackLeft('\\begin{gathered}a=1\\\\b=2\\end{gathered}')).toBe(
+      '\\begin{aligned}&a=1\\\\&b=2\\end{aligned}',
+    );
+    expect(stackLeft('\\sqrt{2}')).toBe('\\sqrt{2}');
   });
 });
