@@ -7,6 +7,7 @@ const folder = path.join(root, '.build');
 const SOURCES = [
   'lib/engine',
   'lib/divisions',
+  'lib/geometry',
   'lib/shop',
   'lib/language',
   'lib/evaluation',

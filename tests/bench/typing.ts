@@ -92,6 +92,8 @@ function mainTasks(events: readonly TraceEvent[]): number[] {
 const sorted = (values: readonly number[]) => [...values].sort((a, b) => a - b);
 const part = (values: readonly number[], share: number) =>
   sorted(values)[Math.min(values.length - 1, Math.floor(values.length * share))] ?? 0;
+const print = (line: string): void => void process.stdout.write(`${line}\n`);
+
 const say = (value: number) => `${value.toFixed(1)} ms`;
 
 const browser = await chromium.launch({
@@ -130,15 +132,15 @@ try {
   const slowKeys = watched.keys;
   const keys = [...Array<number>(Math.max(0, KEYS - slowKeys.length)).fill(8), ...slowKeys];
   const { frames } = watched;
-  console.log(`${cells} cells, ${KEYS} keystrokes at ${1000 / PAUSE} a second`);
-  console.log(
+  print(`${cells} cells, ${KEYS} keystrokes at ${1000 / PAUSE} a second`);
+  print(
     `keystroke to paint: median ${say(part(keys, 0.5))}, 95 % ${say(part(keys, 0.95))}, longest ${say(part(keys, 1))}`,
   );
-  console.log(
+  print(
     `between frames: median ${say(part(frames, 0.5))}, 95 % ${say(part(frames, 0.95))}, longest ${say(part(frames, 1))}; ` +
       `${frames.filter((gap) => gap > 1.5 * FRAME).length} of ${frames.length} missed a frame`,
   );
-  console.log(
+  print(
     `main thread: ${tasks.filter((task) => task > FRAME).length} tasks longer than a frame, ` +
       `${tasks.filter((task) => task > 50).length} longer than 50 ms, longest ${say(part(tasks, 1))}`,
   );

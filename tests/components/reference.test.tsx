@@ -119,7 +119,7 @@ describe('putting lines in', () => {
           answer(200, { notebook: { version: heads.shift() }, content: content('a = 1') }),
         );
       }
-      saved.push(JSON.parse(String(init?.body)) as (typeof saved)[number]);
+      saved.push(JSON.parse(init?.body as string) as (typeof saved)[number]);
       return Promise.resolve(
         saved.length === 1
           ? answer(409, { code: 'stale-version', detail: 'Saved meanwhile.' })

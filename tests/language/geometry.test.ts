@@ -94,7 +94,7 @@ describe('results of figures', () => {
             point: p,
             line: `line(${x}, 2, ${length(y)})`,
             circle: `circle(${p}, 3${u})`,
-          }[kind] as string;
+          }[kind];
           const first = last(source, { unit: settings });
           if (!('exact' in first)) throw new Error(JSON.stringify(first));
           expect(holds(`${first.exact.text} == ${source}`)).toBe(true);

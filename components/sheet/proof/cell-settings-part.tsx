@@ -60,9 +60,7 @@ export function CellSettingsPart({ cell, whole, actions }: CellSettingsPartProps
         <Choice
           label="Unit"
           value={own.unit ?? SHEET}
-          onChange={({ target: { value } }) =>
-            set({ unit: value === SHEET ? undefined : (value as NotebookSettings['unit']) })
-          }
+          onChange={({ target: { value } }) => set({ unit: value === SHEET ? undefined : value })}
         >
           <option value={SHEET}>{`as the sheet: ${whole.unit}`}</option>
           {UNITS.map((unit) => (
@@ -73,7 +71,7 @@ export function CellSettingsPart({ cell, whole, actions }: CellSettingsPartProps
           label="Rounding"
           value={own.rounding ?? SHEET}
           onChange={({ target: { value } }) =>
-            set({ rounding: value === SHEET ? undefined : (value as NotebookSettings['rounding']) })
+            set({ rounding: value === SHEET ? undefined : value })
           }
         >
           <option value={SHEET}>{`as the sheet: ${ROUNDINGS[whole.rounding]}`}</option>

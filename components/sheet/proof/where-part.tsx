@@ -1,6 +1,6 @@
 'use client';
 
-import { useLayoutEffect, useState } from 'react';
+import { useSyncExternalStore } from 'react';
 import type { NotebookCell } from '@/lib/notebooks/content';
 import { findZone } from '@/components/drawing/zones';
 import { cellAnchor, type SheetActions } from '../cells';
@@ -16,12 +16,16 @@ interface WherePartProps {
   actions: SheetActions;
 }
 
+const subscribeToNothing = () => () => undefined;
+
 /** Where the value stands on the sheet, what it reads and what reads it. */
 export function WherePart({ cells, at, mark, actions }: WherePartProps) {
-  const [zone, setZone] = useState<string | null>(null);
-  useLayoutEffect(() => {
-    setZone(findZone(document.getElementById(cellAnchor(at.id))));
-  }, [at.id]);
+  // The letters beside the sheet are known only once it is laid out, so never on the server.
+  const zone = useSyncExternalStore(
+    subscribeToNothing,
+    () => findZone(document.getElementById(cellAnchor(at.id))),
+    () => null,
+  );
   const { definitions, readers } = findUses(cells);
   const section = sectionOf(cells, at.id);
   const place = cells.findIndex(({ id }) => id === at.id) + 1;

@@ -12,7 +12,7 @@ import {
 import { fail } from '../failure';
 import { LANGUAGE_LIMITS } from '../limits';
 import { list } from '../lists';
-import { type NumberValue, type Single, type Value, number } from '../values';
+import { type NumberValue, type Value, number } from '../values';
 import { fromNum } from '../pi-sum';
 import { figureValue } from '../values-geometry';
 import { partOfTurn } from './circular';
@@ -106,7 +106,7 @@ export function ringOfPoints(engine: Engine, args: Arguments): Value {
       'limit-size',
       `The ring would have ${parts} points; the limit is ${LANGUAGE_LIMITS.listItems}.`,
     );
-  const start = fourth === undefined ? TOP : partOfTurn(engine, fourth as Single);
+  const start = fourth === undefined ? TOP : partOfTurn(engine, fourth);
   const points = ring(engine, middle.figure, size, Number(parts), start);
   return list(points.map((each) => figureValue(each, length)));
 }
