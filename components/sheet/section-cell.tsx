@@ -1,7 +1,8 @@
 'use client';
 
 import { memo, useLayoutEffect, useRef, type KeyboardEvent } from 'react';
-import { CONTENT_LIMITS, type NotebookCell } from '@/lib/notebooks/content';
+import type { NotebookCell } from '@/lib/notebooks/content';
+import { CONTENT_LIMITS } from '@/lib/notebooks/content-values';
 import { SectionRule } from '@/components/drawing/section-rule';
 import { onCellKey } from './keys/on-cell-key';
 import { CellTools } from './cell-tools';

@@ -1,8 +1,5 @@
-import {
-  DEFAULT_NOTEBOOK_SETTINGS,
-  type NotebookCell,
-  type NotebookSettings,
-} from '@/lib/notebooks/content';
+import type { NotebookCell, NotebookSettings } from '@/lib/notebooks/content';
+import { DEFAULT_NOTEBOOK_SETTINGS } from '@/lib/notebooks/content-values';
 
 /** What a starter puts onto an empty sheet. */
 export interface Starter {

@@ -1,8 +1,5 @@
-import {
-  DEFAULT_NOTEBOOK_SETTINGS,
-  NotebookContent,
-  type NotebookCell,
-} from '@/lib/notebooks/content';
+import { NotebookContent, type NotebookCell } from '@/lib/notebooks/content';
+import { DEFAULT_NOTEBOOK_SETTINGS } from '@/lib/notebooks/content-values';
 
 export type DemoPerson = 'ida' | 'tam' | 'wren';
 

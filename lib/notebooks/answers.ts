@@ -10,7 +10,8 @@ import {
 } from '@/lib/evaluation';
 import { databaseStore } from '@/lib/evaluation/database-store';
 import { Failure } from '@/lib/access';
-import { settingsField, type NotebookContent } from './content';
+import type { NotebookContent } from './content';
+import { settingsField } from './content-values';
 
 const holder = globalThis as typeof globalThis & { surdworkAnswersKept?: true };
 

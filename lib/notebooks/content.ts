@@ -1,26 +1,10 @@
 import { z } from 'zod';
+import { CONTENT_LIMITS, DEFAULT_NOTEBOOK_SETTINGS, settingsField } from './content-values';
 
 /**
  * What one version of a notebook holds. The same schema checks a save, a draft kept by the browser
  * and a seed; it is strict, so that a field nobody knows is refused instead of silently lost.
  */
-export const CONTENT_LIMITS = {
-  /** Cells in a notebook. */
-  cells: 2_000,
-  /** UTF-16 units of one cell's source. */
-  source: 20_000,
-  /** UTF-16 units of all sources together. */
-  total: 1_000_000,
-  /** UTF-16 units of a cell's id. */
-  cellId: 40,
-  /** Significant digits a notebook may ask its decimals to have. */
-  digits: 1000,
-  /** UTF-16 units of a cutting step such as `0.5 mm`. */
-  step: 40,
-  /** UTF-16 units of the heading of a section. */
-  heading: 200,
-} as const;
-
 const plural = (n: number, one: string) => `${n} ${one}${n === 1 ? '' : 's'}`;
 
 export const NotebookSettings = z.strictObject({
@@ -48,14 +32,6 @@ export const NotebookSettings = z.strictObject({
   }),
 });
 export type NotebookSettings = z.infer<typeof NotebookSettings>;
-
-/** The settings of a notebook nobody has set yet (the defaults of the result schema). */
-export const DEFAULT_NOTEBOOK_SETTINGS: NotebookSettings = {
-  digits: 30,
-  unit: 'mm',
-  step: null,
-  rounding: 'half-even',
-};
 
 /**
  * What one dimension cell is given in instead of the notebook's settings; what is left out follows
@@ -171,13 +147,4 @@ export function canonicalContent(content: NotebookContent): NotebookContent {
       ...settingsField(settings),
     })),
   };
-}
-
-const SETTING_NAMES = ['digits', 'unit', 'step', 'rounding'] as const;
-
-/** The `settings` of a cell in their fixed order, or no such field where they set nothing. */
-export function settingsField(settings: CellSettings | undefined): { settings?: CellSettings } {
-  const set = SETTING_NAMES.filter((name) => settings?.[name] !== undefined);
-  if (settings === undefined || set.length === 0) return {};
-  return { settings: Object.fromEntries(set.map((name) => [name, settings[name]])) };
 }

@@ -1,11 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import {
-  CONTENT_LIMITS,
-  NotebookContent,
-  canonicalContent,
-  emptyContent,
-} from '@/lib/notebooks/content';
+import { NotebookContent, canonicalContent, emptyContent } from '@/lib/notebooks/content';
+import { CONTENT_LIMITS } from '@/lib/notebooks/content-values';
 import { SavableContent } from '@/lib/notebooks/savable';
 
 const cell = fc.record({

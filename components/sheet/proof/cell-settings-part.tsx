@@ -1,12 +1,8 @@
 'use client';
 
 import { useState } from 'react';
-import {
-  CONTENT_LIMITS,
-  type CellSettings,
-  type NotebookCell,
-  type NotebookSettings,
-} from '@/lib/notebooks/content';
+import type { CellSettings, NotebookCell, NotebookSettings } from '@/lib/notebooks/content';
+import { CONTENT_LIMITS } from '@/lib/notebooks/content-values';
 import { Button } from '@/components/ui/button';
 import { Choice, Field } from '@/components/ui/field';
 import type { SheetActions } from '../cells';

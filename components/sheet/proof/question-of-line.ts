@@ -1,4 +1,5 @@
-import { settingsField, type NotebookContent } from '@/lib/notebooks/content';
+import type { NotebookContent } from '@/lib/notebooks/content';
+import { settingsField } from '@/lib/notebooks/content-values';
 import { linesOf } from '../source-text';
 import { linesNeededBy, type Place } from '../state/uses';
 

@@ -1,10 +1,10 @@
-import {
-  settingsField,
-  type CellSettings,
-  type NotebookCell,
-  type NotebookContent,
-  type NotebookSettings,
+import type {
+  CellSettings,
+  NotebookCell,
+  NotebookContent,
+  NotebookSettings,
 } from '@/lib/notebooks/content';
+import { settingsField } from '@/lib/notebooks/content-values';
 
 /** Everything a person can do to what is on the sheet. */
 export type Change =

@@ -1,4 +1,5 @@
-import { settingsField, type NotebookContent } from '@/lib/notebooks/content';
+import type { NotebookContent } from '@/lib/notebooks/content';
+import { settingsField } from '@/lib/notebooks/content-values';
 
 /** What is asked of the evaluation for a notebook: its dimension cells that hold anything. */
 export function evaluationRequest({ cells, settings }: NotebookContent) {
