@@ -104,7 +104,7 @@ describe('what is sent', () => {
     ['an over-long source', { title: 'x', content: content('1'.repeat(20_001)) }, 422, 'invalid'],
     [
       'too many cells',
-      { title: 'x', content: content(...Array<string>(401).fill('1')) },
+      { title: 'x', content: content(...Array<string>(2_001).fill('1')) },
       422,
       'invalid',
     ],
