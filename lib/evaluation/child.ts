@@ -1,3 +1,4 @@
+import './compile-late';
 import { writeSync } from 'node:fs';
 import { certifyLine, evaluateCells } from '@/lib/language/index';
 import { KnownValues } from './known-values';
