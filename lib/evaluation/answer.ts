@@ -19,46 +19,55 @@ export interface AnsweredCell {
   digest: string;
 }
 
-/** Puts the outcomes of all lines in their places, cell by cell; a line that was not come to is answered all the same. */
+/**
+ * Puts the outcomes of all lines in their places, cell by cell; a line that was not come to is answered all the same.
+ * Cells whose digest the client has, by `have`, are left out.
+ */
 export function answerCells(
   cells: readonly CellSource[],
   plan: Plan,
   fates: ReadonlyMap<string, Fate>,
+  have: Readonly<Record<string, string>> = {},
 ): AnsweredCell[] {
-  const answered = cells.map(({ id }) => ({ id, results: [] as Result[], hash: [] as string[] }));
+  const byCell = cells.map((): AnsweredLine[] => []);
   plan.graph.lines.forEach((line, index) => {
-    const cell = answered[line.cell];
-    if (cell === undefined) return;
-    const { result, name } = answerLine(plan, index, fates);
-    cell.results.push(result);
-    cell.hash.push(`${line.line} ${name ?? JSON.stringify(result)}`);
+    byCell[line.cell]?.push(answerLine(plan, index, fates));
   });
-  return answered.map(({ id, results, hash }) => ({ id, results, digest: digestOf(hash) }));
+  return cells.flatMap(({ id }, cell) => {
+    const lines = byCell[cell] ?? [];
+    const digest = digestOf(lines.map(({ key }) => key).join('\n'));
+    return have[id] === digest ? [] : [{ id, results: lines.map(({ give }) => give()), digest }];
+  });
 }
 
-function digestOf(parts: readonly string[]): string {
-  return hash('sha256', parts.join('\n'), 'base64url').slice(0, 16);
+interface AnsweredLine {
+  /** Tells the whole result. */
+  readonly key: string;
+  readonly give: () => Result;
 }
 
-/** `name` is there when it tells the whole result but for its place in the cell. */
-function answerLine(
-  { graph, problems, lines }: Plan,
-  index: number,
-  fates: ReadonlyMap<string, Fate>,
-): { result: Result; name?: string } {
-  const problem = problems[index];
-  if (problem !== null && problem !== undefined)
-    return { result: refusedResult(graph, index, problem) };
+const digestOf = (key: string): string => hash('sha256', key, 'base64url').slice(0, 16);
+
+function answerLine(plan: Plan, index: number, fates: ReadonlyMap<string, Fate>): AnsweredLine {
+  const { graph, lines } = plan;
   const name = lines[index]?.outcome ?? '';
   const fate = fates.get(name);
-  if (fate?.kind === 'outcome') {
-    const result = resultOf(graph, index, fate.outcome);
-    return isPlaceless(fate) ? { result, name } : { result };
-  }
+  const line = graph.lines[index]?.line ?? 0;
+  if (fate?.kind === 'outcome' && isPlaceless(fate))
+    // The name tells the whole result but for its place in the cell, so that most results need not be put together.
+    return { key: `${line} ${name}`, give: () => resultOf(graph, index, fate.outcome) };
+  const result = refusedOrPlaced(plan, index, fate);
+  return { key: `${line} ${JSON.stringify(result)}`, give: () => result };
+}
+
+function refusedOrPlaced({ graph, problems }: Plan, index: number, fate: Fate | undefined): Result {
+  const problem = problems[index];
+  if (problem !== null && problem !== undefined) return refusedResult(graph, index, problem);
+  if (fate?.kind === 'outcome') return resultOf(graph, index, fate.outcome);
   const { code, message } = fate?.refusal ?? OUT_OF_TIME;
   const { from, to } = graph.lines[index]?.statement ?? { from: 0, to: 0 };
   const error: Problem = { code, message, from, to };
-  return { result: refusedResult(graph, index, error) };
+  return refusedResult(graph, index, error);
 }
 
 const isPlaceless = ({ outcome, lasting }: { outcome: Outcome; lasting: boolean }): boolean =>

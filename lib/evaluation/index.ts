@@ -92,20 +92,20 @@ export async function evaluate(
     if (result === undefined) throw new Error('A line that is not blank has a result.');
     return { ...head, result };
   }
-  const cells = await answer(request.cells ?? [], settings, keep);
-  if (have === undefined)
-    return { ...head, cells: cells.map(({ id, results }) => ({ id, results })) };
-  // What the client has is left out; its digest covers all that a result says.
-  return { ...head, cells: cells.filter(({ id, digest }) => have[id] !== digest) };
+  const cells = await answer(request.cells ?? [], settings, keep, have);
+  return have === undefined
+    ? { ...head, cells: cells.map(({ id, results }) => ({ id, results })) }
+    : { ...head, cells };
 }
 
 async function answer(
   cells: readonly CellSource[],
   settings: NonNullable<EvaluateRequest['settings']>,
   keep: boolean,
+  have: EvaluateRequest['have'] = {},
 ): Promise<AnsweredCell[]> {
   const plan = planCells(await programIdentity(), cells, settings);
-  return answerCells(cells, plan, await findFates(plan, keep));
+  return answerCells(cells, plan, await findFates(plan, keep), have);
 }
 
 /** What becomes of every line of a plan, by the name of its outcome. */
@@ -117,17 +117,7 @@ async function findFates(plan: Plan, keep: boolean): Promise<ReadonlyMap<string,
   for (const [name, outcome] of known) fates.set(name, { kind: 'outcome', outcome, lasting: true });
   if (known.size === names.size) return fates;
 
-  const tasks: Task[] = [];
-  const wanted = new Map<number, string>();
-  const asked = new Set(known.keys());
-  for (const index of plan.graph.order) {
-    const line = plan.lines[index];
-    if (line === undefined) continue;
-    const isWanted = !asked.has(line.outcome);
-    if (isWanted) wanted.set(tasks.length, line.outcome);
-    tasks.push(isWanted ? line.task : { ...line.task, settings: null });
-    asked.add(line.outcome);
-  }
+  const { tasks, wanted } = tasksFor(plan, known);
   const finished = await work({ tasks, settings: plan.settings, keep });
   for (const fault of finished.faults) console.error(`evaluation: ${fault}`);
   const fresh = new Map<string, Outcome>();
@@ -142,6 +132,36 @@ async function findFates(plan: Plan, keep: boolean): Promise<ReadonlyMap<string,
   for (const [name, outcome] of fresh) memory.keep(name, outcome);
   if (fresh.size > 0) void lasting?.write(fresh).catch(() => undefined);
   return fates;
+}
+
+/** The lines whose outcomes are not known, and before them all that they read, at any remove. */
+function tasksFor(
+  { graph, lines }: Plan,
+  known: ReadonlyMap<string, Outcome>,
+): { tasks: Task[]; wanted: Map<number, string> } {
+  const first = new Map<string, number>();
+  for (const index of graph.order) {
+    const line = lines[index];
+    if (line !== undefined && !known.has(line.outcome) && !first.has(line.outcome))
+      first.set(line.outcome, index);
+  }
+  const chosen: { task: Task; name: string | null }[] = [];
+  const read = new Set<string | null>();
+  for (const index of graph.order.toReversed()) {
+    const line = lines[index];
+    if (line === undefined) continue;
+    const isWanted = first.get(line.outcome) === index;
+    if (!isWanted && !read.has(line.task.value)) continue;
+    if (isWanted) chosen.push({ task: line.task, name: line.outcome });
+    else chosen.push({ task: { ...line.task, settings: null }, name: null });
+    for (const [, value] of line.task.reads) read.add(value);
+  }
+  chosen.reverse();
+  const wanted = new Map<number, string>();
+  chosen.forEach(({ name }, place) => {
+    if (name !== null) wanted.set(place, name);
+  });
+  return { tasks: chosen.map(({ task }) => task), wanted };
 }
 
 /**

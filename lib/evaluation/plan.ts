@@ -4,6 +4,7 @@ import {
   type LineGraph,
   type Problem,
   type Settings,
+  type SourceLine,
   DEFAULT_SETTINGS,
   findDefinition,
   findPlaceProblem,
@@ -58,15 +59,50 @@ export function planCells(
       if (read !== undefined && graph.functions.has(name))
         for (const [inner, value] of read.task.reads) reads.set(inner, value);
     }
-    const functions = [...reads.keys()].filter((name) => graph.functions.has(name));
-    const value = digest(JSON.stringify([line.source, [...reads], functions]));
     const which = ofCell[line.cell] ?? 0;
-    lines[index] = {
-      task: { source: line.source, value, reads: [...reads], functions, settings: which },
-      outcome: digest(`${heads[which] ?? ''}${value}`),
-    };
+    lines[index] = nameLine(line, [...reads], graph.functions, which, heads[which] ?? '');
   }
   return { graph, problems, lines, settings: settings.all };
+}
+
+/** The name given last to a line, by its statement, with all that it was made of. */
+const named = new WeakMap<
+  NonNullable<SourceLine['statement']>,
+  { readonly head: string; readonly line: PlannedLine }
+>();
+
+/**
+ * The task of a line and its names. Most lines of a notebook read the same values as in the request before; a name is
+ * made anew only where one of them, or the settings, changed.
+ */
+function nameLine(
+  { source, statement }: SourceLine,
+  reads: Task['reads'],
+  functionsOfAll: ReadonlySet<string>,
+  settings: number,
+  head: string,
+): PlannedLine {
+  const functions = reads.flatMap(([name]) => (functionsOfAll.has(name) ? [name] : []));
+  const before = statement === null ? undefined : named.get(statement);
+  const { task } = before?.line ?? {};
+  const isSame =
+    task !== undefined &&
+    task.source === source &&
+    task.functions.length === functions.length &&
+    task.functions.every((name, place) => name === functions[place]) &&
+    task.reads.length === reads.length &&
+    task.reads.every(([mark, value], place) => {
+      const [otherMark, other] = reads[place] ?? [];
+      return mark === otherMark && value === other;
+    });
+  if (isSame && before?.head === head && task.settings === settings) return before.line;
+  const value = isSame ? task.value : digest(JSON.stringify([source, reads, functions]));
+  const line = {
+    task: { source, value, reads, functions, settings },
+    outcome: digest(`${head}${value}`),
+  };
+  if (statement !== null) named.set(statement, { head, line });
+  return line;
 }
 
 /** The settings of the notebook and those that differ from them in some cell, each once. */

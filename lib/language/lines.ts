@@ -2,6 +2,7 @@ import type { Problem } from './failure';
 import { classOfWord } from './names';
 import { orderByDependence } from './graph';
 import { attachOnce, readLineOnce } from './read-once';
+import { rememberByText } from './remember-by-text';
 import type { Settings } from './settings';
 import { type MarkNode, type Statement, markDefinedBy } from './syntax';
 
@@ -37,60 +38,65 @@ export interface LineGraph {
   readonly cycles: ReadonlyMap<number, readonly number[]>;
 }
 
+/** What a line says by itself, wherever it stands. */
+interface PlainLine {
+  readonly line: number;
+  readonly source: string;
+  readonly mark: string | null;
+  readonly statement: Statement | null;
+  readonly problem: Problem | null;
+  /** Also of a line that does not parse: what it means to define is no product elsewhere. */
+  readonly isFunction: boolean;
+}
+
 /** Reads all lines of all cells and orders them so that what a line reads comes before it. */
 export function readCells(cells: readonly CellSource[]): LineGraph {
-  const plain = cells.flatMap((cell, index) => readCell(cell.source, index));
-  const functions = functionsIn(plain);
-  const lines = plain.map((line) =>
-    line.statement === null ? line : { ...line, ...attachOnce(line.statement, functions) },
-  );
+  const plain = cells.map(({ source }) => readCellOnce(source));
+  const functions = new Set<string>();
+  for (const cell of plain)
+    for (const { mark, isFunction } of cell) if (isFunction && mark !== null) functions.add(mark);
+  const lines: SourceLine[] = [];
   const definitions = new Map<string, number[]>();
-  lines.forEach(({ mark }, index) => {
-    if (mark === null) return;
-    const known = definitions.get(mark);
-    if (known === undefined) definitions.set(mark, [index]);
-    else known.push(index);
+  plain.forEach((ofCell, cell) => {
+    for (const { line, source, mark, statement: read, problem } of ofCell) {
+      if (mark !== null) {
+        const known = definitions.get(mark);
+        if (known === undefined) definitions.set(mark, [lines.length]);
+        else known.push(lines.length);
+      }
+      const { statement, reads } = read === null ? UNREAD : attachOnce(read, functions);
+      lines.push({ cell, line, source, mark, statement, problem, reads });
+    }
   });
   const reads = lines.map((line) => line.reads.flatMap(({ name }) => definitions.get(name) ?? []));
   return { lines, definitions, functions, ...orderByDependence(reads) };
 }
 
-/** Also of lines that do not parse: what such a line means to define is no product elsewhere. */
-function functionsIn(lines: readonly SourceLine[]): Set<string> {
-  return new Set(
-    lines.flatMap(({ source, mark, statement }) => {
-      if (mark === null) return [];
-      const isFunction = statement === null ? HEAD.test(source) : statement.kind === 'function';
-      return isFunction ? [mark] : [];
-    }),
-  );
-}
+const UNREAD = { statement: null, reads: [] } as const;
 
-function readCell(source: string, cell: number): SourceLine[] {
-  return source.split(/\r\n|\n|\r/).flatMap((text, index): SourceLine[] => {
+const readCellOnce = rememberByText((source) =>
+  source.split(/\r\n|\n|\r/).flatMap((text, index): PlainLine[] => {
     const reading = readLineOnce(text);
-    const common = { cell, line: index + 1, source: text };
+    const line = index + 1;
     switch (reading.kind) {
       case 'blank':
         return [];
-      case 'problem':
+      case 'problem': {
+        const { problem } = reading;
+        const mark = markOfLine(text);
         return [
-          {
-            ...common,
-            mark: markOfLine(text),
-            statement: null,
-            problem: reading.problem,
-            reads: [],
-          },
+          { line, source: text, mark, statement: null, problem, isFunction: HEAD.test(text) },
         ];
+      }
       case 'statement': {
         const { statement } = reading;
         const mark = markDefinedBy(statement);
-        return [{ ...common, mark, statement, problem: null, reads: [] }];
+        const isFunction = statement.kind === 'function';
+        return [{ line, source: text, mark, statement, problem: null, isFunction }];
       }
     }
-  });
-}
+  }),
+);
 
 /** A mark, or a function with its parameters, before the sign of a definition. */
 const DEFINED = /^\s*(\p{L}[\p{L}\d_]*)\s*(?:\([^()=]*\)\s*)?=(?!=)/u;

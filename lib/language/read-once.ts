@@ -1,5 +1,6 @@
 import { attachCalls } from './attach-calls';
-import { type Reading, readLine } from './read';
+import { readLine } from './read';
+import { rememberByText } from './remember-by-text';
 import { type MarkNode, type Statement, marksReadBy } from './syntax';
 
 /** A statement as the notebook makes it, with the marks and functions that it reads. */
@@ -8,35 +9,8 @@ export interface Attached {
   readonly reads: readonly MarkNode[];
 }
 
-/** Characters of sources whose readings are kept; a reading takes some hundred times the room of its source. */
-const MOST_CHARACTERS = 400_000;
-/** An entry has its price whatever its text. */
-const roomOf = (text: string): number => text.length + 20;
-
-const known = new Map<string, Reading>();
-let characters = 0;
-
-/**
- * `readLine`, which is a function of the text alone, with the readings of the texts seen last kept: of a notebook that
- * is evaluated at every pause of the typing all lines but one are the same as before.
- */
-export function readLineOnce(text: string): Reading {
-  const found = known.get(text);
-  if (found !== undefined) {
-    known.delete(text);
-    known.set(text, found);
-    return found;
-  }
-  const reading = readLine(text);
-  known.set(text, reading);
-  characters += roomOf(text);
-  for (const oldest of known.keys()) {
-    if (characters <= MOST_CHARACTERS) break;
-    known.delete(oldest);
-    characters -= roomOf(oldest);
-  }
-  return reading;
-}
+/** `readLine`, which is a function of the text alone, with the readings of the texts seen last kept. */
+export const readLineOnce = rememberByText(readLine);
 
 /** What is known of a statement as it was read: its names before brackets, and what it becomes with some of them functions. */
 interface Forms {

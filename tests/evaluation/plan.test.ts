@@ -1,4 +1,5 @@
-import { describe, expect, it } from 'vitest';
+import fc from 'fast-check';
+import { describe, expect, it, vi } from 'vitest';
 import { planCells } from '@/lib/evaluation/plan';
 import type { Settings } from '@/lib/language/index';
 
@@ -76,4 +77,39 @@ describe('names of outcomes', () => {
       undefined,
     ]);
   });
+});
+
+describe('a plan', () => {
+  /** So few that one text comes up with other reads, as a function and with other settings. */
+  const source = fc.constantFrom(
+    'a = 1',
+    'a = 2',
+    'b = a + 1',
+    'b = a(2)',
+    'a(t) = t + c',
+    'c = 3',
+    'c = b + 1',
+    'a + b\nb < c',
+    'a(2) + c',
+    'x where x = a(c)',
+    '# remark',
+    'a +',
+  );
+  const settings = fc.constantFrom({}, { digits: 5 }, { unit: 'in' as const });
+  const notebook = fc.array(fc.record({ source, settings }), { maxLength: 8 });
+  const withIds = (cells: Cells) => cells.map((cell, index) => ({ id: String(index), ...cell }));
+
+  it('is the same whatever was planned before', async () => {
+    await fc.assert(
+      fc.asyncProperty(fc.array(notebook, { minLength: 2, maxLength: 12 }), async (notebooks) => {
+        const plans = notebooks.map((cells) => planCells('p', withIds(cells), {}));
+        vi.resetModules();
+        const fresh = await import('@/lib/evaluation/plan');
+        // From the last to the first, so that each was planned after others than here.
+        for (const [index, cells] of [...notebooks.entries()].reverse())
+          expect(plans[index]).toEqual(fresh.planCells('p', withIds(cells), {}));
+      }),
+      { numRuns: 25 },
+    );
+  }, 120_000);
 });
