@@ -4,7 +4,7 @@ import path from 'node:path';
 import { createInterface } from 'node:readline';
 import type { Socket } from 'node:net';
 import { EVALUATION_LIMITS } from './limits';
-import type { CertifyJob, Job, Report } from './messages';
+import type { CertifyJob, Job, Report, SentReport } from './messages';
 
 /** The bundle of `child.ts`. The path is made at run time so that a bundler of the application leaves it alone. */
 export function bundlePath(): string {
@@ -25,7 +25,8 @@ export type Ending = 'stopped' | 'memory' | 'processor-time' | 'crash';
  * parent is gone, through the limit on processor time that it is started with.
  */
 export class EvaluationChild {
-  processorTime = 0;
+  /** Milliseconds of processor time that the child had had when it last reported. */
+  spent = 0;
   private readonly child: ChildProcess;
   private stopped = false;
   private listener: ((report: Report) => void) | null = null;
@@ -55,7 +56,8 @@ export class EvaluationChild {
       void this.ended.then(() => resolve());
       if (this.child.stdout === null) return;
       createInterface({ input: this.child.stdout }).on('line', (line) => {
-        const report = JSON.parse(line) as Report;
+        const report = JSON.parse(line) as SentReport;
+        this.spent = report.spent;
         if (report.kind === 'ready') resolve();
         else this.listener?.(report);
       });
@@ -80,7 +82,6 @@ export class EvaluationChild {
     this.hold(true);
     this.listener = (report) => {
       if (report.job !== job.job) return;
-      if (report.kind === 'done') this.processorTime = report.processorTime;
       listener(report);
     };
     this.child.send(job, () => undefined);

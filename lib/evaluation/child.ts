@@ -3,7 +3,7 @@ import { writeSync } from 'node:fs';
 import { certifyLine, evaluateCells } from '@/lib/language/index';
 import { KnownValues } from './known-values';
 import { EVALUATION_LIMITS } from './limits';
-import type { CertifyJob, Job, Refusal, Report } from './messages';
+import type { CertifyJob, Job, Refusal, Report, SentReport } from './messages';
 import { proposeSolutions } from './propose';
 import { runJob } from './run-job';
 
@@ -12,7 +12,9 @@ import { runJob } from './run-job';
  * Reports go out by a blocking write, so that a report stands even if the next line never ends or ends the process.
  */
 function report(message: Report): void {
-  const bytes = Buffer.from(`${JSON.stringify(message)}\n`);
+  const { user, system } = process.cpuUsage();
+  const sent: SentReport = { ...message, spent: (user + system) / 1e3 };
+  const bytes = Buffer.from(`${JSON.stringify(sent)}\n`);
   for (let written = 0; written < bytes.length;) written += writeSync(1, bytes, written);
 }
 
@@ -22,8 +24,7 @@ function run(job: Job): void {
   try {
     const values = job.keep ? known : new KnownValues(EVALUATION_LIMITS.childValues);
     runJob(job, values, report, proposeSolutions);
-    const { user, system } = process.cpuUsage();
-    report({ kind: 'done', job: job.job, processorTime: (user + system) / 1e6 });
+    report({ kind: 'done', job: job.job });
   } catch (error) {
     report({
       kind: 'fault',

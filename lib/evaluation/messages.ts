@@ -35,6 +35,9 @@ export interface Job {
   readonly brief: readonly (readonly [task: number, Refusal])[];
 }
 
+/** A report as it is sent: with the milliseconds of processor time that the child has had since its start. */
+export type SentReport = Report & { readonly spent: number };
+
 /** What a child reports, one JSON line each, written before it goes on. Tasks are named by their position in the job. */
 export type Report =
   | { readonly kind: 'ready'; readonly job: 0 }
@@ -53,12 +56,7 @@ export type Report =
       readonly refusal: Refusal;
       readonly detail: string;
     }
-  | {
-      readonly kind: 'done';
-      readonly job: number;
-      /** Processor time of the child since its start, in seconds. */
-      readonly processorTime: number;
-    }
+  | { readonly kind: 'done'; readonly job: number }
   | { readonly kind: 'certified'; readonly job: number; readonly answer: Certified };
 
 /** Asks a child for the certificate of one line instead of results; it answers `certified`, or `fault`. */

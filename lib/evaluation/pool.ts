@@ -70,7 +70,7 @@ export class Pool {
     if (
       !this.closed &&
       child.alive &&
-      child.processorTime < EVALUATION_LIMITS.retireProcessorTime
+      child.spent < EVALUATION_LIMITS.retireProcessorTime * 1_000
     ) {
       this.idle.push(child);
     } else {

@@ -14,7 +14,7 @@ export class Watch {
   private memoryTimer: NodeJS.Timeout | undefined;
   private refuse: ((refusal: Refusal) => void) | null = null;
   private allowed = 0;
-  private spentBefore: number | null = null;
+  private spentBefore = 0;
 
   constructor(
     private readonly child: EvaluationChild,
@@ -32,13 +32,13 @@ export class Watch {
     this.begin(null);
   }
 
-  /** A line starts, or its second part after it has its value, or the time between two lines. */
+  /** As the child has just reported, a line starts, or its second part after it has its value, or the time between two lines. */
   begin(task: number | null, valued = false): void {
     this.task = task;
     this.valued = valued;
     const left = this.left();
     this.allowed = Math.ceil(task === null ? left : Math.min(this.limits.lineTime, left / 2));
-    this.spentBefore = this.child.processorMilliseconds();
+    this.spentBefore = this.child.spent;
     this.wait(this.allowed);
   }
 
@@ -58,7 +58,7 @@ export class Watch {
   /** On a busy machine a line may wait for a processor: what it has not had yet it gets, while the request lasts. */
   private missingTime(): number {
     const spent = this.child.processorMilliseconds();
-    if (spent === null || this.spentBefore === null) return 0;
+    if (spent === null) return 0;
     const missing = this.allowed - (spent - this.spentBefore);
     return missing < this.allowed / 4 || this.left() < LEAST_WAIT
       ? 0

@@ -64,12 +64,20 @@ const have: Record<string, string> = {};
 
 async function ask(cells: readonly Cell[], withDigests: boolean) {
   const sent = JSON.stringify({ cells, settings, ...(withDigests ? { have } : {}) });
+  const before = process.cpuUsage();
   const start = performance.now();
   const answer = await evaluate(EvaluateRequest.parse(JSON.parse(sent)));
   const received = JSON.stringify(answer);
   const time = performance.now() - start;
+  const { user, system } = process.cpuUsage(before);
   for (const { id, digest } of answer.cells ?? []) if (digest !== undefined) have[id] = digest;
-  return { time, sent: sent.length, received: received.length, answer };
+  return {
+    time,
+    processor: (user + system) / 1e3,
+    sent: sent.length,
+    received: received.length,
+    answer,
+  };
 }
 
 const sorted = (times: readonly number[]): number[] => [...times].sort((a, b) => a - b);
@@ -83,10 +91,12 @@ const inMilliseconds = (time: number): string => `${time.toFixed(1)} ms`;
 await ensureBundles();
 await ask([{ id: 'warm', source: '1' }], false);
 const full: number[] = [];
+const fullProcessor: number[] = [];
 let failed = 0;
 for (let run = 0; run < FULL_RUNS; run += 1) {
-  const { time, answer } = await ask(notebook(1000 * run), false);
+  const { time, processor, answer } = await ask(notebook(1000 * run), false);
   full.push(time);
+  fullProcessor.push(processor);
   failed += (answer.cells ?? [])
     .flatMap(({ results }) => results)
     .filter(({ kind }) => kind === 'error').length;
@@ -99,21 +109,25 @@ row(
   'the same, first and slowest',
   `${inMilliseconds(full[0] ?? NaN)}, ${inMilliseconds(Math.max(...full))}`,
 );
+row('processor time of the server, children apart, median', inMilliseconds(median(fullProcessor)));
 row('lines in error (none are meant to be)', String(failed));
 
 const cells = notebook(1000 * (FULL_RUNS - 1));
 const whole = await ask(cells, true);
 const edits: number[] = [];
+const editsProcessor: number[] = [];
 let last = whole;
 for (let edit = 0; edit < EDITS; edit += 1) {
   last = await ask(edited(cells, 2000 + edit), true);
   edits.push(last.time);
+  editsProcessor.push(last.processor);
 }
 row(`edit of a mark with ten readers, median of ${EDITS}`, inMilliseconds(median(edits)));
 row(
   'the same, nine of ten below, and slowest',
   `${inMilliseconds(sorted(edits)[Math.floor(EDITS * 0.9)] ?? NaN)}, ${inMilliseconds(Math.max(...edits))}`,
 );
+row('processor time of the server, children apart, median', inMilliseconds(median(editsProcessor)));
 row('cells answered to such an edit', String(last.answer.cells?.length));
 row('bytes sent, bytes received with digests', `${last.sent}, ${last.received}`);
 const plain = await ask(edited(cells, 2000), false);

@@ -1,7 +1,10 @@
 // Speaks the protocol of the evaluation children; each line of a cell says what shall go wrong.
 import { writeSync } from 'node:fs';
 
-const report = (message) => writeSync(1, `${JSON.stringify(message)}\n`);
+const report = (message) => {
+  const { user, system } = process.cpuUsage();
+  writeSync(1, `${JSON.stringify({ ...message, spent: (user + system) / 1e3 })}\n`);
+};
 const keep = [];
 
 const ACTIONS = {
@@ -45,7 +48,7 @@ process.on('message', ({ job, tasks, refused, brief }) => {
       const code = briefTasks.has(task) ? `brief ${briefTasks.get(task).code}` : 'fine';
       report({ kind: 'finished', job, task, outcome: { code }, lasting: true });
     });
-    report({ kind: 'done', job, processorTime: 0.1 });
+    report({ kind: 'done', job });
   } catch (error) {
     const code = error instanceof RangeError ? 'limit-size' : 'fault';
     report({ kind: 'fault', job, refusal: { code, message: 'stopped' }, detail: error.message });
