@@ -2,7 +2,7 @@ import { Download } from '@/components/ui/button';
 import { Tex } from '@/components/ui/tex';
 import { DETEMPLE_CARLYLE_CIRCLES, lastLevel, periodTex } from '@/lib/divisions';
 import type { ShownChain } from './chains';
-import { CELL, FIGURES, ROW, ScrollTable } from './scroll-table';
+import { CELL, FIGURES, ROW, ScrollTable } from '@/components/ui/scroll-table';
 import { sayCount, sayDecimal } from './wording';
 
 function countSentence({ chain, rows }: ShownChain): string {

@@ -1,6 +1,6 @@
 import { Tex } from '@/components/ui/tex';
 import type { Measure, Radius, Vertex } from '@/lib/divisions';
-import { CELL, FIGURES, ROW, ScrollTable } from './scroll-table';
+import { CELL, FIGURES, ROW, ScrollTable } from '@/components/ui/scroll-table';
 import { sayCount, sayDecimal } from './wording';
 
 interface CornerTableProps {

@@ -6,6 +6,8 @@ export interface Compartment {
   tone?: 'plain' | 'reached' | 'approximate' | 'fault';
   /** Figures stand in the monospace. */
   figures?: boolean;
+  /** The value in words, for whoever listens, where its signs would be misread. */
+  spoken?: string;
 }
 
 const TONES = {
@@ -16,7 +18,7 @@ const TONES = {
 } as const;
 
 /** Compasses open on a baseline: this value is reached. */
-function ReachedSign() {
+export function ReachedSign() {
   return (
     <svg viewBox="0 0 16 16" className="mr-1.5 inline size-3.5 align-[-2px]" aria-hidden="true">
       <path
@@ -30,7 +32,7 @@ function ReachedSign() {
 }
 
 /** A gap in a line: this value is approached, not reached. */
-function ApproximateSign() {
+export function ApproximateSign() {
   return (
     <svg viewBox="0 0 16 16" className="mr-1.5 inline size-3.5 align-[-2px]" aria-hidden="true">
       <path d="M1 11h5M10 11h5M6 7v8M10 7v8" fill="none" stroke="currentColor" strokeWidth="1.4" />
@@ -43,7 +45,7 @@ export function Compartments({ items }: { items: readonly Compartment[] }) {
   if (items.length === 0) return null;
   return (
     <dl className="flex flex-wrap pl-px pt-px text-small">
-      {items.map(({ label, value, tone = 'plain', figures }) => (
+      {items.map(({ label, value, tone = 'plain', figures, spoken }) => (
         <div
           key={label}
           className={`-ml-px -mt-px min-w-0 max-w-[calc(100%+1px)] shrink-0 border border-hairline px-2.5 pb-1 pt-0.5 ${TONES[tone]}`}
@@ -52,7 +54,14 @@ export function Compartments({ items }: { items: readonly Compartment[] }) {
           <dd className={`break-words ${figures ? 'font-mono [overflow-wrap:anywhere]' : ''}`}>
             {tone === 'reached' && <ReachedSign />}
             {tone === 'approximate' && <ApproximateSign />}
-            {value}
+            {spoken === undefined ? (
+              value
+            ) : (
+              <>
+                <span aria-hidden="true">{value}</span>
+                <span className="sr-only">{spoken}</span>
+              </>
+            )}
           </dd>
         </div>
       ))}

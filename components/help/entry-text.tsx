@@ -1,6 +1,6 @@
 import { Compartments } from '@/components/drawing/compartments';
 import type { Result } from '@/components/sheet/result';
-import { valueTex } from '@/components/sheet/value-tex';
+import { largeTex } from '@/components/sheet/value-tex';
 import { compartmentsOf } from '@/components/sheet/wording';
 import { CopyButton } from '@/components/ui/copy-button';
 import { Sentence } from '@/components/ui/sentence';
@@ -9,10 +9,22 @@ import type { Entry } from './entries';
 import { PutIn } from './put-in';
 
 /** Of the strip under a value, what tells most in a list of samples. */
-const SHOWN = ['Decimal', 'Reach', 'Decided', 'Stand-in for', 'Error'];
+const SHOWN = [
+  'Decimal',
+  'Feet and inches',
+  'Inches',
+  'Degrees, minutes, seconds',
+  'Items',
+  'Takes',
+  'Reads',
+  'Reach',
+  'Decided',
+  'Stand-in for',
+  'Error',
+];
 
 function SampleResult({ result }: { result: Result }) {
-  const tex = valueTex(result);
+  const tex = largeTex(result);
   const items = compartmentsOf(result, false).filter(({ label }) => SHOWN.includes(label));
   return (
     <div className="flex flex-wrap items-center gap-x-4 gap-y-1">

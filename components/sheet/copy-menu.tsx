@@ -5,7 +5,7 @@ import { Disclosure, DISCLOSURE_ROW } from '@/components/ui/disclosure';
 import { copyForms, type CopyForm } from './copy-forms';
 import type { Result } from './result';
 
-/** Copies a value as exact text, TeX, MathML, decimal, cut size or JSON. */
+/** Copies a value as exact text, TeX, MathML, decimal, cut size or JSON; a list also as a column. */
 export function CopyMenu({ result }: { result: Result }) {
   const [said, setSaid] = useState('');
   const forms = copyForms(result);

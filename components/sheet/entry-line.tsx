@@ -4,9 +4,11 @@ import { Compartments } from '@/components/drawing/compartments';
 import { DimensionLine } from '@/components/drawing/dimension-line';
 import { Sentence } from '@/components/ui/sentence';
 import { Tex } from '@/components/ui/tex';
+import { ListTable } from './lists/list-table';
+import { ListValue } from './lists/list-value';
 import type { Result } from './result';
 import type { ShownLine } from './state/shown';
-import { stepTex, valueTex } from './value-tex';
+import { isLongList, stepTex, valueTex } from './value-tex';
 import { sayUnit } from './say-number';
 import { compartmentsOf, sayDimension } from './wording';
 
@@ -27,13 +29,18 @@ const signOf = ({ mark, kind }: Result) => mark ?? (kind === 'truth' ? '=' : nul
 
 /** The value of one line, typeset; a line that never parsed stands as its text. */
 function Value({ result }: { result: Result }) {
+  if (result.kind === 'list') return <ListValue list={result} />;
   const tex = valueTex(result);
   if (tex === null) return <span className="font-mono text-source">{result.source.trim()}</span>;
   return <Tex tex={tex} display />;
 }
 
+/** Whether the exact value itself stands large, and not the line as it was written. */
+const showsExact = (result: Result) =>
+  'exact' in result && !(result.kind === 'list' && isLongList(result));
+
 const lengthOf = (result: Result) =>
-  'exact' in result ? result.exact.text.length : result.source.length;
+  'exact' in result && showsExact(result) ? result.exact.text.length : result.source.length;
 
 const mayScroll = (result: Result) => lengthOf(result) > 24;
 
@@ -42,7 +49,10 @@ const isWide = (result: Result) => lengthOf(result) >= 40;
 
 /** Typeset in one line it would run off an A4 sheet, where nothing can be scrolled. */
 const isTooWideForPaper = (result: Result) =>
-  'exact' in result && lengthOf(result) > 130 && !(result.kind === 'number' && result.exact.staged);
+  'exact' in result &&
+  result.kind !== 'list' &&
+  lengthOf(result) > 130 &&
+  !(result.kind === 'number' && result.exact.staged);
 
 /** The exact value as text, which breaks at any place: what paper shows of a value too wide for it. */
 function OnPaper({ result }: { result: Result }) {
@@ -89,7 +99,9 @@ function Steps({ result }: { result: Result }) {
 
 /** A value wider than its row, as text that breaks over lines. */
 function WholeText({ result }: { result: Result }) {
-  if (!('exact' in result) || result.exact.text.length <= WIDE) return null;
+  // The items of a list are read whole in its table.
+  if (!('exact' in result) || result.kind === 'list') return null;
+  if (result.exact.text.length <= WIDE) return null;
   return (
     <details>
       <summary className={MORE}>Read it whole</summary>
@@ -113,17 +125,21 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
     <div
       data-row
       data-wide={value && isWide(value) ? '' : undefined}
-      className="group/row grid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 break-inside-avoid lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem] print:grid-cols-[5.5rem_minmax(0,1fr)_10rem] print:data-wide:grid-cols-[5.5rem_minmax(0,1fr)]"
+      className="group/row grid not-has-[[data-list]]:break-inside-avoid grid-cols-[5.5rem_minmax(0,1fr)] gap-x-2.5 gap-y-1.5 lg:grid-cols-[5.5rem_minmax(0,1fr)_12rem] print:grid-cols-[5.5rem_minmax(0,1fr)_10rem] print:data-wide:grid-cols-[5.5rem_minmax(0,1fr)]"
     >
       <div>{result && <Balloon sign={signOf(result)} faulty={faulty} />}</div>
-      <div className="min-w-0 space-y-1.5 max-sm:col-span-2">
+      <div
+        className={`min-w-0 space-y-1.5 max-sm:col-span-2 ${value?.kind === 'list' ? 'lg:col-span-2 print:col-span-2' : ''}`}
+      >
         {value && (
           <div
             className={`-ml-1 min-h-balloon scroll-hint overflow-x-auto overflow-y-hidden py-1 pl-1 print:overflow-visible print:bg-none ${sizeOf(value)} ${dim ? 'opacity-55' : ''}`}
             // Only what may be wider than its row has to be reached by keyboard to be scrolled.
             tabIndex={mayScroll(value) ? 0 : undefined}
             role="group"
-            aria-label={faulty ? 'Last good value' : 'Exact value'}
+            aria-label={
+              faulty ? 'Last good value' : showsExact(value) ? 'Exact value' : 'As written'
+            }
           >
             <div className={isTooWideForPaper(value) ? 'print:hidden' : undefined}>
               <Value result={value} />
@@ -134,6 +150,11 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
         )}
         {value && !faulty && <WholeText result={value} />}
         {source}
+        {value?.kind === 'list' && (
+          <div className={dim ? 'opacity-55' : undefined}>
+            <ListTable list={value} name={value.mark ?? value.source.trim()} />
+          </div>
+        )}
         {fault && (
           <p data-fault className="text-base text-ruddle">
             <Sentence text={fault.message} />

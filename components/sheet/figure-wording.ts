@@ -1,5 +1,5 @@
 import type { Compartment } from '@/components/drawing/compartments';
-import type { Result } from './result';
+import type { Result, SingleItem } from './result';
 import {
   DIRECTIONS,
   type NumberResult,
@@ -11,16 +11,14 @@ import {
 
 export type FigureResult = Extract<Result, { kind: 'point' | 'line' | 'circle' }>;
 /** A figure on a line of its own, or as an item of a list. */
-type Figure =
-  | FigureResult
-  | Extract<
-      Extract<Result, { kind: 'list' }>['items'][number],
-      { kind: 'point' | 'line' | 'circle' }
-    >;
+type Figure = FigureResult | Extract<SingleItem, { kind: 'point' | 'line' | 'circle' }>;
 type Part = Pick<NumberResult, 'decimal' | 'unit' | 'cut' | 'degree'>;
 
+export const isFigure = (item: SingleItem): item is Extract<SingleItem, Figure> =>
+  item.kind === 'point' || item.kind === 'line' || item.kind === 'circle';
+
 /** The numbers that fix a figure, by the names they have on the sheet. */
-function partsOf(result: FigureResult): [label: string, part: Part][] {
+export function partsOf(result: Figure): [label: string, part: Part][] {
   switch (result.kind) {
     case 'point':
       return [

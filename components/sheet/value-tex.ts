@@ -1,4 +1,4 @@
-import type { Result } from './result';
+import type { Item, ListResult, Result } from './result';
 
 /** A unit as TeX: `mm^2` upright with its power. */
 export function unitTex(unit: string): string {
@@ -19,25 +19,48 @@ export function isSum(text: string): boolean {
   return false;
 }
 
+/** TeX of an exact value with its unit, in brackets where that would bind to its last term alone. */
+export function exactTex(item: Item): string {
+  const { exact } = item;
+  if (item.kind !== 'number') return exact.tex;
+  const tex = stackLeft(exact.tex);
+  if (item.unit === null) return tex;
+  const value = isSum(exact.text) ? `\\left(${tex}\\right)` : tex;
+  return `${value}\\,${unitTex(item.unit)}`;
+}
+
 /** TeX of what stands large on the sheet: the exact value with its unit, or the statement as written. */
 export function valueTex(result: Result): string | null {
   switch (result.kind) {
-    case 'number': {
-      const { exact, unit } = result;
-      const tex = stackLeft(exact.tex);
-      if (unit === null) return tex;
-      const value = isSum(exact.text) ? `\\left(${tex}\\right)` : tex;
-      return `${value}\\,${unitTex(unit)}`;
-    }
+    case 'number':
     case 'angle':
     case 'point':
     case 'line':
     case 'circle':
     case 'list':
-      return result.exact.tex;
+      return exactTex(result);
     default:
       return result.typeset;
   }
+}
+
+/** Of a list whose text is longer nobody would read one row of brackets, */
+const LONGEST_LIST = 240;
+/** nor one of items as long as this. */
+const LONGEST_ITEM = 60;
+
+/** Whether a list stands large as it was written, its items in their table alone. */
+export function isLongList({ exact, items }: ListResult): boolean {
+  return (
+    exact.staged ||
+    exact.text.length > LONGEST_LIST ||
+    items.some((item) => item.exact.text.length > LONGEST_ITEM)
+  );
+}
+
+/** TeX of a result where there is one row for it: a long list as it was written. */
+export function largeTex(result: Result): string | null {
+  return result.kind === 'list' && isLongList(result) ? result.typeset : valueTex(result);
 }
 
 /** One root of a tower: `r_2 = √(…)`. */

@@ -1,6 +1,8 @@
 import type { Compartment } from '@/components/drawing/compartments';
 import { figureCompartments, sayFigure, sayFigureBriefly } from './figure-wording';
+import { countItems, listCompartments, sayList } from './lists/say-list';
 import type { Result } from './result';
+import { dmsCompartments, inchesCompartments, speakDms, speakInches } from './say-parts';
 import {
   DIRECTIONS,
   type NumberResult,
@@ -81,7 +83,10 @@ function standInCompartments(standIn: NumberResult['standIn'], unit: string): Co
 function numberCompartments(result: NumberResult, full: boolean): Compartment[] {
   const unit = result.unit === null ? null : sayUnit(result.unit);
   const left = new Map(result.omitted?.map(({ field, message }) => [field, message]));
-  const items = decimalCompartment(result, unit, full);
+  const items = [
+    ...decimalCompartment(result, unit, full),
+    ...inchesCompartments(result.inches, result.unit),
+  ];
   if (result.degree !== null) items.push({ label: 'Degree', value: String(result.degree) });
   else
     items.push({
@@ -116,6 +121,7 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
     case 'angle':
       return [
         ...decimalCompartment(result, '°', full),
+        ...dmsCompartments(result.dms, full),
         reachCompartment(result.reach),
         ...standInCompartments(result.standIn, '°'),
       ];
@@ -127,8 +133,10 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
       return listCompartments(result, full);
     case 'function':
       return [
-        { label: 'Function', value: `called as ${result.signature}` },
-        ...(result.reads.length > 0 ? [{ label: 'Reads', value: result.reads.join(', ') }] : []),
+        { label: 'Takes', value: result.parameters.join(', ') || 'nothing', figures: true },
+        result.reads.length > 0
+          ? { label: 'Reads', value: result.reads.join(', '), figures: true }
+          : { label: 'Reads', value: 'nothing else' },
       ];
     case 'truth':
       return [
@@ -144,38 +152,6 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
   }
 }
 
-type ListResult = Extract<Result, { kind: 'list' }>;
-
-/** Items of a list that are told apart before the rest is only counted. */
-const ITEMS_SHOWN = 6;
-
-function listCompartments({ items }: ListResult, full: boolean): Compartment[] {
-  const shown = full ? items : items.slice(0, ITEMS_SHOWN);
-  return [
-    { label: 'Items', value: String(items.length) },
-    ...shown.map((item, index) => ({
-      label: `Item ${index + 1}`,
-      value: sayItem(item),
-      figures: true,
-    })),
-  ];
-}
-
-function sayItem(item: ListResult['items'][number]): string {
-  switch (item.kind) {
-    case 'number': {
-      const size = sayDecimal(item, false);
-      return item.unit === null ? size : `${size} ${sayUnit(item.unit)}`;
-    }
-    case 'angle':
-      return `${shorten(item.decimal.re)}°`;
-    case 'list':
-      return `a list of ${item.items.length}`;
-    default:
-      return sayFigureBriefly(item);
-  }
-}
-
 /** One line in words, for whoever listens instead of looking. */
 export function sayResult(result: Result): string {
   const name = result.mark ?? result.source.trim();
@@ -185,7 +161,10 @@ export function sayResult(result: Result): string {
     case 'truth':
       return `${name}: ${result.truth.value ? 'true' : 'false'}, exactly.`;
     case 'number': {
-      const size = sayDimension(result)?.figure ?? shorten(sayDecimal(result, false), 8);
+      const size =
+        (result.inches && !result.cut ? speakInches(result.inches.text) : null) ??
+        sayDimension(result)?.figure ??
+        shorten(sayDecimal(result, false), 8);
       const reached =
         result.reach?.straightedgeAndCompass === null
           ? 'reach not decided'
@@ -195,15 +174,15 @@ export function sayResult(result: Result): string {
       return `${name} is ${size}, degree ${result.degree ?? 'none'}, ${reached}.`;
     }
     case 'angle':
-      return `${name} is ${shorten(result.decimal.re, 8)} degrees.`;
+      return `${name} is ${speakDms(result.dms.text)}.`;
     case 'point':
     case 'line':
     case 'circle':
       return `${name} is ${sayFigure(result)}.`;
     case 'list':
-      return `${name} is a list of ${result.items.length}: ${result.items.slice(0, ITEMS_SHOWN).map(sayItem).join(', ')}.`;
+      return `${name} is ${sayList(result)}.`;
     case 'function':
-      return `${result.signature} is a function.`;
+      return `${result.signature} is a function of ${result.parameters.join(' and ')}${result.reads.length > 0 ? `, reading ${result.reads.join(', ')}` : ''}.`;
   }
 }
 
@@ -212,7 +191,7 @@ export function sayBriefly(result: Result): string {
   if (result.kind === 'error') return 'error';
   if (result.kind === 'truth') return result.truth.value ? 'true' : 'false';
   if (result.kind === 'angle') return `${shorten(result.decimal.re, 7)}°`;
-  if (result.kind === 'list') return `list of ${result.items.length}`;
+  if (result.kind === 'list') return countItems(result);
   if (result.kind === 'function') return result.signature;
   if (result.kind !== 'number') return sayFigureBriefly(result);
   if (result.cut) return `${result.cut.value} ${result.unit ?? ''}`.trim();

@@ -1,5 +1,6 @@
-import type { Cut, NumberPart, Result } from '@/lib/language/index';
-import { breakableDigits, escapeTex } from './tex-text';
+import type { FunctionResult, Inches, Result } from '@/lib/language/index';
+import { cutTex, decimalTex, figureParts, unitTex } from './tex-size';
+import { escapeTex } from './tex-text';
 
 /** A formula longer than this is set as running text, where TeX may break it over lines. */
 const LONGEST_DISPLAY = 160;
@@ -73,16 +74,11 @@ function displayed(formulaTex: string): string {
     : `\\[${formulaTex}\\]`;
 }
 
-/** `mm^2` as TeX. */
-export function unitTex(unit: string): string {
-  const [name = '', exponent] = unit.split('^');
-  return exponent === undefined ? `\\,\\mathrm{${name}}` : `\\,\\mathrm{${name}}^{${exponent}}`;
-}
-
 /** What stands beside a value, in plain words, one entry for each compartment of the sheet. */
 export function compartments(result: Result): { name: string; tex: string }[] {
   if (result.kind === 'point' || result.kind === 'line' || result.kind === 'circle')
     return figureCompartments(result);
+  if (result.kind === 'function') return functionCompartments(result);
   if (result.kind !== 'number' && result.kind !== 'angle') return [];
   const { decimal } = result;
   const unit =
@@ -98,7 +94,15 @@ export function compartments(result: Result): { name: string; tex: string }[] {
   const entries = [
     { name: 'Decimal', tex: `$${whole}${unit}$${decimal.terminates ? ', exactly' : ''}` },
   ];
+  if (result.kind === 'angle') {
+    const { text, direction } = result.dms;
+    const rounded =
+      direction === 'exact' ? 'exactly' : `rounded ${direction} to a tenth of a second`;
+    entries.push({ name: 'Degrees, minutes, seconds', tex: `${escapeTex(text)}, ${rounded}` });
+  }
   if (result.kind === 'number') {
+    if (result.inches !== undefined)
+      entries.push({ name: 'On a rule in inches', tex: inchesTex(result.inches) });
     if (result.cut !== undefined)
       entries.push({ name: 'Cut size', tex: cutTex(result.cut, result.unit ?? '') });
     entries.push({
@@ -120,10 +124,27 @@ export function compartments(result: Result): { name: string; tex: string }[] {
   return entries;
 }
 
+/** A length to the nearest division of a rule, and on which side of the exact one that lies. */
+function inchesTex({ text, denominator, error, direction }: Inches): string {
+  if (direction === 'exact') return `${escapeTex(text)}, exactly`;
+  const side = direction === 'up' ? 'above' : 'below';
+  return `${escapeTex(text)}, to the nearest 1/${denominator} in, $${error.replace(/^[+-]/, '')}\\,\\mathrm{mm}$ ${side} the exact length`;
+}
+
+function functionCompartments({
+  parameters,
+  reads,
+}: FunctionResult): { name: string; tex: string }[] {
+  return [
+    { name: 'Takes', tex: escapeTex(parameters.join(', ')) },
+    { name: 'Reads', tex: reads.length === 0 ? 'nothing else' : escapeTex(reads.join(', ')) },
+  ];
+}
+
 type FigureResult = Extract<Result, { kind: 'point' | 'line' | 'circle' }>;
 
 function figureCompartments(result: FigureResult): { name: string; tex: string }[] {
-  const entries = partsOf(result).flatMap(([name, { decimal, unit, cut }]) => {
+  const entries = figureParts(result).flatMap(([name, { decimal, unit, cut }]) => {
     const size = `$${decimalTex(decimal.re)}${unit === null ? '' : unitTex(unit)}$`;
     const exactly = decimal.terminates ? ', exactly' : '';
     const own = [{ name, tex: size + exactly }];
@@ -132,38 +153,6 @@ function figureCompartments(result: FigureResult): { name: string; tex: string }
       : [...own, { name: `${name}, cut size`, tex: cutTex(cut, unit ?? '') }];
   });
   return [...entries, { name: 'Reach', tex: escapeTex(result.reach.reason) }];
-}
-
-function partsOf(result: FigureResult): [name: string, part: NumberPart][] {
-  switch (result.kind) {
-    case 'point':
-      return Object.entries(result.coordinates);
-    case 'line':
-      return Object.entries(result.coefficients);
-    case 'circle':
-      return [
-        ['Centre, x', result.centre.x],
-        ['Centre, y', result.centre.y],
-        ['Radius', result.radius],
-      ];
-  }
-}
-
-/** A decimal string, with a power of ten where it has one. */
-function decimalTex(value: string): string {
-  const [mantissa = '', exponent] = value.split('e');
-  const power = exponent === undefined ? '' : `\\cdot 10^{${exponent.replace('+', '')}}`;
-  return breakableDigits(mantissa) + power;
-}
-
-const DIRECTIONS: Readonly<Record<Cut['direction'], string>> = {
-  up: 'rounded up, so greater than the exact value',
-  down: 'rounded down, so less than the exact value',
-  exact: 'the exact value itself',
-};
-
-function cutTex(cut: Cut, unit: string): string {
-  return `$${breakableDigits(cut.value)}${unitTex(unit)}$, ${DIRECTIONS[cut.direction]} (step ${escapeTex(cut.step)}, ${cut.rounding})`;
 }
 
 /** The mark of a result, for the margin: as it stands before the sign of equality in the line as typeset. */

@@ -6,6 +6,7 @@ import {
   type ExportedResults,
   resultsOf,
 } from './notebook';
+import { listTex } from './tex-list';
 import { noteTex } from './tex-note';
 import { compartments, markTex, resultTex } from './tex-result';
 import { escapeTex, typewriter } from './tex-text';
@@ -54,6 +55,7 @@ function entryTex(result: Result): string {
   return [
     `\\medskip\\noindent ${head}${typewriter(result.source.trim())}\\par`,
     resultTex(result),
+    ...(result.kind === 'list' ? [listTex(result)] : []),
     ...lines,
   ].join('\n');
 }

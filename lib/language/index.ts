@@ -20,6 +20,7 @@ export { findDefinition, findPlaceProblem, refusedResult, resultOf } from './pla
 export type { ErrorCode, Problem, Span } from './failure';
 export type {
   AngleResult,
+  Bare,
   CircleResult,
   Coordinates,
   Cut,

@@ -100,6 +100,45 @@ describe('the TeX of a notebook', () => {
   });
 });
 
+describe('lists, functions, angles and inches in TeX', () => {
+  const written = (source: string, settings: Partial<ExportedNotebook['settings']> = {}) => {
+    const cells = [{ id: 'a', kind: 'dimension' as const, source }];
+    const notebook = { ...SAMPLE, cells, settings: { ...SAMPLE.settings, ...settings } };
+    const tex = writeNotebookTex(notebook, evaluated(notebook));
+    compile(tex);
+    return tex;
+  };
+
+  it('sets the items of a list in a table with running numbers, decimals and cut sizes', () => {
+    const tex = written('L = [sqrt(2) mm, [3 mm, turn/7], point(1 mm, 2 mm)]');
+    expect(tex).toContain('\\textbf{No.}&\\textbf{Decimal}&\\textbf{Cut size}');
+    expect(tex).toMatch(/^1&\\raggedright \$1\.41421.*\\mathrm\{mm\}\$&\\raggedright \$1\.5/m);
+    expect(tex).toMatch(/^2&\\raggedright a list of 2&/m);
+    expect(tex).toMatch(/^2\.2&\\raggedright \$51\.4285.*\^\{\\circ\}\$&/m);
+    expect(tex).toMatch(/^3&\\raggedright x \$1.*; y \$2/m);
+  });
+
+  it('repeats the head of a long table, which can so go over pages', () => {
+    const tex = written('P = ring(point(0 mm, 0 mm), 1500 mm, 60)', { digits: 60 });
+    expect(tex.match(/\\textbf\{No\.\}/g)).toHaveLength(3);
+    expect(tex.match(/\\tabularnewline/g)).toHaveLength(60);
+  });
+
+  it('says what a function takes and reads, and how inches, minutes and seconds were rounded', () => {
+    const tex = written('R = 4 ft sqrt(2)\nf(x_1) = R x_1\ng(x) = x\na = turn/7', {
+      unit: 'ft',
+      step: null,
+    });
+    expect(tex).toContain('Takes:} x\\_1');
+    expect(tex).toContain('Reads:} R\\par');
+    expect(tex).toContain('Reads:} nothing else');
+    expect(tex).toContain(
+      'On a rule in inches:} 5 ft 7 7/8 in, to the nearest 1/64 in, $0.184175\\,\\mathrm{mm}$ below',
+    );
+    expect(tex).toContain("$^{\\circ}$ 25$'$ 42.9$''$, rounded up");
+  });
+});
+
 describe('hostile text', () => {
   it.each([
     [

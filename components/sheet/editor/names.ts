@@ -1,6 +1,6 @@
 import type { Result } from '../result';
 import type { Shown } from '../state/shown';
-import { valueTex } from '../value-tex';
+import { largeTex } from '../value-tex';
 import { sayDecimal, shorten } from '../say-number';
 import { sayBriefly, sayDimension } from '../wording';
 
@@ -57,7 +57,7 @@ export function knownMarks(cells: readonly { id: string }[], shown: Shown): Know
               name: result.mark,
               signature: result.kind === 'function' ? result.signature : null,
               size: sayBriefly(result),
-              tex: result.kind === 'error' ? null : valueTex(result),
+              tex: result.kind === 'error' ? null : largeTex(result),
               decimal: decimalOf(result),
               cut: cutOf(result),
               fault: result.kind === 'error' ? result.error.message : null,

@@ -7,14 +7,17 @@ import { Sentence } from '@/components/ui/sentence';
 import { Tex } from '@/components/ui/tex';
 import type { SheetActions } from '../cells';
 import { CopyMenu } from '../copy-menu';
+import { ListTable } from '../lists/list-table';
+import { countItems } from '../lists/say-list';
 import type { Result } from '../result';
 import { linesOf, SourceLine } from '../source-text';
 import type { Place } from '../state/uses';
-import { valueTex } from '../value-tex';
+import { isLongList, largeTex } from '../value-tex';
 import { CellSettingsPart } from './cell-settings-part';
 import { CertificatePart } from './certificate-part';
 import { DecimalPart } from './decimal-part';
 import { Part, Wide } from './part';
+import { FunctionPart, ListReachPart, RulePart } from './kind-parts';
 import { CutPart, PolynomialPart, ReachPart, StandInPart, TowerPart } from './structure-parts';
 import { WherePart } from './where-part';
 
@@ -64,6 +67,14 @@ export function ProofDrawer({ content, at, result, mayWrite, actions, onClose }:
       {(result?.kind === 'number' || result?.kind === 'angle') && (
         <DecimalPart key={figure} content={content} at={at} result={result} />
       )}
+      {result?.kind === 'list' && (
+        <Part title={countItems(result)}>
+          <ListTable list={result} name={mark ?? text.trim()} />
+        </Part>
+      )}
+      {result?.kind === 'list' && <ListReachPart list={result} />}
+      {result?.kind === 'function' && <FunctionPart result={result} />}
+      {(result?.kind === 'number' || result?.kind === 'angle') && <RulePart result={result} />}
       {result?.kind === 'number' && (
         <>
           <CutPart result={result} />
@@ -87,17 +98,18 @@ export function ProofDrawer({ content, at, result, mayWrite, actions, onClose }:
 
 /** The exact value, typeset and as the text that can be typed again. */
 function Figure({ result }: { result: Result }) {
-  const tex = valueTex(result);
+  const tex = largeTex(result);
+  const isWritten = result.kind === 'function' || (result.kind === 'list' && isLongList(result));
   return (
-    <Part title="Exact">
+    <Part title={isWritten ? 'As written' : 'Exact'}>
       {tex !== null && (
-        <Wide label="Exact value">
+        <Wide label={isWritten ? 'As written' : 'Exact value'}>
           <span className="text-figure">
             <Tex tex={tex} display />
           </span>
         </Wide>
       )}
-      {'exact' in result && (
+      {'exact' in result && result.kind !== 'list' && (
         <code className="mt-1 block max-h-40 overflow-y-auto font-mono text-small text-soft [overflow-wrap:anywhere]">
           {result.exact.text}
         </code>

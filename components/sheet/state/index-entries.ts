@@ -56,7 +56,8 @@ export function listMarks({ cells }: NotebookContent, shown: Shown): IndexedMark
 }
 
 function shortExact(result: Result, size: string): string | null {
-  if (!('exact' in result)) return null;
+  // Of a list the count says enough; its table stands in the entry.
+  if (!('exact' in result) || result.kind === 'list') return null;
   const { text } = result.exact;
   if (size.startsWith(text)) return null;
   if (text.length <= LONGEST_EXACT) return text;
