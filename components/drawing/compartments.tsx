@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { Spoken } from '@/components/ui/spoken';
 
 export interface Compartment {
   label: string;
@@ -54,14 +55,7 @@ export function Compartments({ items }: { items: readonly Compartment[] }) {
           <dd className={`break-words ${figures ? 'font-mono [overflow-wrap:anywhere]' : ''}`}>
             {tone === 'reached' && <ReachedSign />}
             {tone === 'approximate' && <ApproximateSign />}
-            {spoken === undefined ? (
-              value
-            ) : (
-              <>
-                <span aria-hidden="true">{value}</span>
-                <span className="sr-only">{spoken}</span>
-              </>
-            )}
+            <Spoken words={spoken}>{value}</Spoken>
           </dd>
         </div>
       ))}

@@ -1,16 +1,22 @@
+import { Spoken } from '@/components/ui/spoken';
+
 interface DimensionLineProps {
   /** What stands on the line: figure and unit. */
   figure: string;
   /** What stands below it: how the figure was rounded. */
   below: string;
+  /** The figure in words. */
+  spoken?: string;
   greyed?: boolean;
 }
 
 /** A drawn dimension: extension lines, a line between them and oblique ticks where they meet. */
-export function DimensionLine({ figure, below, greyed = false }: DimensionLineProps) {
+export function DimensionLine({ figure, below, spoken, greyed = false }: DimensionLineProps) {
   return (
     <figure className={`w-full text-center ${greyed ? 'opacity-55' : ''}`}>
-      <div className="font-sans text-figure font-medium tabular-nums">{figure}</div>
+      <div className="font-sans text-figure font-medium tabular-nums">
+        <Spoken words={spoken}>{figure}</Spoken>
+      </div>
       <svg
         viewBox="0 0 200 16"
         className="h-4 w-full"

@@ -45,7 +45,7 @@ const lengthOf = (result: Result) =>
 const mayScroll = (result: Result) => lengthOf(result) > 24;
 
 /** On paper a drawn dimension stands beside a value only where both have room. */
-const isWide = (result: Result) => lengthOf(result) >= 40;
+const isWide = (result: Result) => result.kind === 'list' || lengthOf(result) >= 40;
 
 /** Typeset in one line it would run off an A4 sheet, where nothing can be scrolled. */
 const isTooWideForPaper = (result: Result) =>
@@ -129,7 +129,7 @@ export function EntryLine({ line, greyed = false, full = false, source, actions 
     >
       <div>{result && <Balloon sign={signOf(result)} faulty={faulty} />}</div>
       <div
-        className={`min-w-0 space-y-1.5 max-sm:col-span-2 ${value?.kind === 'list' ? 'lg:col-span-2 print:col-span-2' : ''}`}
+        className={`min-w-0 space-y-1.5 max-sm:col-span-2 ${value?.kind === 'list' ? 'lg:col-span-2 print:col-span-1' : ''}`}
       >
         {value && (
           <div

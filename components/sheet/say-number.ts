@@ -43,7 +43,7 @@ export const DIRECTIONS = { up: 'rounded up', down: 'rounded down', exact: 'exac
 
 type Reach = NumberResult['reach'];
 
-export function reachCompartment(reach: Reach | null): Compartment {
+export function reachCompartment(reach: Omit<Reach, 'reason'> | null): Compartment {
   const label = 'Reach';
   if (reach === null) return { label, value: 'not decided', tone: 'approximate' };
   if (reach.straightedgeAndCompass === null) {

@@ -23,7 +23,9 @@ export function shortenUp(bound: string, figures: number): string {
 }
 
 /** What stands on the drawn dimension line and below it; null where nothing is cut to length. */
-export function sayDimension(result: Result): { figure: string; below: string } | null {
+export function sayDimension(
+  result: Result,
+): { figure: string; below: string; spoken?: string } | null {
   if (result.kind !== 'number' || result.unit === null || !result.real) return null;
   const unit = sayUnit(result.unit);
   if (result.cut) {
@@ -32,6 +34,11 @@ export function sayDimension(result: Result): { figure: string; below: string } 
     return { figure: `${value} ${unit}`, below: `${DIRECTIONS[direction]}${to}` };
   }
   if (!['mm', 'cm', 'm', 'in', 'ft'].includes(result.unit)) return null;
+  if (result.inches) {
+    const { text, denominator, direction } = result.inches;
+    const to = direction === 'exact' ? '' : ` to 1/${denominator} in`;
+    return { figure: text, below: `${DIRECTIONS[direction]}${to}`, spoken: speakInches(text) };
+  }
   const { re, terminates } = result.decimal;
   const short = shorten(re, 7);
   const exact = terminates && short === re;
@@ -130,7 +137,7 @@ export function compartmentsOf(result: Result, full: boolean): Compartment[] {
     case 'circle':
       return figureCompartments(result, full);
     case 'list':
-      return listCompartments(result, full);
+      return listCompartments(result);
     case 'function':
       return [
         { label: 'Takes', value: result.parameters.join(', ') || 'nothing', figures: true },
@@ -195,6 +202,7 @@ export function sayBriefly(result: Result): string {
   if (result.kind === 'function') return result.signature;
   if (result.kind !== 'number') return sayFigureBriefly(result);
   if (result.cut) return `${result.cut.value} ${result.unit ?? ''}`.trim();
+  if (result.inches) return result.inches.text;
   const short = result.decimal.im === null ? shorten(result.decimal.re, 7) : 'not real';
   return result.unit ? `${short} ${sayUnit(result.unit)}` : short;
 }

@@ -41,5 +41,5 @@ export function ScrollTable({ caption, heads, children }: ScrollTableProps) {
 
 export const ROW = 'break-inside-avoid border-b border-hairline last:border-b-0';
 export const CELL =
-  'whitespace-nowrap px-3 py-1.5 text-left align-top font-normal print:whitespace-normal print:px-1.5';
+  'whitespace-nowrap px-3 py-1.5 text-left align-baseline font-normal print:whitespace-normal print:px-1.5';
 export const FIGURES = `${CELL} font-mono tabular-nums`;

@@ -5,7 +5,7 @@ import { EntryLine } from '@/components/sheet/entry-line';
 import { FunctionPart, ListReachPart, RulePart } from '@/components/sheet/proof/kind-parts';
 import type { Result } from '@/components/sheet/result';
 import { speakDms, speakInches } from '@/components/sheet/say-parts';
-import { compartmentsOf, sayDimension, sayResult } from '@/components/sheet/wording';
+import { compartmentsOf, sayBriefly, sayDimension, sayResult } from '@/components/sheet/wording';
 import { evaluateCells, evaluateExpression } from '@/lib/language/index';
 
 const of = (source: string, unit: 'mm' | 'in' | 'ft' = 'mm'): Result =>
@@ -64,10 +64,23 @@ describe('a length in feet and inches', () => {
     expect(valueAt(of('1 mm'), 'Inches')).toBeUndefined();
   });
 
+  it('stands so on its drawn dimension where there is no cutting step', () => {
+    expect(sayDimension(DIAGONAL)).toEqual({
+      figure: '5 ft 7 7/8 in',
+      below: 'rounded down to 1/64 in',
+      spoken: '5 feet 7 inches and 7 eighths',
+    });
+    expect(sayDimension(of('3/8 in', 'in'))).toMatchObject({ figure: '3/8 in', below: 'exact' });
+    expect(sayBriefly(DIAGONAL)).toBe('5 ft 7 7/8 in');
+  });
+
   it('is read out in words in place of its signs', () => {
     render(<EntryLine line={{ result: DIAGONAL, before: null }} />);
-    expect(screen.getByText('5 ft 7 7/8 in')).toHaveAttribute('aria-hidden', 'true');
-    expect(screen.getByText('5 feet 7 inches and 7 eighths')).toHaveClass('sr-only');
+    // On the drawn dimension and in the compartments.
+    const signs = screen.getAllByText('5 ft 7 7/8 in');
+    const words = screen.getAllByText('5 feet 7 inches and 7 eighths');
+    expect(signs.map((one) => one.getAttribute('aria-hidden'))).toEqual(['true', 'true']);
+    expect(words.map(({ className }) => className)).toEqual(['sr-only', 'sr-only']);
     expect(sayResult(DIAGONAL)).toContain('s is 5 feet 7 inches and 7 eighths, degree 2');
   });
 

@@ -28,7 +28,9 @@ const textOf = (row: HTMLElement | undefined) =>
 const copied = (result: Result, label: string) =>
   copyForms(result).find((form) => form.label === label)?.text;
 const wordings = (result: Result, full = false) =>
-  compartmentsOf(result, full).map(({ label, value }) => `${label}: ${String(value)}`);
+  compartmentsOf(result, full).map(
+    ({ label, value }) => `${label}: ${typeof value === 'string' ? value : ''}`,
+  );
 
 describe('a list on the sheet', () => {
   it('has its items in a table with a name, heads of columns and running numbers', () => {
@@ -102,6 +104,18 @@ describe('a list on the sheet', () => {
     });
   });
 
+  it('has the decimal points of a column under one another', () => {
+    const list = listOf('[sqrt(2) mm, -1200 mm sqrt(2), 30 mm sqrt(3)]');
+    for (const at of [1, 2]) {
+      const points = listRows(list).rows.map((row) => {
+        const cell = row.kind === 'single' ? row.cells[at] : undefined;
+        if (cell?.kind !== 'figure') throw new Error('A figure was expected.');
+        return cell.indent + (/\.|$/.exec(cell.text)?.index ?? 0);
+      });
+      expect(points).toEqual([5, 5, 5]);
+    }
+  });
+
   it('numbers the items of a list within it below the number of that list', () => {
     const { rows } = listRows(NESTED);
     expect(rows.map(({ number, kind }) => [number, kind])).toEqual([
@@ -117,7 +131,7 @@ describe('a list on the sheet', () => {
   it('says what reaches its items once, and item by item only where they differ', () => {
     expect(heads(CHORDS)).not.toContain('Reach');
     expect(wordings(CHORDS)).toEqual(['Items: 7', 'Reach: straightedge and compass']);
-    expect(heads(UNLIKE).at(-1)).toBe('Reach');
+    expect(heads(UNLIKE)).toEqual(['Decimal', 'Reach', 'Exact']);
     expect(wordings(UNLIKE)).toContain('Reach: 1 of 2 with straightedge and compass');
     show(UNLIKE);
     expect(screen.getByText('with an angle trisector')).toBeInTheDocument();

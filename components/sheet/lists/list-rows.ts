@@ -6,8 +6,8 @@ import { DIRECTIONS, sayDecimal, sayUnit } from '../say-number';
 export type ListCell =
   | { kind: 'exact'; item: SingleItem }
   | { kind: 'reach'; item: SingleItem }
-  /** A figure, and beside it in words how it was rounded. */
-  | { kind: 'figure'; text: string; rounded: string | null };
+  /** A figure, in words how it was rounded, and characters before it that bring the points of a column under another. */
+  | { kind: 'figure'; text: string; rounded: string | null; indent: number };
 
 export type ListRow =
   | { kind: 'single'; number: string; cells: ListCell[] }
@@ -16,6 +16,8 @@ export type ListRow =
 
 export interface ListTableRows {
   heads: string[];
+  /** Whether the exact values are so long that paper has no room for them. */
+  isWideForPaper: boolean;
   rows: ListRow[];
 }
 
@@ -39,7 +41,9 @@ export function singlesOf({ items }: Pick<ListResult, 'items'>): SingleItem[] {
 }
 
 /** From here on an exact value is so wide that the sizes stand before it, to be seen without scrolling. */
-const WIDE = 60;
+export const WIDE = 60;
+/** So long a value would leave no room for the sizes on an A4 sheet. */
+const WIDE_FOR_PAPER = 120;
 
 interface Column {
   head: string;
@@ -51,6 +55,7 @@ const figure = (text: string, rounded: string | null = null): ListCell => ({
   kind: 'figure',
   text,
   rounded,
+  indent: 0,
 });
 
 /** The table of a list: which columns its items need, and what each item has in them. */
@@ -59,8 +64,11 @@ export function listRows(list: Pick<ListResult, 'items'>): ListTableRows {
   const columns = columnsFor(singles);
   return {
     heads: columns.map(({ head }) => head),
-    rows: numbered(list.items).map((row) =>
-      row.kind === 'list' ? row : { ...row, cells: columns.map(({ cell }) => cell(row.item)) },
+    isWideForPaper: singles.some((item) => item.exact.text.length > WIDE_FOR_PAPER),
+    rows: alignPoints(
+      numbered(list.items).map((row) =>
+        row.kind === 'list' ? row : { ...row, cells: columns.map(({ cell }) => cell(row.item)) },
+      ),
     ),
   };
 }
@@ -69,10 +77,9 @@ function columnsFor(singles: readonly SingleItem[]): Column[] {
   const exact: Column = { head: 'Exact', cell: (item) => ({ kind: 'exact', item }) };
   const isWide = singles.some((item) => item.exact.text.length > WIDE);
   const sizes = haveSameParts(singles) ? partColumns(singles) : sizeColumns(singles);
-  const columns = isWide ? [...sizes, exact] : [exact, ...sizes];
-  return commonReach(singles) === null
-    ? [...columns, { head: 'Reach', cell: (item) => ({ kind: 'reach', item }) }]
-    : columns;
+  if (commonReach(singles) === null)
+    sizes.push({ head: 'Reach', cell: (item) => ({ kind: 'reach', item }) });
+  return isWide ? [...sizes, exact] : [exact, ...sizes];
 }
 
 /** Whether all are figures of one kind, so that each number that fixes them has a column of its own. */
@@ -157,8 +164,32 @@ function sizeColumns(singles: readonly SingleItem[]): Column[] {
   return columns;
 }
 
-/** What reaches all items alike; null where they differ. */
-export function commonReach(singles: readonly SingleItem[]): SingleItem['reach'] | null {
+const wholeLength = (text: string) => /^-?\d+/.exec(text)?.[0].length ?? 0;
+
+/** Brings the decimal points of each column under one another. */
+function alignPoints(rows: readonly ListRow[]): ListRow[] {
+  const widest: number[] = [];
+  for (const row of rows)
+    if (row.kind === 'single')
+      row.cells.forEach((cell, at) => {
+        const length = cell.kind === 'figure' ? wholeLength(cell.text) : 0;
+        widest[at] = Math.max(widest[at] ?? 0, length);
+      });
+  const indented = (cell: ListCell, at: number): ListCell => {
+    const length = cell.kind === 'figure' ? wholeLength(cell.text) : 0;
+    return cell.kind === 'figure' && length > 0
+      ? { ...cell, indent: (widest[at] ?? 0) - length }
+      : cell;
+  };
+  return rows.map((row) =>
+    row.kind === 'single' ? { ...row, cells: row.cells.map(indented) } : row,
+  );
+}
+
+/** The verdict that all items have alike; null where they differ. */
+export function commonReach(
+  singles: readonly SingleItem[],
+): Omit<SingleItem['reach'], 'reason'> | null {
   const [first] = singles;
   if (first === undefined) return null;
   const { straightedgeAndCompass, withTrisector } = first.reach;
@@ -167,6 +198,6 @@ export function commonReach(singles: readonly SingleItem[]): SingleItem['reach']
       reach.straightedgeAndCompass === straightedgeAndCompass &&
       reach.withTrisector === withTrisector,
   )
-    ? first.reach
+    ? { straightedgeAndCompass, withTrisector }
     : null;
 }

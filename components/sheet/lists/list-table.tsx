@@ -3,7 +3,7 @@ import { CELL, FIGURES, ROW, ScrollTable } from '@/components/ui/scroll-table';
 import { Tex } from '@/components/ui/tex';
 import type { ListResult, SingleItem } from '../result';
 import { exactTex } from '../value-tex';
-import { type ListCell, type ListRow, listRows } from './list-rows';
+import { type ListCell, type ListRow, listRows, WIDE } from './list-rows';
 
 /** A table of more rows than this is folded, */
 const MOST_UNFOLDED = 10;
@@ -22,11 +22,15 @@ interface ListTableProps {
 
 /** The items of a list as a ruled table with running numbers; a long one is folded, without any script, but not on paper. */
 export function ListTable({ list, name }: ListTableProps) {
-  const { heads, rows } = listRows(list);
+  const { heads, rows, isWideForPaper } = listRows(list);
   const folds = rows.length > MOST_UNFOLDED;
   const shown = folds ? SHOWN_FOLDED : rows.length;
   return (
-    <div data-list className="group/list min-w-0">
+    <div
+      data-list
+      data-sizes-on-paper={isWideForPaper ? '' : undefined}
+      className="group/list min-w-0 print:data-sizes-on-paper:[&_:is(thead_th:last-child,[data-exact])]:hidden"
+    >
       <ScrollTable caption={`Items of ${name}`} heads={['No.', ...heads]}>
         {rows.map((row, index) => (
           <tr
@@ -37,6 +41,11 @@ export function ListTable({ list, name }: ListTableProps) {
           </tr>
         ))}
       </ScrollTable>
+      {isWideForPaper && (
+        <p className="hidden pt-1 text-small print:block">
+          The exact values are too long for this sheet of paper; they are those of the line above.
+        </p>
+      )}
       {folds && (
         <details data-all className="group/all print:hidden">
           <summary className="inline-block cursor-pointer py-1 text-small text-snapline underline-offset-4 hover:underline">
@@ -71,7 +80,7 @@ function Cell({ cell, typesets }: { cell: ListCell; typesets: boolean }) {
   switch (cell.kind) {
     case 'exact':
       return (
-        <td className={CELL}>
+        <td data-exact className={CELL}>
           <Exact item={cell.item} typesets={typesets} />
         </td>
       );
@@ -84,7 +93,7 @@ function Cell({ cell, typesets }: { cell: ListCell; typesets: boolean }) {
     case 'figure':
       return (
         <td className={FIGURES}>
-          {cell.text}
+          <span style={{ paddingLeft: `${cell.indent}ch` }}>{cell.text}</span>
           {cell.rounded !== null && (
             <span className="ml-2 font-sans text-soft print:block print:ml-0">{cell.rounded}</span>
           )}
@@ -111,12 +120,13 @@ function Exact({ item, typesets }: { item: SingleItem; typesets: boolean }) {
       </details>
     );
   if (!typesets) return <code className="font-mono text-small">{text}</code>;
+  const isWide = text.length > WIDE;
   return (
     <>
-      <span className={text.length > 60 ? 'print:hidden' : undefined}>
+      <span className={isWide ? 'print:hidden' : 'text-base'}>
         <Tex tex={exactTex(item)} />
       </span>
-      {text.length > 60 && <code className={`${TEXT} hidden print:block`}>{text}</code>}
+      {isWide && <code className={`${TEXT} hidden print:block`}>{text}</code>}
     </>
   );
 }

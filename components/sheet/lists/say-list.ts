@@ -12,7 +12,7 @@ export const countItems = ({ items }: Pick<ListResult, 'items'>) =>
   items.length === 1 ? '1 item' : `${items.length} items`;
 
 /** How many items there are, how many values in the lists among them, and what reaches them where they are alike. */
-export function listCompartments(list: ListResult, full: boolean): Compartment[] {
+export function listCompartments(list: ListResult): Compartment[] {
   const singles = singlesOf(list);
   const items: Compartment[] = [{ label: 'Items', value: String(list.items.length) }];
   if (singles.length !== list.items.length)
@@ -28,8 +28,6 @@ export function listCompartments(list: ListResult, full: boolean): Compartment[]
     return items;
   }
   items.push(reachCompartment(reach));
-  if (full && reach.straightedgeAndCompass !== true)
-    items.push({ label: 'Because', value: reach.reason });
   return items;
 }
 

@@ -4,7 +4,7 @@ import type { ListResult, Result } from '../result';
 import { dmsCompartments, inchesCompartments, sayGap } from '../say-parts';
 import { compartmentsOf } from '../wording';
 import { Part } from './part';
-import { ReachPart } from './structure-parts';
+import { reachCompartments } from './say-proof';
 
 /** A length on a rule in inches, an angle on a circle of minutes and seconds; each is rounded, and by how much is said. */
 export function RulePart({ result }: { result: Extract<Result, { kind: 'number' | 'angle' }> }) {
@@ -39,14 +39,16 @@ export function FunctionPart({ result }: { result: Extract<Result, { kind: 'func
   );
 }
 
-/** What reaches all items of a list; where they differ its table says so item by item. */
+/** What reaches the items of a list, once where it is the same for all; else its table says so item by item. */
 export function ListReachPart({ list }: { list: ListResult }) {
   const reach = commonReach(singlesOf(list));
-  if (reach !== null) return <ReachPart reach={reach} />;
   return (
     <Part title="Reach">
-      <p className="text-base">
-        The items differ: the last column of their table says which is reached.
+      {reach !== null && <Compartments items={reachCompartments(reach)} />}
+      <p className={`text-base ${reach === null ? '' : 'mt-1.5'}`}>
+        {reach === null
+          ? 'The items differ: the table says of each what reaches it.'
+          : 'It is the same for every item.'}
       </p>
     </Part>
   );

@@ -2,7 +2,9 @@ import type { Compartment } from '@/components/drawing/compartments';
 import type { NumberResult } from '../say-number';
 
 /** The verdict tool by tool, for where there is room. */
-export function reachCompartments(reach: NumberResult['reach']): Compartment[] {
+export function reachCompartments(
+  reach: Pick<NumberResult['reach'], 'straightedgeAndCompass' | 'withTrisector'>,
+): Compartment[] {
   const say = (label: string, reached: boolean | null): Compartment =>
     reached === null
       ? { label, value: 'not decided', tone: 'approximate' }
