@@ -41,7 +41,11 @@ const MAY_IMPORT: Record<string, string[]> = {
 };
 
 /** What `components` may take from the services: code that runs in the browser as well. */
-const BROWSER_SAFE = ['lib/notebooks/content.ts', 'lib/notebooks/trial-limits.ts'];
+const BROWSER_SAFE = [
+  'lib/notebooks/content.ts',
+  'lib/notebooks/content-values.ts',
+  'lib/notebooks/trial-limits.ts',
+];
 
 /** The table of the language's words: plain data, which the help page shows as it is. */
 const WORDS = 'lib/language/names.ts';
