@@ -82,7 +82,10 @@ function nameLine(
   settings: number,
   head: string,
 ): PlannedLine {
-  const functions = reads.flatMap(([name]) => (functionsOfAll.has(name) ? [name] : []));
+  const functions =
+    functionsOfAll.size === 0
+      ? []
+      : reads.flatMap(([name]) => (functionsOfAll.has(name) ? [name] : []));
   const before = statement === null ? undefined : named.get(statement);
   const { task } = before?.line ?? {};
   const isSame =
@@ -90,11 +93,7 @@ function nameLine(
     task.source === source &&
     task.functions.length === functions.length &&
     task.functions.every((name, place) => name === functions[place]) &&
-    task.reads.length === reads.length &&
-    task.reads.every(([mark, value], place) => {
-      const [otherMark, other] = reads[place] ?? [];
-      return mark === otherMark && value === other;
-    });
+    areEqualReads(task.reads, reads);
   if (isSame && before?.head === head && task.settings === settings) return before.line;
   const value = isSame ? task.value : digest(JSON.stringify([source, reads, functions]));
   const line = {
@@ -103,6 +102,16 @@ function nameLine(
   };
   if (statement !== null) named.set(statement, { head, line });
   return line;
+}
+
+function areEqualReads(some: Task['reads'], others: Task['reads']): boolean {
+  return (
+    some.length === others.length &&
+    some.every((read, place) => {
+      const other = others[place];
+      return other !== undefined && read[0] === other[0] && read[1] === other[1];
+    })
+  );
 }
 
 /** The settings of the notebook and those that differ from them in some cell, each once. */

@@ -68,8 +68,22 @@ export function readCells(cells: readonly CellSource[]): LineGraph {
       lines.push({ cell, line, source, mark, statement, problem, reads });
     }
   });
-  const reads = lines.map((line) => line.reads.flatMap(({ name }) => definitions.get(name) ?? []));
+  const reads = lines.map((line) => definitionsOf(line.reads, definitions));
   return { lines, definitions, functions, ...orderByDependence(reads) };
+}
+
+const NONE: readonly number[] = [];
+
+/** The lines that define what is read. Few lines read more than one mark, and only for those a list is made. */
+function definitionsOf(
+  reads: readonly MarkNode[],
+  definitions: ReadonlyMap<string, readonly number[]>,
+): readonly number[] {
+  const [first] = reads;
+  if (first === undefined) return NONE;
+  return reads.length === 1
+    ? (definitions.get(first.name) ?? NONE)
+    : reads.flatMap(({ name }) => definitions.get(name) ?? NONE);
 }
 
 const UNREAD = { statement: null, reads: [] } as const;
