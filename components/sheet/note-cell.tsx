@@ -6,7 +6,7 @@ import { CellTools } from './cell-tools';
 import { AT_END, cellAnchor, entryId, focusEntry, type Hand, type SheetActions } from './cells';
 import { onCellKey } from './keys/on-cell-key';
 import { SourceEditor } from './editor/source-editor';
-import { NoteText } from './note-text';
+import { LiveNote } from './live-note';
 
 interface NoteCellProps {
   cell: NotebookCell;
@@ -52,7 +52,7 @@ export const NoteCell = memo(function NoteCell(props: NoteCellProps) {
           {cell.source.trim() === '' && !open ? (
             <p className="font-serif text-note italic text-soft">Empty note</p>
           ) : (
-            <NoteText source={cell.source} />
+            <LiveNote source={cell.source} />
           )}
         </div>
         {open ? (

@@ -1,12 +1,7 @@
-import { memo } from 'react';
 import { renderNote } from './note';
+import { NOTE_LOOK } from './note-look';
 
-/** A note set in the text serif. */
-export const NoteText = memo(function NoteText({ source }: { source: string }) {
-  return (
-    <div
-      className="prose-note max-w-prose font-serif text-note [overflow-wrap:anywhere]"
-      dangerouslySetInnerHTML={{ __html: renderNote(source) }}
-    />
-  );
-});
+/** A note on a page that the server sets. */
+export function NoteText({ source }: { source: string }) {
+  return <div className={NOTE_LOOK} dangerouslySetInnerHTML={{ __html: renderNote(source) }} />;
+}

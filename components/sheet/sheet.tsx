@@ -11,6 +11,7 @@ import { preloadEditor } from './editor/source-editor';
 import { Entries } from './entries';
 import { preloadAids, useAids } from './keys/use-aids';
 import { useSheetKeys } from './keys/use-sheet-keys';
+import { NotesSet, preloadNotes } from './live-note';
 import { MarkIndex } from './mark-index';
 import { Removed } from './removed';
 import { MARKS_BUTTON, SheetBar } from './sheet-bar';
@@ -32,6 +33,8 @@ export interface SheetProps {
   content: NotebookContent;
   /** The figures as the server computed them with the page; null when it could not. */
   answers: CellAnswer[] | null;
+  /** The notes as the server set them, by their sources. */
+  notes: Readonly<Record<string, string>>;
   /** The person who looks. */
   personId: string;
   personName: string;
@@ -54,7 +57,9 @@ export function Sheet(props: SheetProps) {
   const [cache] = useState(() => new BoundedCache(ANSWERS));
   return (
     <SWRConfig value={{ provider: () => cache }}>
-      <SheetOnScreen {...props} />
+      <NotesSet value={props.notes}>
+        <SheetOnScreen {...props} />
+      </NotesSet>
     </SWRConfig>
   );
 }
@@ -107,7 +112,10 @@ function SheetOnScreen(props: SheetProps) {
 
   useEffect(() => {
     const preload = () => {
-      if (mayWrite) preloadEditor();
+      if (mayWrite) {
+        preloadEditor();
+        preloadNotes();
+      }
       preloadAids();
     };
     if ('requestIdleCallback' in window) window.requestIdleCallback(preload);

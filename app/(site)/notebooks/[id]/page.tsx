@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { cache } from 'react';
 import { answersFor, isHurried } from '@/components/sheet/answers';
+import { notesOf } from '@/components/sheet/notes-of';
 import { Sheet } from '@/components/sheet/sheet';
 import { orNotFound } from '@/components/site/or-not-found';
 import { can } from '@/lib/access';
@@ -34,6 +35,7 @@ export default async function NotebookPage({ params }: PageProps) {
         notebook={notebook}
         content={content}
         answers={answers === null || isHurried(answers) ? null : answers}
+        notes={notesOf(content)}
         personId={person.id}
         personName={person.name}
         mayWrite={inUse && can(actor, 'versions.save', guarded)}
