@@ -65,24 +65,3 @@ markdown.renderer.rules.link_open = (tokens, index, options, _environment, self)
 export function renderNote(source: string): string {
   return markdown.render(source);
 }
-
-export interface Heading {
-  level: number;
-  text: string;
-}
-
-/** The headings of a note, for the index beside the sheet. */
-export function headingsOf(source: string): Heading[] {
-  if (!/^ {0,3}#|^ {0,3}[=-]+\s*$/m.test(source)) return [];
-  const tokens = markdown.parse(source, {});
-  return tokens.flatMap((token, index) =>
-    token.type === 'heading_open'
-      ? [
-          {
-            level: Number(token.tag.slice(1)),
-            text: tokens[index + 1]?.content.replace(/[*_`$]/g, '') ?? '',
-          },
-        ]
-      : [],
-  );
-}

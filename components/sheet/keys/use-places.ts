@@ -2,7 +2,7 @@ import { useEffect, useMemo, useRef } from 'react';
 import type { NotebookCell, NotebookContent } from '@/lib/notebooks/content';
 import { cellAnchor, type Hand, type SheetActions } from '../cells';
 import { findDefinition, markDefinedBy } from '../editor/names';
-import { headingsOf } from '../note';
+import { headingsOf } from '../note-headings';
 import { linesOf } from '../source-text';
 
 /** Places remembered for the way back. */

@@ -1,5 +1,5 @@
 import type { NotebookCell, NotebookContent } from '@/lib/notebooks/content';
-import { headingsOf, type Heading } from '../note';
+import { headingsOf, type Heading } from '../note-headings';
 import type { Result } from '../result';
 import { sayBriefly } from '../wording';
 import type { Shown } from './shown';
