@@ -2,7 +2,13 @@ import { describe, expect, it } from 'vitest';
 import { certificateQuestion, questionOfLine } from '@/components/sheet/proof/question-of-line';
 import { filterMarks, listHeadings, listMarks } from '@/components/sheet/state/index-entries';
 import { foldAnswer } from '@/components/sheet/state/shown';
-import { findUses, linesNeededBy, markDefinedIn, namesReadIn } from '@/components/sheet/state/uses';
+import {
+  findUses,
+  linesNeededBy,
+  markDefinedIn,
+  marksReadIn,
+  namesReadIn,
+} from '@/components/sheet/state/uses';
 import { evaluateCells } from '@/lib/language/index';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { contentOf, dimension, note } from './sample';
@@ -32,6 +38,17 @@ describe('what a line defines and reads', () => {
 
   it('never takes a part of a longer name, a remark or its own definition for a use', () => {
     expect([...namesReadIn('p = 2R + Rx - k2 # and q')]).toEqual(['R', 'Rx', 'k2']);
+  });
+
+  it.each([
+    ['v = 2 r sin(a) + R where r = 2 mm, a = b/2', ['sin', 'R', 'where', 'mm', 'b']],
+    ['f(x, y) = x y + R', ['R']],
+    ['L = each(k, 2, n, k R)', ['each', 'n', 'R']],
+    ['h = solve(R == y^2/2, y)', ['solve', 'R']],
+    ['root(x^2 - c, 1)', ['root', 'c']],
+    ['x + y where_1', ['x', 'y', 'where_1']],
+  ])('in %s are not the names of the line alone', (line, names) => {
+    expect([...marksReadIn(line)]).toEqual(names);
   });
 
   it('is found across the sheet, notes left alone', () => {

@@ -6,7 +6,7 @@ import { findZone } from '@/components/drawing/zones';
 import { cellAnchor, type SheetActions } from '../cells';
 import { linesOf } from '../source-text';
 import { sectionOf } from '../state/blocks';
-import { findUses, namesReadIn, type Place } from '../state/uses';
+import { findUses, marksReadIn, type Place } from '../state/uses';
 import { Part } from './part';
 
 interface WherePartProps {
@@ -30,7 +30,7 @@ export function WherePart({ cells, at, mark, actions }: WherePartProps) {
   const section = sectionOf(cells, at.id);
   const place = cells.findIndex(({ id }) => id === at.id) + 1;
   const text = linesOf(cells[place - 1]?.source ?? '')[at.line] ?? '';
-  const reads = [...namesReadIn(text)].flatMap((name) => definitions.get(name)?.slice(0, 1) ?? []);
+  const reads = [...marksReadIn(text)].flatMap((name) => definitions.get(name)?.slice(0, 1) ?? []);
   const used = mark === null ? [] : (readers.get(mark) ?? []);
   const where = [
     zone && `zone ${zone}`,

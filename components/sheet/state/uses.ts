@@ -36,10 +36,39 @@ export function namesReadIn(line: string): Set<string> {
   );
 }
 
+const HEAD = /^\s*\p{L}[\p{L}\d_]*\s*\(([^()]*)\)\s*=(?!=)/u;
+const WHERE = /\bwhere\b([^#]*)/u;
+const LOCAL = /(?:^|,)\s*(\p{L}[\p{L}\d_]*)\s*=(?!=)/gu;
+const COUNTER = /\beach\s*\(\s*(\p{L}[\p{L}\d_]*)\s*,/gu;
+const UNKNOWN = /\bsolve\s*\([^#]*?==[^#]*?,\s*(\p{L}[\p{L}\d_]*)\s*(?=[,)])/gu;
+const POLYNOMIAL = /\broot\s*\(/u;
+
+/** Names that mean something of the line's own: parameters, counters, unknowns and what stands after `where`. */
+function localNamesIn(line: string): Set<string> {
+  const names = new Set(
+    HEAD.exec(line)?.[1]
+      ?.split(',')
+      .map((name) => name.trim()),
+  );
+  for (const pattern of [COUNTER, UNKNOWN])
+    for (const [, name] of line.matchAll(pattern)) names.add(name ?? '');
+  for (const [, name] of (WHERE.exec(line)?.[1] ?? '').matchAll(LOCAL)) names.add(name ?? '');
+  if (POLYNOMIAL.test(line)) names.add('x');
+  return names;
+}
+
+/** The names that a line reads from the sheet, as far as its text tells. */
+export function marksReadIn(line: string): Set<string> {
+  const local = localNamesIn(line);
+  return new Set([...namesReadIn(line)].filter((name) => !local.has(name)));
+}
+
 interface CellUses {
   line: number;
   defines: string | null;
+  /** Every name, so that what is sent along is never too little. */
   reads: ReadonlySet<string>;
+  readsMarks: ReadonlySet<string>;
 }
 
 /** Untouched cells stay the same object from one change to the next, so each is read once. */
@@ -50,9 +79,12 @@ function usesInCell(cell: NotebookCell): CellUses[] {
   if (found) return found;
   const uses =
     cell.kind === 'dimension'
-      ? cell.source
-          .split(/\r?\n/)
-          .map((text, line) => ({ line, defines: markDefinedIn(text), reads: namesReadIn(text) }))
+      ? cell.source.split(/\r?\n/).map((text, line) => ({
+          line,
+          defines: markDefinedIn(text),
+          reads: namesReadIn(text),
+          readsMarks: marksReadIn(text),
+        }))
       : [];
   known.set(cell, uses);
   return uses;
@@ -72,8 +104,8 @@ export function findUses(cells: readonly NotebookCell[]): MarkUses {
     }
   }
   for (const cell of cells) {
-    for (const { line, defines, reads } of usesInCell(cell)) {
-      for (const name of reads) {
+    for (const { line, defines, readsMarks } of usesInCell(cell)) {
+      for (const name of readsMarks) {
         if (name !== defines && definitions.has(name)) add(readers, name, { id: cell.id, line });
       }
     }
