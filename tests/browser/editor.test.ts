@@ -121,8 +121,13 @@ describe('renaming a mark', () => {
     const { ida, page, press, type } = await begin('Renaming');
     await writeCells(ida, ['r = 600 mm # r as given', 's = 2r + root(x^2 - 2, 1)', 't = r + s']);
     await press('Escape');
+    // The focus follows with the next frame: a key before it would go nowhere.
+    const focused = () => page.evaluate(() => document.activeElement?.textContent ?? '');
+    await expect.poll(focused).toContain('t = r + s');
     await press('ArrowUp');
+    await expect.poll(focused).toContain('s = 2r');
     await press('ArrowUp');
+    await expect.poll(focused).toContain('r = 600 mm');
     await press('F2');
     const dialog = page.getByRole('dialog', { name: 'Rename the mark r' });
     await dialog.getByText('r stands in 3 places in 3 cells').waitFor();
