@@ -252,6 +252,7 @@ describe('the keys', () => {
     await dialog.waitFor({ state: 'detached' });
     expect(await page.evaluate(() => document.activeElement?.className)).toContain('cm-content');
     await press('Escape');
+    await expect.poll(() => page.evaluate(() => document.activeElement?.id)).toMatch(/^entry-/);
     await page.keyboard.press('Shift+?');
     await dialog.waitFor();
     await press('Escape');
