@@ -1,36 +1,16 @@
 import { isqrt } from '../engine/integers';
+import { boundsOfPi } from '../engine/pi';
 import { type Interval, type IntervalArithmetic, ceilDiv, floorDiv } from './interval';
 
 /**
  * π, sine and arcsine of intervals, in integers with a bound on every remainder.
- * Sources of the series: Machin 1706 for π; Taylor's series of the sine; the binomial series of the arcsine
+ * Sources of the series: Taylor's series of the sine; the binomial series of the arcsine
  * (Abramowitz and Stegun 4.3.65 and 4.4.40, from memory).
  */
 
-const known = new WeakMap<IntervalArithmetic, Interval>();
-
-/** π = 16 arctan(1/5) - 4 arctan(1/239). Each truncated division errs by less than one unit of the guard bits. */
+/** π to the bits of the arithmetic. */
 export function enclosePi(arithmetic: IntervalArithmetic): Interval {
-  let pi = known.get(arithmetic);
-  if (pi === undefined) {
-    const guard = 32n;
-    const one = arithmetic.one << guard;
-    const scaled = 16n * arctangentOfInverse(5n, one) - 4n * arctangentOfInverse(239n, one);
-    const middle = scaled >> guard;
-    pi = { low: middle - 1n, high: middle + 2n };
-    known.set(arithmetic, pi);
-  }
-  return pi;
-}
-
-function arctangentOfInverse(x: bigint, one: bigint): bigint {
-  let power = one / x;
-  let sum = power;
-  for (let k = 3n, sign = -1n; power !== 0n; k += 2n, sign = -sign) {
-    power /= x * x;
-    sum += (sign * power) / k;
-  }
-  return sum;
+  return boundsOfPi(Number(arithmetic.shift));
 }
 
 /** sin of an angle in radians: at the middle of the interval, which the sine leaves by no more than half its width. */
