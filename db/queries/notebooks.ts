@@ -5,9 +5,13 @@ import type { Database } from '../client';
 export interface Notebook {
   id: string;
   workshop: { id: string; name: string };
+  /** The workshop's settings, as stored; the service checks their shape. */
+  workshopSettings: unknown;
   title: string;
   /** Number of the newest version; 0 only before the first one is in. */
   head: number;
+  /** Its own entries for the title block, as stored. */
+  titleBlock: unknown;
   archivedAt: Date | null;
   createdAt: Date;
   changedAt: Date;
@@ -17,6 +21,8 @@ interface NotebookRow {
   id: string;
   workshop_id: string;
   workshop_name: string;
+  workshop_defaults: string;
+  title_block: string;
   title: string;
   head: number;
   archived_at: Date | null;
@@ -27,6 +33,8 @@ interface NotebookRow {
 const toNotebook = (row: NotebookRow): Notebook => ({
   id: row.id,
   workshop: { id: row.workshop_id, name: row.workshop_name },
+  workshopSettings: JSON.parse(row.workshop_defaults) as unknown,
+  titleBlock: JSON.parse(row.title_block) as unknown,
   title: row.title,
   head: row.head,
   archivedAt: row.archived_at,
@@ -37,7 +45,11 @@ const toNotebook = (row: NotebookRow): Notebook => ({
 const withWorkshop = (db: Database) =>
   db('notebooks')
     .join('workshops', 'workshops.id', 'notebooks.workshop_id')
-    .select('notebooks.*', 'workshops.name as workshop_name');
+    .select(
+      'notebooks.*',
+      'workshops.name as workshop_name',
+      'workshops.defaults as workshop_defaults',
+    );
 
 /** Adds a notebook without versions and returns the new id. */
 export async function insertNotebook(

@@ -15,4 +15,6 @@ export {
 } from './people';
 export { hashPassword } from './passwords';
 export { hashOf, newSecret } from './secrets';
+export { TOLERANCE_CLASSES, WorkshopSettings, readWorkshopSettings } from './workshop-settings';
+export type { ToleranceClass } from './workshop-settings';
 export type { ApiKeyLine, MemberWorkshop, NewApiKey, Person } from './types';

@@ -58,7 +58,7 @@ export async function createKey(person: Person, request: KeyRequest): Promise<Ne
     label: request.label,
     keyHash: hashOf(key),
     fragment: key.slice(-FRAGMENT),
-    scopes: [...KEY_SCOPES],
+    scopes: ['evaluate'],
     expiresAt: days === undefined ? null : new Date(Date.now() + days * DAY_MS),
   });
   const made = (await listApiKeys(db, person.id)).find((line) => line.id === id);

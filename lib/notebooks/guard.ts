@@ -2,8 +2,8 @@ import type { Knex } from 'knex';
 import { database, type Database } from '@/db/client';
 import { findNotebookRole } from '@/db/queries/notebook-roles';
 import { findNotebook, lockHead, type Notebook } from '@/db/queries/notebooks';
-import { demand, standingOf, type Action, type Actor, type Role } from '@/lib/access';
-import { isId, type Person } from '@/lib/accounts';
+import { demand, standingOf, type Action, type Actor, type Guarded, type Role } from '@/lib/access';
+import { isId, readWorkshopSettings, type Person } from '@/lib/accounts';
 
 export interface Opened {
   notebook: Notebook;
@@ -24,12 +24,21 @@ export async function openFor(
   const actor: Actor = { kind: 'person', id: person.id };
   const notebook = isId(id) ? await findNotebook(db, id) : null;
   const role = notebook === null ? null : await findNotebookRole(db, id, person.id);
-  const guarded = { id, roles: new Map(role === null ? [] : [[person.id, role]]) };
-  demand(actor, action, notebook === null ? null : guarded);
+  const guarded = notebook === null ? null : guardedBy(notebook, person, role);
+  demand(actor, action, guarded);
   if (notebook === null || role === null) {
     throw new Error(`Access let ${standingOf(actor, guarded)} through to a notebook.`);
   }
   return { notebook, role };
+}
+
+/** What access has to know of a notebook to decide about one person. */
+export function guardedBy(notebook: Notebook, person: Person, role: Role | null): Guarded {
+  return {
+    id: notebook.id,
+    roles: new Map(role === null ? [] : [[person.id, role]]),
+    editorsIssue: readWorkshopSettings(notebook.workshopSettings).issuing.editorsIssue,
+  };
 }
 
 /**

@@ -3,19 +3,26 @@ import { describe, expect, it } from 'vitest';
 import {
   ACTIONS,
   ALLOWED,
+  ALLOWED_IN_WORKSHOP,
   Failure,
   KEY_SCOPES,
   NOBODY,
   ROLES,
   STANDINGS,
+  WORKSHOP_ACTIONS,
   can,
+  canInWorkshop,
   demand,
+  demandInWorkshop,
   keyAllows,
   standingOf,
   type Action,
   type Actor,
   type Guarded,
+  type GuardedWorkshop,
+  type KeyScope,
   type Role,
+  type WorkshopRole,
 } from '@/lib/access';
 
 const person = (id: string): Actor => ({ kind: 'person', id });
@@ -43,9 +50,15 @@ describe('the table', () => {
     expect(editor?.size).toBeGreaterThan(viewer?.size ?? 0);
   });
 
-  it('lets a viewer change nothing', () => {
+  it('lets a viewer change nothing but leave and comment', () => {
     const changes: Action[] = [
       'notebook.rename',
+      'notebook.move',
+      'notebook.template',
+      'titleBlock.change',
+      'versions.check',
+      'comments.resolve',
+      'revisions.issue',
       'notebook.archive',
       'versions.save',
       'versions.restore',
@@ -88,9 +101,25 @@ describe('standing', () => {
     expect(can({ kind: 'link', notebookId: 'n1' }, 'notebook.read', guarded)).toBe(false);
   });
 
-  it('is never had by a key, even one of an owner', () => {
-    const key: Actor = { kind: 'key', personId: 'ida', scopes: KEY_SCOPES };
-    for (const action of ACTIONS) expect(can(key, action, notebook(['ida', 'owner']))).toBe(false);
+  it('of a key is to read revisions, with that scope and while its maker holds a role', () => {
+    const key = (...scopes: KeyScope[]): Actor => ({ kind: 'key', personId: 'ida', scopes });
+    const held = notebook(['ida', 'owner']);
+    for (const action of ACTIONS) {
+      const reads = action === 'revisions.list' || action === 'revisions.read';
+      expect(can(key('revisions'), action, held)).toBe(reads);
+      expect(can(key('evaluate'), action, held)).toBe(false);
+      expect(can(key(...KEY_SCOPES), action, notebook(['tam', 'owner']))).toBe(false);
+    }
+  });
+
+  it('lets an editor issue where the workshop does, and changes nothing else', () => {
+    for (const action of ACTIONS) {
+      const plain = notebook(['tam', 'editor']);
+      const issues = can(person('tam'), action, { ...plain, editorsIssue: true });
+      expect(issues).toBe(can(person('tam'), action, plain) || action === 'revisions.issue');
+      const viewer = { ...notebook(['wren', 'viewer']), editorsIssue: true };
+      expect(can(person('wren'), action, viewer)).toBe(ALLOWED.viewer.has(action));
+    }
   });
 
   it('is none on a notebook that does not exist', () => {
@@ -127,6 +156,52 @@ describe('a refusal', () => {
         }
       }),
     );
+  });
+});
+
+describe('in a workshop', () => {
+  const yard = (...people: [string, WorkshopRole][]): GuardedWorkshop => ({
+    id: 'w1',
+    members: new Map(people),
+  });
+  const anyDeed = fc.constantFrom(...WORKSHOP_ACTIONS);
+
+  it('admins may all that members may, and more', () => {
+    const { admin, member, none } = ALLOWED_IN_WORKSHOP;
+    for (const action of member) expect(admin).toContain(action);
+    expect([...admin].sort()).toEqual([...WORKSHOP_ACTIONS].sort());
+    expect(admin.size).toBeGreaterThan(member.size);
+    expect(none.size).toBe(0);
+  });
+
+  it('links, keys and outsiders may nothing, and outsiders learn nothing', () => {
+    fc.assert(
+      fc.property(anyDeed, (action) => {
+        const held = yard(['ida', 'admin']);
+        const key: Actor = { kind: 'key', personId: 'ida', scopes: KEY_SCOPES };
+        for (const actor of [key, NOBODY, person('tam'), { kind: 'link', notebookId: 'w1' }]) {
+          expect(canInWorkshop(actor as Actor, action, held)).toBe(false);
+        }
+        const said = [held, null].map((workshop) => {
+          try {
+            demandInWorkshop(person('tam'), action, workshop);
+            return null;
+          } catch (error) {
+            return error instanceof Failure ? [error.code, error.message] : error;
+          }
+        });
+        expect(said[0]).toEqual(said[1]);
+        expect(said[0]).toEqual(['not-found', expect.any(String)]);
+      }),
+    );
+  });
+
+  it('a member is told in one sentence what only admins do', () => {
+    for (const action of WORKSHOP_ACTIONS) {
+      const attempt = () => demandInWorkshop(person('tam'), action, yard(['tam', 'member']));
+      if (ALLOWED_IN_WORKSHOP.member.has(action)) expect(attempt).not.toThrow();
+      else expect(attempt).toThrow(/^You are a member of this workshop; only admins .+\.$/);
+    }
   });
 });
 

@@ -1,0 +1,2 @@
+export { DEEDS, type Deed } from './deeds';
+export { record, type Happening } from './record';

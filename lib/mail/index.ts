@@ -1,0 +1,2 @@
+export type { Letter } from './letter';
+export { queueLetter } from './queue';
