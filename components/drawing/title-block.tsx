@@ -8,14 +8,15 @@ export interface TitleField {
   strong?: boolean;
 }
 
+/** How wide a compartment is at least; those of a row share what is left over, so that no row has a hole. */
 const SPANS = {
-  2: 'sm:col-span-2 col-span-3',
-  3: 'sm:col-span-3 col-span-6',
-  4: 'sm:col-span-4 col-span-12',
-  5: 'sm:col-span-5 col-span-12',
-  6: 'sm:col-span-6 col-span-12',
-  8: 'sm:col-span-8 col-span-12',
-  12: 'col-span-12',
+  2: 'sm:basis-1/6 basis-1/4',
+  3: 'sm:basis-1/4 basis-1/2',
+  4: 'sm:basis-1/3 basis-1/2',
+  5: 'sm:basis-5/12 basis-full',
+  6: 'sm:basis-1/2 basis-full',
+  8: 'sm:basis-2/3 basis-full',
+  12: 'basis-full',
 } as const;
 
 /** The title block in the lower right corner of the sheet; fields after ISO 7200. */
@@ -25,11 +26,11 @@ export function TitleBlock({ fields }: { fields: readonly TitleField[] }) {
       aria-label="Title block"
       className="ml-auto w-full max-w-3xl border-t-2 border-ink bg-sheet sm:border-l-2 break-inside-avoid"
     >
-      <dl className="-mb-px -mr-px grid grid-cols-12 overflow-hidden">
+      <dl className="-mb-px -mr-px flex flex-wrap overflow-hidden">
         {fields.map(({ label, value, span, strong }) => (
           <div
             key={label}
-            className={`min-w-0 border-b border-r border-rule px-2.5 pb-1.5 pt-1 ${SPANS[span]}`}
+            className={`min-w-0 grow border-b border-r border-rule px-2.5 pb-1.5 pt-1 ${SPANS[span]}`}
           >
             <dt className="text-tag text-soft">{label}</dt>
             <dd

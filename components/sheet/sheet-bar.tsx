@@ -72,6 +72,7 @@ export function SheetBar(props: SheetBarProps) {
               Redo
             </Button>
             <Button onClick={() => onPanel('settings')}>Unit and step</Button>
+            <Button onClick={() => onPanel('title-block')}>Title block</Button>
           </>
         )}
         <Button onClick={onFind}>Find</Button>

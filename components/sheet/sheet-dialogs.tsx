@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { lazy, Suspense, useState } from 'react';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import { ConflictDialog } from './panels/conflict-dialog';
 import { KeepDialog } from './panels/keep-dialog';
@@ -9,7 +9,10 @@ import { PeopleDialog } from './panels/people-dialog';
 import { SettingsDialog } from './panels/settings-dialog';
 import type { NotebookOnScreen } from './state/use-notebook';
 
-export type Panel = 'keep' | 'settings' | 'people' | 'links' | 'conflict';
+export type Panel = 'keep' | 'settings' | 'title-block' | 'people' | 'links' | 'conflict';
+
+/** Loaded when first asked for. */
+const TitleBlockDialog = lazy(() => import('./panels/title-block-dialog'));
 
 interface SheetDialogsProps {
   panel: Panel | null;
@@ -78,6 +81,12 @@ export function SheetDialogs(props: SheetDialogsProps) {
           onSet={(settings) => dispatch({ kind: 'set', settings })}
           onClose={onClose}
         />
+      );
+    case 'title-block':
+      return (
+        <Suspense>
+          <TitleBlockDialog notebook={notebook} author={kept.savedBy} onClose={onClose} />
+        </Suspense>
       );
     case 'people':
       return <PeopleDialog notebookId={notebook.id} mayChange={mayShare} onClose={onClose} />;

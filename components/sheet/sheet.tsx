@@ -25,7 +25,7 @@ import { useEvaluation } from './state/use-evaluation';
 import { useNotebook } from './state/use-notebook';
 import { useSheetActions } from './state/use-sheet-actions';
 import type { Place } from './state/uses';
-import { titleFields } from './title-fields';
+import { blockOf, titleFields } from './title-fields';
 import { sayResult } from './wording';
 
 export interface SheetProps {
@@ -168,13 +168,11 @@ function SheetOnScreen(props: SheetProps) {
         foot={
           <TitleBlock
             fields={titleFields({
-              workshop: notebook.workshop.name,
-              title: notebook.title,
-              id: notebook.id,
+              block: blockOf(notebook, sheet.kept.savedBy),
               version: sheet.kept.number,
               savedAt: sheet.kept.savedAt,
-              savedBy: sheet.kept.savedBy,
               settings: content.settings,
+              logoAt: `/api/notebooks/${notebook.id}/logo`,
             })}
           />
         }

@@ -129,3 +129,10 @@ export async function setArchived(db: Database, id: string, archived: boolean): 
     .where({ id })
     .update({ archived_at: archived ? now : null, changed_at: now });
 }
+
+/** Stores a notebook's own entries for the title block in place of those before. */
+export async function putTitleBlock(db: Database, id: string, entries: object): Promise<void> {
+  await db('notebooks')
+    .where({ id })
+    .update({ title_block: JSON.stringify(entries), changed_at: db.raw('current_timestamp(3)') });
+}

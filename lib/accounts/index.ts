@@ -15,6 +15,11 @@ export {
 } from './people';
 export { hashPassword } from './passwords';
 export { hashOf, newSecret } from './secrets';
-export { TOLERANCE_CLASSES, WorkshopSettings, readWorkshopSettings } from './workshop-settings';
+export {
+  Logo,
+  TOLERANCE_CLASSES,
+  WorkshopSettings,
+  readWorkshopSettings,
+} from './workshop-settings';
 export type { ToleranceClass } from './workshop-settings';
 export type { ApiKeyLine, MemberWorkshop, NewApiKey, Person } from './types';

@@ -4,7 +4,22 @@ import { z } from 'zod';
 export const TOLERANCE_CLASSES = ['f', 'm', 'c', 'v'] as const;
 export type ToleranceClass = (typeof TOLERANCE_CLASSES)[number];
 
-const shortText = z.string().trim().max(120).default('');
+const line = (max: number) =>
+  z
+    .string()
+    .trim()
+    .max(max)
+    .regex(/^[^\p{Cc}\p{Cs}]*$/u, { error: 'It contains characters that cannot be printed.' })
+    .default('');
+const shortText = line(120);
+
+/** The workshop's logo: the SHA-256 of the stored file, by which it is found, and its size in pixels. */
+export const Logo = z.strictObject({
+  hash: z.string().regex(/^[0-9a-f]{64}$/),
+  width: z.int().min(1),
+  height: z.int().min(1),
+});
+export type Logo = z.infer<typeof Logo>;
 
 /**
  * What a workshop decides for its notebooks. Stored as JSON; whatever an older row leaves out has
@@ -35,8 +50,9 @@ export const WorkshopSettings = z.strictObject({
       /** Empty: the name of the workshop. */
       legalOwner: shortText,
       /** Put before a notebook's identification number, such as `FY-`. */
-      identificationPrefix: z.string().trim().max(20).default(''),
+      identificationPrefix: line(20),
       approvalPerson: shortText,
+      logo: Logo.nullable().default(null),
     })
     .prefault({}),
 });

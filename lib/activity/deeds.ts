@@ -23,6 +23,7 @@ export const DEEDS = {
   'notebook.made': 'made the notebook',
   'notebook.duplicated': 'duplicated the notebook',
   'notebook.renamed': 'renamed the notebook',
+  'titleBlock.changed': 'filled in the title block of',
   'notebook.archived': 'archived the notebook',
   'notebook.brought-back': 'brought back the notebook',
   'notebook.moved': 'moved the notebook',

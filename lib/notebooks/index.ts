@@ -16,6 +16,7 @@ export {
   readNotebook,
 } from './notebooks';
 export { NewPerson, RoleChange, addPerson, changeRole, listPeople, removePerson } from './people';
+export { TitleBlockEntries, changeTitleBlock, titleBlockIn, titleBlockOf } from './title-block';
 export { TryRequest, tryLines } from './try-lines';
 export {
   RestoreRequest,

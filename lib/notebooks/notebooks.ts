@@ -15,6 +15,7 @@ import { isId, oneLine, type Person } from '@/lib/accounts';
 import { canonicalContent, emptyContent } from './content';
 import { holdFor, openFor } from './guard';
 import { SavableContent } from './savable';
+import { titleBlockIn } from './title-block';
 import type { NotebookHead, NotebookLine, OpenNotebook } from './types';
 import { contentOf, getVersion } from './versions';
 
@@ -107,6 +108,7 @@ export async function changeNotebook(
 }
 
 function headOf(notebook: Notebook, role: Role, version: Version): NotebookHead {
+  const { entries, block } = titleBlockIn(notebook, version.author.name);
   return {
     id: notebook.id,
     title: notebook.title,
@@ -116,5 +118,7 @@ function headOf(notebook: Notebook, role: Role, version: Version): NotebookHead 
     version: version.number,
     savedAt: version.savedAt.toISOString(),
     savedBy: version.author.name,
+    titleEntries: entries,
+    titleBlock: block,
   };
 }

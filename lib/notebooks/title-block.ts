@@ -1,7 +1,24 @@
 import { z } from 'zod';
-import { TOLERANCE_CLASSES, type WorkshopSettings } from '@/lib/accounts';
+import { inTransaction } from '@/db/client';
+import { putTitleBlock, type Notebook } from '@/db/queries/notebooks';
+import { Failure } from '@/lib/access';
+import {
+  TOLERANCE_CLASSES,
+  readWorkshopSettings,
+  type Logo,
+  type Person,
+  type WorkshopSettings,
+} from '@/lib/accounts';
+import { record } from '@/lib/activity';
+import { holdFor } from './guard';
 
-const field = (max: number) => z.string().trim().max(max).default('');
+const field = (max: number) =>
+  z
+    .string()
+    .trim()
+    .max(max)
+    .regex(/^[^\p{Cc}\p{Cs}]*$/u, { error: 'It contains characters that cannot be printed.' })
+    .default('');
 
 /** What a notebook says of itself in the title block; empty fields follow the workshop. */
 export const TitleBlockEntries = z.strictObject({
@@ -25,6 +42,7 @@ export interface TitleBlock {
   approvalPerson: string;
   sheet: string;
   toleranceClass: TitleBlockEntries['toleranceClass'];
+  logo: Logo | null;
 }
 
 interface Facts {
@@ -51,5 +69,45 @@ export function titleBlockOf({ notebook, workshop, entries, author }: Facts): Ti
     approvalPerson: entries.approvalPerson || titleBlock.approvalPerson,
     sheet: entries.sheet || '1',
     toleranceClass: entries.toleranceClass ?? start.toleranceClass,
+    logo: titleBlock.logo,
   };
+}
+
+/** The notebook's own entries, and the title block that follows from them for a version of `author`. */
+export function titleBlockIn(
+  notebook: Notebook,
+  author: string,
+): { entries: TitleBlockEntries; block: TitleBlock } {
+  const entries = TitleBlockEntries.parse(notebook.titleBlock);
+  const settings = readWorkshopSettings(notebook.workshopSettings);
+  const workshop = { name: notebook.workshop.name, settings };
+  return { entries, block: titleBlockOf({ notebook, workshop, entries, author }) };
+}
+
+/**
+ * Fills in the notebook's own entries, all of them at once; what is left out becomes empty.
+ * @throws Failure `archived`
+ */
+export async function changeTitleBlock(
+  person: Person,
+  id: string,
+  entries: TitleBlockEntries,
+): Promise<void> {
+  await inTransaction(async (trx) => {
+    const { notebook } = await holdFor(trx, person, 'titleBlock.change', id);
+    if (notebook.archivedAt !== null) {
+      throw new Failure(
+        'archived',
+        'This notebook is archived, so its title block stays as it is. An owner can bring it back.',
+      );
+    }
+    await putTitleBlock(trx, id, entries);
+    await record(trx, {
+      deed: 'titleBlock.changed',
+      by: person.id,
+      workshopId: notebook.workshop.id,
+      notebookId: id,
+      subject: notebook.title,
+    });
+  });
 }

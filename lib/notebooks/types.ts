@@ -1,5 +1,8 @@
 import type { Role } from '@/lib/access';
 import type { NotebookContent } from './content';
+import type { TitleBlock, TitleBlockEntries } from './title-block';
+
+export type { TitleBlock, TitleBlockEntries } from './title-block';
 
 /** Moments are ISO 8601 strings in UTC throughout: they cross from server to browser unchanged. */
 export type Moment = string;
@@ -30,6 +33,9 @@ export interface NotebookHead {
   version: number;
   savedAt: Moment;
   savedBy: string;
+  /** What the notebook itself says in its title block, and the whole of it as it is shown. */
+  titleEntries: TitleBlockEntries;
+  titleBlock: TitleBlock;
 }
 
 export interface OpenNotebook {

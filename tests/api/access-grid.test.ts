@@ -48,6 +48,14 @@ const endpoints: Endpoint[] = [
     allowed: 204,
   },
   {
+    name: 'PATCH title block',
+    action: 'titleBlock.change',
+    method: 'PATCH',
+    path: (scene) => `${base(scene)}/title-block`,
+    body: () => ({ sheet: '1 of 3' }),
+    allowed: 204,
+  },
+  {
     name: 'GET versions',
     action: 'versions.list',
     method: 'GET',

@@ -50,12 +50,21 @@ export default async function ClientPage({ params }: PageProps) {
         content={content}
         answers={answers ?? []}
         fields={titleFields({
-          workshop: notebook.workshop,
-          title: notebook.title,
-          id: notebook.id,
+          block: {
+            legalOwner: notebook.workshop,
+            identificationNumber: notebook.id.slice(0, 8),
+            title: notebook.title,
+            supplementaryTitle: '',
+            creator: '',
+            approvalPerson: '',
+            sheet: '1',
+            toleranceClass: null,
+            logo: null,
+          },
           version: version.number,
           savedAt: version.savedAt,
           settings: content.settings,
+          logoAt: `/api/client/${token}/logo`,
         })}
       />
     </div>

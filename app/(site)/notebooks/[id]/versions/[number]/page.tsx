@@ -3,7 +3,7 @@ import Link from 'next/link';
 import { notFound } from 'next/navigation';
 import { answersFor } from '@/components/sheet/answers';
 import { ReadOnlySheet } from '@/components/sheet/read-only-sheet';
-import { titleFields } from '@/components/sheet/title-fields';
+import { blockOf, titleFields } from '@/components/sheet/title-fields';
 import { orNotFound } from '@/components/site/or-not-found';
 import { Download } from '@/components/ui/button';
 import { Moment } from '@/components/ui/moment';
@@ -76,13 +76,11 @@ export default async function VersionPage({ params }: PageProps) {
         content={content}
         answers={answers ?? []}
         fields={titleFields({
-          workshop: notebook.workshop.name,
-          title: notebook.title,
-          id: notebook.id,
+          block: blockOf(notebook, version.author),
           version: version.number,
           savedAt: version.savedAt,
-          savedBy: version.author,
           settings: content.settings,
+          logoAt: `/api/notebooks/${id}/logo`,
         })}
       />
     </div>
