@@ -17,6 +17,7 @@ export const FAILURE_CODES = [
   'email-taken',
   'stale-version',
   'archived',
+  'resolved',
   'last-owner',
   'unknown-email',
   'already-added',

@@ -23,6 +23,7 @@ export const LIMITS = {
   evaluateKey: { name: 'evaluate-key', hits: 300, seconds: 60, what: 'evaluations with this key' },
   tryAddress: { name: 'try-address', hits: 60, seconds: 60, what: 'tries from this address' },
   tryAll: { name: 'try-all', hits: 600, seconds: 60, what: 'tries by all visitors together' },
+  comment: { name: 'comment', hits: 120, seconds: 600, what: 'comments' },
   export: { name: 'export', hits: 60, seconds: 60, what: 'exports' },
 } as const satisfies Record<string, Limit>;
 

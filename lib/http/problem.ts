@@ -13,6 +13,7 @@ export const PROBLEMS: Readonly<Record<FailureCode | 'fault', { status: number; 
     'email-taken': { status: 409, title: 'E-mail address taken' },
     'already-added': { status: 409, title: 'Already added' },
     'stale-version': { status: 409, title: 'Saved meanwhile by somebody else' },
+    resolved: { status: 409, title: 'Thread resolved' },
     archived: { status: 409, title: 'Notebook archived' },
     'last-owner': { status: 409, title: 'Last owner' },
     'limit-reached': { status: 409, title: 'Limit reached' },

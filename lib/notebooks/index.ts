@@ -1,5 +1,13 @@
 export { answerTo, certificateFor, questionOf } from './answers';
 export {
+  CommentChange,
+  NewComment,
+  addComment,
+  changeComment,
+  readComments,
+  withdrawComment,
+} from './comments';
+export {
   LinkRequest,
   createLink,
   listLinks,
@@ -17,6 +25,7 @@ export {
 } from './notebooks';
 export { NewPerson, RoleChange, addPerson, changeRole, listPeople, removePerson } from './people';
 export { TitleBlockEntries, changeTitleBlock, titleBlockIn, titleBlockOf } from './title-block';
+export { SearchRequest, search } from './search';
 export { TryRequest, tryLines } from './try-lines';
 export {
   RestoreRequest,

@@ -8,6 +8,7 @@ import {
   setArchived,
   type Notebook,
 } from '@/db/queries/notebooks';
+import { putSearchTitle } from '@/db/queries/notebook-search';
 import { insertVersion, type Version } from '@/db/queries/versions';
 import { findWorkshopRole, listWorkshopsOf } from '@/db/queries/workshops';
 import { Failure, type Role } from '@/lib/access';
@@ -16,6 +17,7 @@ import { canonicalContent, emptyContent } from './content';
 import { holdFor, openFor } from './guard';
 import { SavableContent } from './savable';
 import { titleBlockIn } from './title-block';
+import { keepSearchable } from './search-text';
 import type { NotebookHead, NotebookLine, OpenNotebook } from './types';
 import { contentOf, getVersion } from './versions';
 
@@ -72,12 +74,9 @@ export async function createNotebook(
     }
     const id = await insertNotebook(trx, { workshopId: workshop, title });
     await putNotebookRole(trx, id, person.id, 'owner');
-    await insertVersion(trx, {
-      notebookId: id,
-      number: 1,
-      authorId: person.id,
-      content: canonicalContent(content),
-    });
+    const first = canonicalContent(content);
+    await insertVersion(trx, { notebookId: id, number: 1, authorId: person.id, content: first });
+    await keepSearchable(trx, { id, title, version: 1 }, first);
     return { id };
   });
 }
@@ -99,6 +98,7 @@ export async function changeNotebook(
     if (title !== undefined) {
       await holdFor(trx, person, 'notebook.rename', id);
       await renameNotebook(trx, id, title);
+      await putSearchTitle(trx, id, title);
     }
     if (archived !== undefined) {
       const { notebook } = await holdFor(trx, person, 'notebook.archive', id);

@@ -101,3 +101,65 @@ export interface ClientView {
   version: { number: number; savedAt: Moment };
   content: NotebookContent;
 }
+
+/** One thing said in a thread. The text names those it mentions by id (`comment-text.ts`); a withdrawn one has none. */
+export interface CommentLine {
+  id: string;
+  author: { id: string; name: string };
+  text: string;
+  saidAt: Moment;
+  editedAt: Moment | null;
+  withdrawn: boolean;
+}
+
+/** A thread of comments on one cell: what began it, then the answers. */
+export interface CommentThread {
+  id: string;
+  cell: string;
+  /** What the cell was called when the thread began. */
+  cellName: string;
+  resolvedAt: Moment | null;
+  resolvedBy: string | null;
+  comments: CommentLine[];
+}
+
+export interface CommentsView {
+  threads: CommentThread[];
+  /** Names of those who are mentioned, by id. */
+  people: Record<string, string>;
+}
+
+export interface MadeComment {
+  id: string;
+  thread: string;
+}
+
+export interface SnippetPiece {
+  text: string;
+  /** Whether it is one of the words looked for. */
+  found: boolean;
+}
+
+/** A place in a notebook's text: the cell, and what stands around the words found. */
+export interface Snippet {
+  cell: string;
+  pieces: SnippetPiece[];
+}
+
+export interface SearchHit {
+  id: string;
+  title: string;
+  workshop: NamedWorkshop;
+  role: Role;
+  archivedAt: Moment | null;
+  changedAt: Moment;
+  /** Lines that define the mark looked for, or one that begins so. */
+  marks: { cell: string; line: number; mark: string; definition: string }[];
+  snippet: Snippet | null;
+}
+
+export interface SearchAnswer {
+  hits: SearchHit[];
+  /** Where the next page begins; null behind the last. */
+  next: string | null;
+}

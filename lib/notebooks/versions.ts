@@ -15,6 +15,7 @@ import type { Person } from '@/lib/accounts';
 import { NotebookContent, canonicalContent } from './content';
 import { holdFor, openFor } from './guard';
 import { SavableContent } from './savable';
+import { keepSearchable } from './search-text';
 import type { OpenNotebook, OpenVersion, Saved, StaleHead, VersionLine } from './types';
 
 /** Versions count in steps of one from 1; the column holds no more than this. */
@@ -122,6 +123,7 @@ function addVersion(
       note: added.note === '' ? null : added.note,
       restoredFrom: added.restoredFrom,
     });
+    await keepSearchable(trx, { id, title: notebook.title, version: number }, content);
     return { number, savedAt: savedAt.toISOString(), unchanged: false };
   });
 }

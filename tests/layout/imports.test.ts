@@ -54,6 +54,7 @@ const MAY_IMPORT: Record<string, string[]> = {
 const BROWSER_SAFE = [
   'lib/notebooks/content.ts',
   'lib/notebooks/content-values.ts',
+  'lib/notebooks/comment-text.ts',
   'lib/notebooks/trial-limits.ts',
 ];
 
