@@ -75,3 +75,49 @@ export async function lockOwners(trx: Knex.Transaction, notebookId: string): Pro
     .select('user_id');
   return rows.map((row) => row.user_id);
 }
+
+export interface HeldRole {
+  notebookId: string;
+  title: string;
+  role: NotebookRole;
+  /** Whether nobody else owns the notebook. */
+  onlyOwner: boolean;
+}
+
+/**
+ * A person's roles on the notebooks of one workshop, held until the transaction ends. The notebooks
+ * are held first, in the order of their ids, as whoever changes a role on one of them does.
+ */
+export async function lockRolesIn(
+  trx: Knex.Transaction,
+  workshopId: string,
+  userId: string,
+): Promise<HeldRole[]> {
+  const ids = await trx('notebook_roles')
+    .join('notebooks', 'notebooks.id', 'notebook_roles.notebook_id')
+    .where({ 'notebooks.workshop_id': workshopId, 'notebook_roles.user_id': userId })
+    .orderBy('notebooks.id')
+    .pluck<string[]>('notebooks.id');
+  const notebooks = await trx('notebooks')
+    .whereIn('id', ids)
+    .where({ workshop_id: workshopId })
+    .orderBy('id')
+    .forUpdate()
+    .select<{ id: string; title: string }[]>('id', 'title');
+  const roles = await trx<RoleRow>('notebook_roles')
+    .whereIn(
+      'notebook_id',
+      notebooks.map(({ id }) => id),
+    )
+    .orderBy(['notebook_id', 'user_id'])
+    .forUpdate()
+    .select('notebook_id', 'user_id', 'role');
+  return notebooks.flatMap(({ id, title }) => {
+    const here = roles.filter((row) => row.notebook_id === id);
+    const own = here.find((row) => row.user_id === userId);
+    if (own === undefined) return [];
+    const owners = here.filter((row) => row.role === 'owner');
+    const onlyOwner = own.role === 'owner' && owners.length === 1;
+    return [{ notebookId: id, title, role: own.role, onlyOwner }];
+  });
+}

@@ -19,6 +19,10 @@ export const FAILURE_CODES = [
   'archived',
   'resolved',
   'last-owner',
+  'last-admin',
+  'successor-needed',
+  'link-over',
+  'other-address',
   'unknown-email',
   'already-added',
   'too-many',
@@ -38,6 +42,8 @@ export interface FieldFault {
 export interface FailureExtra {
   fields?: FieldFault[];
   head?: unknown;
+  /** Notebooks that stand in the way of what was asked. */
+  notebooks?: readonly { id: string; title: string }[];
   retryAfter?: number;
 }
 

@@ -6,6 +6,7 @@ export type { KeyHolder } from './keys';
 export { LIMITS, countAgainst } from './limits';
 export {
   EmailAddress,
+  Password,
   SignUp,
   oneLine,
   signIn,

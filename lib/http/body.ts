@@ -25,7 +25,8 @@ export async function readJson(request: Request, limit: number): Promise<unknown
   }
 }
 
-async function readBytes(request: Request, limit: number): Promise<Buffer> {
+/** The body of a request, read no further than `limit` bytes. @throws Failure `too-large` */
+export async function readBytes(request: Request, limit: number): Promise<Buffer> {
   const announced = Number(request.headers.get('content-length') ?? 0);
   if (announced > limit) throw tooLarge(`${announced} bytes`, limit);
   const chunks: Uint8Array[] = [];

@@ -1,9 +1,9 @@
 /**
  * Writes a fault to the log: one JSON line with the request's number. Messages of the database are
- * left out, because they quote the values of the failed statement; so are the tokens of client links.
+ * left out, because they quote the values of the failed statement; so are the tokens of client links and invitations.
  */
 export function logFault(error: unknown, request: Request, requestId: string): void {
-  const path = new URL(request.url).pathname.replace(/(\/client\/)[^/]+/, '$1…');
+  const path = new URL(request.url).pathname.replace(/(\/(?:client|invitations)\/)[^/]+/, '$1…');
   console.error(
     JSON.stringify({ fault: describe(error), requestId, method: request.method, path }),
   );

@@ -16,6 +16,10 @@ export const PROBLEMS: Readonly<Record<FailureCode | 'fault', { status: number; 
     resolved: { status: 409, title: 'Thread resolved' },
     archived: { status: 409, title: 'Notebook archived' },
     'last-owner': { status: 409, title: 'Last owner' },
+    'last-admin': { status: 409, title: 'Last admin' },
+    'successor-needed': { status: 409, title: 'Successor needed' },
+    'link-over': { status: 410, title: 'Link not valid any more' },
+    'other-address': { status: 403, title: 'Meant for another address' },
     'limit-reached': { status: 409, title: 'Limit reached' },
     'too-large': { status: 413, title: 'Request too large' },
     'wrong-type': { status: 415, title: 'Content type not accepted' },
@@ -39,6 +43,7 @@ export function problemResponse(failure: Failure, requestId: string): Response {
   return write(code, message, requestId, headers, {
     ...(extra.fields === undefined ? {} : { fields: extra.fields }),
     ...(extra.head === undefined ? {} : { head: extra.head }),
+    ...(extra.notebooks === undefined ? {} : { notebooks: extra.notebooks }),
   });
 }
 

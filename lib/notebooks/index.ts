@@ -23,7 +23,17 @@ export {
   listNotebooks,
   readNotebook,
 } from './notebooks';
-export { NewPerson, RoleChange, addPerson, changeRole, listPeople, removePerson } from './people';
+export {
+  HandingOver,
+  NewPerson,
+  RoleChange,
+  addPerson,
+  changeRole,
+  handOver,
+  leaveNotebook,
+  listPeople,
+  removePerson,
+} from './people';
 export { TitleBlockEntries, changeTitleBlock, titleBlockIn, titleBlockOf } from './title-block';
 export { SearchRequest, search } from './search';
 export { TryRequest, tryLines } from './try-lines';

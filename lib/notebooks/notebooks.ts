@@ -10,10 +10,11 @@ import {
 } from '@/db/queries/notebooks';
 import { putSearchTitle } from '@/db/queries/notebook-search';
 import { insertVersion, type Version } from '@/db/queries/versions';
-import { findWorkshopRole, listWorkshopsOf } from '@/db/queries/workshops';
-import { Failure, type Role } from '@/lib/access';
-import { isId, oneLine, type Person } from '@/lib/accounts';
-import { canonicalContent, emptyContent } from './content';
+import { findWorkshop, holdWorkshopRole, listWorkshopsOf } from '@/db/queries/workshops';
+import { Failure, demandInWorkshop, type Role } from '@/lib/access';
+import { isId, oneLine, readWorkshopSettings, type Person } from '@/lib/accounts';
+import { record } from '@/lib/activity';
+import { canonicalContent, emptyContent, type NotebookContent } from './content';
 import { holdFor, openFor } from './guard';
 import { SavableContent } from './savable';
 import { titleBlockIn } from './title-block';
@@ -57,28 +58,43 @@ export async function listNotebooks(
 
 /**
  * Makes a notebook with its first version, in the given workshop or in the person's oldest one; the
- * person becomes its owner.
+ * person becomes its owner. Without content it starts from the workshop's values.
  * @throws Failure `not-found` for a workshop the person does not belong to, `invalid` for none at all
  */
 export async function createNotebook(
   person: Person,
-  { title, workshopId, content = emptyContent() }: NewNotebook,
+  { title, workshopId, content }: NewNotebook,
 ): Promise<{ id: string }> {
   return inTransaction(async (trx) => {
     const workshop = workshopId ?? (await listWorkshopsOf(trx, person.id))[0]?.id;
     if (workshop === undefined) {
       throw new Failure('invalid', 'You belong to no workshop, and a notebook needs one.');
     }
-    if (!isId(workshop) || (await findWorkshopRole(trx, workshop, person.id)) === null) {
-      throw new Failure('not-found', 'There is no such workshop, or you do not belong to it.');
-    }
+    const role = isId(workshop) ? await holdWorkshopRole(trx, workshop, person.id) : null;
+    const found = role === null ? null : await findWorkshop(trx, workshop);
+    const members = new Map(role === null ? [] : [[person.id, role]]);
+    const actor = { kind: 'person', id: person.id } as const;
+    demandInWorkshop(actor, 'notebooks.create', found && { id: workshop, members });
     const id = await insertNotebook(trx, { workshopId: workshop, title });
     await putNotebookRole(trx, id, person.id, 'owner');
-    const first = canonicalContent(content);
+    const first = canonicalContent(content ?? startOf(found?.defaults));
     await insertVersion(trx, { notebookId: id, number: 1, authorId: person.id, content: first });
     await keepSearchable(trx, { id, title, version: 1 }, first);
+    await record(trx, {
+      deed: 'notebook.made',
+      by: person.id,
+      workshopId: workshop,
+      notebookId: id,
+      subject: title,
+    });
     return { id };
   });
+}
+
+/** No cells yet, and the settings that new notebooks of the workshop start from. */
+function startOf(workshopSettings: unknown): NotebookContent {
+  const { digits, unit, step, rounding } = readWorkshopSettings(workshopSettings).start;
+  return { ...emptyContent(), settings: { digits, unit, step, rounding } };
 }
 
 /** The notebook as it was last saved. */
@@ -94,15 +110,34 @@ export async function changeNotebook(
   id: string,
   { title, archived }: NotebookChange,
 ): Promise<void> {
+  const about = (notebook: Notebook) => ({
+    by: person.id,
+    workshopId: notebook.workshop.id,
+    notebookId: id,
+    subject: notebook.title,
+  });
   await inTransaction(async (trx) => {
     if (title !== undefined) {
-      await holdFor(trx, person, 'notebook.rename', id);
-      await renameNotebook(trx, id, title);
-      await putSearchTitle(trx, id, title);
+      const { notebook } = await holdFor(trx, person, 'notebook.rename', id);
+      if (notebook.title !== title) {
+        await renameNotebook(trx, id, title);
+        await putSearchTitle(trx, id, title);
+        const details = { from: notebook.title };
+        await record(trx, {
+          ...about(notebook),
+          deed: 'notebook.renamed',
+          subject: title,
+          details,
+        });
+      }
     }
     if (archived !== undefined) {
       const { notebook } = await holdFor(trx, person, 'notebook.archive', id);
-      if ((notebook.archivedAt !== null) !== archived) await setArchived(trx, id, archived);
+      if ((notebook.archivedAt !== null) !== archived) {
+        await setArchived(trx, id, archived);
+        const deed = archived ? 'notebook.archived' : 'notebook.brought-back';
+        await record(trx, { ...about(notebook), deed });
+      }
     }
   });
 }

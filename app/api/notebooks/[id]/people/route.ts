@@ -1,10 +1,18 @@
 import { created, route } from '@/lib/http';
-import { NewPerson, addPerson, listPeople } from '@/lib/notebooks';
+import { NewPerson, listPeople } from '@/lib/notebooks';
+import { shareNotebook } from '@/lib/workshops';
 
 export const GET = route({ person: 'required' }, async ({ person, part }) => ({
   people: await listPeople(person, part('id')),
 }));
 
-export const POST = route({ person: 'required', body: NewPerson }, async ({ person, part, body }) =>
-  created(await addPerson(person, part('id'), body)),
+/** 201 for a role that was given; 202 where the address has no account and was invited. */
+export const POST = route(
+  { person: 'required', body: NewPerson },
+  async ({ person, part, body }) => {
+    const shared = await shareNotebook(person, part('id'), body);
+    return shared.kind === 'added'
+      ? created(shared.person)
+      : Response.json({ invitation: shared.invitation }, { status: 202 });
+  },
 );
