@@ -9,6 +9,10 @@ export interface VersionEntry {
   savedAt: Date;
   note: string | null;
   restoredFrom: number | null;
+  /** The version with which it was brought together, being made on an older one. */
+  mergedWith: number | null;
+  /** Saved by the sheet after a pause, not kept by hand. */
+  byItself: boolean;
 }
 
 export interface Version extends VersionEntry {
@@ -24,6 +28,8 @@ interface EntryRow {
   saved_at: Date;
   note: string | null;
   restored_from: number | null;
+  merged_with: number | null;
+  by_itself: number;
 }
 
 interface VersionRow extends EntryRow {
@@ -38,6 +44,8 @@ const entryColumns = [
   'versions.saved_at',
   'versions.note',
   'versions.restored_from',
+  'versions.merged_with',
+  'versions.by_itself',
 ];
 
 const toEntry = (row: EntryRow): VersionEntry => ({
@@ -46,6 +54,8 @@ const toEntry = (row: EntryRow): VersionEntry => ({
   savedAt: row.saved_at,
   note: row.note,
   restoredFrom: row.restored_from,
+  mergedWith: row.merged_with,
+  byItself: row.by_itself !== 0,
 });
 
 const ofNotebook = (db: Database, notebookId: string) =>
@@ -53,12 +63,31 @@ const ofNotebook = (db: Database, notebookId: string) =>
     .join('users', 'users.id', 'versions.author_id')
     .where('versions.notebook_id', notebookId);
 
-/** All versions of a notebook, newest first. */
-export async function listVersions(db: Database, notebookId: string): Promise<VersionEntry[]> {
-  const rows = await ofNotebook(db, notebookId)
-    .orderBy('versions.number', 'desc')
-    .select<EntryRow[]>(entryColumns);
+/** The versions of a notebook, newest first: all, or so many of those below a number. */
+export async function listVersions(
+  db: Database,
+  notebookId: string,
+  { below, limit }: { below?: number; limit?: number } = {},
+): Promise<VersionEntry[]> {
+  const query = ofNotebook(db, notebookId).orderBy('versions.number', 'desc');
+  if (below !== undefined) void query.where('versions.number', '<', below);
+  if (limit !== undefined) void query.limit(limit);
+  const rows = await query.select<EntryRow[]>(entryColumns);
   return rows.map(toEntry);
+}
+
+/** The names of those who saved versions after one number, up to another; each once. */
+export async function listAuthorsBetween(
+  db: Database,
+  notebookId: string,
+  after: number,
+  upTo: number,
+): Promise<{ id: string; name: string }[]> {
+  return ofNotebook(db, notebookId)
+    .where('versions.number', '>', after)
+    .where('versions.number', '<=', upTo)
+    .distinct('users.id', 'users.name')
+    .orderBy(['users.name', 'users.id']);
 }
 
 export async function findVersion(
@@ -81,6 +110,8 @@ export interface NewVersion {
   content: unknown;
   note?: string | null;
   restoredFrom?: number | null;
+  mergedWith?: number | null;
+  byItself?: boolean;
   /** Now when left out. */
   savedAt?: Date;
 }
@@ -100,6 +131,8 @@ export async function insertVersion(trx: Knex.Transaction, version: NewVersion):
     saved_at: savedAt,
     note: version.note ?? null,
     restored_from: version.restoredFrom ?? null,
+    merged_with: version.mergedWith ?? null,
+    by_itself: version.byItself ?? false,
     content,
     content_hash: createHash('sha256').update(content).digest('hex'),
   });

@@ -44,6 +44,7 @@ export interface FailureExtra {
   head?: unknown;
   /** Notebooks that stand in the way of what was asked. */
   notebooks?: readonly { id: string; title: string }[];
+  conflicts?: unknown;
   retryAfter?: number;
 }
 

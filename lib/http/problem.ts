@@ -44,6 +44,7 @@ export function problemResponse(failure: Failure, requestId: string): Response {
     ...(extra.fields === undefined ? {} : { fields: extra.fields }),
     ...(extra.head === undefined ? {} : { head: extra.head }),
     ...(extra.notebooks === undefined ? {} : { notebooks: extra.notebooks }),
+    ...(extra.conflicts === undefined ? {} : { conflicts: extra.conflicts }),
   });
 }
 

@@ -23,6 +23,7 @@ export {
   listNotebooks,
   readNotebook,
 } from './notebooks';
+export { NowQuery, findSeen, lookNow, type Now } from './now';
 export {
   HandingOver,
   NewPerson,
@@ -37,13 +38,6 @@ export {
 export { TitleBlockEntries, changeTitleBlock, titleBlockIn, titleBlockOf } from './title-block';
 export { SearchRequest, search } from './search';
 export { TryRequest, tryLines } from './try-lines';
-export {
-  RestoreRequest,
-  SaveRequest,
-  listVersions,
-  readForExport,
-  readVersion,
-  restoreVersion,
-  saveVersion,
-} from './versions';
+export { RestoreRequest, SaveRequest, restoreVersion, saveVersion } from './save';
+export { ListQuery, listVersions, readForExport, readVersion } from './versions';
 export type * from './types';

@@ -49,6 +49,10 @@ export interface VersionLine {
   savedAt: Moment;
   note: string | null;
   restoredFrom: number | null;
+  /** The version with which it was brought together, being made on an older one. */
+  mergedWith: number | null;
+  /** Saved by the sheet after a pause, not kept by hand. */
+  byItself: boolean;
 }
 
 export interface OpenVersion {
@@ -61,6 +65,9 @@ export interface Saved {
   number: number;
   savedAt: Moment;
   unchanged: boolean;
+  /** Brought together with a newer head than the one it was made on; `content` is what came of it. */
+  merged: boolean;
+  content?: NotebookContent;
 }
 
 /** What a refused save hands back, so that the two texts can be brought together. */

@@ -63,6 +63,21 @@ const endpoints: Endpoint[] = [
     allowed: 200,
   },
   {
+    name: 'GET now',
+    action: 'presence.see',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/now?seen=1`,
+    allowed: 200,
+  },
+  {
+    name: 'POST versions to be merged',
+    action: 'versions.save',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/versions`,
+    body: () => ({ base: 1, content: content('R = 1200 mm'), merge: true, byItself: true }),
+    allowed: 200,
+  },
+  {
     name: 'POST versions',
     action: 'versions.save',
     method: 'POST',

@@ -74,6 +74,7 @@ const BROWSER_SAFE = [
   'lib/notebooks/content-values.ts',
   'lib/notebooks/comment-text.ts',
   'lib/notebooks/trial-limits.ts',
+  'lib/notebooks/merge/index.ts',
 ];
 
 /** The table of the language's words: plain data, which the help page shows as it is. */

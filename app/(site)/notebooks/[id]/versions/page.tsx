@@ -15,7 +15,7 @@ export default async function VersionsPage({ params }: PageProps) {
   const { id } = await params;
   const person = await personForPage(`/notebooks/${id}/versions`);
   const { notebook } = await orNotFound(readNotebook(person, id));
-  const versions = await orNotFound(listVersions(person, id));
+  const { versions } = await orNotFound(listVersions(person, id));
   return (
     <div className="mx-auto max-w-page space-y-5">
       <div>

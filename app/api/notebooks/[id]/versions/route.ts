@@ -1,8 +1,10 @@
 import { NOTEBOOK_BODY, created, revalidated, route } from '@/lib/http';
-import { SaveRequest, listVersions, saveVersion } from '@/lib/notebooks';
+import { ListQuery, SaveRequest, listVersions, saveVersion } from '@/lib/notebooks';
 
-export const GET = route({ person: 'required' }, async ({ request, person, part }) =>
-  revalidated(request, { versions: await listVersions(person, part('id')) }),
+export const GET = route(
+  { person: 'required', query: ListQuery },
+  async ({ request, person, part, query }) =>
+    revalidated(request, await listVersions(person, part('id'), query)),
 );
 
 /** 201 for a new version; 200 when the content is that of the newest one already. */
