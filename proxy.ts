@@ -27,10 +27,18 @@ export async function proxy(request: NextRequest): Promise<NextResponse> {
   const headers = new Headers(request.headers);
   headers.set('x-nonce', nonce);
   headers.set('content-security-policy', policy);
+  headers.set('x-opening', isOpening(request) ? '1' : '0');
   const response = withHeaders(NextResponse.next({ request: { headers } }));
   response.headers.set('content-security-policy', policy);
   if (pathname.startsWith('/client/')) response.headers.set('x-robots-tag', 'noindex, nofollow');
   return response;
+}
+
+/** Whether somebody opens the page, rather than a browser that fetches it in case, or asks for its head. */
+function isOpening({ method, headers }: NextRequest): boolean {
+  const purpose = `${headers.get('purpose') ?? ''} ${headers.get('sec-purpose') ?? ''}`;
+  const inCase = purpose.includes('prefetch') || headers.has('next-router-prefetch');
+  return method === 'GET' && !inCase && !headers.has('rsc');
 }
 
 export const config = {

@@ -13,10 +13,3 @@ export async function answersFor(content: NotebookContent): Promise<CellAnswer[]
     return null;
   }
 }
-
-/** Whether the server was too busy to finish: worth asking again instead of showing. */
-export function isHurried(answers: readonly CellAnswer[]): boolean {
-  return answers.some(({ results }) =>
-    results.some((result) => result.kind === 'error' && result.error.code === 'limit-time'),
-  );
-}

@@ -11,10 +11,25 @@ export interface DemoVersion {
   content: NotebookContent;
 }
 
+export interface DemoRevision {
+  version: number;
+  purpose: string;
+  note: string;
+  issuedBy: DemoPerson;
+  /** Has checked the version, a day before it was issued. */
+  checkedBy: DemoPerson;
+  remark?: string;
+  daysAgo: number;
+}
+
 export interface DemoNotebook {
   title: string;
-  /** Label of its client link, for the notebook that has one. */
-  link?: string;
+  /** Its own entries in the title block. */
+  block: { identificationNumber: string; supplementaryTitle: string; sheet: string };
+  /** Issued as A, B … in this order. */
+  revisions: DemoRevision[];
+  /** Its client link to the latest revision, for the notebook that has one. */
+  link?: { label: string; name: string; email: string };
   /** Oldest first. */
   versions: DemoVersion[];
 }
@@ -188,6 +203,29 @@ const FINE_STEP = '0.1 mm';
 export const demoNotebooks: DemoNotebook[] = [
   {
     title: 'Decagonal lantern stair',
+    block: {
+      identificationNumber: '1042',
+      supplementaryTitle: 'Olvane Hall, lantern stair',
+      sheet: '1',
+    },
+    revisions: [
+      {
+        version: 1,
+        purpose: 'for comment',
+        note: 'Plan only; treads to follow.',
+        issuedBy: 'ida',
+        checkedBy: 'tam',
+        daysAgo: 21,
+      },
+      {
+        version: 2,
+        purpose: 'for manufacture',
+        note: 'Treads, walking line and risers added.',
+        issuedBy: 'ida',
+        checkedBy: 'ida',
+        daysAgo: 18,
+      },
+    ],
     versions: [
       {
         author: 'ida',
@@ -205,6 +243,26 @@ export const demoNotebooks: DemoNotebook[] = [
   },
   {
     title: 'Fifteen-fold paved court',
+    block: { identificationNumber: '1043', supplementaryTitle: 'Olvane Hall, court', sheet: '1' },
+    revisions: [
+      {
+        version: 1,
+        purpose: 'for comment',
+        note: 'Courses only.',
+        issuedBy: 'ida',
+        checkedBy: 'ida',
+        daysAgo: 10,
+      },
+      {
+        version: 2,
+        purpose: 'for manufacture',
+        note: 'Closing check, and a stand-in for the seven-part inlay.',
+        issuedBy: 'ida',
+        checkedBy: 'tam',
+        remark: 'The stand-in keeps within 0.2 mm all the way round.',
+        daysAgo: 7,
+      },
+    ],
     versions: [
       {
         author: 'tam',
@@ -222,7 +280,35 @@ export const demoNotebooks: DemoNotebook[] = [
   },
   {
     title: 'Seventeen-light window',
-    link: 'Olvane Hall Trustees',
+    block: {
+      identificationNumber: '1041',
+      supplementaryTitle: 'Olvane Hall, great window',
+      sheet: '1',
+    },
+    revisions: [
+      {
+        version: 2,
+        purpose: 'for comment',
+        note: 'Ring, foils, chords and voussoirs. The closing is still to be checked.',
+        issuedBy: 'ida',
+        checkedBy: 'ida',
+        daysAgo: 3,
+      },
+      {
+        version: 3,
+        purpose: 'for manufacture',
+        note: 'The closing of the ring is added: set out by running dimensions from point 0.',
+        issuedBy: 'ida',
+        checkedBy: 'tam',
+        remark: 'Chords worked out again from the drawing.',
+        daysAgo: 1,
+      },
+    ],
+    link: {
+      label: 'Olvane Hall Trustees',
+      name: 'The Trustees of Olvane Hall',
+      email: 'trustees@olvane-hall.example',
+    },
     versions: [
       {
         author: 'ida',

@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import type { Knex } from 'knex';
 import { inTransaction, type Database } from '../client';
 import { insertClientLink } from '../queries/client-links';
@@ -8,11 +9,21 @@ import { insertVersion } from '../queries/versions';
 import { insertMembership, insertWorkshop } from '../queries/workshops';
 import { hashPassword, verifyPassword } from '@/lib/accounts/passwords';
 import { hashOf, newSecret } from '@/lib/accounts/secrets';
+import { tokenOf } from '@/lib/notebooks/link-tokens';
+import { issueDemo } from './demo-revisions';
 import { demoNotebooks, type DemoNotebook, type DemoPerson } from './demo-notebooks';
 
 /** Published on purpose: it lets nobody in unless the demo is wanted on this copy. */
 export const DEMO_PASSWORD = 'limestone-and-lime';
 export const DEMO_WORKSHOP = 'Ferrowick Yard';
+const DEMO_SETTINGS = {
+  issuing: { editorsIssue: false, checkNeeded: false },
+  titleBlock: {
+    legalOwner: 'Ferrowick Yard',
+    identificationPrefix: 'FY-',
+    approvalPerson: 'Ida Quellby',
+  },
+};
 
 const people: { key: DemoPerson; email: string; name: string; role: NotebookRole }[] = [
   { key: 'ida', email: 'ida@ferrowick.example', name: 'Ida Quellby', role: 'owner' },
@@ -42,14 +53,15 @@ export async function seedDemo(db: Database): Promise<DemoReport> {
   for (const { email } of people) {
     const user = await findUserByEmail(db, email);
     if (user === null) {
-      const linkToken = newSecret();
-      await inTransaction((trx) => insertDemo(trx, passwordHash, hashOf(linkToken)), db);
-      return { ...report, linkToken };
+      const linkId = randomUUID();
+      await inTransaction((trx) => insertDemo(trx, passwordHash, linkId), db);
+      return { ...report, linkToken: tokenOf(linkId) };
     }
     if (!(await verifyPassword(user.passwordHash, DEMO_PASSWORD))) {
       await changePassword(db, user.id, passwordHash);
     }
   }
+  await inTransaction(issueDemo, db);
   return report;
 }
 
@@ -70,9 +82,9 @@ export async function withdrawDemo(db: Database): Promise<null> {
 async function insertDemo(
   trx: Knex.Transaction,
   passwordHash: string,
-  linkTokenHash: string,
+  linkId: string,
 ): Promise<void> {
-  const workshopId = await insertWorkshop(trx, { name: DEMO_WORKSHOP });
+  const workshopId = await insertWorkshop(trx, { name: DEMO_WORKSHOP, defaults: DEMO_SETTINGS });
   const ids = new Map<DemoPerson, string>();
   for (const { key, email, name, role } of people) {
     const id = await insertUser(trx, { email, name, passwordHash });
@@ -80,8 +92,9 @@ async function insertDemo(
     ids.set(key, id);
   }
   for (const notebook of demoNotebooks) {
-    await insertDemoNotebook(trx, { notebook, workshopId, ids, linkTokenHash });
+    await insertDemoNotebook(trx, { notebook, workshopId, ids, linkId });
   }
+  await issueDemo(trx);
 }
 
 async function insertDemoNotebook(
@@ -90,10 +103,10 @@ async function insertDemoNotebook(
     notebook: DemoNotebook;
     workshopId: string;
     ids: Map<DemoPerson, string>;
-    linkTokenHash: string;
+    linkId: string;
   },
 ): Promise<void> {
-  const { notebook, workshopId, ids, linkTokenHash } = given;
+  const { notebook, workshopId, ids, linkId } = given;
   const idOf = (key: DemoPerson): string => {
     const id = ids.get(key);
     if (id === undefined) throw new Error(`The demo has nobody called ${key}.`);
@@ -108,8 +121,18 @@ async function insertDemoNotebook(
     const authorId = idOf(author);
     await insertVersion(trx, { notebookId, number, authorId, content, note, savedAt });
   }
+  await trx('notebooks')
+    .where({ id: notebookId })
+    .update({ title_block: JSON.stringify(notebook.block) });
   if (notebook.link === undefined) return;
-  const createdBy = idOf('ida');
-  const label = notebook.link;
-  await insertClientLink(trx, { notebookId, tokenHash: linkTokenHash, label, createdBy });
+  const { label, name, email } = notebook.link;
+  await insertClientLink(trx, {
+    id: linkId,
+    notebookId,
+    tokenHash: hashOf(tokenOf(linkId)),
+    label,
+    createdBy: idOf('ida'),
+    clientName: name,
+    clientEmail: email,
+  });
 }

@@ -28,6 +28,12 @@ export const FAILURE_CODES = [
   'too-many',
   'limit-reached',
   'busy',
+  'check-needed',
+  'faulty-lines',
+  'not-settled',
+  'nothing-issued',
+  'link-expired',
+  'passphrase-needed',
 ] as const;
 
 export type FailureCode = (typeof FAILURE_CODES)[number];

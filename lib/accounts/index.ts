@@ -3,7 +3,7 @@ export { addressOf } from './address';
 export { isId } from './ids';
 export { KeyRequest, createKey, holderOfKey, listKeys, revokeKey } from './keys';
 export type { KeyHolder } from './keys';
-export { LIMITS, countAgainst } from './limits';
+export { LIMITS, countAgainst, takeBack } from './limits';
 export {
   EmailAddress,
   Password,
@@ -14,7 +14,7 @@ export {
   signUp,
   workshopsOf,
 } from './people';
-export { hashPassword } from './passwords';
+export { hashPassword, verifyPassword } from './passwords';
 export { hashOf, newSecret } from './secrets';
 export {
   Logo,

@@ -26,6 +26,14 @@ const USE_RECORDED_EVERY_MS = 60_000;
 
 export const KeyRequest = z.strictObject({
   label: oneLine('The label', 120),
+  scopes: z
+    .array(z.enum(KEY_SCOPES, { error: `A scope is one of ${KEY_SCOPES.join(', ')}.` }))
+    .min(1, { error: 'A key without a scope is good for nothing; choose one at least.' })
+    .max(KEY_SCOPES.length, { error: 'A scope is given twice.' })
+    .refine((scopes) => new Set(scopes).size === scopes.length, {
+      error: 'A scope is given twice.',
+    })
+    .default(['evaluate']),
   expiresInDays: z
     .int({ error: 'The number of days must be a whole number.' })
     .min(1, { error: 'A key is valid for at least 1 day.' })
@@ -58,7 +66,7 @@ export async function createKey(person: Person, request: KeyRequest): Promise<Ne
     label: request.label,
     keyHash: hashOf(key),
     fragment: key.slice(-FRAGMENT),
-    scopes: ['evaluate'],
+    scopes: request.scopes,
     expiresAt: days === undefined ? null : new Date(Date.now() + days * DAY_MS),
   });
   const made = (await listApiKeys(db, person.id)).find((line) => line.id === id);

@@ -33,6 +33,18 @@ export const LIMITS = {
   tryAddress: { name: 'try-address', hits: 60, seconds: 60, what: 'tries from this address' },
   tryAll: { name: 'try-all', hits: 600, seconds: 60, what: 'tries by all visitors together' },
   comment: { name: 'comment', hits: 120, seconds: 600, what: 'comments' },
+  linkPassphrase: {
+    name: 'link-passphrase',
+    hits: 60,
+    seconds: 900,
+    what: 'passphrases tried for this link',
+  },
+  linkPassphraseAddress: {
+    name: 'link-passphrase-address',
+    hits: 8,
+    seconds: 900,
+    what: 'passphrases tried for this link from this address',
+  },
   export: { name: 'export', hits: 60, seconds: 60, what: 'exports' },
 } as const satisfies Record<string, Limit>;
 

@@ -39,6 +39,7 @@ export const DEEDS = {
   'version.checked': 'checked a version of',
   'revision.issued': 'issued a revision of',
   'link.made': 'made a client link to',
+  'link.changed': 'changed the passphrase of a client link to',
   'link.revoked': 'revoked a client link to',
   'key.made': 'made an API key',
   'key.revoked': 'revoked an API key',

@@ -1,9 +1,11 @@
 import type { Result, Settings } from '@/lib/language/index';
+import type { TitleBlock } from '@/lib/notebooks/title-block';
 import {
   CAUTION,
   type ExportedCell,
   type ExportedNotebook,
   type ExportedResults,
+  type ExportedRevision,
   resultsOf,
 } from './notebook';
 
@@ -14,6 +16,9 @@ export interface NotebookDocument {
   engine: string;
   notebook: { id: string; title: string; workshop: string };
   version: { number: number; author: string; savedAt: string };
+  /** Only of an issued revision. */
+  revision?: ExportedRevision;
+  titleBlock?: TitleBlock;
   settings: Settings;
   cells: (ExportedCell & { results?: readonly Result[] })[];
   caution: string;
@@ -24,12 +29,14 @@ export function notebookDocument(
   results: ExportedResults,
   engine: string,
 ): NotebookDocument {
-  const { id, title, workshop, version, settings: whole, cells } = notebook;
+  const { id, title, workshop, version, settings: whole, cells, revision, titleBlock } = notebook;
   return {
     schema: 1,
     engine,
     notebook: { id, title, workshop },
     version: { number: version.number, author: version.author, savedAt: version.savedAt },
+    ...(revision === undefined ? {} : { revision }),
+    ...(titleBlock === undefined ? {} : { titleBlock }),
     settings: {
       digits: whole.digits,
       unit: whole.unit,

@@ -1,4 +1,6 @@
 import type { Result, Settings } from '@/lib/language/index';
+import type { TitleBlock } from '@/lib/notebooks/title-block';
+import type { RevisionLine } from '@/lib/notebooks/types';
 
 /** A notebook as its exports need it: one version, with what is printed in a title block. */
 export interface ExportedNotebook {
@@ -15,7 +17,15 @@ export interface ExportedNotebook {
   };
   readonly settings: Settings;
   readonly cells: readonly ExportedCell[];
+  /** Only of an issued revision, with its title block as it was frozen. */
+  readonly revision?: ExportedRevision;
+  readonly titleBlock?: TitleBlock;
 }
+
+/** What an issued revision says of itself; the engine's version is told with the results. */
+export type ExportedRevision = Omit<RevisionLine, 'version' | 'engine' | 'issuedBy'> & {
+  readonly issuedBy?: string;
+};
 
 export interface ExportedCell {
   readonly id: string;

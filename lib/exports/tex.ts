@@ -68,13 +68,9 @@ const ROUNDING_WORDS: Readonly<Record<ExportedNotebook['settings']['rounding'], 
 };
 
 function titleBlock(notebook: ExportedNotebook): string {
-  const { settings, version } = notebook;
+  const { settings } = notebook;
   const fields: [string, string][] = [
-    ['Workshop', notebook.workshop],
-    ['Notebook', notebook.id],
-    ['Version', String(version.number)],
-    ['Saved', `${version.savedAt.slice(0, 16).replace('T', ' ')} UTC`],
-    ['Author', version.author],
+    ...identityFields(notebook),
     ['Unit', settings.unit],
     [
       'Cutting step',
@@ -90,3 +86,38 @@ function titleBlock(notebook: ExportedNotebook): string {
     '\\medskip\\hrule\\bigskip',
   ].join('\n');
 }
+
+/** Which sheet it is: an issued revision by its title block, a version by who saved it. */
+function identityFields(notebook: ExportedNotebook): [string, string][] {
+  const { version, revision, titleBlock: block } = notebook;
+  if (revision === undefined || block === undefined) {
+    return [
+      ['Workshop', notebook.workshop],
+      ['Notebook', notebook.id],
+      ['Version', String(version.number)],
+      ['Saved', momentOf(version.savedAt)],
+      ['Author', version.author],
+    ];
+  }
+  const superseded =
+    revision.supersededBy === null ? '' : `, superseded by ${revision.supersededBy}`;
+  const fields: [string, string | null][] = [
+    ['Legal owner', block.legalOwner],
+    ['Identification number', block.identificationNumber],
+    ['Supplementary title', block.supplementaryTitle],
+    ['Revision', `${revision.letter}${superseded}`],
+    ['Purpose', revision.purpose],
+    ['Date of issue', momentOf(revision.issuedAt)],
+    ['Note', revision.note],
+    ['Created by', block.creator],
+    ['Checked by', revision.checkedBy],
+    ['Approved by', block.approvalPerson],
+    ['Sheet', block.sheet],
+    ['Tolerance class (ISO 2768-1)', block.toleranceClass],
+    ['Version', String(version.number)],
+    ['Check code', revision.checkCode],
+  ];
+  return fields.flatMap(([name, value]): [string, string][] => (value ? [[name, value]] : []));
+}
+
+const momentOf = (at: string): string => `${at.slice(0, 16).replace('T', ' ')} UTC`;

@@ -35,14 +35,36 @@ export function revalidated(request: Request, body: unknown): Response {
   const text = JSON.stringify(body);
   const tag = `W/"${createHash('sha256').update(text).digest('base64url').slice(0, 27)}"`;
   const headers = { etag: tag, 'cache-control': 'private, no-cache', vary: 'Cookie' };
-  const known =
-    request.headers
-      .get('if-none-match')
-      ?.split(',')
-      .map((one) => one.trim()) ?? [];
-  if (known.includes(tag)) return new Response(null, { status: 304, headers });
+  if (isKnown(request, tag)) return new Response(null, { status: 304, headers });
   return new Response(text, { headers: { ...headers, 'content-type': 'application/json' } });
 }
+
+/**
+ * The same for an answer whose tag is known before it is made, such as that of an issued revision: it
+ * is made only for who has not got it.
+ * @param name tells this answer from every other one at the same address
+ */
+export async function taggedAs(
+  request: Request,
+  name: string,
+  make: () => Promise<Response>,
+): Promise<Response> {
+  const tag = `"${name}"`;
+  const isNew = !isKnown(request, tag);
+  const answer = isNew ? await make() : new Response(null, { status: 304 });
+  answer.headers.set('etag', tag);
+  answer.headers.set('cache-control', 'private, no-cache');
+  answer.headers.set('vary', 'Cookie, Authorization');
+  return answer;
+}
+
+const isKnown = (request: Request, tag: string): boolean => {
+  const sent = request.headers.get('if-none-match')?.split(',') ?? [];
+  return sent.some((one) => bare(one.trim()) === bare(tag));
+};
+
+/** Tags are compared weakly (RFC 9110, 13.1.2): a proxy that packs an answer makes its tag weak. */
+const bare = (tag: string): string => tag.replace(/^W\//, '');
 
 /**
  * A file to be saved, never shown in place. The plain name is for old clients; `filename*` after

@@ -25,6 +25,20 @@ export async function readJson(request: Request, limit: number): Promise<unknown
   }
 }
 
+/**
+ * The fields of a form that a page sends without a script; of a field given twice the last one.
+ * @throws Failure `wrong-type`, `too-large`
+ */
+export async function readForm(request: Request): Promise<Record<string, string>> {
+  const type = request.headers.get('content-type')?.split(';')[0]?.trim().toLowerCase() ?? '';
+  if (type !== 'application/x-www-form-urlencoded') {
+    const met = type === '' ? 'no content type' : `“${type.slice(0, 80)}”`;
+    throw new Failure('wrong-type', `The request has ${met}; expected the form of the page.`);
+  }
+  const bytes = await readBytes(request, SMALL_BODY);
+  return Object.fromEntries(new URLSearchParams(bytes.toString('utf8')));
+}
+
 /** The body of a request, read no further than `limit` bytes. @throws Failure `too-large` */
 export async function readBytes(request: Request, limit: number): Promise<Buffer> {
   const announced = Number(request.headers.get('content-length') ?? 0);

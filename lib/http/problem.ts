@@ -27,6 +27,12 @@ export const PROBLEMS: Readonly<Record<FailureCode | 'fault', { status: number; 
     invalid: { status: 422, title: 'Request not valid' },
     'unknown-email': { status: 422, title: 'No such account' },
     'too-many': { status: 429, title: 'Too many requests' },
+    'check-needed': { status: 409, title: 'Check needed' },
+    'faulty-lines': { status: 409, title: 'Lines with faults' },
+    'not-settled': { status: 503, title: 'Not worked out in time' },
+    'nothing-issued': { status: 404, title: 'Nothing issued yet' },
+    'link-expired': { status: 410, title: 'Link expired' },
+    'passphrase-needed': { status: 401, title: 'Passphrase needed' },
     busy: { status: 503, title: 'Busy' },
     fault: { status: 500, title: 'A fault of ours' },
   };

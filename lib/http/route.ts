@@ -1,6 +1,13 @@
 import type { z } from 'zod';
 import { Failure, keyAllows, type KeyScope } from '@/lib/access';
-import { LIMITS, addressOf, countAgainst, holderOfKey, type Person } from '@/lib/accounts';
+import {
+  LIMITS,
+  addressOf,
+  countAgainst,
+  holderOfKey,
+  type KeyHolder,
+  type Person,
+} from '@/lib/accounts';
 import { currentPerson } from '@/lib/accounts/session';
 import { SMALL_BODY, check, readJson } from './body';
 import { answered } from './guarded';
@@ -24,6 +31,8 @@ export interface Call<Who, B, Q> {
   person: Who;
   /** The id of the API key the request came with, if it came with one. */
   keyId: string | null;
+  /** The person, or the key with its scopes: what a service asks that takes both. */
+  asker: Who | KeyHolder;
   address: string;
   /** A part of the path by its name in the route's folder, such as `id` for `[id]`. */
   part: (name: string) => string;
@@ -58,13 +67,14 @@ export function route<B extends z.ZodType, Q extends z.ZodType>(
 ): (request: Request, context: Context) => Promise<Response> {
   return (request, context) =>
     answered(request, async () => {
-      const { person, keyId } = await whoAsks(request, options);
+      const { person, holder } = await whoAsks(request, options);
       const limit = options.bodyLimit ?? SMALL_BODY;
       const part = partsOf((await context.params) ?? {});
       const call = {
         request,
         person: person as never,
-        keyId,
+        keyId: holder?.keyId ?? null,
+        asker: (holder ?? person) as never,
         address: addressOf(request.headers),
         part,
         count: (name: string) => (/^[1-9]\d{0,9}$/.test(part(name)) ? Number(part(name)) : NaN),
@@ -87,14 +97,21 @@ function partsOf(params: object): (name: string) => string {
 
 interface Asking {
   person: Person | null;
-  keyId: string | null;
+  /** The key the request came with. */
+  holder: KeyHolder | null;
 }
+
+/** What each scope is for, as the sentence to who lacks it ends. */
+const SCOPES: Readonly<Record<KeyScope, string>> = {
+  evaluate: 'evaluate',
+  revisions: 'read issued revisions',
+};
 
 async function whoAsks(
   request: Request,
   options: { person: 'required' | 'none'; key?: KeyScope },
 ): Promise<Asking> {
-  if (options.person === 'none') return { person: null, keyId: null };
+  if (options.person === 'none') return { person: null, holder: null };
   const authorization = request.headers.get('authorization');
   if (options.key !== undefined && authorization !== null) {
     return whoHolds(authorization, options.key, addressOf(request.headers));
@@ -106,7 +123,7 @@ async function whoAsks(
     throw new Failure('sign-in-needed', `You are not signed in. Sign in first${how}.`);
   }
   demandSameOrigin(request);
-  return { person, keyId: null };
+  return { person, holder: null };
 }
 
 async function whoHolds(authorization: string, scope: KeyScope, address: string): Promise<Asking> {
@@ -123,9 +140,9 @@ async function whoHolds(authorization: string, scope: KeyScope, address: string)
     );
   }
   if (!keyAllows(holder.scopes, scope)) {
-    throw new Failure('forbidden', `This key may not be used to ${scope}.`);
+    throw new Failure('forbidden', `This key may not be used to ${SCOPES[scope]}.`);
   }
-  return { person: holder.person, keyId: holder.keyId };
+  return { person: holder.person, holder };
 }
 
 /** Query parameters as an object; one that is given twice is a list, which no schema here takes. */

@@ -4,6 +4,7 @@ import {
   certify,
   evaluate,
   storeOutcomesIn,
+  type CellAnswer,
   type CertificateAnswer,
   type CertificateRequest,
   type EvaluateAnswer,
@@ -54,4 +55,11 @@ export function questionOf(content: NotebookContent): EvaluateRequest {
     })),
     settings: content.settings,
   };
+}
+
+/** Whether the server was too busy to finish: worth asking again instead of showing or keeping. */
+export function isHurried(answers: readonly Pick<CellAnswer, 'results'>[]): boolean {
+  return answers.some(({ results }) =>
+    results.some((result) => result.kind === 'error' && result.error.code === 'limit-time'),
+  );
 }

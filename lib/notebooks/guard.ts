@@ -3,25 +3,37 @@ import { database, type Database } from '@/db/client';
 import { findNotebookRole } from '@/db/queries/notebook-roles';
 import { findNotebook, lockHead, type Notebook } from '@/db/queries/notebooks';
 import { demand, standingOf, type Action, type Actor, type Guarded, type Role } from '@/lib/access';
-import { isId, readWorkshopSettings, type Person } from '@/lib/accounts';
+import { isId, readWorkshopSettings, type KeyHolder, type Person } from '@/lib/accounts';
 
 export interface Opened {
   notebook: Notebook;
   role: Role;
 }
 
+/** Whoever asks a service: a person, or a script with a key that a person made. */
+export type Asker = Person | KeyHolder;
+
+const actorOf = (asker: Asker): Actor =>
+  'keyId' in asker
+    ? { kind: 'key', personId: asker.person.id, scopes: asker.scopes }
+    : { kind: 'person', id: asker.id };
+
+/** The person who asks, or who made the key; it is that person's role that counts, at each request. */
+const personOf = (asker: Asker): Person => ('keyId' in asker ? asker.person : asker);
+
 /**
- * The notebook, for a person who may do this to it.
+ * The notebook, for a person or a key that may do this to it.
  * @throws Failure `not-found` for an unknown notebook and for one the person has no role on, alike;
  *   `forbidden` for somebody who may read it and no more
  */
 export async function openFor(
-  person: Person,
+  asker: Asker,
   action: Action,
   id: string,
   db: Database = database(),
 ): Promise<Opened> {
-  const actor: Actor = { kind: 'person', id: person.id };
+  const actor = actorOf(asker);
+  const person = personOf(asker);
   const notebook = isId(id) ? await findNotebook(db, id) : null;
   const role = notebook === null ? null : await findNotebookRole(db, id, person.id);
   const guarded = notebook === null ? null : guardedBy(notebook, person, role);
@@ -47,10 +59,10 @@ export function guardedBy(notebook: Notebook, person: Person, role: Role | null)
  */
 export async function holdFor(
   trx: Knex.Transaction,
-  person: Person,
+  asker: Asker,
   action: Action,
   id: string,
 ): Promise<Opened> {
   if (isId(id)) await lockHead(trx, id);
-  return openFor(person, action, id, trx);
+  return openFor(asker, action, id, trx);
 }

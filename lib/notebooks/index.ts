@@ -1,4 +1,5 @@
-export { answerTo, certificateFor, questionOf } from './answers';
+export { answerTo, certificateFor, isHurried, questionOf } from './answers';
+export { CheckRequest, checkVersion, listChecks } from './checks';
 export {
   CommentChange,
   NewComment,
@@ -8,11 +9,22 @@ export {
   withdrawComment,
 } from './comments';
 export {
+  PassphraseForm,
+  countOpening,
+  exportByToken,
+  readByToken,
+  tryPassphrase,
+} from './client-view';
+export type { Asker } from './guard';
+export { IssueRequest, issueRevision, prospectOfIssue } from './issue';
+export { PASS_SECONDS } from './link-tokens';
+export {
+  LinkChange,
   LinkRequest,
+  changeLink,
   createLink,
   listLinks,
-  readByToken,
-  readByTokenForExport,
+  readLink,
   revokeLink,
 } from './links';
 export {
@@ -37,6 +49,7 @@ export {
 } from './people';
 export { TitleBlockEntries, changeTitleBlock, titleBlockIn, titleBlockOf } from './title-block';
 export { SearchRequest, search } from './search';
+export { listRevisions, readRevision, reevaluateRevision, revisionTag } from './revisions';
 export { TryRequest, tryLines } from './try-lines';
 export { RestoreRequest, SaveRequest, restoreVersion, saveVersion } from './save';
 export { ListQuery, listVersions, readForExport, readVersion } from './versions';

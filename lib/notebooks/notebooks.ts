@@ -11,11 +11,11 @@ import {
 import { putSearchTitle } from '@/db/queries/notebook-search';
 import { insertVersion, type Version } from '@/db/queries/versions';
 import { findWorkshop, holdWorkshopRole, listWorkshopsOf } from '@/db/queries/workshops';
-import { Failure, demandInWorkshop, type Role } from '@/lib/access';
+import { Failure, can, demandInWorkshop, type Role } from '@/lib/access';
 import { isId, oneLine, readWorkshopSettings, type Person } from '@/lib/accounts';
 import { record } from '@/lib/activity';
 import { canonicalContent, emptyContent, type NotebookContent } from './content';
-import { holdFor, openFor } from './guard';
+import { guardedBy, holdFor, openFor } from './guard';
 import { SavableContent } from './savable';
 import { titleBlockIn } from './title-block';
 import { keepSearchable } from './search-text';
@@ -101,7 +101,7 @@ function startOf(workshopSettings: unknown): NotebookContent {
 export async function readNotebook(person: Person, id: string): Promise<OpenNotebook> {
   const { notebook, role } = await openFor(person, 'notebook.read', id);
   const version = await getVersion(database(), id, notebook.head);
-  return { notebook: headOf(notebook, role, version), content: contentOf(version) };
+  return { notebook: headOf(person, notebook, role, version), content: contentOf(version) };
 }
 
 /** Renames, archives or brings back. The whole change or nothing of it. */
@@ -142,13 +142,17 @@ export async function changeNotebook(
   });
 }
 
-function headOf(notebook: Notebook, role: Role, version: Version): NotebookHead {
+function headOf(person: Person, notebook: Notebook, role: Role, version: Version): NotebookHead {
+  const actor = { kind: 'person', id: person.id } as const;
   const { entries, block } = titleBlockIn(notebook, version.author.name);
   return {
     id: notebook.id,
     title: notebook.title,
     workshop: notebook.workshop,
     role,
+    mayIssue:
+      notebook.archivedAt === null &&
+      can(actor, 'revisions.issue', guardedBy(notebook, person, role)),
     archivedAt: notebook.archivedAt?.toISOString() ?? null,
     version: version.number,
     savedAt: version.savedAt.toISOString(),

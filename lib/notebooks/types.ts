@@ -1,4 +1,5 @@
 import type { Role } from '@/lib/access';
+import type { CellAnswer } from '@/lib/evaluation';
 import type { NotebookContent } from './content';
 import type { TitleBlock, TitleBlockEntries } from './title-block';
 
@@ -29,6 +30,8 @@ export interface NotebookHead {
   title: string;
   workshop: NamedWorkshop;
   role: Role;
+  /** Whether the person may issue revisions of it. */
+  mayIssue: boolean;
   archivedAt: Moment | null;
   version: number;
   savedAt: Moment;
@@ -91,22 +94,114 @@ export interface ClientLinkLine {
   madeAt: Moment;
   madeBy: string;
   revokedAt: Moment | null;
+  /** The one revision it shows, by its letter; null for the latest issued. */
+  revision: string | null;
+  expiresAt: Moment | null;
+  expired: boolean;
+  hasPassphrase: boolean;
+  clientName: string | null;
+  clientEmail: string | null;
   opened: number;
   lastOpenedAt: Moment | null;
 }
 
-/** A link as shown once, at its making: only the hash of `token` is kept. */
+/** A link as shown at its making; only the hash of `token` is kept. */
 export interface NewClientLink {
   id: string;
   token: string;
   url: string;
 }
 
-/** All that a client link gives away: no people, no addresses, no identities but the notebook's. */
-export interface ClientView {
-  notebook: { id: string; title: string; workshop: string };
+/** What owners see of one link beyond its line. */
+export interface ClientLinkDetails {
+  /** Null where the address cannot be made again, though the link goes on working. */
+  url: string | null;
+  /** When it was last opened, newest first; nothing of who did. */
+  openings: Moment[];
+}
+
+/** What the holder of a client link meets. Of people it tells only what the title block tells. */
+export type ClientView =
+  | { kind: 'revision'; linkId: string; open: OpenRevision }
+  | { kind: 'nothing-issued'; linkId: string; title: string; legalOwner: string }
+  | { kind: 'passphrase'; linkId: string }
+  | { kind: 'expired'; linkId: string; since: Moment };
+
+/** That somebody has checked a version. */
+export interface CheckLine {
+  version: number;
+  person: { id: string; name: string };
+  checkedAt: Moment;
+  remark: string | null;
+}
+
+/** An issued revision as lists show it. */
+export interface RevisionLine {
+  letter: string;
+  version: number;
+  purpose: string;
+  note: string | null;
+  issuedBy: string;
+  issuedAt: Moment;
+  checkedBy: string | null;
+  engine: string;
+  /** On paper too: two sheets with the same code were printed from the same revision. */
+  checkCode: string;
+  /** The newest letter, where that is another one. */
+  supersededBy: string | null;
+}
+
+/** A revision with all that is frozen in it. */
+export interface OpenRevision {
+  notebook: { id: string; title: string };
   version: { number: number; savedAt: Moment };
+  revision: RevisionLine;
+  titleBlock: TitleBlock;
   content: NotebookContent;
+  results: Pick<CellAnswer, 'id' | 'results'>[];
+}
+
+/** What there is to know before a version is issued. */
+export interface IssueProspect {
+  version: number;
+  /** Letter that it would get now. */
+  letter: string;
+  /** Lines with a fault instead of a value. */
+  faults: number;
+  checks: CheckLine[];
+  checkNeeded: boolean;
+  /** Why it cannot be issued yet, and who could change that; null when nothing stands in the way. */
+  hindrance: string | null;
+  /** Live links to the latest revision whose client would get a letter. */
+  letters: number;
+}
+
+export interface Issued {
+  letter: string;
+  version: number;
+  checkCode: string;
+  /** Letters to clients that were queued. */
+  letters: number;
+}
+
+/** One field of one line in which the engine now says something else than what was issued. */
+export interface Difference {
+  cell: string;
+  line: number;
+  mark: string | null;
+  source: string;
+  field: string;
+  frozen: string | null;
+  now: string | null;
+}
+
+export interface Reevaluation {
+  letter: string;
+  /** Version of the engine whose results are frozen, and of the one that is asked now. */
+  engineThen: string;
+  engineNow: string;
+  lines: number;
+  differences: Difference[];
 }
 
 /** One thing said in a thread. The text names those it mentions by id (`comment-text.ts`); a withdrawn one has none. */

@@ -64,7 +64,7 @@ const MAY_IMPORT: Record<string, string[]> = {
   ],
   proxy: ['lib/access', 'lib/env', 'lib/http', ...SERVICES],
   // Run by the set-up, outside the application: it fills the database through what lies above it.
-  'db/seeds': ['db', 'lib/access', 'lib/env', ...SERVICES],
+  'db/seeds': ['db', 'lib/access', 'lib/env', 'lib/engine', 'lib/language', ...SERVICES],
   'lib/setup': ['db', 'lib/env', 'lib/language', 'lib/engine', 'lib/evaluation'],
 };
 

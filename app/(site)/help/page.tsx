@@ -81,7 +81,11 @@ export default async function HelpPage({ searchParams }: PageProps) {
           <div className="mt-5 flex flex-wrap gap-x-2.5 gap-y-0.5 font-mono text-small">
             {GROUPS.filter(({ id }) => id !== 'forms').flatMap(({ entries }) =>
               entries.map(({ id, form }) => (
-                <a key={id} href={`#${id}`} className="min-w-6 py-[3px] text-snapline hover:underline">
+                <a
+                  key={id}
+                  href={`#${id}`}
+                  className="min-w-6 py-[3px] text-snapline hover:underline"
+                >
                   {form.replace(/[(,].*/, '')}
                 </a>
               )),

@@ -1,12 +1,12 @@
 import type { Metadata } from 'next';
 import { cache } from 'react';
-import { answersFor, isHurried } from '@/components/sheet/answers';
+import { answersFor } from '@/components/sheet/answers';
 import { notesOf } from '@/components/sheet/notes-of';
 import { Sheet } from '@/components/sheet/sheet';
 import { orNotFound } from '@/components/site/or-not-found';
 import { can } from '@/lib/access';
 import { personForPage } from '@/lib/accounts/session';
-import { readNotebook } from '@/lib/notebooks';
+import { isHurried, readNotebook } from '@/lib/notebooks';
 
 interface PageProps {
   params: Promise<{ id: string }>;
