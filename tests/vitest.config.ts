@@ -9,7 +9,7 @@ const alias = {
 };
 
 /** Folders whose files share one real MariaDB, so they run one after another. */
-const onDatabase = ['db', 'accounts', 'access', 'notebooks', 'workshops'];
+const onDatabase = ['db', 'accounts', 'access', 'mail', 'notebooks', 'workshops'];
 const inFolders = (folders: string[]) => folders.map((folder) => `tests/${folder}/**/*.test.ts`);
 const elsewhere = ['tests/components/**', 'tests/browser/**', 'tests/api/**'];
 

@@ -1,13 +1,13 @@
 import { randomUUID } from 'node:crypto';
+import type { Knex } from 'knex';
 import type { Database } from '../client';
 
 export interface User {
   id: string;
   email: string;
   name: string;
-  passwordHash: string;
-  /** Part of every session of the person; a session with an older one is over. */
-  tokenVersion: number;
+  /** Null for somebody who signs in through another service only, and for one who has left. */
+  passwordHash: string | null;
   createdAt: Date;
 }
 
@@ -15,8 +15,8 @@ interface UserRow {
   id: string;
   email: string;
   name: string;
+  /** Empty where there is none. */
   password_hash: string;
-  token_version: number;
   created_at: Date;
 }
 
@@ -24,8 +24,7 @@ const toUser = (row: UserRow): User => ({
   id: row.id,
   email: row.email,
   name: row.name,
-  passwordHash: row.password_hash,
-  tokenVersion: row.token_version,
+  passwordHash: row.password_hash === '' ? null : row.password_hash,
   createdAt: row.created_at,
 });
 
@@ -40,14 +39,14 @@ export function normaliseEmail(email: string): string {
  */
 export async function insertUser(
   db: Database,
-  user: { email: string; name: string; passwordHash: string },
+  user: { email: string; name: string; passwordHash: string | null },
 ): Promise<string> {
   const id = randomUUID();
   await db('users').insert({
     id,
     email: normaliseEmail(user.email),
     name: user.name,
-    password_hash: user.passwordHash,
+    password_hash: user.passwordHash ?? '',
   });
   return id;
 }
@@ -64,18 +63,40 @@ export async function findUser(db: Database, id: string): Promise<User | null> {
   return row === undefined ? null : toUser(row);
 }
 
-/** Stores a new password hash and ends every session the person has. */
-export async function changePassword(
+/** The same, held until the transaction ends. */
+export async function lockUser(trx: Knex.Transaction, id: string): Promise<User | null> {
+  const row = await trx<UserRow>('users').where({ id }).forUpdate().first();
+  return row === undefined ? null : toUser(row);
+}
+
+/** Whether there is anybody at all; held, so that of two at once only one finds nobody. */
+export async function isAnybodyThere(trx: Knex.Transaction): Promise<boolean> {
+  const row: unknown = await trx('users').forUpdate().first('id');
+  return row !== undefined;
+}
+
+/** Stores a new password hash. Sessions are the caller's to end. */
+export async function changePasswordHash(
   db: Database,
   id: string,
   passwordHash: string,
 ): Promise<void> {
-  await db<UserRow>('users')
-    .where({ id })
-    .update({ password_hash: passwordHash, token_version: db.raw('token_version + 1') });
+  await db('users').where({ id }).update({ password_hash: passwordHash });
 }
 
-/** Ends every session the person has. */
-export async function endSessions(db: Database, id: string): Promise<void> {
-  await db<UserRow>('users').where({ id }).increment('token_version', 1);
+export async function renameUser(db: Database, id: string, name: string): Promise<void> {
+  await db('users').where({ id }).update({ name });
+}
+
+/** What is said in place of the name of somebody who has left. */
+const FORMER = 'former member';
+
+/**
+ * Takes from a person's row all that says who it was. The row itself stays, because versions and
+ * client links name it as their author. The address is one that no mail can reach and nobody can have.
+ */
+export async function makeUserAnonymous(db: Database, id: string): Promise<void> {
+  await db('users')
+    .where({ id })
+    .update({ email: `${id}@left.invalid`, name: FORMER, password_hash: '' });
 }

@@ -4,7 +4,8 @@ import { inTransaction, type Database } from '../client';
 import { insertClientLink } from '../queries/client-links';
 import { insertNotebook, type NotebookRole } from '../queries/notebooks';
 import { putNotebookRole } from '../queries/notebook-roles';
-import { changePassword, findUserByEmail, insertUser } from '../queries/users';
+import { deleteSessionsOf } from '../queries/sessions';
+import { changePasswordHash, findUserByEmail, insertUser } from '../queries/users';
 import { insertVersion } from '../queries/versions';
 import { insertMembership, insertWorkshop } from '../queries/workshops';
 import { hashPassword, verifyPassword } from '@/lib/accounts/passwords';
@@ -50,16 +51,16 @@ export async function seedDemo(db: Database): Promise<DemoReport> {
     people: people.map(({ email, role }) => ({ email, role })),
   };
   const passwordHash = await hashPassword(DEMO_PASSWORD);
-  for (const { email } of people) {
-    const user = await findUserByEmail(db, email);
-    if (user === null) {
-      const linkId = randomUUID();
-      await inTransaction((trx) => insertDemo(trx, passwordHash, linkId), db);
-      return { ...report, linkToken: tokenOf(linkId) };
-    }
-    if (!(await verifyPassword(user.passwordHash, DEMO_PASSWORD))) {
-      await changePassword(db, user.id, passwordHash);
-    }
+  const found = await Promise.all(people.map(({ email }) => findUserByEmail(db, email)));
+  if (found.every((user) => user === null)) {
+    const linkId = randomUUID();
+    await inTransaction((trx) => insertDemo(trx, passwordHash, linkId), db);
+    return { ...report, linkToken: tokenOf(linkId) };
+  }
+  for (const user of found) {
+    // One who has deleted the account does not come back.
+    if (user === null || (await verifyPassword(user.passwordHash, DEMO_PASSWORD))) continue;
+    await changePassword(db, user.id, passwordHash);
   }
   await inTransaction(issueDemo, db);
   return report;
@@ -77,6 +78,11 @@ export async function withdrawDemo(db: Database): Promise<null> {
     }
   }
   return null;
+}
+
+async function changePassword(db: Database, userId: string, passwordHash: string): Promise<void> {
+  await changePasswordHash(db, userId, passwordHash);
+  await deleteSessionsOf(db, userId);
 }
 
 async function insertDemo(

@@ -5,6 +5,8 @@
 export const FAILURE_CODES = [
   'sign-in-needed',
   'bad-credentials',
+  'unconfirmed',
+  'link-over',
   'bad-key',
   'forbidden',
   'not-found',
@@ -14,7 +16,7 @@ export const FAILURE_CODES = [
   'too-large',
   'foreign-origin',
   'method-not-allowed',
-  'email-taken',
+  'still-needed',
   'stale-version',
   'archived',
   'resolved',

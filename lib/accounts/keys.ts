@@ -10,8 +10,8 @@ import {
 } from '@/db/queries/api-keys';
 import { findUser } from '@/db/queries/users';
 import { Failure, KEY_SCOPES, type KeyScope } from '@/lib/access';
+import { oneLine } from './fields';
 import { isId } from './ids';
-import { oneLine } from './people';
 import { hashOf, newSecret } from './secrets';
 import type { ApiKeyLine, NewApiKey, Person } from './types';
 

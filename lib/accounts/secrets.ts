@@ -13,3 +13,8 @@ export function newSecret(): string {
 export function hashOf(secret: string): string {
   return createHash('sha256').update(secret).digest('hex');
 }
+
+/** Whether a text can be a secret of ours at all; whatever else is sent is not looked up. */
+export function isSecret(text: string): boolean {
+  return /^[A-Za-z0-9_-]{43}$/.test(text);
+}

@@ -4,15 +4,19 @@ import { redirect } from 'next/navigation';
 import { cache } from 'react';
 import { getToken } from 'next-auth/jwt';
 import { env } from '@/lib/env';
-import { isId } from './ids';
-import { personOfSession } from './people';
+import { personOfSession } from './sessions';
 import type { Person } from './types';
 
+interface CurrentSession {
+  id: string;
+  person: Person;
+}
+
 /**
- * Who is signed in with the cookie of this request, asked of the database once per request: a
- * session that was ended elsewhere, or whose account is gone, is none.
+ * The session of this request's cookie, asked of the database once per request: one that was ended
+ * elsewhere, or whose account is gone, is none.
  */
-export const currentPerson = cache(async (): Promise<Person | null> => {
+export const currentSession = cache(async (): Promise<CurrentSession | null> => {
   const jar = await cookies();
   const sent = Object.fromEntries(jar.getAll().map(({ name, value }) => [name, value]));
   // No headers: next-auth would also take a session from a bearer token, which is for API keys.
@@ -21,9 +25,15 @@ export const currentPerson = cache(async (): Promise<Person | null> => {
     secret: env().NEXTAUTH_SECRET,
     secureCookie: env().NEXTAUTH_URL.startsWith('https:'),
   });
-  if (token?.sub === undefined || token.tokenVersion === undefined || !isId(token.sub)) return null;
-  return personOfSession(token.sub, token.tokenVersion);
+  if (token?.sid === undefined) return null;
+  const person = await personOfSession(token.sid);
+  return person === null ? null : { id: token.sid, person };
 });
+
+/** Who is signed in with the cookie of this request. */
+export async function currentPerson(): Promise<Person | null> {
+  return (await currentSession())?.person ?? null;
+}
 
 /** The same for a page that needs a person: signed-out people go to sign in and come back to `path`. */
 export async function personForPage(path: string): Promise<Person> {

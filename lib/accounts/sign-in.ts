@@ -3,29 +3,26 @@ import CredentialsProvider from 'next-auth/providers/credentials';
 import { Failure } from '@/lib/access';
 import { env } from '@/lib/env';
 import { addressOf } from './address';
-import { personOfSession, signIn } from './people';
-
-/** How long a session lasts without a visit, in seconds: two weeks. */
-const SESSION_SECONDS = 14 * 24 * 3600;
+import { deviceOf } from './device';
+import { OPEN_ID, openIdProvider, openIdSettings, personOfClaims, type Claims } from './open-id';
+import { signIn } from './people';
+import { SESSION_SECONDS, beginSession, endSession, personOfSession } from './sessions';
 
 declare module 'next-auth/jwt' {
   interface JWT {
-    /** The person's token version at sign-in; a session with an older one is over. */
-    tokenVersion?: number;
-  }
-}
-
-declare module 'next-auth' {
-  interface User {
-    tokenVersion: number;
+    /** The session's row in the database; once that is gone the cookie is worth nothing. */
+    sid?: string;
   }
 }
 
 /**
- * Options of next-auth, made at the first request and not when the module loads: a build has no
- * secrets. A failed attempt comes back as `?error=CredentialsSignin`, too many as `?error=too-many`.
+ * Options of next-auth for one request, and not made when the module loads: a build has no secrets.
+ * What went wrong comes back as `?error=` and a code: `CredentialsSignin` for a failed attempt, a
+ * code of ours such as `too-many` or `unconfirmed`, or one of next-auth's about the other service.
  */
-export function signInOptions(): NextAuthOptions {
+export function signInOptions(headers: Headers): NextAuthOptions {
+  const device = deviceOf(headers.get('user-agent'));
+  const openId = openIdSettings();
   return {
     secret: env().NEXTAUTH_SECRET,
     session: { strategy: 'jwt', maxAge: SESSION_SECONDS },
@@ -33,35 +30,38 @@ export function signInOptions(): NextAuthOptions {
     providers: [
       CredentialsProvider({
         credentials: { email: { type: 'email' }, password: { type: 'password' } },
-        async authorize(credentials, request) {
+        async authorize(credentials) {
           const { email, password } = credentials ?? {};
           if (typeof email !== 'string' || typeof password !== 'string') return null;
-          try {
-            return await signIn({ email, password }, addressOf(new Headers(request.headers)));
-          } catch (error) {
-            // next-auth hands the message on in an address, so it must be a code and nothing more.
-            throw new Error(error instanceof Failure ? error.code : 'fault', { cause: error });
-          }
+          return withCode(() =>
+            signIn({ email, password }, { address: addressOf(headers), device }),
+          );
         },
       }),
+      ...(openId === null ? [] : [openIdProvider(openId)]),
     ],
     callbacks: {
+      async signIn({ user, account, profile }) {
+        if (account?.provider !== OPEN_ID || openId === null) return true;
+        // In place of the service's name for the person: ours.
+        user.id = await withCode(() => personOfClaims(profile as Claims, openId));
+        return true;
+      },
       async jwt({ token, user, trigger }) {
-        if (trigger === 'signIn') {
-          return {
-            sub: user.id,
-            name: user.name,
-            email: user.email,
-            tokenVersion: user.tokenVersion,
-          };
-        }
-        const person = await personOfSession(token.sub ?? '', token.tokenVersion ?? -1);
+        const sid = trigger === 'signIn' ? await beginSession(user.id, device) : (token.sid ?? '');
+        const person = await personOfSession(sid);
         // Thrown, because next-auth answers that by taking the cookie away.
         if (person === null) throw new Error('The session has been ended.');
-        return { ...token, name: person.name, email: person.email };
+        return { sub: person.id, name: person.name, email: person.email, sid };
       },
       session({ session, token }) {
         return { user: { name: token.name, email: token.email }, expires: session.expires };
+      },
+    },
+    events: {
+      async signOut({ token }) {
+        const person = await personOfSession(token.sid ?? '');
+        if (person !== null) await endSession(person, token.sid ?? '');
       },
     },
     logger: {
@@ -72,4 +72,13 @@ export function signInOptions(): NextAuthOptions {
       warn() {},
     },
   };
+}
+
+/** next-auth hands the message of an error on in an address, so it must be a code and nothing more. */
+async function withCode<T>(work: () => Promise<T>): Promise<T> {
+  try {
+    return await work();
+  } catch (error) {
+    throw new Error(error instanceof Failure ? error.code : 'fault', { cause: error });
+  }
 }

@@ -7,6 +7,18 @@ export interface Person {
   email: string;
 }
 
+/** One session of a person, as their settings list it. */
+export interface SessionLine {
+  id: string;
+  /** Browser and system in words. */
+  device: string;
+  begunAt: string;
+  /** Roughly: to a few minutes. */
+  seenAt: string;
+  /** The one that asks. */
+  current: boolean;
+}
+
 export interface MemberWorkshop {
   id: string;
   name: string;

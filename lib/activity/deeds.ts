@@ -3,13 +3,13 @@
  * after the name of whoever did it and before the subject.
  */
 export const DEEDS = {
-  'session.begun': 'signed in',
-  'session.refused': 'was refused at signing in',
+  'session.begun': 'signed in with',
+  'session.refused': 'was refused at signing in with',
   'session.ended': 'signed out of',
-  'account.made': 'made an account',
+  'account.made': 'made an account with the workshop',
   'account.confirmed': 'confirmed the e-mail address of',
   'account.exported': 'exported the data of',
-  'account.deleted': 'deleted the account',
+  'account.deleted': 'deleted',
   'password.changed': 'changed the password of',
   'password.forgotten': 'asked for a new password of',
   'workshop.made': 'made the workshop',

@@ -1,2 +1,3 @@
 export type { Letter } from './letter';
+export { hasLocalMailbox } from './local';
 export { queueLetter } from './queue';

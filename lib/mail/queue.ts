@@ -1,6 +1,7 @@
 import type { Database } from '@/db/client';
 import { insertMail } from '@/db/queries/outgoing-mail';
 import type { Letter } from './letter';
+import { pokeSending } from './poke';
 
 /**
  * Puts a letter into the queue. Called inside the transaction of what it tells about: a letter goes
@@ -14,4 +15,5 @@ export async function queueLetter(db: Database, letter: Letter, once?: string): 
     letter,
     onceKey: once ?? null,
   });
+  pokeSending();
 }

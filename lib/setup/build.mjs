@@ -16,6 +16,7 @@ const SOURCES = [
   'components',
   'db',
   'fonts',
+  'instrumentation.ts',
   'lib',
   'next.config.mjs',
   'package-lock.json',

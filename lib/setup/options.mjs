@@ -35,6 +35,8 @@ export function readOptions(root, variables = process.env) {
       databaseUrl === undefined,
     ]),
     secret: variables.NEXTAUTH_SECRET,
+    /** Whether an SMTP server is named that takes the mail. */
+    smtp: Boolean(variables.SMTP_URL || variables.SMTP_HOST),
   };
 }
 

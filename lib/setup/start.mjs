@@ -3,6 +3,7 @@ import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { ensureBuild, markServing, runScript } from './build.mjs';
 import { ensureDebianPackages, SERVER_PACKAGES } from './debian-packages.mjs';
+import { startMailbox } from './mailbox.mjs';
 import { checkNodeVersion, ensureNodePackages } from './node-packages.mjs';
 import { readOptions } from './options.mjs';
 import { prepareDatabase } from './prepare-database.mjs';
@@ -61,7 +62,11 @@ async function start() {
   undo.push(() => rmSync(mark, { force: true }));
 
   await ensureNodePackages(root);
-  const env = { ...process.env, ...(await applicationEnvironment(options)) };
+  const env = {
+    ...process.env,
+    ...(await applicationEnvironment(options)),
+    ...(options.smtp ? {} : await localMail(options)),
+  };
   say('bringing the database up to date …');
   const { migrated, demo, linkToken } = await prepareDatabase(root, options.folder, env);
   if (migrated.length > 0) say(`${migrated.length} changes of structure applied.`);
@@ -76,7 +81,7 @@ async function start() {
   undo.push(server.stop);
   writeFileSync(mark, JSON.stringify({ ...note, server: server.pid }));
 
-  greet(options.address, demo, linkToken);
+  greet(options, demo, linkToken);
   const code = await server.ended;
   if (stopping !== null) return;
   await stop();
@@ -106,6 +111,13 @@ async function applicationEnvironment(options) {
   };
 }
 
+/** Where no SMTP server is named, letters are kept in the data folder, to be read on a page. */
+async function localMail({ folder }) {
+  const mailbox = await startMailbox(root, join(folder, 'mail'));
+  undo.push(mailbox.stop);
+  return mailbox.env;
+}
+
 async function startDatabase({ folder, databasePort }) {
   await ensureDebianPackages(SERVER_PACKAGES);
   const server = new PrivateServer(folder, { port: databasePort });
@@ -114,7 +126,7 @@ async function startDatabase({ folder, databasePort }) {
   return server.ensureDatabase('surdwork');
 }
 
-function greet(address, demo, linkToken) {
+function greet({ address, smtp }, demo, linkToken) {
   const lines = ['', `  Surdwork is ready: ${address}`, ''];
   if (demo !== null) {
     lines.push(`  Demo workshop ${demo.workshop}; password for each: ${demo.password}`);
@@ -124,6 +136,7 @@ function greet(address, demo, linkToken) {
     }
     lines.push('');
   }
+  if (!smtp) lines.push(`  Letters stay on this machine; an admin reads them: ${address}/mail`, '');
   lines.push('  Ctrl-C stops it.', '');
   process.stdout.write(`${lines.join('\n')}\n`);
 }

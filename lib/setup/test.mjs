@@ -3,6 +3,7 @@ import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { ensureBuild, markServing, runScript } from './build.mjs';
 import { ensureDebianPackages, SERVER_PACKAGES, TEST_PACKAGES } from './debian-packages.mjs';
+import { startMailbox } from './mailbox.mjs';
 import { checkNodeVersion, ensureNodePackages } from './node-packages.mjs';
 import { endRunning, findProgram, run, say, SetupError } from './run-command.mjs';
 import { serve } from './serve.mjs';
@@ -50,6 +51,16 @@ async function step(name, work) {
 function needsServer() {
   const needsNone = /^tests\/(?!api\/|browser\/)[^/]+\//;
   return files.length === 0 || files.some((file) => !needsNone.test(file));
+}
+
+/** An OpenID Connect provider that a test starts where the served copy looks for it. */
+async function openIdEnvironment() {
+  return {
+    OIDC_ISSUER: `http://127.0.0.1:${await findFreePort()}`,
+    OIDC_CLIENT_ID: 'surdwork',
+    OIDC_CLIENT_SECRET: 'a secret between the two',
+    OIDC_NAME: 'Quarry House',
+  };
 }
 
 async function startServed(env, port) {
@@ -104,6 +115,9 @@ async function runChecks() {
     env = { ...database.env, TEST_CHROMIUM: findProgram('chromium') };
     if (!needsServer()) return runScript(root, 'build:child');
     await ensureBuild(root);
+    const mailbox = await startMailbox(root, join(folder, 'mail'));
+    undo.push(mailbox.stop);
+    Object.assign(env, mailbox.env, await openIdEnvironment());
     await startServed(env, port);
     env.TEST_BASE_URL = address;
   });

@@ -1,6 +1,7 @@
 import { afterAll, describe, expect, test } from 'vitest';
 import { closeDatabase, database } from '@/db/client';
 import { listNotebooksOf } from '@/db/queries/notebooks';
+import { insertSession, listSessionsOf } from '@/db/queries/sessions';
 import { findUserByEmail } from '@/db/queries/users';
 import { findVersion, listVersions } from '@/db/queries/versions';
 import { DEMO_PASSWORD, seedDemo, withdrawDemo } from '@/db/seeds/demo';
@@ -132,15 +133,18 @@ describe('putting the demo in', () => {
     const stateOf = async (email: string) => {
       const user = await findUserByEmail(database(), email);
       const opens = await verifyPassword(user?.passwordHash ?? null, DEMO_PASSWORD);
-      return { opens, tokenVersion: user?.tokenVersion ?? -1 };
+      return { opens, sessions: (await listSessionsOf(database(), user?.id ?? '')).length };
     };
+    for (const email of people) {
+      const user = await findUserByEmail(database(), email);
+      await insertSession(database(), { userId: user?.id ?? '', device: 'Some browser' });
+    }
     const before = await Promise.all(people.map(stateOf));
     expect(before.map(({ opens }) => opens)).toEqual([true, true, true]);
+    expect(before.every(({ sessions }) => sessions > 0)).toBe(true);
     await withdrawDemo(database());
     const after = await Promise.all(people.map(stateOf));
-    expect(after).toEqual(
-      before.map(({ tokenVersion }) => ({ opens: false, tokenVersion: tokenVersion + 1 })),
-    );
+    expect(after).toEqual(people.map(() => ({ opens: false, sessions: 0 })));
     await seedDemo(database());
     const again = await Promise.all(people.map(stateOf));
     expect(again.map(({ opens }) => opens)).toEqual([true, true, true]);

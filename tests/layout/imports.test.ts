@@ -62,6 +62,7 @@ const MAY_IMPORT: Record<string, string[]> = {
     'fonts',
     ...SERVICES,
   ],
+  instrumentation: ['lib/mail'],
   proxy: ['lib/access', 'lib/env', 'lib/http', ...SERVICES],
   // Run by the set-up, outside the application: it fills the database through what lies above it.
   'db/seeds': ['db', 'lib/access', 'lib/env', 'lib/engine', 'lib/language', ...SERVICES],
@@ -86,7 +87,10 @@ function areaOf(path: string): string {
   return top === 'lib' ? `lib/${second}` : top;
 }
 
-const files = listFiles(['app', 'components', 'db', 'lib', 'proxy.ts'], ['.ts', '.tsx', '.mjs']);
+const files = listFiles(
+  ['app', 'components', 'db', 'lib', 'instrumentation.ts', 'proxy.ts'],
+  ['.ts', '.tsx', '.mjs'],
+);
 const imports = files.flatMap(readImports);
 const show = ({ from, specifier }: Import) => `${from} imports ${specifier}`;
 const within = (area: string) => imports.filter(({ from }) => areaOf(from) === area);

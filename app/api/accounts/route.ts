@@ -1,6 +1,6 @@
 import { SignUp, signUp } from '@/lib/accounts';
-import { created, route } from '@/lib/http';
+import { route } from '@/lib/http';
 
 export const POST = route({ person: 'none', body: SignUp }, async ({ body, address }) =>
-  created(await signUp(body, address)),
+  Response.json(await signUp(body, address), { status: 202 }),
 );

@@ -1,4 +1,5 @@
 import { randomBytes, randomInt } from 'node:crypto';
+import { letterTo, linkIn } from '../../setup/letters';
 import { baseUrl } from '../../setup/server';
 
 export const PASSWORD = 'trammel and straightedge';
@@ -93,18 +94,30 @@ export function freshEmail(name: string): string {
   return `${name.toLowerCase()}.${randomBytes(5).toString('hex')}@quarrymoor.example`;
 }
 
-/** Somebody with an account and a workshop, signed in. */
-export async function newcomer(name: string): Promise<Visitor> {
-  const visitor = new Visitor();
-  visitor.name = name;
-  visitor.email = freshEmail(name);
-  const made = await visitor.post('/api/accounts', {
+/** Asks for an account over HTTP and gives the confirmation link's token, read from the letter. */
+export async function signUpAndRead(visitor: Visitor, name: string): Promise<string> {
+  const asked = await visitor.post('/api/accounts', {
     name,
     email: visitor.email,
     password: PASSWORD,
     workshop: 'Quarrymoor Yard',
   });
-  if (made.status !== 201) throw new Error(`No account: ${made.text}`);
+  if (asked.status !== 202) throw new Error(`No account: ${asked.text}`);
+  const letter = await letterTo(visitor.email, { subject: 'Confirm your e-mail address' });
+  return tokenIn(linkIn(letter.text));
+}
+
+/** The secret at the end of a link. */
+export const tokenIn = (link: string) => new URL(link).pathname.split('/').at(-1) ?? '';
+
+/** Somebody with a confirmed account and a workshop, signed in. */
+export async function newcomer(name: string): Promise<Visitor> {
+  const visitor = new Visitor();
+  visitor.name = name;
+  visitor.email = freshEmail(name);
+  const token = await signUpAndRead(visitor, name);
+  const made = await visitor.post('/api/accounts/confirm', { token });
+  if (made.status !== 201) throw new Error(`Not confirmed: ${made.text}`);
   await visitor.signIn(visitor.email);
   if (visitor.session === undefined) throw new Error('No session after signing in.');
   return visitor;

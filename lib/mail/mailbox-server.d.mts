@@ -1,0 +1,4 @@
+export function openMailbox(
+  folder: string,
+  options?: { port?: number },
+): Promise<{ port: number; close(): Promise<void> }>;
