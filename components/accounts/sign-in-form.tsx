@@ -5,11 +5,22 @@ import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
+import { SendAgain } from './look-into-mail';
+
+const UNCONFIRMED = 'unconfirmed';
+const SERVICE = 'Signing in through the other service did not work; try again, or use a password.';
 
 const SENTENCES: Record<string, string> = {
   CredentialsSignin: 'This e-mail address and password do not belong together.',
   'bad-credentials': 'This e-mail address and password do not belong together.',
   'too-many': 'Too many attempts; wait a few minutes before the next one.',
+  [UNCONFIRMED]:
+    'This e-mail address is not confirmed yet: open the link in the letter that was sent to it.',
+  forbidden:
+    'The other service does not vouch for an e-mail address of yours, so it opens no account.',
+  OAuthSignin: SERVICE,
+  OAuthCallback: SERVICE,
+  Callback: SERVICE,
 };
 
 export function sayRefusal(code: string | null | undefined): string | null {
@@ -20,17 +31,20 @@ export function sayRefusal(code: string | null | undefined): string | null {
 interface SignInFormProps {
   next: string;
   refusal: string | null;
+  /** What people call the other service they may sign in through; null where there is none. */
+  service: string | null;
 }
 
-export function SignInForm({ next, refusal }: SignInFormProps) {
+export function SignInForm({ next, refusal, service }: SignInFormProps) {
   const [email, setEmail] = useState('');
   const [password, setPassword] = useState('');
-  const [fault, setFault] = useState(sayRefusal(refusal));
+  const [code, setCode] = useState(refusal);
   const [busy, setBusy] = useState(false);
+  const fault = sayRefusal(code);
 
   const submit = async () => {
     setBusy(true);
-    setFault(null);
+    setCode(null);
     const answer = await signIn('credentials', { email, password, redirect: false }).catch(
       () => null,
     );
@@ -38,41 +52,61 @@ export function SignInForm({ next, refusal }: SignInFormProps) {
       window.location.assign(next);
       return;
     }
-    setFault(sayRefusal(answer?.error ?? 'unreachable'));
+    setCode(answer?.error ?? 'unreachable');
     setBusy(false);
   };
 
   return (
-    <form
-      className="space-y-4"
-      method="post"
-      onSubmit={(event) => {
-        event.preventDefault();
-        void submit();
-      }}
-    >
+    <div className="space-y-4">
       {fault && <Notice tone="fault">{fault}</Notice>}
-      <Field
-        label="E-mail address"
-        type="email"
-        name="email"
-        autoComplete="username"
-        required
-        value={email}
-        onChange={(event) => setEmail(event.target.value)}
-      />
-      <Field
-        label="Password"
-        type="password"
-        name="password"
-        autoComplete="current-password"
-        required
-        value={password}
-        onChange={(event) => setPassword(event.target.value)}
-      />
-      <Button type="submit" look="main" className="w-full" disabled={busy}>
-        {busy ? 'Signing in…' : 'Sign in'}
-      </Button>
-    </form>
+      {code === UNCONFIRMED && password !== '' && <SendAgain email={email} password={password} />}
+      <form
+        className="space-y-4"
+        method="post"
+        onSubmit={(event) => {
+          event.preventDefault();
+          void submit();
+        }}
+      >
+        <Field
+          label="E-mail address"
+          type="email"
+          name="email"
+          autoComplete="username"
+          required
+          value={email}
+          onChange={(event) => setEmail(event.target.value)}
+        />
+        <Field
+          label="Password"
+          type="password"
+          name="password"
+          autoComplete="current-password"
+          required
+          value={password}
+          onChange={(event) => setPassword(event.target.value)}
+        />
+        <Button type="submit" look="main" className="w-full" disabled={busy}>
+          {busy ? 'Signing in…' : 'Sign in'}
+        </Button>
+      </form>
+      {service !== null && (
+        <div className="border-t border-hairline pt-4">
+          <Button
+            className="w-full"
+            disabled={busy}
+            onClick={() => {
+              setBusy(true);
+              signIn('oidc', { callbackUrl: next }).catch(() => {
+                setCode('OAuthSignin');
+                setBusy(false);
+              });
+            }}
+          >
+            Continue with {service}
+          </Button>
+        </div>
+      )}
+    </div>
   );
 }

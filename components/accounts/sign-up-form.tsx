@@ -2,10 +2,12 @@
 
 import { signIn } from 'next-auth/react';
 import { useState } from 'react';
-import { ask, Refusal, sayFault } from '@/components/ui/ask';
+import { ask } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
+import { LookIntoMail } from './look-into-mail';
+import { useAsking } from './use-asking';
 
 const FIELDS = [
   { name: 'name', label: 'Your name', autoComplete: 'name', type: 'text', hint: undefined },
@@ -21,7 +23,7 @@ const FIELDS = [
     label: 'E-mail address',
     autoComplete: 'username',
     type: 'email',
-    hint: undefined,
+    hint: 'A letter goes there, with a link that makes the account.',
   },
   {
     name: 'password',
@@ -34,41 +36,23 @@ const FIELDS = [
 
 type Values = Record<(typeof FIELDS)[number]['name'], string>;
 
-/** The faults of single fields, as the problem document lists them. */
-export function fieldFaults(refusal: Refusal): Partial<Record<string, string>> {
-  const { fields } = refusal.document;
-  if (!Array.isArray(fields)) return {};
-  return Object.fromEntries(
-    fields.map((fault: { field: string; message: string }) => [fault.field, fault.message]),
-  );
-}
+const NAMES = FIELDS.map(({ name }) => name);
 
-export function SignUpForm() {
+export function SignUpForm({ localMail }: { localMail: boolean }) {
   const [values, setValues] = useState<Values>({ name: '', workshop: '', email: '', password: '' });
-  const [faults, setFaults] = useState<Partial<Record<string, string>>>({});
-  const [fault, setFault] = useState<string | null>(null);
-  const [busy, setBusy] = useState(false);
+  const [waits, setWaits] = useState(false);
+  const { busy, fault, faults, run } = useAsking(NAMES);
+  const { email, password } = values;
 
-  const submit = async () => {
-    setBusy(true);
-    setFault(null);
-    setFaults({});
-    try {
-      await ask('/api/accounts', { body: values });
-      await signIn('credentials', {
-        email: values.email,
-        password: values.password,
-        redirect: false,
-      });
+  const submit = () =>
+    run(async () => {
+      const { confirmed } = await ask<{ confirmed: boolean }>('/api/accounts', { body: values });
+      if (!confirmed) return setWaits(true);
+      await signIn('credentials', { email, password, redirect: false });
       window.location.assign('/notebooks');
-    } catch (refused) {
-      const placed = refused instanceof Refusal ? fieldFaults(refused) : {};
-      setFaults(placed);
-      if (Object.keys(placed).length === 0) setFault(sayFault(refused));
-      setBusy(false);
-    }
-  };
+    });
 
+  if (waits) return <LookIntoMail email={email.trim()} password={password} localMail={localMail} />;
   return (
     <form
       className="space-y-4"

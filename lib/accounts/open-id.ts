@@ -64,7 +64,7 @@ export function openIdProvider(settings: OpenIdSettings): OAuthConfig<Claims> {
     userinfo: {
       async request({ tokens, client }) {
         const claims = readPayload(tokens.id_token ?? '');
-        const more =
+        const more: Claims =
           client.issuer.metadata.userinfo_endpoint === undefined
             ? {}
             : await client.userinfo(tokens.access_token ?? '', {});

@@ -2,99 +2,66 @@ import { randomUUID } from 'node:crypto';
 import { afterAll, describe, expect, it } from 'vitest';
 import { closeDatabase, database } from '@/db/client';
 import { findUser } from '@/db/queries/users';
-import { SignUp, signIn, signOutEverywhere, signUp, workshopsOf } from '@/lib/accounts';
-import { personOfSession } from '@/lib/accounts/people';
+import { changeName, signIn, workshopsOf } from '@/lib/accounts';
+import { PASSWORD as password, newPerson } from './support/person';
 
 afterAll(closeDatabase);
 
-const password = 'trammel and straightedge';
-const newAccount = () => ({
-  name: 'Maren Oldacre',
-  email: `maren.${randomUUID()}@oldacre.example`,
-  password,
-  workshop: 'Oldacre Joinery',
-});
-
-describe('signing up', () => {
-  it('makes the person admin of a new workshop', async () => {
-    const person = await signUp(newAccount(), randomUUID());
-    expect(await workshopsOf(person)).toEqual([
-      { id: expect.any(String) as string, name: 'Oldacre Joinery', admin: true },
-    ]);
-  });
-
-  it('stores no password', async () => {
-    const person = await signUp(newAccount(), randomUUID());
-    expect(JSON.stringify(await findUser(database(), person.id))).not.toContain(password);
-  });
-
-  it('makes neither person nor workshop when the address is taken', async () => {
-    const account = { ...newAccount(), workshop: `Twice ${randomUUID()}` };
-    await signUp(account, randomUUID());
-    const again = signUp({ ...account, name: 'Other' }, randomUUID());
-    await expect(again).rejects.toMatchObject({ code: 'email-taken' });
-    const rows: unknown[] = await database()('workshops').where({ name: account.workshop });
-    expect(rows).toHaveLength(1);
-  });
-
-  it('lets one of two with the same address through when they come at once', async () => {
-    const account = newAccount();
-    const answers = await Promise.allSettled([
-      signUp(account, randomUUID()),
-      signUp(account, randomUUID()),
-    ]);
-    expect(answers.map(({ status }) => status).sort()).toEqual(['fulfilled', 'rejected']);
-  });
-
-  it('reads the address without blanks and case', () => {
-    const read = SignUp.parse({ ...newAccount(), email: '  Maren@Oldacre.EXAMPLE ' });
-    expect(read.email).toBe('maren@oldacre.example');
-  });
-});
+const whence = (address: string = randomUUID()) => ({ address, device: 'Firefox on Linux' });
+const nobody = () => `${randomUUID()}@oldacre.example`;
 
 describe('signing in', () => {
   it('finds the person by address and password together', async () => {
-    const account = newAccount();
-    const person = await signUp(account, randomUUID());
-    const found = await signIn({ email: account.email.toUpperCase(), password }, randomUUID());
-    expect(found).toMatchObject({ id: person.id, name: 'Maren Oldacre' });
-    expect(
-      await signIn({ email: account.email, password: `${password}!` }, randomUUID()),
-    ).toBeNull();
-    expect(await signIn({ email: newAccount().email, password }, randomUUID())).toBeNull();
+    const person = await newPerson();
+    const { email } = person;
+    expect(await signIn({ email: email.toUpperCase(), password }, whence())).toEqual(person);
+    expect(await signIn({ email, password: `${password}!` }, whence())).toBeNull();
+    expect(await signIn({ email: nobody(), password }, whence())).toBeNull();
+  });
+
+  it('finds nobody by an empty password, who signs in through another service only', async () => {
+    const { email } = await newPerson('Maren Oldacre', { password: false });
+    for (const sent of ['', password]) {
+      expect(await signIn({ email, password: sent }, whence())).toBeNull();
+    }
   });
 
   it('bounds what it reads of over-long input and finds nobody by it', async () => {
     const long = { email: 'x'.repeat(1_000_000), password: 'y'.repeat(1_000_000) };
-    expect(await signIn(long, randomUUID())).toBeNull();
+    expect(await signIn(long, whence())).toBeNull();
   });
 
   it('limits an address that tries many people, though it knows one password', async () => {
     const address = randomUUID();
-    const account = newAccount();
-    await signUp(account, randomUUID());
+    const { email } = await newPerson();
     let refused: unknown = null;
     for (let attempt = 0; attempt < 80 && refused === null; attempt += 1) {
-      const email = attempt % 7 === 0 ? account.email : newAccount().email;
-      await signIn({ email, password }, address).catch((error: unknown) => {
+      const tried = attempt % 7 === 0 ? email : nobody();
+      await signIn({ email: tried, password }, whence(address)).catch((error: unknown) => {
         refused = error;
       });
     }
     expect(refused).toMatchObject({ code: 'too-many' });
   });
+
+  it('puts a refusal into the record of the workshop, without name and address', async () => {
+    const person = await newPerson();
+    await signIn({ email: person.email, password: 'a wrong one' }, whence());
+    const [workshop] = await workshopsOf(person);
+    const [line]: Record<string, unknown>[] = await database()('activity').where({
+      workshop_id: workshop?.id,
+      deed: 'session.refused',
+    });
+    expect(line).toMatchObject({ actor_id: null, subject: 'Firefox on Linux' });
+    expect(JSON.stringify(line)).not.toContain(person.email);
+    expect(JSON.stringify(line)).not.toContain(person.name);
+  });
 });
 
-describe('a session', () => {
-  it('ends for good when the person signs out everywhere', async () => {
-    const account = newAccount();
-    const person = await signUp(account, randomUUID());
-    const before = await signIn({ email: account.email, password }, randomUUID());
-    const version = before?.tokenVersion ?? -1;
-    expect(await personOfSession(person.id, version)).toEqual(person);
-    await signOutEverywhere(person);
-    expect(await personOfSession(person.id, version)).toBeNull();
-    const after = await signIn({ email: account.email, password }, randomUUID());
-    expect(await personOfSession(person.id, after?.tokenVersion ?? -1)).toEqual(person);
-    expect(await personOfSession(person.id, version + 2)).toBeNull();
+describe('the name', () => {
+  it('is changed by the person', async () => {
+    const person = await newPerson();
+    await changeName(person, 'Maren Oldacre-Finch');
+    expect((await findUser(database(), person.id))?.name).toBe('Maren Oldacre-Finch');
   });
 });

@@ -1,5 +1,6 @@
 import { beforeAll, describe, expect, it } from 'vitest';
-import { PASSWORD, Visitor, freshEmail, newcomer } from './support/visitor';
+import { letterTo, linkIn } from '../setup/letters';
+import { PASSWORD, Visitor, freshEmail, newcomer, tokenIn } from './support/visitor';
 
 const account = (email: string) => ({
   name: 'Maren Oldacre',
@@ -9,13 +10,26 @@ const account = (email: string) => ({
 });
 
 describe('signing up', () => {
-  it('makes an account, its workshop and a way in, and never says the password back', async () => {
-    const email = freshEmail('maren');
+  it('sends a letter whose link makes an account, its workshop and a way in', async () => {
     const visitor = new Visitor();
-    const made = await visitor.post('/api/accounts', account(email));
+    visitor.email = freshEmail('maren');
+    const { email } = visitor;
+    const asked = await visitor.post('/api/accounts', account(email));
+    expect([asked.status, asked.json]).toEqual([202, { email, confirmed: false }]);
+    const letter = await letterTo(email, { subject: 'Confirm your e-mail address' });
+    const page = await visitor.get(new URL(linkIn(letter.text)).pathname);
+    expect(page.status).toBe(200);
+    expect(page.headers.get('cache-control')).toContain('no-store');
+    expect(page.headers.get('x-robots-tag')).toBe('noindex, nofollow');
+    expect(page.text).toContain('Oldacre Joinery');
+    const early = await visitor.signIn(email);
+    expect(early.status).toBe(401);
+    expect(String(early.json.url)).toContain('error=unconfirmed');
+    const token = tokenIn(linkIn(letter.text));
+    const made = await visitor.post('/api/accounts/confirm', { token });
     expect(made.status).toBe(201);
     expect(made.json).toEqual({ id: made.json.id, name: 'Maren Oldacre', email });
-    expect(made.text).not.toContain(PASSWORD);
+    expect(asked.text + made.text + letter.text).not.toContain(PASSWORD);
     expect((await visitor.signIn(email)).status).toBe(200);
     const notebook = await visitor.post('/api/notebooks', { title: 'First' });
     expect(notebook.status).toBe(201);
@@ -23,16 +37,21 @@ describe('signing up', () => {
     expect(list.json.notebooks).toMatchObject([
       { title: 'First', workshop: { name: 'Oldacre Joinery' }, role: 'owner', version: 1 },
     ]);
+    const again = await visitor.post('/api/accounts/confirm', { token });
+    expect([again.status, again.json.code]).toEqual([404, 'link-over']);
+    expect((await visitor.get(new URL(linkIn(letter.text)).pathname)).text).toContain('not valid');
   });
 
-  it('refuses an e-mail address that has an account, whatever its case', async () => {
-    const email = freshEmail('maren');
-    const visitor = new Visitor();
-    await visitor.post('/api/accounts', account(email));
-    const again = await visitor.post('/api/accounts', account(email.toUpperCase()));
-    expect(again.status).toBe(409);
-    expect(again.json.code).toBe('email-taken');
-    expect(again.json.fields).toMatchObject([{ field: 'email' }]);
+  it('answers alike for an address that has an account, whatever its case, and writes to its owner', async () => {
+    const known = await newcomer('Maren');
+    const [fresh, taken] = [freshEmail('maren'), known.email.toUpperCase()];
+    const [first, second] = await Promise.all(
+      [fresh, taken].map((email) => new Visitor().post('/api/accounts', account(email))),
+    );
+    expect([first?.status, second?.status]).toEqual([202, 202]);
+    expect({ ...second?.json, email: '' }).toEqual({ ...first?.json, email: '' });
+    const letter = await letterTo(known.email, { subject: 'You have an account already' });
+    expect(letter.text).toContain('Sign in with the password you have');
   });
 
   it.each([
@@ -61,7 +80,7 @@ describe('signing up', () => {
     );
     const refused = answers.filter(({ status }) => status === 429);
     expect(refused.length).toBeGreaterThanOrEqual(1);
-    expect(answers.filter(({ status }) => status === 201).length).toBeLessThanOrEqual(30);
+    expect(answers.filter(({ status }) => status === 202).length).toBeLessThanOrEqual(30);
     expect(refused[0]?.json.code).toBe('too-many');
     expect(Number(refused[0]?.headers.get('retry-after'))).toBeGreaterThan(0);
   });

@@ -1,7 +1,6 @@
-import { randomUUID } from 'node:crypto';
 import { afterAll, describe, expect, it } from 'vitest';
 import { closeDatabase, database } from '@/db/client';
-import { signUp, type Person } from '@/lib/accounts';
+import type { Person } from '@/lib/accounts';
 import {
   TitleBlockEntries,
   addPerson,
@@ -10,19 +9,9 @@ import {
   createNotebook,
   readNotebook,
 } from '@/lib/notebooks';
+import { newPerson } from '../accounts/support/person';
 
 afterAll(closeDatabase);
-
-const newPerson = (name: string): Promise<Person> =>
-  signUp(
-    {
-      name,
-      email: `${name.toLowerCase()}.${randomUUID()}@oldacre.example`,
-      password: 'trammel and straightedge',
-      workshop: 'Oldacre Joinery',
-    },
-    randomUUID(),
-  );
 
 async function newSheet() {
   const owner = await newPerson('Maren');

@@ -61,7 +61,8 @@ export async function newestLink(db: Knex, email: string, subject: string): Prom
     .where({ recipient: email, subject, sent_at: null })
     .orderBy('queued_at', 'desc')
     .first('letter');
-  const letter = row === undefined ? null : (JSON.parse(row.letter) as { action?: { url: string } });
+  const letter =
+    row === undefined ? null : (JSON.parse(row.letter) as { action?: { url: string } });
   if (letter?.action !== undefined) return letter.action.url;
   return linkIn((await letterTo(email, { subject })).text);
 }

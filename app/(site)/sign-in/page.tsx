@@ -3,6 +3,7 @@ import Link from 'next/link';
 import { redirect } from 'next/navigation';
 import { SignInForm } from '@/components/accounts/sign-in-form';
 import { Card } from '@/components/site/card';
+import { openIdSettings } from '@/lib/accounts';
 import { safeNextPath } from '@/lib/accounts/next-path';
 import { currentPerson } from '@/lib/accounts/session';
 
@@ -20,7 +21,12 @@ export default async function SignInPage({ searchParams }: PageProps) {
   if (await currentPerson()) redirect(next);
   return (
     <Card title="Sign in">
-      <SignInForm next={next} refusal={one(query.error)} />
+      <SignInForm next={next} refusal={one(query.error)} service={openIdSettings()?.name ?? null} />
+      <p className="text-small">
+        <Link href="/forgot" className="text-snapline underline underline-offset-4">
+          Forgotten your password?
+        </Link>
+      </p>
       <p className="text-small text-soft">
         No account yet?{' '}
         <Link href="/sign-up" className="text-snapline underline underline-offset-4">

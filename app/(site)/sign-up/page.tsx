@@ -4,6 +4,7 @@ import { redirect } from 'next/navigation';
 import { SignUpForm } from '@/components/accounts/sign-up-form';
 import { Card } from '@/components/site/card';
 import { currentPerson } from '@/lib/accounts/session';
+import { hasLocalMailbox } from '@/lib/mail';
 
 export const metadata: Metadata = { title: 'Make an account' };
 
@@ -11,7 +12,7 @@ export default async function SignUpPage() {
   if (await currentPerson()) redirect('/notebooks');
   return (
     <Card title="Make an account">
-      <SignUpForm />
+      <SignUpForm localMail={hasLocalMailbox()} />
       <p className="text-small text-soft">
         You have one?{' '}
         <Link href="/sign-in" className="text-snapline underline underline-offset-4">
