@@ -8,8 +8,10 @@ import { problemResponse } from '@/lib/http/problem';
 /** Pages that make sense only with a person; the services behind them ask again and decide. */
 const NEEDS_PERSON = /^\/(notebooks|settings)(\/|$)/;
 
-/** Pages whose address is itself a secret: no search engine and no cache may keep them. */
+/** Pages whose address is itself a secret: no search engine may keep them, */
 const SECRET_ADDRESS = /^\/(client|confirm|reset)\//;
+/** and of these, whose secret works once, no cache either. */
+const USED_ONCE = /^\/(confirm|reset)\//;
 
 /**
  * Runs before every page: sends signed-out people to sign in, and puts the security headers on.
@@ -33,10 +35,8 @@ export async function proxy(request: NextRequest): Promise<NextResponse> {
   headers.set('x-opening', isOpening(request) ? '1' : '0');
   const response = withHeaders(NextResponse.next({ request: { headers } }));
   response.headers.set('content-security-policy', policy);
-  if (SECRET_ADDRESS.test(pathname)) {
-    response.headers.set('x-robots-tag', 'noindex, nofollow');
-    response.headers.set('cache-control', 'private, no-store');
-  }
+  if (SECRET_ADDRESS.test(pathname)) response.headers.set('x-robots-tag', 'noindex, nofollow');
+  if (USED_ONCE.test(pathname)) response.headers.set('cache-control', 'private, no-store');
   return response;
 }
 
