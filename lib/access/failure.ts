@@ -6,7 +6,6 @@ export const FAILURE_CODES = [
   'sign-in-needed',
   'bad-credentials',
   'unconfirmed',
-  'link-over',
   'bad-key',
   'forbidden',
   'not-found',

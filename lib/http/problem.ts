@@ -10,7 +10,6 @@ export const PROBLEMS: Readonly<Record<FailureCode | 'fault', { status: number; 
     forbidden: { status: 403, title: 'Not allowed' },
     'foreign-origin': { status: 403, title: 'Request from another site' },
     'not-found': { status: 404, title: 'Not found' },
-    'link-over': { status: 404, title: 'Link not valid' },
     'method-not-allowed': { status: 405, title: 'Method not allowed' },
     'still-needed': { status: 409, title: 'Still needed by others' },
     'already-added': { status: 409, title: 'Already added' },

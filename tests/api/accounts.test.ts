@@ -38,7 +38,7 @@ describe('signing up', () => {
       { title: 'First', workshop: { name: 'Oldacre Joinery' }, role: 'owner', version: 1 },
     ]);
     const again = await visitor.post('/api/accounts/confirm', { token });
-    expect([again.status, again.json.code]).toEqual([404, 'link-over']);
+    expect([again.status, again.json.code]).toEqual([410, 'link-over']);
     expect((await visitor.get(new URL(linkIn(letter.text)).pathname)).text).toContain('not valid');
   });
 
