@@ -130,7 +130,7 @@ function ChooseNotebook({ lines, onClose, onChoose }: ChooseNotebookProps) {
   const [chosen, setChosen] = useState('');
   useEffect(() => {
     let gone = false;
-    void ask<{ notebooks: NotebookLine[] }>('/api/notebooks').then(
+    void ask<{ notebooks: NotebookLine[] }>('/api/notebooks?size=500').then(
       (answer) => {
         if (gone) return;
         const mine = answer.notebooks.filter(({ role }) => role !== 'viewer');

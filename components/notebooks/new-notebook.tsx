@@ -3,6 +3,7 @@
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
 import type { MemberWorkshop } from '@/lib/accounts/types';
+import type { TemplateLine } from '@/lib/notebooks/types';
 import { findStarter } from '@/components/starters/sheets';
 import { ChooseStarter } from '@/components/starters/choose-starter';
 import { ask, sayFault } from '@/components/ui/ask';
@@ -11,13 +12,22 @@ import { Dialog } from '@/components/ui/dialog';
 import { Choice, Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 
+interface NewNotebookProps {
+  workshops: readonly MemberWorkshop[];
+  /** Of all these workshops. */
+  templates: readonly TemplateLine[];
+}
+
 /** Begins a notebook and opens it. */
-export function NewNotebook({ workshops }: { workshops: readonly MemberWorkshop[] }) {
+export function NewNotebook({ workshops, templates }: NewNotebookProps) {
   const router = useRouter();
   const [open, setOpen] = useState(false);
   const [title, setTitle] = useState('');
   const [workshopId, setWorkshopId] = useState(workshops[0]?.id ?? '');
+  /** `empty`, the name of a starter, or the id of a template. */
   const [beginWith, setBeginWith] = useState('empty');
+  const offered = templates.filter(({ workshop }) => workshop.id === workshopId);
+  const template = offered.find(({ id }) => id === beginWith);
   const [fault, setFault] = useState<string | null>(null);
   const [busy, setBusy] = useState(false);
 
@@ -31,9 +41,12 @@ export function NewNotebook({ workshops }: { workshops: readonly MemberWorkshop[
       cells: starter.cells,
     };
     try {
-      const made = await ask<{ id: string }>('/api/notebooks', {
-        body: { title, ...(workshopId ? { workshopId } : {}), ...(content ? { content } : {}) },
-      });
+      const place = { title, ...(workshopId ? { workshopId } : {}) };
+      const made = await (template
+        ? ask<{ id: string }>(`/api/templates/${template.id}/notebooks`, { body: place })
+        : ask<{ id: string }>('/api/notebooks', {
+            body: { ...place, ...(content ? { content } : {}) },
+          }));
       router.push(`/notebooks/${made.id}`);
     } catch (refused) {
       setFault(sayFault(refused));
@@ -78,7 +91,11 @@ export function NewNotebook({ workshops }: { workshops: readonly MemberWorkshop[
                 ))}
               </Choice>
             )}
-            <ChooseStarter chosen={beginWith} onChange={setBeginWith} />
+            <ChooseStarter
+              chosen={template || findStarter(beginWith) ? beginWith : 'empty'}
+              templates={offered}
+              onChange={setBeginWith}
+            />
             {fault && <Notice tone="fault">{fault}</Notice>}
             <div className="flex justify-end">
               <Button type="submit" look="main" disabled={busy || title.trim() === ''}>

@@ -1,11 +1,16 @@
 import Link from 'next/link';
+import type { MemberWorkshop } from '@/lib/accounts/types';
 import type { NotebookLine } from '@/lib/notebooks/types';
 import { Moment } from '@/components/ui/moment';
 import { NotebookTools } from './notebook-tools';
 
 interface NotebookTableProps {
   notebooks: readonly NotebookLine[];
+  /** Those the person belongs to. */
+  workshops: readonly MemberWorkshop[];
   archived: boolean;
+  /** Whether only some of all notebooks were asked for. */
+  filtered: boolean;
 }
 
 const CELL = 'px-3 py-2.5 align-top max-md:block max-md:px-0 max-md:py-0.5';
@@ -13,24 +18,9 @@ const CELL = 'px-3 py-2.5 align-top max-md:block max-md:px-0 max-md:py-0.5';
 const BESIDE = 'max-md:mr-3 max-md:inline-block';
 const HEAD = 'px-3 py-2 text-left text-small font-semibold whitespace-nowrap';
 
-/** Every notebook the person may read, last changed first; on a narrow screen each row is a card. */
-export function NotebookTable({ notebooks, archived }: NotebookTableProps) {
-  if (notebooks.length === 0) {
-    return (
-      <div className="border border-rule bg-sheet p-1.5">
-        <div className="border-2 border-ink px-6 py-14 text-center">
-          <p className="font-serif text-head font-semibold">
-            {archived ? 'Nothing is archived.' : 'No notebook yet.'}
-          </p>
-          <p className="mx-auto mt-2 max-w-prose text-soft">
-            {archived
-              ? 'A notebook that is done with can be archived: it can still be read, but not changed.'
-              : 'A notebook holds the figures of one piece of work: what was given, what follows from it, and what is cut. Begin one, or ask a colleague to add you to theirs.'}
-          </p>
-        </div>
-      </div>
-    );
-  }
+/** Notebooks the person may read; on a narrow screen each row is a card. */
+export function NotebookTable({ notebooks, workshops, archived, filtered }: NotebookTableProps) {
+  if (notebooks.length === 0) return <NoNotebooks archived={archived} filtered={filtered} />;
   return (
     <div className="border border-rule bg-sheet">
       <table className="w-full border-collapse max-md:block">
@@ -68,6 +58,11 @@ export function NotebookTable({ notebooks, archived }: NotebookTableProps) {
                 >
                   {notebook.title}
                 </Link>
+                {notebook.template && (
+                  <span className="ml-2 whitespace-nowrap border border-rule px-1.5 py-px text-small text-soft">
+                    template
+                  </span>
+                )}
               </th>
               <td className={`${CELL} ${BESIDE} md:min-w-36 [overflow-wrap:anywhere]`}>
                 {notebook.workshop.name}
@@ -87,12 +82,34 @@ export function NotebookTable({ notebooks, archived }: NotebookTableProps) {
                 )}
               </td>
               <td className={`${CELL} md:text-right`}>
-                <NotebookTools notebook={notebook} />
+                <NotebookTools notebook={notebook} workshops={workshops} />
               </td>
             </tr>
           ))}
         </tbody>
       </table>
+    </div>
+  );
+}
+
+function NoNotebooks({ archived, filtered }: { archived: boolean; filtered: boolean }) {
+  const [title, text] = filtered
+    ? ['No notebook like that.', 'None that you may read is in that workshop with that role.']
+    : archived
+      ? [
+          'Nothing is archived.',
+          'A notebook that is done with can be archived: it can still be read, but not changed.',
+        ]
+      : [
+          'No notebook yet.',
+          'A notebook holds the figures of one piece of work: what was given, what follows from it, and what is cut. Begin one, or ask a colleague to add you to theirs.',
+        ];
+  return (
+    <div className="border border-rule bg-sheet p-1.5">
+      <div className="border-2 border-ink px-6 py-14 text-center">
+        <p className="font-serif text-head font-semibold">{title}</p>
+        <p className="mx-auto mt-2 max-w-prose text-soft">{text}</p>
+      </div>
     </div>
   );
 }

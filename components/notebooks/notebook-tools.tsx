@@ -1,100 +1,80 @@
 'use client';
 
-import { useRouter } from 'next/navigation';
-import { useState } from 'react';
+import { useState, type ComponentType } from 'react';
+import type { MemberWorkshop } from '@/lib/accounts/types';
 import type { NotebookLine } from '@/lib/notebooks/types';
-import { ask, sayFault } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
-import { Dialog } from '@/components/ui/dialog';
-import { Field } from '@/components/ui/field';
-import { Notice } from '@/components/ui/notice';
+import { Disclosure, DISCLOSURE_ROW } from '@/components/ui/disclosure';
+import {
+  ArchiveDialog,
+  DuplicateDialog,
+  MoveDialog,
+  RenameDialog,
+  TemplateDialog,
+  type DeedProps,
+} from './deed-dialogs';
 
-/** Rename and archive, as far as the person's role goes. */
-export function NotebookTools({ notebook }: { notebook: NotebookLine }) {
-  const router = useRouter();
-  const [open, setOpen] = useState<'rename' | 'archive' | null>(null);
-  const [title, setTitle] = useState(notebook.title);
-  const [fault, setFault] = useState<string | null>(null);
-  const archived = notebook.archivedAt !== null;
-  if (notebook.role === 'viewer') return null;
+type Deed = 'rename' | 'duplicate' | 'move' | 'template' | 'archive';
 
-  const change = async (body: { title: string } | { archived: boolean }) => {
-    setFault(null);
-    try {
-      await ask(`/api/notebooks/${notebook.id}`, { method: 'PATCH', body });
-      setOpen(null);
-      router.refresh();
-    } catch (refused) {
-      setFault(sayFault(refused));
-    }
-  };
-  const close = () => {
-    setOpen(null);
-    setFault(null);
-    setTitle(notebook.title);
-  };
+const DIALOGS: Record<Deed, ComponentType<DeedProps>> = {
+  rename: RenameDialog,
+  duplicate: DuplicateDialog,
+  move: MoveDialog,
+  template: TemplateDialog,
+  archive: ArchiveDialog,
+};
 
+/** What may be done with a notebook in this role; the server decides again. */
+function deedsFor({ role, archivedAt }: NotebookLine): Deed[] {
+  const inUse = archivedAt === null;
+  return [
+    ...(role !== 'viewer' && inUse ? (['rename'] as const) : []),
+    'duplicate' as const,
+    ...(role === 'owner' && inUse ? (['move', 'template', 'archive'] as const) : []),
+  ];
+}
+
+const words = ({ template }: NotebookLine): Record<Deed, string> => ({
+  rename: 'Rename',
+  duplicate: 'Duplicate',
+  move: 'Move to another workshop',
+  template: template ? 'No longer a template' : 'Make it a template',
+  archive: 'Archive',
+});
+
+interface NotebookToolsProps {
+  notebook: NotebookLine;
+  workshops: readonly MemberWorkshop[];
+}
+
+/** What can be done with a notebook as a whole, as far as the person's role goes. */
+export function NotebookTools({ notebook, workshops }: NotebookToolsProps) {
+  const [open, setOpen] = useState<Deed | null>(null);
+  const Open = open === null ? null : DIALOGS[open];
+  const says = words(notebook);
   return (
-    <span className="inline-flex gap-1 max-md:-ml-1.5">
-      <Button
-        look="quiet"
-        onClick={() => setOpen('rename')}
-        aria-label={`Rename ${notebook.title}`}
-      >
-        Rename
-      </Button>
-      {notebook.role === 'owner' && (
+    <span className="inline-flex items-center gap-2">
+      {notebook.archivedAt !== null && notebook.role === 'owner' && (
         <Button
           look="quiet"
+          aria-label={`Bring back ${notebook.title}`}
           onClick={() => setOpen('archive')}
-          aria-label={`${archived ? 'Bring back' : 'Archive'} ${notebook.title}`}
         >
-          {archived ? 'Bring back' : 'Archive'}
+          Bring back
         </Button>
       )}
-      {open === 'rename' && (
-        <Dialog title="Rename the notebook" onClose={close}>
-          <form
-            className="space-y-4 text-left"
-            onSubmit={(event) => {
-              event.preventDefault();
-              void change({ title });
-            }}
-          >
-            <Field
-              label="Title"
-              required
-              autoFocus
-              maxLength={200}
-              value={title}
-              onChange={(event) => setTitle(event.target.value)}
-            />
-            {fault && <Notice tone="fault">{fault}</Notice>}
-            <div className="flex justify-end">
-              <Button type="submit" look="main" disabled={title.trim() === ''}>
-                Rename
-              </Button>
-            </div>
-          </form>
-        </Dialog>
-      )}
-      {open === 'archive' && (
-        <Dialog title={archived ? 'Bring it back' : 'Archive the notebook'} onClose={close}>
-          <div className="space-y-4 text-left">
-            <p className="[overflow-wrap:anywhere]">
-              {archived
-                ? `“${notebook.title}” returns to the notebooks in use and can be changed again.`
-                : `“${notebook.title}” can still be read, by client links too, but not changed, until it is brought back.`}
-            </p>
-            {fault && <Notice tone="fault">{fault}</Notice>}
-            <div className="flex justify-end">
-              <Button look="main" onClick={() => void change({ archived: !archived })}>
-                {archived ? 'Bring back' : 'Archive'}
-              </Button>
-            </div>
-          </div>
-        </Dialog>
-      )}
+      <Disclosure
+        label="More"
+        name={`More with ${notebook.title}`}
+        className="inline-flex min-h-7 items-center rounded-cut border border-rule bg-sheet px-2 text-small hover:border-ink"
+      >
+        {deedsFor(notebook).map((deed) => (
+          <button key={deed} type="button" className={DISCLOSURE_ROW} onClick={() => setOpen(deed)}>
+            {says[deed]}
+          </button>
+        ))}
+      </Disclosure>
+      {Open && <Open notebook={notebook} workshops={workshops} onClose={() => setOpen(null)} />}
     </span>
   );
 }

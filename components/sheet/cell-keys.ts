@@ -18,6 +18,7 @@ export type CellCommand =
   | 'fold'
   | 'copy'
   | 'proof'
+  | 'comment'
   | 'remove'
   | 'cellBefore'
   | 'cellAfter'
@@ -197,6 +198,13 @@ export const KEYS: readonly Key[] = [
     keys: ['Alt+Shift+P'],
     runs: ['proof'],
     does: 'Open the proof of the figure of the line: digits, polynomial, tower, reach, certificate',
+  },
+  {
+    scope: 'cell',
+    group: 'Cells',
+    keys: ['Alt+Shift+M'],
+    runs: ['comment'],
+    does: 'Read and write comments on the cell',
   },
   {
     scope: 'entry',

@@ -49,6 +49,9 @@ export function CellTools({ id, kind, folded = false, mark = null, actions }: Ce
           Rename {mark}
         </Button>
       )}
+      <Button look="quiet" onClick={() => actions.comment(id)}>
+        Comment
+      </Button>
       <Button look="quiet" onClick={() => actions.remove(id)}>
         Delete
       </Button>

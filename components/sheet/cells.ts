@@ -46,6 +46,8 @@ export interface SheetActions extends CellActions, SheetNames {
   /** Puts the focus on the cell before or after, or on the nearest heading that way. */
   jump: (id: string, by: -1 | 1, to: 'cell' | 'heading') => boolean;
   showKeys: () => void;
+  /** Shows the comments on a cell. */
+  comment: (id: string) => void;
 }
 
 export const cellAnchor = (id: string) => `cell-${id}`;

@@ -5,6 +5,7 @@ import type { NotebookCell, NotebookContent } from '@/lib/notebooks/content';
 import { Button } from '@/components/ui/button';
 import { Gap } from './cell-tools';
 import type { Hand, SheetActions } from './cells';
+import { CommentMark } from './comments/comment-mark';
 import { DimensionCell } from './dimension-cell';
 import { FoldedCell } from './folded-cell';
 import { Grip } from './grip';
@@ -115,6 +116,11 @@ const Entry = memo(function Entry(props: EntryProps) {
           />
         </>
       )}
+      <CommentMark
+        id={cell.id}
+        name={`${KIND_NAMES[cell.kind]} ${from + 1}`}
+        reachable={readOnly}
+      />
       {cell.kind === 'section' ? (
         <SectionCell {...common} hand={hand} folded={folded} count={count} />
       ) : folded ? (

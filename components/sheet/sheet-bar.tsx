@@ -4,6 +4,7 @@ import Link from 'next/link';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import { Button, LinkButton } from '@/components/ui/button';
 import { Disclosure, DISCLOSURE_ROW } from '@/components/ui/disclosure';
+import { CommentsButton } from './comments/comments-button';
 import type { Panel } from './sheet-dialogs';
 import type { Evaluation } from './state/use-evaluation';
 import type { NotebookOnScreen } from './state/use-notebook';
@@ -77,6 +78,7 @@ export function SheetBar(props: SheetBarProps) {
         )}
         <Button onClick={onFind}>Find</Button>
         <Button onClick={onKeys}>Keys</Button>
+        <CommentsButton />
         <LinkButton href={`/notebooks/${notebook.id}/versions`}>Versions</LinkButton>
         <Disclosure
           label="Hand over"

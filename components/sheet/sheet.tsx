@@ -1,12 +1,14 @@
 'use client';
 
-import { lazy, Suspense, useEffect, useMemo, useState } from 'react';
+import { lazy, Suspense, useCallback, useEffect, useMemo, useState } from 'react';
 import { SWRConfig } from 'swr';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { TitleBlock } from '@/components/drawing/title-block';
 import { Drawer } from '@/components/ui/drawer';
 import { focusLine, type Hand, type SheetActions } from './cells';
+import { CommentsContext } from './comments/comments-context';
+import { useSheetComments } from './comments/use-sheet-comments';
 import { preloadEditor } from './editor/source-editor';
 import { Entries } from './entries';
 import { preloadAids, useAids } from './keys/use-aids';
@@ -19,6 +21,7 @@ import { SheetDialogs, type Panel } from './sheet-dialogs';
 import { SheetLayout, zonesFor } from './sheet-layout';
 import { SheetNews } from './sheet-news';
 import { BoundedCache } from './state/bounded-cache';
+import { useArrival } from './state/use-arrival';
 import { useFolds } from './state/folds';
 import type { CellAnswer, Shown } from './state/shown';
 import { useEvaluation } from './state/use-evaluation';
@@ -93,9 +96,17 @@ function SheetOnScreen(props: SheetProps) {
     say,
   });
   const aids = useAids({ content, hand, mayWrite, actions: cellActions });
+  const showCell = useCallback((id: string) => cellActions.showLine(id, 0), [cellActions]);
+  useArrival(showCell);
+  const { context, show, drawer } = useSheetComments({
+    notebook,
+    content,
+    personId: props.personId,
+    onShowCell: showCell,
+  });
   const actions = useMemo<SheetActions>(
-    () => ({ ...cellActions, ...aids.actions }),
-    [cellActions, aids.actions],
+    () => ({ ...cellActions, ...aids.actions, comment: show }),
+    [cellActions, aids.actions, show],
   );
 
   // In its drawer the index makes room for what it leads to.
@@ -142,94 +153,97 @@ function SheetOnScreen(props: SheetProps) {
   );
 
   return (
-    <div className="space-y-3">
-      <SheetBar
-        notebook={notebook}
-        sheet={sheet}
-        evaluation={evaluation}
-        mayWrite={mayWrite}
-        mayShare={props.mayShare}
-        onPanel={setPanel}
-        onFind={aids.keys.find}
-        onKeys={aids.keys.keys}
-        onMarks={() => setListing(true)}
-      />
-      {aids.bar}
-      <SheetNews
-        sheet={sheet}
-        evaluation={evaluation}
-        archived={notebook.archivedAt !== null}
-        onPanel={setPanel}
-      />
-      <SheetLayout
-        index={index}
-        narrow="elsewhere"
-        zones={zonesFor(content.cells.length)}
-        foot={
-          <TitleBlock
-            fields={titleFields({
-              block: blockOf(notebook, sheet.kept.savedBy),
-              version: sheet.kept.number,
-              savedAt: sheet.kept.savedAt,
-              settings: content.settings,
-              logoAt: `/api/notebooks/${notebook.id}/logo`,
-            })}
-          />
-        }
-      >
-        <Entries
-          content={content}
+    <CommentsContext value={context}>
+      <div className="space-y-3">
+        <SheetBar
+          notebook={notebook}
+          sheet={sheet}
           evaluation={evaluation}
-          hand={mayWrite ? hand : null}
-          folds={folds}
           mayWrite={mayWrite}
-          actions={actions}
+          mayShare={props.mayShare}
+          onPanel={setPanel}
+          onFind={aids.keys.find}
+          onKeys={aids.keys.keys}
+          onMarks={() => setListing(true)}
         />
-      </SheetLayout>
-      <div role="status" aria-live="polite" className="sr-only">
-        {spoken}
-      </div>
-      <div role="status" aria-live="polite" className="sr-only">
-        {said}
-      </div>
-      <Removed count={sheet.removed} onUndo={undo} />
-      {listing && (
-        <Drawer
-          title="Marks"
-          side="left"
-          onClose={() => {
-            setListing(false);
-            document.getElementById(MARKS_BUTTON)?.focus();
-          }}
+        {aids.bar}
+        <SheetNews
+          sheet={sheet}
+          evaluation={evaluation}
+          archived={notebook.archivedAt !== null}
+          onPanel={setPanel}
+        />
+        <SheetLayout
+          index={index}
+          narrow="elsewhere"
+          zones={zonesFor(content.cells.length)}
+          foot={
+            <TitleBlock
+              fields={titleFields({
+                block: blockOf(notebook, sheet.kept.savedBy),
+                version: sheet.kept.number,
+                savedAt: sheet.kept.savedAt,
+                settings: content.settings,
+                logoAt: `/api/notebooks/${notebook.id}/logo`,
+              })}
+            />
+          }
         >
-          {index}
-        </Drawer>
-      )}
-      {details && (
-        <Suspense>
-          <ProofDrawer
-            key={`${details.id}:${details.line}`}
+          <Entries
             content={content}
-            at={details}
-            result={resultAt(shown, details)}
+            evaluation={evaluation}
+            hand={mayWrite ? hand : null}
+            folds={folds}
             mayWrite={mayWrite}
             actions={actions}
-            onClose={() => {
-              setDetails(null);
-              focusLine(details.id, details.line);
-            }}
           />
-        </Suspense>
-      )}
-      <SheetDialogs
-        panel={panel}
-        notebook={notebook}
-        sheet={sheet}
-        personName={personName}
-        mayShare={props.mayShare}
-        onClose={() => setPanel(null)}
-      />
-      {aids.dialogs}
-    </div>
+        </SheetLayout>
+        <div role="status" aria-live="polite" className="sr-only">
+          {spoken}
+        </div>
+        <div role="status" aria-live="polite" className="sr-only">
+          {said}
+        </div>
+        <Removed count={sheet.removed} onUndo={undo} />
+        {listing && (
+          <Drawer
+            title="Marks"
+            side="left"
+            onClose={() => {
+              setListing(false);
+              document.getElementById(MARKS_BUTTON)?.focus();
+            }}
+          >
+            {index}
+          </Drawer>
+        )}
+        {details && (
+          <Suspense>
+            <ProofDrawer
+              key={`${details.id}:${details.line}`}
+              content={content}
+              at={details}
+              result={resultAt(shown, details)}
+              mayWrite={mayWrite}
+              actions={actions}
+              onClose={() => {
+                setDetails(null);
+                focusLine(details.id, details.line);
+              }}
+            />
+          </Suspense>
+        )}
+        <SheetDialogs
+          panel={panel}
+          notebook={notebook}
+          sheet={sheet}
+          personName={personName}
+          mayShare={props.mayShare}
+          onClose={() => setPanel(null)}
+        />
+        {drawer}
+        {aids.dialogs}
+      </div>
+    </CommentsContext>
   );
 }

@@ -18,6 +18,21 @@ export function SiteHeader({ who }: SiteHeaderProps) {
           <Logo />
           <span className="text-figure font-semibold">Surdwork</span>
         </Link>
+        {signedIn && (
+          <form action="/search" role="search" className="max-sm:order-last max-sm:w-full">
+            <label className="flex items-center gap-2 text-small">
+              <span className="sr-only">Search all notebooks</span>
+              <input
+                type="search"
+                name="q"
+                maxLength={200}
+                autoComplete="off"
+                placeholder="Search titles, marks, text"
+                className="min-h-8 w-full rounded-cut border border-rule bg-sheet px-2.5 text-ink placeholder:text-soft sm:w-56"
+              />
+            </label>
+          </form>
+        )}
         {who !== 'guest' && (
           <nav aria-label="Main" className="flex flex-wrap items-center gap-x-5 gap-y-1 text-small">
             {signedIn && (

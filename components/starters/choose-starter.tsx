@@ -1,17 +1,19 @@
 'use client';
 
 import { useId } from 'react';
+import type { TemplateLine } from '@/lib/notebooks/types';
 import { Pictogram } from './pictogram';
 import { STARTERS } from './sheets';
 
 interface ChooseStarterProps {
-  /** The name of a starter, or `empty`. */
+  /** The name of a starter, the id of a template, or `empty`. */
   chosen: string;
+  templates: readonly TemplateLine[];
   onChange: (name: string) => void;
 }
 
-/** What a new notebook begins with: nothing, or one of the starters. */
-export function ChooseStarter({ chosen, onChange }: ChooseStarterProps) {
+/** What a new notebook begins with: nothing, one of the starters, or a template of the workshop. */
+export function ChooseStarter({ chosen, templates, onChange }: ChooseStarterProps) {
   const group = useId();
   const choices = [{ name: 'empty' as const, title: 'An empty sheet' }, ...STARTERS];
   return (
@@ -43,6 +45,33 @@ export function ChooseStarter({ chosen, onChange }: ChooseStarterProps) {
           </label>
         ))}
       </div>
+      {templates.length > 0 && (
+        <div className="mt-3">
+          <p className="text-small font-medium">Or with a template of the workshop</p>
+          <ul className="mt-1 max-h-44 divide-y divide-hairline overflow-y-auto border border-rule">
+            {templates.map(({ id, title, version }) => (
+              <li key={id}>
+                <label
+                  className={`flex cursor-pointer items-baseline gap-2 px-3 py-1.5 text-small ${chosen === id ? 'bg-hand font-semibold' : 'hover:bg-hand'}`}
+                >
+                  <input
+                    type="radio"
+                    name={group}
+                    value={id}
+                    checked={chosen === id}
+                    onChange={() => onChange(id)}
+                    className="accent-ruddle"
+                  />
+                  <span className="min-w-0 [overflow-wrap:anywhere]">{title}</span>
+                  <span className="ml-auto whitespace-nowrap font-normal text-soft">
+                    version {version}
+                  </span>
+                </label>
+              </li>
+            ))}
+          </ul>
+        </div>
+      )}
     </fieldset>
   );
 }

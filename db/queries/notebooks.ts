@@ -13,6 +13,8 @@ export interface Notebook {
   /** Its own entries for the title block, as stored. */
   titleBlock: unknown;
   archivedAt: Date | null;
+  /** Since when it is a template of its workshop; null while it is none. */
+  templateSince: Date | null;
   createdAt: Date;
   changedAt: Date;
 }
@@ -26,6 +28,7 @@ interface NotebookRow {
   title: string;
   head: number;
   archived_at: Date | null;
+  template_since: Date | null;
   created_at: Date;
   changed_at: Date;
 }
@@ -38,6 +41,7 @@ const toNotebook = (row: NotebookRow): Notebook => ({
   title: row.title,
   head: row.head,
   archivedAt: row.archived_at,
+  templateSince: row.template_since,
   createdAt: row.created_at,
   changedAt: row.changed_at,
 });
@@ -51,13 +55,19 @@ const withWorkshop = (db: Database) =>
       'workshops.defaults as workshop_defaults',
     );
 
-/** Adds a notebook without versions and returns the new id. */
+/** Adds a notebook without versions and returns the new id; a copy says which version of which notebook it is of. */
 export async function insertNotebook(
   db: Database,
-  notebook: { workshopId: string; title: string },
+  notebook: { workshopId: string; title: string; origin?: { id: string; version: number } },
 ): Promise<string> {
   const id = randomUUID();
-  await db('notebooks').insert({ id, workshop_id: notebook.workshopId, title: notebook.title });
+  await db('notebooks').insert({
+    id,
+    workshop_id: notebook.workshopId,
+    title: notebook.title,
+    origin_id: notebook.origin?.id ?? null,
+    origin_version: notebook.origin?.version ?? null,
+  });
   return id;
 }
 
@@ -82,30 +92,77 @@ interface EntryRow extends NotebookRow {
   saved_at: Date | null;
 }
 
-/** The notebooks in which a person has a role, last changed first. */
+export interface NotebookFilter {
+  archived: boolean;
+  workshopId?: string | undefined;
+  role?: NotebookRole | undefined;
+  /** By default the last changed first; by title otherwise. */
+  sort?: 'changed' | 'title';
+  limit?: number;
+  offset?: number;
+}
+
+const heldBy = (db: Database, userId: string, { archived, workshopId, role }: NotebookFilter) => {
+  const query = withWorkshop(db)
+    .join('notebook_roles', 'notebook_roles.notebook_id', 'notebooks.id')
+    .where('notebook_roles.user_id', userId);
+  if (workshopId !== undefined) query.where('notebooks.workshop_id', workshopId);
+  if (role !== undefined) query.where('notebook_roles.role', role);
+  return archived
+    ? query.whereNotNull('notebooks.archived_at')
+    : query.whereNull('notebooks.archived_at');
+};
+
+/** The notebooks in which a person has a role, as the filter has them. */
 export async function listNotebooksOf(
   db: Database,
   userId: string,
-  { archived }: { archived: boolean },
+  filter: NotebookFilter,
 ): Promise<NotebookEntry[]> {
-  const query = withWorkshop(db)
-    .join('notebook_roles', 'notebook_roles.notebook_id', 'notebooks.id')
+  const query = heldBy(db, userId, filter)
     .leftJoin('versions', function () {
       this.on('versions.notebook_id', 'notebooks.id').andOn('versions.number', 'notebooks.head');
     })
     .leftJoin('users', 'users.id', 'versions.author_id')
-    .where('notebook_roles.user_id', userId)
     .select('notebook_roles.role', 'users.name as saved_by', 'versions.saved_at')
-    .orderBy([{ column: 'notebooks.changed_at', order: 'desc' }, 'notebooks.id']);
-  const rows = (await (archived
-    ? query.whereNotNull('notebooks.archived_at')
-    : query.whereNull('notebooks.archived_at'))) as EntryRow[];
+    .orderBy(
+      filter.sort === 'title'
+        ? ['notebooks.title', 'notebooks.id']
+        : [{ column: 'notebooks.changed_at', order: 'desc' }, 'notebooks.id'],
+    );
+  if (filter.limit !== undefined) query.limit(filter.limit);
+  if (filter.offset !== undefined) query.offset(filter.offset);
+  const rows = (await query) as EntryRow[];
   return rows.map((row) => ({
     ...toNotebook(row),
     role: row.role,
     savedBy: row.saved_by,
     savedAt: row.saved_at,
   }));
+}
+
+/** How many the filter has altogether. */
+export async function countNotebooksOf(
+  db: Database,
+  userId: string,
+  filter: NotebookFilter,
+): Promise<number> {
+  const query = heldBy(db, userId, filter).clearSelect().count({ n: '*' });
+  const [row] = (await query) as unknown as { n: number }[];
+  return Number(row?.n ?? 0);
+}
+
+/** The workshops of all notebooks in which a person has a role, by name; the person need not belong to them. */
+export async function listNotebookWorkshopsOf(
+  db: Database,
+  userId: string,
+): Promise<{ id: string; name: string }[]> {
+  return db('notebooks')
+    .join('notebook_roles', 'notebook_roles.notebook_id', 'notebooks.id')
+    .join('workshops', 'workshops.id', 'notebooks.workshop_id')
+    .where('notebook_roles.user_id', userId)
+    .distinct<{ id: string; name: string }[]>('workshops.id', 'workshops.name')
+    .orderBy(['workshops.name', 'workshops.id']);
 }
 
 /**
@@ -135,4 +192,15 @@ export async function putTitleBlock(db: Database, id: string, entries: object): 
   await db('notebooks')
     .where({ id })
     .update({ title_block: JSON.stringify(entries), changed_at: db.raw('current_timestamp(3)') });
+}
+
+/** Puts a notebook into another workshop, where it is no template. */
+export async function moveNotebook(db: Database, id: string, workshopId: string): Promise<void> {
+  await db('notebooks')
+    .where({ id })
+    .update({
+      workshop_id: workshopId,
+      template_since: null,
+      changed_at: db.raw('current_timestamp(3)'),
+    });
 }

@@ -8,6 +8,7 @@ export {
   readComments,
   withdrawComment,
 } from './comments';
+export { DuplicateRequest, duplicateNotebook } from './copies';
 export {
   PassphraseForm,
   countOpening,
@@ -27,12 +28,13 @@ export {
   readLink,
   revokeLink,
 } from './links';
+export { ListRequest, listNotebooks } from './list';
+export { MoveRequest, moveNotebook } from './move';
 export {
   NewNotebook,
   NotebookChange,
   changeNotebook,
   createNotebook,
-  listNotebooks,
   readNotebook,
 } from './notebooks';
 export { NowQuery, findSeen, lookNow, type Now } from './now';
@@ -50,6 +52,13 @@ export {
 export { TitleBlockEntries, changeTitleBlock, titleBlockIn, titleBlockOf } from './title-block';
 export { SearchRequest, search } from './search';
 export { listRevisions, readRevision, reevaluateRevision, revisionTag } from './revisions';
+export {
+  FromTemplate,
+  TemplateChange,
+  changeTemplate,
+  makeFromTemplate,
+  templatesFor,
+} from './templates';
 export { TryRequest, tryLines } from './try-lines';
 export { RestoreRequest, SaveRequest, restoreVersion, saveVersion } from './save';
 export { ListQuery, listVersions, readForExport, readVersion } from './versions';

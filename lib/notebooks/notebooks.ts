@@ -1,28 +1,21 @@
 import { z } from 'zod';
 import { database, inTransaction } from '@/db/client';
 import { putNotebookRole } from '@/db/queries/notebook-roles';
-import {
-  insertNotebook,
-  listNotebooksOf,
-  renameNotebook,
-  setArchived,
-  type Notebook,
-} from '@/db/queries/notebooks';
+import { insertNotebook, renameNotebook, setArchived, type Notebook } from '@/db/queries/notebooks';
 import { putSearchTitle } from '@/db/queries/notebook-search';
 import { insertVersion, type Version } from '@/db/queries/versions';
 import { findWorkshop, holdWorkshopRole, listWorkshopsOf } from '@/db/queries/workshops';
 import { Failure, can, demandInWorkshop, type Role } from '@/lib/access';
-import { isId, oneLine, readWorkshopSettings, type Person } from '@/lib/accounts';
+import { isId, readWorkshopSettings, type Person } from '@/lib/accounts';
 import { record } from '@/lib/activity';
 import { canonicalContent, emptyContent, type NotebookContent } from './content';
 import { guardedBy, holdFor, openFor } from './guard';
 import { SavableContent } from './savable';
+import { Title } from './title';
 import { titleBlockIn } from './title-block';
 import { keepSearchable } from './search-text';
-import type { NotebookHead, NotebookLine, OpenNotebook } from './types';
+import type { NotebookHead, OpenNotebook } from './types';
 import { contentOf, getVersion } from './versions';
-
-const Title = oneLine('The title', 200);
 
 export const NewNotebook = z.strictObject({
   title: Title,
@@ -37,24 +30,6 @@ export const NotebookChange = z
     error: 'Nothing to change is given; expected a title, archived, or both.',
   });
 export type NotebookChange = z.infer<typeof NotebookChange>;
-
-/** The notebooks on which the person has a role, last changed first; archived ones only when asked for. */
-export async function listNotebooks(
-  person: Person,
-  { archived = false }: { archived?: boolean } = {},
-): Promise<NotebookLine[]> {
-  const entries = await listNotebooksOf(database(), person.id, { archived });
-  return entries.map((entry) => ({
-    id: entry.id,
-    title: entry.title,
-    workshop: entry.workshop,
-    role: entry.role,
-    version: entry.head,
-    changedAt: (entry.savedAt ?? entry.changedAt).toISOString(),
-    changedBy: entry.savedBy ?? '',
-    archivedAt: entry.archivedAt?.toISOString() ?? null,
-  }));
-}
 
 /**
  * Makes a notebook with its first version, in the given workshop or in the person's oldest one; the
@@ -104,7 +79,7 @@ export async function readNotebook(person: Person, id: string): Promise<OpenNote
   return { notebook: headOf(person, notebook, role, version), content: contentOf(version) };
 }
 
-/** Renames, archives or brings back. The whole change or nothing of it. */
+/** Renames, archives or brings back. The whole change or nothing of it. @throws Failure `archived` */
 export async function changeNotebook(
   person: Person,
   id: string,
@@ -119,6 +94,12 @@ export async function changeNotebook(
   await inTransaction(async (trx) => {
     if (title !== undefined) {
       const { notebook } = await holdFor(trx, person, 'notebook.rename', id);
+      if (notebook.archivedAt !== null && archived !== false) {
+        throw new Failure(
+          'archived',
+          'This notebook is archived, so it keeps its title. An owner can bring it back.',
+        );
+      }
       if (notebook.title !== title) {
         await renameNotebook(trx, id, title);
         await putSearchTitle(trx, id, title);

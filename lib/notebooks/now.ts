@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { database } from '@/db/client';
+import { commentsStamp } from '@/db/queries/comments';
 import { findPresence, listPresent, putPresence, type Presence } from '@/db/queries/presence';
 import type { Role } from '@/lib/access';
 import type { Person } from '@/lib/accounts';
@@ -36,19 +37,24 @@ export interface Now {
   head: number;
   archived: boolean;
   role: Role;
+  /** Changes whenever its comments do. */
+  comments: string;
   /** The others who have it on the screen. */
   people: { id: string; name: string; cell: string | null }[];
 }
 
 /**
  * What is news on a notebook, and a note that the asking person is here. The note is written at most every ten seconds,
- * or two when another cell is taken in hand, so that asking often costs four short reads.
+ * or two when another cell is taken in hand, so that asking often costs five short reads.
  */
 export async function lookNow(person: Person, id: string, query: NowQuery): Promise<Now> {
   const { notebook, role } = await openFor(person, 'presence.see', id);
   const db = database();
   const at = new Date();
-  const present = await listPresent(db, id, new Date(at.getTime() - GONE), person.id);
+  const [present, comments] = await Promise.all([
+    listPresent(db, id, new Date(at.getTime() - GONE), person.id),
+    commentsStamp(db, id),
+  ]);
   const own = present.find((one) => one.person.id === person.id) ?? null;
   const cell = query.cell ?? null;
   const seenVersion = Math.min(query.seen ?? 0, notebook.head);
@@ -59,6 +65,7 @@ export async function lookNow(person: Person, id: string, query: NowQuery): Prom
     head: notebook.head,
     archived: notebook.archivedAt !== null,
     role,
+    comments,
     people: present.filter((one) => one !== own).map((one) => ({ ...one.person, cell: one.cell })),
   };
 }

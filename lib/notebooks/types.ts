@@ -23,6 +23,19 @@ export interface NotebookLine {
   changedAt: Moment;
   changedBy: string;
   archivedAt: Moment | null;
+  /** Whether it is a template of its workshop. */
+  template: boolean;
+}
+
+/** One page of the table of notebooks. */
+export interface NotebookList {
+  notebooks: NotebookLine[];
+  /** How many the filters have altogether. */
+  total: number;
+  page: number;
+  pages: number;
+  /** The workshops to choose from. */
+  workshops: NamedWorkshop[];
 }
 
 export interface NotebookHead {
@@ -264,4 +277,13 @@ export interface SearchAnswer {
   hits: SearchHit[];
   /** Where the next page begins; null behind the last. */
   next: string | null;
+}
+
+/** A template, as members of its workshop see it: nothing of its content, people or earlier versions. */
+export interface TemplateLine {
+  id: string;
+  title: string;
+  workshop: NamedWorkshop;
+  version: number;
+  changedAt: Moment;
 }

@@ -7,9 +7,10 @@ import { Filter, Filtered } from '@/components/help/filter';
 import { PutProvider } from '@/components/help/put-in';
 import { CAUTIONS, WORDS } from '@/components/help/text';
 import { KEYS } from '@/components/sheet/cell-keys';
+import { Failure } from '@/lib/access';
 import { isId } from '@/lib/accounts';
 import { currentPerson } from '@/lib/accounts/session';
-import { listNotebooks } from '@/lib/notebooks';
+import { readNotebook } from '@/lib/notebooks';
 
 export const metadata: Metadata = { title: 'How to write cells' };
 
@@ -51,8 +52,15 @@ async function sheetBehind(asked: string | string[] | undefined) {
   const person = await currentPerson();
   if (person === null) return { signedIn: false, from: null };
   if (typeof asked !== 'string' || !isId(asked)) return { signedIn: true, from: null };
-  const found = (await listNotebooks(person)).find(({ id }) => id === asked);
-  const from = found && found.role !== 'viewer' ? { id: found.id, title: found.title } : null;
+  const found = await readNotebook(person, asked).then(
+    ({ notebook }) => notebook,
+    (fault: unknown) => {
+      if (fault instanceof Failure) return null;
+      throw fault;
+    },
+  );
+  const mayWrite = found !== null && found.role !== 'viewer' && found.archivedAt === null;
+  const from = mayWrite ? { id: found.id, title: found.title } : null;
   return { signedIn: true, from };
 }
 

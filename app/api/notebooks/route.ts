@@ -1,13 +1,9 @@
-import { z } from 'zod';
 import { NOTEBOOK_BODY, created, revalidated, route } from '@/lib/http';
-import { NewNotebook, createNotebook, listNotebooks } from '@/lib/notebooks';
+import { ListRequest, NewNotebook, createNotebook, listNotebooks } from '@/lib/notebooks';
 
-const Which = z.strictObject({ archived: z.enum(['0', '1']).optional() });
-
-export const GET = route({ person: 'required', query: Which }, async ({ request, person, query }) =>
-  revalidated(request, {
-    notebooks: await listNotebooks(person, { archived: query.archived === '1' }),
-  }),
+export const GET = route(
+  { person: 'required', query: ListRequest },
+  async ({ request, person, query }) => revalidated(request, await listNotebooks(person, query)),
 );
 
 export const POST = route(

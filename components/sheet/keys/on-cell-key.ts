@@ -57,6 +57,7 @@ export const CELL_COMMANDS: Record<CellCommand, Run> = {
   fold: always(({ id }, actions) => actions.fold(id)),
   copy: openCopies,
   proof: always((place, actions) => actions.details(place.id, lineOf(place))),
+  comment: always(({ id }, actions) => actions.comment(id)),
   remove: always(({ id }, actions) => actions.remove(id)),
   cellBefore: ({ id }, actions) => actions.jump(id, -1, 'cell'),
   cellAfter: ({ id }, actions) => actions.jump(id, 1, 'cell'),
