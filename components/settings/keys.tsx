@@ -10,6 +10,14 @@ import { Choice, Field } from '@/components/ui/field';
 import { Moment } from '@/components/ui/moment';
 import { Notice } from '@/components/ui/notice';
 
+/** What a key may be for, as the person ticks it and as the list says it. */
+const SCOPES = {
+  evaluate: { label: 'Evaluate expressions', short: 'evaluates' },
+  revisions: { label: 'Read issued revisions of my notebooks', short: 'reads revisions' },
+} as const satisfies Record<ApiKeyLine['scopes'][number], { label: string; short: string }>;
+type Scope = keyof typeof SCOPES;
+const ALL_SCOPES = Object.keys(SCOPES) as Scope[];
+
 const EXPIRIES = {
   '30': '30 days',
   '90': '90 days',
@@ -23,6 +31,7 @@ export function Keys({ keys }: { keys: readonly ApiKeyLine[] }) {
   const [made, setMade] = useState<NewApiKey | null>(null);
   const [label, setLabel] = useState('');
   const [days, setDays] = useState('90');
+  const [scopes, setScopes] = useState<readonly Scope[]>(['evaluate']);
   const [fault, setFault] = useState<string | null>(null);
 
   const change = async (work: () => Promise<void>) => {
@@ -37,7 +46,9 @@ export function Keys({ keys }: { keys: readonly ApiKeyLine[] }) {
   const make = () =>
     change(async () => {
       const expiry = days === '' ? {} : { expiresInDays: Number(days) };
-      setMade(await ask<NewApiKey>('/api/keys', { body: { label: label.trim(), ...expiry } }));
+      setMade(
+        await ask<NewApiKey>('/api/keys', { body: { label: label.trim(), scopes, ...expiry } }),
+      );
       setLabel('');
     });
   const revoke = (key: ApiKeyLine) =>
@@ -84,8 +95,30 @@ export function Keys({ keys }: { keys: readonly ApiKeyLine[] }) {
             ))}
           </Choice>
         </div>
+        <fieldset>
+          <legend className="text-small font-medium">The key may</legend>
+          <div className="mt-1 flex flex-wrap gap-x-6 gap-y-1">
+            {ALL_SCOPES.map((scope) => (
+              <label key={scope} className="flex min-h-7 items-center gap-2">
+                <input
+                  type="checkbox"
+                  className="size-4 accent-ruddle"
+                  checked={scopes.includes(scope)}
+                  onChange={(event) =>
+                    setScopes(
+                      ALL_SCOPES.filter((one) =>
+                        one === scope ? event.target.checked : scopes.includes(one),
+                      ),
+                    )
+                  }
+                />
+                {SCOPES[scope].label}
+              </label>
+            ))}
+          </div>
+        </fieldset>
         <div className="flex justify-end">
-          <Button type="submit" look="main" disabled={label.trim() === ''}>
+          <Button type="submit" look="main" disabled={label.trim() === '' || scopes.length === 0}>
             Make a key
           </Button>
         </div>
@@ -111,7 +144,8 @@ function KeyRow({ line, onRevoke }: { line: ApiKeyLine; onRevoke: () => void }) 
           {line.label} <span className="font-mono text-small text-soft">…{line.fragment}</span>
         </span>
         <span className="block text-small text-soft">
-          made <Moment at={line.madeAt} dayOnly />
+          {line.scopes.map((scope) => SCOPES[scope].short).join(' and ')}, made{' '}
+          <Moment at={line.madeAt} dayOnly />
           {line.expiresAt && (
             <>
               , valid until <Moment at={line.expiresAt} dayOnly />

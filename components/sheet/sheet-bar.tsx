@@ -31,6 +31,8 @@ const STATES = {
   failed: 'no answer; the figures shown are the last ones',
 } as const;
 
+const EXPORTS = { json: 'Results as JSON', tex: 'Sheet as TeX', csv: 'Marks as CSV' } as const;
+
 /** Above the sheet: which one it is, whether it is kept, and what can be done with it as a whole. */
 export function SheetBar(props: SheetBarProps) {
   const { notebook, sheet, evaluation, mayWrite, mayShare, onPanel, onFind, onKeys, onMarks } =
@@ -80,6 +82,7 @@ export function SheetBar(props: SheetBarProps) {
         <Button onClick={onKeys}>Keys</Button>
         <CommentsButton />
         <LinkButton href={`/notebooks/${notebook.id}/versions`}>Versions</LinkButton>
+        <LinkButton href={`/notebooks/${notebook.id}/revisions`}>Revisions</LinkButton>
         <Disclosure
           label="Hand over"
           className="inline-flex min-h-9 items-center rounded-cut border border-rule bg-sheet px-3 text-small font-medium hover:border-ink"
@@ -96,14 +99,20 @@ export function SheetBar(props: SheetBarProps) {
                 {panel === 'people' ? 'People on this notebook' : 'Client links'}
               </button>
             ))}
-          {(['json', 'tex'] as const).map((format) => (
+          {notebook.mayIssue && (
+            <button type="button" className={DISCLOSURE_ROW} onClick={() => onPanel('issue')}>
+              Issue a revision
+              <span className="text-soft">version {sheet.kept.number}</span>
+            </button>
+          )}
+          {(['json', 'tex', 'csv'] as const).map((format) => (
             <a
               key={format}
               download
               href={`/api/notebooks/${notebook.id}/export?format=${format}`}
               className={DISCLOSURE_ROW}
             >
-              {format === 'json' ? 'Results as JSON' : 'Sheet as TeX'}
+              {EXPORTS[format]}
               <span className="text-soft">version {sheet.kept.number}</span>
             </a>
           ))}

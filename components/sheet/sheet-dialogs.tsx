@@ -4,14 +4,15 @@ import { lazy, Suspense, useState } from 'react';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import { ConflictDialog } from './panels/conflict-dialog';
 import { KeepDialog } from './panels/keep-dialog';
-import { LinksDialog } from './panels/links-dialog';
 import { PeopleDialog } from './panels/people-dialog';
 import { SettingsDialog } from './panels/settings-dialog';
 import type { NotebookOnScreen } from './state/use-notebook';
 
-export type Panel = 'keep' | 'settings' | 'title-block' | 'people' | 'links' | 'conflict';
+export type Panel = 'keep' | 'settings' | 'title-block' | 'people' | 'links' | 'issue' | 'conflict';
 
 /** Loaded when first asked for. */
+const LinksDialog = lazy(() => import('./panels/links-dialog'));
+const IssueDialog = lazy(() => import('@/components/revisions/issue-dialog'));
 const TitleBlockDialog = lazy(() => import('./panels/title-block-dialog'));
 
 interface SheetDialogsProps {
@@ -91,7 +92,22 @@ export function SheetDialogs(props: SheetDialogsProps) {
     case 'people':
       return <PeopleDialog notebookId={notebook.id} mayChange={mayShare} onClose={onClose} />;
     case 'links':
-      return <LinksDialog notebookId={notebook.id} onClose={onClose} />;
+      return (
+        <Suspense>
+          <LinksDialog notebookId={notebook.id} onClose={onClose} />
+        </Suspense>
+      );
+    case 'issue':
+      return (
+        <Suspense>
+          <IssueDialog
+            notebookId={notebook.id}
+            head={kept.number}
+            unkept={sheet.dirty}
+            onClose={onClose}
+          />
+        </Suspense>
+      );
     default:
       return null;
   }

@@ -1,6 +1,7 @@
 import Link from 'next/link';
-import type { VersionLine } from '@/lib/notebooks/types';
+import type { CheckLine, VersionLine } from '@/lib/notebooks/types';
 import { Moment } from '@/components/ui/moment';
+import { CheckedBy } from './checked-by';
 import { RestoreButton } from './restore-button';
 
 interface VersionTableProps {
@@ -8,6 +9,7 @@ interface VersionTableProps {
   head: number;
   mayRestore: boolean;
   versions: readonly VersionLine[];
+  checks: readonly CheckLine[];
 }
 
 const CELL = 'px-3 py-2.5 align-top max-md:block max-md:px-0 max-md:py-0.5';
@@ -18,7 +20,8 @@ export function sayNote({ note, restoredFrom }: VersionLine): string {
   return [restored, note].filter(Boolean).join('; ');
 }
 
-export function VersionTable({ notebookId, head, mayRestore, versions }: VersionTableProps) {
+export function VersionTable(props: VersionTableProps) {
+  const { notebookId, head, mayRestore, versions, checks } = props;
   return (
     <div className="border border-rule bg-sheet">
       <table className="w-full border-collapse max-md:block">
@@ -61,7 +64,10 @@ export function VersionTable({ notebookId, head, mayRestore, versions }: Version
               <td className={`${CELL} [overflow-wrap:anywhere]`}>
                 {sayNote(version) || <span className="text-soft">not said</span>}
               </td>
-              <td className={CELL}>{version.author}</td>
+              <td className={CELL}>
+                {version.author}
+                <CheckedBy checks={checks} number={version.number} />
+              </td>
               <td className={CELL}>
                 <Moment at={version.savedAt} />
               </td>

@@ -13,6 +13,7 @@ export {
   PassphraseForm,
   countOpening,
   exportByToken,
+  logoByToken,
   readByToken,
   tryPassphrase,
 } from './client-view';

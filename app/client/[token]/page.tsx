@@ -3,6 +3,7 @@ import { cookies, headers } from 'next/headers';
 import { cache } from 'react';
 import { AskPassphrase, Expired, NothingIssued } from '@/components/revisions/client-messages';
 import { revisionFields } from '@/components/revisions/revision-fields';
+import { RevisionNote } from '@/components/revisions/revision-note';
 import { Superseded } from '@/components/revisions/superseded';
 import { ReadOnlySheet } from '@/components/sheet/read-only-sheet';
 import { orNotFound } from '@/components/site/or-not-found';
@@ -89,11 +90,7 @@ function IssuedSheet({ token, issued }: { token: string; issued: Issued }) {
       {revision.supersededBy !== null && (
         <Superseded letter={revision.letter} by={revision.supersededBy} />
       )}
-      {revision.note !== null && (
-        <p className="max-w-prose whitespace-pre-line border-l-2 border-rule pl-4 font-serif text-note [overflow-wrap:anywhere] print:hidden">
-          {revision.note}
-        </p>
-      )}
+      <RevisionNote note={revision.note} />
       <ReadOnlySheet
         content={content}
         answers={results}

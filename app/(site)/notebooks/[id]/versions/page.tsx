@@ -3,7 +3,7 @@ import Link from 'next/link';
 import { VersionTable } from '@/components/versions/version-table';
 import { orNotFound } from '@/components/site/or-not-found';
 import { personForPage } from '@/lib/accounts/session';
-import { listVersions, readNotebook } from '@/lib/notebooks';
+import { listChecks, listVersions, readNotebook } from '@/lib/notebooks';
 
 export const metadata: Metadata = { title: 'Versions' };
 
@@ -38,6 +38,7 @@ export default async function VersionsPage({ params }: PageProps) {
         head={notebook.version}
         mayRestore={notebook.role !== 'viewer' && notebook.archivedAt === null}
         versions={versions}
+        checks={await listChecks(person, id)}
       />
     </div>
   );

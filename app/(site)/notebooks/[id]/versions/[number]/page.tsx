@@ -9,9 +9,10 @@ import { Download } from '@/components/ui/button';
 import { Moment } from '@/components/ui/moment';
 import { Notice } from '@/components/ui/notice';
 import { RestoreButton } from '@/components/versions/restore-button';
+import { VersionChecks } from '@/components/versions/version-checks';
 import { sayNote } from '@/components/versions/version-table';
 import { personForPage } from '@/lib/accounts/session';
-import { readNotebook, readVersion } from '@/lib/notebooks';
+import { listChecks, readNotebook, readVersion } from '@/lib/notebooks';
 
 interface PageProps {
   params: Promise<{ id: string; number: string }>;
@@ -30,6 +31,7 @@ export default async function VersionPage({ params }: PageProps) {
   const answers = await answersFor(content);
   const old = version.number !== notebook.version;
   const note = sayNote(version);
+  const checks = (await listChecks(person, id)).filter((one) => one.version === version.number);
   return (
     <div className="mx-auto max-w-sheet space-y-3 print:max-w-none">
       <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2 print:hidden">
@@ -57,11 +59,24 @@ export default async function VersionPage({ params }: PageProps) {
           <Download href={`/api/notebooks/${id}/export?format=tex&version=${version.number}`}>
             TeX
           </Download>
+          <Download href={`/api/notebooks/${id}/export?format=csv&version=${version.number}`}>
+            CSV
+          </Download>
           {old && notebook.role !== 'viewer' && notebook.archivedAt === null && (
             <RestoreButton notebookId={id} number={version.number} head={notebook.version} />
           )}
         </div>
       </div>
+      <VersionChecks
+        notebookId={id}
+        number={version.number}
+        checks={checks}
+        mayCheck={
+          notebook.role !== 'viewer' &&
+          notebook.archivedAt === null &&
+          !checks.some((one) => one.person.id === person.id)
+        }
+      />
       {old && (
         <Notice tone="caution" title="Superseded">
           This is not the newest version; version {notebook.version} is.
