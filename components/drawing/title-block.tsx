@@ -30,7 +30,7 @@ export function TitleBlock({ fields }: { fields: readonly TitleField[] }) {
         {fields.map(({ label, value, span, strong }) => (
           <div
             key={label}
-            className={`min-w-0 grow border-b border-r border-rule px-2.5 pb-1.5 pt-1 ${SPANS[span]}`}
+            className={`min-w-0 grow border-b border-r border-rule px-2.5 pb-1.5 pt-1 print:pb-0.5 print:pt-0 ${SPANS[span]}`}
           >
             <dt className="text-tag text-soft">{label}</dt>
             <dd

@@ -2,7 +2,11 @@ import type { TitleField } from '@/components/drawing/title-block';
 import { titleFields } from '@/components/sheet/title-fields';
 import type { OpenRevision } from '@/lib/notebooks/types';
 
-/** The title block of an issued revision, as it was frozen: that of every sheet, and what issuing adds. */
+/**
+ * The title block of an issued revision, as it was frozen: that of every sheet, and what issuing adds.
+ * It stands at the foot of every printed page, and a browser repeats what keeps its place free only
+ * while that is lower than a quarter of the page: so the rows are few and full.
+ */
 export function revisionFields(issued: OpenRevision, logoAt: string): TitleField[] {
   const { revision, titleBlock, content, version } = issued;
   const fields = titleFields({
@@ -12,23 +16,29 @@ export function revisionFields(issued: OpenRevision, logoAt: string): TitleField
     savedAt: version.savedAt,
     revision: { index: revision.letter, issuedAt: revision.issuedAt },
     logoAt,
-  }).map((field) => (field.label === 'Revision' ? { ...field, strong: true } : field));
-  const issue: TitleField[] = [
-    { label: 'Checked by', value: revision.checkedBy ?? 'nobody named', span: 3 },
-    { label: 'Purpose', value: revision.purpose, span: 4 },
-    { label: 'Check code', value: revision.checkCode, span: 3 },
-  ];
-  const created = fields.findIndex(({ label }) => label === 'Created by') + 1;
+  });
+  const of = (label: string, more: Partial<TitleField> = {}): TitleField[] =>
+    fields.filter((field) => field.label === label).map((field) => ({ ...field, ...more }));
+  const { letter, supersededBy: by } = revision;
+  const standing = by === null ? letter : `${letter}, superseded by ${by}`;
   return [
-    ...supersededField(revision.supersededBy),
-    ...fields.slice(0, created),
-    ...issue,
-    ...fields.slice(created),
+    ...of('Legal owner'),
+    ...of('Title'),
+    ...of('Supplementary title', { span: 8 }),
+    { label: 'Purpose', value: revision.purpose, span: 4 },
+    ...of('Identification number', { span: 3 }),
+    { label: 'Revision', value: standing, span: by === null ? 2 : 4, strong: true },
+    ...of('Date of issue', { span: 2 }),
+    { label: 'Check code', value: revision.checkCode, span: 3 },
+    ...of('Created by'),
+    { label: 'Checked by', value: revision.checkedBy ?? 'nobody named', span: 3 },
+    ...of('Approved by'),
+    ...of('Version', { label: 'From version' }),
+    ...of('Unit'),
+    ...of('Cutting step', { span: 2 }),
+    ...of('Rounding', { span: 3 }),
+    ...of('General tolerances'),
+    ...of('Sheet'),
+    ...of('Caution'),
   ];
-}
-
-function supersededField(by: string | null): TitleField[] {
-  if (by === null) return [];
-  const value = `Superseded by revision ${by}: do not work from this sheet`;
-  return [{ label: 'Standing', value, span: 12, strong: true }];
 }

@@ -1,6 +1,5 @@
 import { z } from 'zod';
 import { database } from '@/db/client';
-import { findAttachmentAnywhere, type Attachment } from '@/db/queries/attachments';
 import {
   findLiveClientLink,
   recordClientLinkOpened,
@@ -80,18 +79,6 @@ export async function exportByToken(token: string, pass: Pass): Promise<ClientEx
     throw new Failure('nothing-issued', 'Nothing has been issued for this link yet.');
   }
   return { tag: tagOf(...shown), read: () => openRevision(database(), notebook, ...shown) };
-}
-
-/**
- * The logo in the title block of what the link shows, by its hash; no other picture.
- * @throws Failure `not-found`
- */
-export async function logoByToken(token: string, pass: Pass, hash: string): Promise<Attachment> {
-  const { read } = await exportByToken(token, pass);
-  const { logo } = (await read()).titleBlock;
-  const found = logo?.hash === hash ? await findAttachmentAnywhere(database(), hash) : null;
-  if (found === null) throw new Failure('not-found', 'There is no such logo.');
-  return found;
 }
 
 export const PassphraseForm = z.object({ passphrase: z.string().max(200).default('') });

@@ -13,7 +13,6 @@ export {
   PassphraseForm,
   countOpening,
   exportByToken,
-  logoByToken,
   readByToken,
   tryPassphrase,
 } from './client-view';

@@ -2,7 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { insertMembership } from '@/db/queries/workshops';
 import { ALLOWED, ROLES, type Action, type Role } from '@/lib/access';
 import { openDatabase } from '../setup/server';
-import { content, newCast, newKey, newLink, type Cast } from './support/notebook';
+import { content, issue, newCast, newKey, newLink, type Cast } from './support/notebook';
 import { Visitor, newcomer } from './support/visitor';
 
 /**
@@ -17,11 +17,14 @@ interface Endpoint {
   body?: (scene: Scene) => unknown;
   /** Status where the table allows it; chosen so that asking twice changes nothing that matters. */
   allowed: number;
+  /** Takes an API key with this scope as well; the scene's key has another one. */
+  key?: 'revisions';
 }
 
 interface Scene extends Cast {
   member: Visitor;
   token: string;
+  linkId: string;
   key: string;
   editorId: string;
   ownerId: string;
@@ -154,6 +157,81 @@ const endpoints: Endpoint[] = [
     allowed: 204,
   },
   {
+    name: 'GET link',
+    action: 'links.list',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/links/${scene.linkId}`,
+    allowed: 200,
+  },
+  {
+    name: 'PATCH link',
+    action: 'links.change',
+    method: 'PATCH',
+    path: (scene) => `${base(scene)}/links/${scene.linkId}`,
+    body: () => ({ passphrase: null }),
+    allowed: 204,
+  },
+  {
+    name: 'GET checks',
+    action: 'versions.list',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/versions/1/checks`,
+    allowed: 200,
+  },
+  {
+    name: 'POST check',
+    action: 'versions.check',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/versions/1/checks`,
+    body: () => ({}),
+    allowed: 201,
+  },
+  {
+    name: 'GET revisions',
+    action: 'revisions.list',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/revisions`,
+    allowed: 200,
+    key: 'revisions',
+  },
+  {
+    name: 'POST revisions',
+    action: 'revisions.issue',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/revisions`,
+    body: () => ({ version: 1, purpose: 'for comment' }),
+    allowed: 201,
+  },
+  {
+    name: 'GET what issuing meets',
+    action: 'revisions.issue',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/revisions/next?version=1`,
+    allowed: 200,
+  },
+  {
+    name: 'GET revision',
+    action: 'revisions.read',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/revisions/A`,
+    allowed: 200,
+    key: 'revisions',
+  },
+  {
+    name: 'GET export of a revision',
+    action: 'revisions.read',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/revisions/A/export?format=csv`,
+    allowed: 200,
+  },
+  {
+    name: 'POST reevaluation',
+    action: 'revisions.read',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/revisions/A/reevaluation`,
+    allowed: 200,
+  },
+  {
     name: 'GET export',
     action: 'notebook.export',
     method: 'GET',
@@ -162,19 +240,27 @@ const endpoints: Endpoint[] = [
   },
 ];
 
+const SIGN_IN = [401, 'sign-in-needed'] as const;
+/** Where a key is taken, whoever sends what is none, or one for something else, is told so. */
+const REFUSED: Readonly<Record<string, readonly [number, string]>> = {
+  'holders of a client link': [401, 'bad-key'],
+  'holders of an API key': [403, 'forbidden'],
+};
+
 let scene: Scene;
 const db = openDatabase();
 
 beforeAll(async () => {
   const cast = await newCast('R = 1200 mm');
   const { owner, notebook } = cast;
-  const [{ token }, { key }, member, people, opened] = await Promise.all([
+  const [{ id: linkId, token }, { key }, member, people, opened] = await Promise.all([
     newLink(owner, notebook),
     newKey(owner),
     newcomer('Mab'),
     owner.get(`/api/notebooks/${notebook}/people`),
     owner.get(`/api/notebooks/${notebook}`),
   ]);
+  await issue(owner, notebook);
   const idOf = (email: string) =>
     (people.json.people as { id: string; email: string }[]).find((one) => one.email === email)
       ?.id ?? '';
@@ -185,6 +271,7 @@ beforeAll(async () => {
     ...cast,
     member,
     token,
+    linkId,
     key,
     editorId: idOf(cast.editor.email),
     ownerId: idOf(owner.email),
@@ -242,10 +329,10 @@ describe.each(endpoints)('$name ($action)', (endpoint) => {
     ['signed-out people', () => ({})],
     ['holders of a client link', () => ({ authorization: `Bearer ${scene.token}` })],
     ['holders of an API key', () => ({ authorization: `Bearer ${scene.key}` })],
-  ])('asks %s to sign in', async (_who, headers) => {
+  ])('asks %s to sign in', async (who, headers) => {
     const answer = await ask(endpoint, new Visitor(), headers());
-    expect(answer.status).toBe(401);
-    expect(answer.json.code).toBe('sign-in-needed');
+    const [status, code] = endpoint.key === undefined ? SIGN_IN : (REFUSED[who] ?? SIGN_IN);
+    expect([answer.status, answer.json.code]).toEqual([status, code]);
     expectNothingLeaked(answer.text);
   });
 

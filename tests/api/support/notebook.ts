@@ -32,14 +32,27 @@ export async function give(
 export async function newLink(
   owner: Visitor,
   notebook: string,
+  more: Record<string, string> = {},
 ): Promise<{ id: string; token: string }> {
-  const made = await owner.post(`/api/notebooks/${notebook}/links`, { label: 'For the client' });
+  const body = { label: 'For the client', ...more };
+  const made = await owner.post(`/api/notebooks/${notebook}/links`, body);
   if (made.status !== 201) throw new Error(`No link: ${made.text}`);
   return { id: String(made.json.id), token: String(made.json.token) };
 }
 
-export async function newKey(person: Visitor): Promise<{ id: string; key: string }> {
-  const made = await person.post('/api/keys', { label: 'Saw' });
+/** Issues a version under the next letter, which it returns. */
+export async function issue(owner: Visitor, notebook: string, version = 1): Promise<string> {
+  const body = { version, purpose: 'for manufacture' };
+  const issued = await owner.post(`/api/notebooks/${notebook}/revisions`, body);
+  if (issued.status !== 201) throw new Error(`No revision: ${issued.text}`);
+  return String(issued.json.letter);
+}
+
+export async function newKey(
+  person: Visitor,
+  scopes: readonly string[] = ['evaluate'],
+): Promise<{ id: string; key: string }> {
+  const made = await person.post('/api/keys', { label: 'Saw', scopes });
   if (made.status !== 201) throw new Error(`No key: ${made.text}`);
   return { id: String(made.json.id), key: String(made.json.key) };
 }
