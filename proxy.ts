@@ -6,12 +6,12 @@ import { env } from '@/lib/env';
 import { problemResponse } from '@/lib/http/problem';
 
 /** Pages that make sense only with a person; the services behind them ask again and decide. */
-const NEEDS_PERSON = /^\/(notebooks|settings)(\/|$)/;
+const NEEDS_PERSON = /^\/(notebooks|workshops|settings)(\/|$)/;
 
 /** Pages whose address is itself a secret: no search engine may keep them, */
-const SECRET_ADDRESS = /^\/(client|confirm|reset)\//;
+const SECRET_ADDRESS = /^\/(client|confirm|reset|invitations)\//;
 /** and of these, whose secret works once, no cache either. */
-const USED_ONCE = /^\/(confirm|reset)\//;
+const USED_ONCE = /^\/(confirm|reset|invitations)\//;
 
 /**
  * Runs before every page: sends signed-out people to sign in, and puts the security headers on.

@@ -4,7 +4,6 @@ import { lazy, Suspense, useState } from 'react';
 import type { NotebookHead } from '@/lib/notebooks/types';
 import { ConflictDialog } from './panels/conflict-dialog';
 import { KeepDialog } from './panels/keep-dialog';
-import { PeopleDialog } from './panels/people-dialog';
 import { SettingsDialog } from './panels/settings-dialog';
 import type { NotebookOnScreen } from './state/use-notebook';
 
@@ -13,12 +12,14 @@ export type Panel = 'keep' | 'settings' | 'title-block' | 'people' | 'links' | '
 /** Loaded when first asked for. */
 const LinksDialog = lazy(() => import('./panels/links-dialog'));
 const IssueDialog = lazy(() => import('@/components/revisions/issue-dialog'));
+const PeopleDialog = lazy(() => import('./panels/people-dialog'));
 const TitleBlockDialog = lazy(() => import('./panels/title-block-dialog'));
 
 interface SheetDialogsProps {
   panel: Panel | null;
   notebook: NotebookHead;
   sheet: NotebookOnScreen;
+  personId: string;
   personName: string;
   mayShare: boolean;
   onClose: () => void;
@@ -90,7 +91,16 @@ export function SheetDialogs(props: SheetDialogsProps) {
         </Suspense>
       );
     case 'people':
-      return <PeopleDialog notebookId={notebook.id} mayChange={mayShare} onClose={onClose} />;
+      return (
+        <Suspense>
+          <PeopleDialog
+            notebookId={notebook.id}
+            personId={props.personId}
+            mayChange={mayShare}
+            onClose={onClose}
+          />
+        </Suspense>
+      );
     case 'links':
       return (
         <Suspense>

@@ -237,7 +237,7 @@ function SheetOnScreen(props: SheetProps) {
           panel={panel}
           notebook={notebook}
           sheet={sheet}
-          personName={personName}
+          personId={props.personId}          personName={personName}
           mayShare={props.mayShare}
           onClose={() => setPanel(null)}
         />

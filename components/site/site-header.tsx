@@ -36,9 +36,14 @@ export function SiteHeader({ who }: SiteHeaderProps) {
         {who !== 'guest' && (
           <nav aria-label="Main" className="flex flex-wrap items-center gap-x-5 gap-y-1 text-small">
             {signedIn && (
-              <Link className={LINK} href="/notebooks">
-                Notebooks
-              </Link>
+              <>
+                <Link className={LINK} href="/notebooks">
+                  Notebooks
+                </Link>
+                <Link className={LINK} href="/workshops">
+                  Workshop
+                </Link>
+              </>
             )}
             <Link className={LINK} href="/divide">
               Divide a circle

@@ -15,8 +15,10 @@ export class Refusal extends Error {
 }
 
 interface Asking {
-  method?: 'GET' | 'POST' | 'PATCH' | 'DELETE';
+  method?: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
   body?: unknown;
+  /** Sent as it is, in place of a body in JSON. */
+  file?: Blob;
   signal?: AbortSignal;
 }
 
@@ -24,13 +26,16 @@ interface Asking {
  * Asks our own server in JSON.
  * @throws Refusal with the server's sentence, or with code `unreachable` when no answer came.
  */
-export async function ask<T>(path: string, { method, body, signal }: Asking = {}): Promise<T> {
+export async function ask<T>(
+  path: string,
+  { method, body, file, signal }: Asking = {},
+): Promise<T> {
   let response: Response;
   try {
     response = await fetch(path, {
       method: method ?? (body === undefined ? 'GET' : 'POST'),
-      headers: body === undefined ? {} : { 'content-type': 'application/json' },
-      body: body === undefined ? null : JSON.stringify(body),
+      headers: { ...typed(file?.type), ...typed(body === undefined ? '' : 'application/json') },
+      body: file ?? (body === undefined ? null : JSON.stringify(body)),
       signal: signal ?? null,
     });
   } catch (cause) {
@@ -53,6 +58,8 @@ export async function ask<T>(path: string, { method, body, signal }: Asking = {}
     document ?? {},
   );
 }
+
+const typed = (type = ''): Record<string, string> => (type === '' ? {} : { 'content-type': type });
 
 /** The fetcher of SWR: what stands at an address. */
 export const askFor = <T>(path: string): Promise<T> => ask<T>(path);
