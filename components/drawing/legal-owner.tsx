@@ -18,7 +18,7 @@ export function LegalOwner({ name, logo, logoAt }: LegalOwnerProps) {
           width={logo.width}
           height={logo.height}
           alt=""
-          className="mb-1 mt-0.5 h-10 print:h-6 w-auto max-w-full bg-white object-contain object-left"
+          className="mb-1 mt-0.5 h-10 print:h-6 w-auto max-w-full bg-[#fff] object-contain object-left"
         />
       )}
       {name}

@@ -58,7 +58,7 @@ export function titleFields(facts: TitleFacts): TitleField[] {
     },
     { label: 'Unit', value: settings.unit, span: 2 },
     { label: 'Cutting step', value: settings.step ?? 'none', span: 2 },
-    { label: 'Rounding', value: ROUNDINGS[settings.rounding], span: 4 },
+    { label: 'Rounding', value: ROUNDINGS[settings.rounding], span: 3 },
     { label: 'Digits', value: String(settings.digits), span: 2 },
     { label: 'Caution', value: CAUTION, span: 12 },
   ];

@@ -31,7 +31,7 @@ export function LogoForm({ path, logo, mayChange }: LogoFormProps) {
           keep the logo they were issued with.
         </p>
       </div>
-      <div className="flex min-h-24 items-center justify-center border border-hairline bg-white p-3">
+      <div className="flex min-h-24 items-center justify-center border border-hairline bg-[#fff] p-3">
         {logo ? (
           <img
             src={`${path}/logo/${logo.hash}`}

@@ -74,7 +74,7 @@ export function Members(props: MembersProps) {
                       aria-label={`Role of ${member.name}`}
                       value={member.role}
                       disabled={busy}
-                      className="min-h-9 rounded-cut border border-rule bg-sheet px-2 text-small"
+                      className="min-h-9 w-24 rounded-cut border border-rule bg-sheet px-2 text-small"
                       onChange={(event) => changeRole(member, event.target.value as WorkshopRole)}
                     >
                       {Object.keys(MEMBER_WORDS).map((role) => (
