@@ -30,13 +30,15 @@ export function sayRefusal(code: string | null | undefined): string | null {
 
 interface SignInFormProps {
   next: string;
+  /** Filled in where whoever sends the person here knows the address. */
+  address: string;
   refusal: string | null;
   /** What people call the other service they may sign in through; null where there is none. */
   service: string | null;
 }
 
-export function SignInForm({ next, refusal, service }: SignInFormProps) {
-  const [email, setEmail] = useState('');
+export function SignInForm({ next, address, refusal, service }: SignInFormProps) {
+  const [email, setEmail] = useState(address);
   const [password, setPassword] = useState('');
   const [code, setCode] = useState(refusal);
   const [busy, setBusy] = useState(false);

@@ -7,7 +7,7 @@ import { Refusal, ask, sayFault } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
-import { fieldFaults } from '@/components/accounts/sign-up-form';
+import { fieldFaults } from '@/components/accounts/use-asking';
 
 /** The one button of whoever is signed in with the invited address. */
 export function AcceptButton({ token }: { token: string }) {

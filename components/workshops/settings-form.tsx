@@ -6,7 +6,7 @@ import { Refusal, ask } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
 import { Choice, Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
-import { fieldFaults } from '@/components/accounts/sign-up-form';
+import { fieldFaults } from '@/components/accounts/use-asking';
 import { readStep } from '@/components/sheet/read-step';
 import { ROUNDINGS } from '@/components/sheet/title-fields';
 import { TOLERANCE_WORDS, type ToleranceClass } from '@/components/sheet/tolerance-words';

@@ -9,6 +9,7 @@ import {
 } from '@/db/queries/invitations';
 import { findNotebookRole, putNotebookRole } from '@/db/queries/notebook-roles';
 import { lockHead } from '@/db/queries/notebooks';
+import { deleteSignUps } from '@/db/queries/sign-ups';
 import { findUserByEmail, insertUser } from '@/db/queries/users';
 import { changeMembership, insertMembership, lockMembers } from '@/db/queries/workshops';
 import { Failure, ROLES, WORKSHOP_ROLES, type Role, type WorkshopRole } from '@/lib/access';
@@ -93,6 +94,8 @@ export async function acceptWithNewAccount(
   const { email } = invitation;
   try {
     await inTransaction(async (trx) => {
+      // Whoever waited for a confirmation of this address needs none any more.
+      await deleteSignUps(trx, email);
       const id = await insertUser(trx, { email, name, passwordHash });
       await record(trx, {
         deed: 'account.made',

@@ -21,7 +21,12 @@ export default async function SignInPage({ searchParams }: PageProps) {
   if (await currentPerson()) redirect(next);
   return (
     <Card title="Sign in">
-      <SignInForm next={next} refusal={one(query.error)} service={openIdSettings()?.name ?? null} />
+      <SignInForm
+        next={next}
+        address={one(query.email) ?? ''}
+        refusal={one(query.error)}
+        service={openIdSettings()?.name ?? null}
+      />
       <p className="text-small">
         <Link href="/forgot" className="text-snapline underline underline-offset-4">
           Forgotten your password?
