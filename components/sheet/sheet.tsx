@@ -237,7 +237,8 @@ function SheetOnScreen(props: SheetProps) {
           panel={panel}
           notebook={notebook}
           sheet={sheet}
-          personId={props.personId}          personName={personName}
+          personId={props.personId}
+          personName={personName}
           mayShare={props.mayShare}
           onClose={() => setPanel(null)}
         />
