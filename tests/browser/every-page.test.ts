@@ -16,11 +16,15 @@ beforeAll(async () => {
   const first = await ida.page
     .getByRole('link', { name: 'Seventeen-light window' })
     .getAttribute('href');
-  const made = await ida.context.request.post(`/api${first}/links`, {
-    data: { label: 'For looking at every page' },
-    headers: { origin: new URL(ida.page.url()).origin },
-  });
-  const { token } = (await made.json()) as { token: string };
+  const headers = { origin: new URL(ida.page.url()).origin };
+  const post = async (path: string, data: object) => {
+    const made = await ida.context.request.post(path, { data, headers });
+    return (await made.json()) as Record<string, string>;
+  };
+  const { token } = await post(`/api${first}/links`, { label: 'For looking at every page' });
+  const { token: locked } = await post(`/api${first}/links`, { passphrase: 'lime and sand' });
+  const { id } = await post('/api/notebooks', { title: 'Nothing issued of it' });
+  const { token: waiting } = await post(`/api/notebooks/${id}/links`, {});
   paths = {
     front: '/',
     'sign-up': '/sign-up',
@@ -30,6 +34,10 @@ beforeAll(async () => {
     versions: `${first}/versions`,
     version: `${first}/versions/1`,
     client: `/client/${token}`,
+    'client asked for a passphrase': `/client/${locked}`,
+    'client with nothing issued': `/client/${waiting}`,
+    revisions: `${first}/revisions`,
+    revision: `${first}/revisions/A`,
     settings: '/settings',
     help: '/help',
     divide: '/divide?n=17&radius=1200+mm',
@@ -48,6 +56,10 @@ const PAGES = [
   'versions',
   'version',
   'client',
+  'client asked for a passphrase',
+  'client with nothing issued',
+  'revisions',
+  'revision',
   'settings',
   'help',
   'divide',
@@ -124,6 +136,11 @@ describe.each(['light', 'dark'] as const)('in %s', (colorScheme) => {
     await ida.open(String(paths.sheet));
     await page.locator('[data-entry]').nth(1).click();
     await ida.editor().waitFor();
+    expect(await faultsOf(ida)).toEqual([]);
+    await page.keyboard.press('Escape');
+    await page.getByRole('button', { name: 'Hand over' }).click();
+    await page.getByRole('button', { name: /^Issue a revision/ }).click();
+    await page.getByRole('button', { name: /^Issue revision/ }).waitFor();
     expect(await faultsOf(ida)).toEqual([]);
     await page.keyboard.press('Escape');
     for (const panel of ['People on this notebook', 'Client links']) {

@@ -54,6 +54,12 @@ describe('the main job', () => {
     await ida.page.getByText('Version 2, kept').waitFor();
 
     await ida.page.getByRole('button', { name: 'Hand over' }).click();
+    await ida.page.getByRole('button', { name: /^Issue a revision/ }).click();
+    await ida.page.getByRole('button', { name: 'Issue revision A' }).click();
+    await ida.page.waitForURL(/\/revisions\/A$/);
+
+    await ida.open(sheet);
+    await ida.page.getByRole('button', { name: 'Hand over' }).click();
     await ida.page.getByRole('button', { name: 'Client links' }).click();
     const dialog = ida.page.getByRole('dialog', { name: 'Client links' });
     await dialog.getByLabel('For whom').fill('The architect');

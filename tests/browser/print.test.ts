@@ -57,7 +57,12 @@ beforeAll(async () => {
     headers: { origin: new URL(ida.page.url()).origin },
   });
   const { token } = (await made.json()) as { token: string };
-  paths = { notebook: String(sheet), version: `${sheet}/versions/1`, client: `/client/${token}` };
+  paths = {
+    notebook: String(sheet),
+    version: `${sheet}/versions/1`,
+    client: `/client/${token}`,
+    revision: `${sheet}/revisions/A`,
+  };
 });
 
 /** Points of 10 and of 20 millimetres: the margins of ISO 5457, the wider one for filing. */
@@ -71,7 +76,7 @@ async function print(name: string, format: 'A4' | 'A3'): Promise<Paper[]> {
   return readPages(await ida.page.pdf({ format, printBackground: true }));
 }
 
-describe.each(['notebook', 'version', 'client'])('the %s on paper', (name) => {
+describe.each(['notebook', 'version', 'client', 'revision'])('the %s on paper', (name) => {
   it.each(['A4', 'A3'] as const)('is a clean sheet on %s', async (format) => {
     const pages = await print(name, format);
     expect(pages.length).toBeGreaterThan(0);
@@ -129,4 +134,37 @@ describe.each(['notebook', 'version', 'client'])('the %s on paper', (name) => {
     });
     expect(new Set(feet).size).toBe(1);
   });
+});
+
+describe('an issued revision on paper', () => {
+  it.each([
+    ['client', 'B', 'A4'],
+    ['client', 'B', 'A3'],
+    ['revision', 'A, superseded by B', 'A4'],
+  ] as const)(
+    'of the %s has its letter and its check code on every sheet',
+    async (name, says, format) => {
+      const pages = await print(name, format);
+      const codes = new Set(
+        pages.map((page) => {
+          const text = textOf(page);
+          expect(text).toContain('Check code');
+          const words = page.words.map((word) => word.text);
+          const letter = page.words[words.lastIndexOf('Revision')];
+          const under = page.words.filter(
+            (word) =>
+              letter !== undefined &&
+              word.top > letter.top &&
+              word.top < letter.bottom + 16 &&
+              Math.abs(word.left - letter.left) < 3,
+          );
+          expect(under.map((word) => word.text).join(' ')).toContain(says.split(',')[0]);
+          expect(text).toContain(says.includes(',') ? 'superseded by B' : 'for manufacture');
+          return /[0-9A-F]{4}-[0-9A-F]{4}/.exec(text)?.[0];
+        }),
+      );
+      expect(codes.size).toBe(1);
+      expect([...codes][0]).toBeDefined();
+    },
+  );
 });
