@@ -6,7 +6,7 @@ import { env } from '@/lib/env';
 import { problemResponse } from '@/lib/http/problem';
 
 /** Pages that make sense only with a person; the services behind them ask again and decide. */
-const NEEDS_PERSON = /^\/(notebooks|workshops|settings)(\/|$)/;
+const NEEDS_PERSON = /^\/(mail|notebooks|workshops|settings)(\/|$)/;
 
 /** Pages whose address is itself a secret: no search engine may keep them, */
 const SECRET_ADDRESS = /^\/(client|confirm|reset|invitations)\//;

@@ -170,3 +170,11 @@ export async function putWorkshop(
     .where({ id })
     .update({ name, defaults: JSON.stringify(defaults) });
 }
+
+/** The id of the workshop that was made first; null while there is none. */
+export async function findOldestWorkshop(db: Database): Promise<string | null> {
+  const row: { id: string } | undefined = await db('workshops')
+    .orderBy(['created_at', 'id'])
+    .first('id');
+  return row?.id ?? null;
+}

@@ -151,4 +151,5 @@ const NEEDED_HERE: Readonly<Record<WorkshopAction, string>> = {
   'notebooks.create': 'making a notebook needs a membership',
   'templates.list': 'its templates are for members',
   'activity.read': 'only admins read its activity record',
+  'localMail.read': 'only admins read the letters of a copy that keeps them to itself',
 };

@@ -106,6 +106,7 @@ export const WORKSHOP_ACTIONS = [
   'notebooks.create',
   'templates.list',
   'activity.read',
+  'localMail.read',
 ] as const;
 export type WorkshopAction = (typeof WORKSHOP_ACTIONS)[number];
 
@@ -124,6 +125,7 @@ export const ALLOWED_IN_WORKSHOP: Readonly<Record<WorkshopStanding, ReadonlySet<
       'workshop.change',
       'members.change',
       'activity.read',
+      'localMail.read',
     ]),
     member: new Set(member),
     none: new Set<WorkshopAction>(),
