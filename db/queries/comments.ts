@@ -191,3 +191,22 @@ export async function namesMentioned(
     .distinct<{ id: string; name: string }[]>('users.id', 'users.name');
   return new Map(rows.map(({ id, name }) => [id, name]));
 }
+
+/** Everything a person has said, as the export of their account shows it, oldest first. */
+export async function listCommentsBy(
+  db: Database,
+  authorId: string,
+): Promise<{ notebookId: string; cell: string; body: string; saidAt: Date }[]> {
+  const rows: { notebook_id: string; cell_name: string; body: string; said_at: Date }[] = await db(
+    'comments',
+  )
+    .where({ author_id: authorId, withdrawn_at: null })
+    .orderBy(['said_at', 'id'])
+    .select('notebook_id', 'cell_name', 'body', 'said_at');
+  return rows.map((row) => ({
+    notebookId: row.notebook_id,
+    cell: row.cell_name,
+    body: row.body,
+    saidAt: row.said_at,
+  }));
+}

@@ -61,8 +61,12 @@ function held(
   return { ...one, others: others.length, peers };
 }
 
-/** Deletes a notebook with all that belongs to it. Versions go newest first: they name older ones. */
+/**
+ * Deletes a notebook with all that belongs to it, its issued revisions too. Client links go first,
+ * because they lead to revisions; versions go newest first, because they name older ones.
+ */
 export async function deleteNotebook(trx: Knex.Transaction, id: string): Promise<void> {
+  await trx('client_links').where({ notebook_id: id }).delete();
   await trx.raw('delete from versions where notebook_id = ? order by number desc', [id]);
   await trx('notebooks').where({ id }).delete();
 }
@@ -81,9 +85,15 @@ const OWN_TABLES = [
   'sessions',
   'password_resets',
   'identities',
+  'presence',
 ] as const;
 
-/** Takes away every role, key, session and way in that a person has. */
-export async function deleteBelongings(trx: Knex.Transaction, userId: string): Promise<void> {
-  for (const table of OWN_TABLES) await trx(table).where({ user_id: userId }).delete();
+/** Takes away every role, key, session and way in that a person has, and what was sent to them. */
+export async function deleteBelongings(
+  trx: Knex.Transaction,
+  person: { id: string; email: string },
+): Promise<void> {
+  for (const table of OWN_TABLES) await trx(table).where({ user_id: person.id }).delete();
+  await trx('invitations').where({ email: person.email }).delete();
+  await trx('outgoing_mail').where({ recipient: person.email }).delete();
 }

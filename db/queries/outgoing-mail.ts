@@ -102,8 +102,3 @@ export async function pruneMail(db: Database, days: number): Promise<void> {
   await db('outgoing_mail').where('sent_at', '<', before).delete();
   await db('outgoing_mail').where('given_up_at', '<', before).delete();
 }
-
-/** Drops every mail to an address, sent or not. */
-export async function deleteMailsTo(db: Database, recipient: string): Promise<void> {
-  await db('outgoing_mail').where({ recipient }).delete();
-}

@@ -7,7 +7,6 @@ import {
   lockOwned,
   lockWorkshops,
 } from '@/db/queries/leaving';
-import { deleteMailsTo } from '@/db/queries/outgoing-mail';
 import { findUser, lockUser, makeUserAnonymous } from '@/db/queries/users';
 import { Failure, type FieldFault } from '@/lib/access';
 import { queueLetter } from '@/lib/mail';
@@ -58,10 +57,9 @@ export async function deleteAccount(person: Person, sent: Deletion): Promise<voi
     // Before the memberships go, which say whose record it belongs to.
     await recordForAccount(trx, { deed: 'account.deleted', accountId: person.id, by: person.id });
     for (const { id, others } of notebooks) if (others === 0) await deleteNotebook(trx, id);
-    await deleteBelongings(trx, person.id);
+    await deleteBelongings(trx, person);
     for (const { id, others } of workshops) if (others === 0) await deleteEmptyWorkshop(trx, id);
     await makeUserAnonymous(trx, person.id);
-    await deleteMailsTo(trx, person.email);
     await queueLetter(trx, farewellLetter(person));
   });
 }

@@ -1,4 +1,5 @@
 import { database } from '@/db/client';
+import { listCommentsBy } from '@/db/queries/comments';
 import { listIdentities } from '@/db/queries/identities';
 import { listNotebooksOf } from '@/db/queries/notebooks';
 import { findUser } from '@/db/queries/users';
@@ -15,17 +16,18 @@ const FORMAT = 1;
 
 /**
  * Everything that is stored about a person, as plain data: the account, its workshops, the roles on
- * notebooks with the current content of those the person owns, keys and sessions without secrets.
+ * notebooks with the current content of those the person owns, what they said in comments, keys and sessions without secrets.
  * @throws Failure `too-many`
  */
 export async function exportAccount(person: Person): Promise<object> {
   await countAgainst(LIMITS.accountExport, person.id);
   const db = database();
   const user = await findUser(db, person.id);
-  const [workshops, used, archived, keys, sessions, identities] = await Promise.all([
+  const [workshops, used, archived, comments, keys, sessions, identities] = await Promise.all([
     listWorkshopsOf(db, person.id),
     listNotebooksOf(db, person.id, { archived: false }),
     listNotebooksOf(db, person.id, { archived: true }),
+    listCommentsBy(db, person.id),
     listKeys(person),
     listSessions(person, null),
     listIdentities(db, person.id),
@@ -60,6 +62,7 @@ export async function exportAccount(person: Person): Promise<object> {
     },
     workshops: workshops.map(({ id, name, role }) => ({ id, name, role })),
     notebooks,
+    comments: comments.map(({ saidAt, ...said }) => ({ ...said, saidAt: saidAt.toISOString() })),
     keys,
     sessions: sessions.map(({ device, begunAt, seenAt }) => ({ device, begunAt, seenAt })),
   };
