@@ -25,6 +25,8 @@ export class Visitor {
   readonly address = `198.18.${randomInt(256)}.${randomInt(256)}`;
   name = 'nobody';
   email = '';
+  /** What the browser says it is, if anything. */
+  userAgent = '';
 
   /** Sends a request as a page of the site would. */
   async ask(method: string, path: string, { body, headers = {} }: Asked = {}): Promise<Answer> {
@@ -34,6 +36,7 @@ export class Visitor {
       headers: {
         origin: new URL(baseUrl()).origin,
         'x-forwarded-for': this.address,
+        ...(this.userAgent === '' ? {} : { 'user-agent': this.userAgent }),
         ...(this.cookies.size === 0 ? {} : { cookie: this.cookieHeader() }),
         ...(body === undefined ? {} : { 'content-type': 'application/json' }),
         ...headers,
