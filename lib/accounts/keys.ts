@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { database } from '@/db/client';
+import { database, inTransaction } from '@/db/client';
 import {
   findLiveApiKey,
   insertApiKey,
@@ -8,9 +8,10 @@ import {
   revokeApiKey,
   type ApiKey,
 } from '@/db/queries/api-keys';
-import { findUser } from '@/db/queries/users';
+import { findUser, lockUser } from '@/db/queries/users';
 import { Failure, KEY_SCOPES, type KeyScope } from '@/lib/access';
 import { oneLine } from './fields';
+import { recordForAccount } from './happenings';
 import { isId } from './ids';
 import { hashOf, newSecret } from './secrets';
 import type { ApiKeyLine, NewApiKey, Person } from './types';
@@ -51,32 +52,49 @@ export async function listKeys(person: Person): Promise<ApiKeyLine[]> {
  * @throws Failure `limit-reached` above 20 live keys
  */
 export async function createKey(person: Person, request: KeyRequest): Promise<NewApiKey> {
-  const db = database();
-  const live = (await listApiKeys(db, person.id)).filter((key) => isLive(key, Date.now()));
-  if (live.length >= LIVE_KEYS) {
-    throw new Failure(
-      'limit-reached',
-      `You have ${live.length} keys in use; at most ${LIVE_KEYS} are allowed. Revoke one first.`,
-    );
-  }
   const key = PREFIX + newSecret();
   const days = request.expiresInDays;
-  const id = await insertApiKey(db, {
-    userId: person.id,
-    label: request.label,
-    keyHash: hashOf(key),
-    fragment: key.slice(-FRAGMENT),
-    scopes: request.scopes,
-    expiresAt: days === undefined ? null : new Date(Date.now() + days * DAY_MS),
+  return inTransaction(async (trx) => {
+    // Held, so that of two keys made at once the second sees the first.
+    await lockUser(trx, person.id);
+    const live = (await listApiKeys(trx, person.id)).filter((one) => isLive(one, Date.now()));
+    if (live.length >= LIVE_KEYS) {
+      throw new Failure(
+        'limit-reached',
+        `You have ${live.length} keys in use; at most ${LIVE_KEYS} are allowed. Revoke one first.`,
+      );
+    }
+    const id = await insertApiKey(trx, {
+      userId: person.id,
+      label: request.label,
+      keyHash: hashOf(key),
+      fragment: key.slice(-FRAGMENT),
+      scopes: request.scopes,
+      expiresAt: days === undefined ? null : new Date(Date.now() + days * DAY_MS),
+    });
+    const made = (await listApiKeys(trx, person.id)).find((line) => line.id === id);
+    if (made === undefined) throw new Error('A key vanished while it was being made.');
+    await recordForAccount(trx, {
+      ...aboutKey(person),
+      deed: 'key.made',
+      subject: request.label,
+      details: { for: request.scopes.join(' and ') },
+    });
+    return { ...toLine(made), key };
   });
-  const made = (await listApiKeys(db, person.id)).find((line) => line.id === id);
-  if (made === undefined) throw new Error('A key vanished while it was being made.');
-  return { ...toLine(made), key };
 }
+
+const aboutKey = ({ id }: Person) => ({ accountId: id, by: id });
 
 /** @throws Failure `not-found` when the person has no such live key */
 export async function revokeKey(person: Person, id: string): Promise<void> {
-  if (isId(id) && (await revokeApiKey(database(), person.id, id))) return;
+  const isDone = await inTransaction(async (trx) => {
+    if (!isId(id) || !(await revokeApiKey(trx, person.id, id))) return false;
+    const label = (await listApiKeys(trx, person.id)).find((key) => key.id === id)?.label ?? '';
+    await recordForAccount(trx, { ...aboutKey(person), deed: 'key.revoked', subject: label });
+    return true;
+  });
+  if (isDone) return;
   throw new Failure('not-found', 'You have no such key, or it is revoked already.');
 }
 

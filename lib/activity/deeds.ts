@@ -41,8 +41,8 @@ export const DEEDS = {
   'link.made': 'made a client link to',
   'link.changed': 'changed the passphrase of a client link to',
   'link.revoked': 'revoked a client link to',
-  'key.made': 'made an API key',
-  'key.revoked': 'revoked an API key',
+  'key.made': 'made the API key',
+  'key.revoked': 'revoked the API key',
 } as const;
 
 export type Deed = keyof typeof DEEDS;

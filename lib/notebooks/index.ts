@@ -59,6 +59,7 @@ export {
   makeFromTemplate,
   templatesFor,
 } from './templates';
+export { recordExport } from './record-export';
 export { TryRequest, tryLines } from './try-lines';
 export { RestoreRequest, SaveRequest, restoreVersion, saveVersion } from './save';
 export { ListQuery, listVersions, readForExport, readVersion } from './versions';

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { LIMITS, countAgainst } from '@/lib/accounts';
 import { ExportFormat, exportFile, route } from '@/lib/http';
-import { readForExport } from '@/lib/notebooks';
+import { readForExport, recordExport } from '@/lib/notebooks';
 
 const Which = z.strictObject({
   format: ExportFormat,
@@ -16,5 +16,6 @@ export const GET = route({ person: 'required', query: Which }, async ({ person, 
   const { notebook, version, content } = await readForExport(person, part('id'), query.version);
   await countAgainst(LIMITS.export, person.id);
   const identity = { id: notebook.id, title: notebook.title, workshop: notebook.workshop.name };
+  await recordExport(person, notebook.id, { format: query.format, version: version.number });
   return exportFile({ ...identity, version }, content, query.format);
 });

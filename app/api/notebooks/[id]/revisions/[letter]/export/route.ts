@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { LIMITS, countAgainst } from '@/lib/accounts';
 import { ExportFormat, revisionFile, route, taggedAs } from '@/lib/http';
-import { readRevision, revisionTag } from '@/lib/notebooks';
+import { readRevision, recordExport, revisionTag } from '@/lib/notebooks';
 
 const Which = z.strictObject({ format: ExportFormat });
 
@@ -11,8 +11,10 @@ export const GET = route(
     await countAgainst(LIMITS.export, person.id);
     const [id, letter] = [part('id'), part('letter')];
     const tag = await revisionTag(person, id, letter);
-    return taggedAs(request, `${tag}-${query.format}`, async () =>
-      revisionFile(await readRevision(person, id, letter), query.format, { forClient: false }),
-    );
+    return taggedAs(request, `${tag}-${query.format}`, async () => {
+      const revision = await readRevision(person, id, letter);
+      await recordExport(person, id, { format: query.format, revision: letter });
+      return revisionFile(revision, query.format, { forClient: false });
+    });
   },
 );
