@@ -62,7 +62,9 @@ export async function search(person: Person, request: SearchRequest): Promise<Se
         .filter(({ notebookId }) => notebookId === hit.id)
         .slice(0, MARKS)
         .map(({ cellId, line, mark, definition }) => ({ cell: cellId, line, mark, definition })),
-      snippet: snippetOf(cellsOf(hit), [...words.long, ...words.short]),
+      // Short words alone are looked for in titles and among marks.
+      snippet:
+        words.long.length === 0 ? null : snippetOf(cellsOf(hit), [...words.long, ...words.short]),
     })),
     next: found.length > PAGE && last !== undefined ? writePlace(last) : null,
   };

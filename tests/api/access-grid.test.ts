@@ -28,6 +28,9 @@ interface Scene extends Cast {
   key: string;
   editorId: string;
   ownerId: string;
+  workshop: string;
+  /** One of comments, begun by the owner. */
+  thread: string;
 }
 
 const base = (scene: Scene) => `/api/notebooks/${scene.notebook}`;
@@ -238,6 +241,62 @@ const endpoints: Endpoint[] = [
     path: (scene) => `${base(scene)}/export?format=json`,
     allowed: 200,
   },
+  {
+    name: 'GET comments',
+    action: 'comments.list',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/comments`,
+    allowed: 200,
+  },
+  {
+    name: 'POST comment',
+    action: 'comments.write',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/comments`,
+    body: () => ({ cell: 'c1', text: 'Seen.' }),
+    allowed: 201,
+  },
+  {
+    name: 'POST answer',
+    action: 'comments.write',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/comments`,
+    body: ({ thread }) => ({ thread, text: 'Seen as well.' }),
+    allowed: 201,
+  },
+  {
+    name: 'PATCH resolved',
+    action: 'comments.resolve',
+    method: 'PATCH',
+    path: (scene) => `${base(scene)}/comments/${scene.thread}`,
+    body: () => ({ resolved: false }),
+    allowed: 204,
+  },
+  {
+    name: 'POST duplicate',
+    action: 'notebook.duplicate',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/duplicate`,
+    body: () => ({ title: 'Another sheet' }),
+    allowed: 201,
+  },
+  {
+    name: 'PATCH template',
+    action: 'notebook.template',
+    method: 'PATCH',
+    path: (scene) => `${base(scene)}/template`,
+    body: () => ({ template: false }),
+    allowed: 204,
+  },
+  {
+    // To where it is already, so that nothing changes for the others.
+    name: 'POST move',
+    action: 'notebook.move',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/move`,
+    body: ({ workshop }) => ({ workshopId: workshop }),
+    allowed: 422,
+  },
 ];
 
 const SIGN_IN = [401, 'sign-in-needed'] as const;
@@ -261,6 +320,10 @@ beforeAll(async () => {
     owner.get(`/api/notebooks/${notebook}`),
   ]);
   await issue(owner, notebook);
+  const begun = await owner.post(`/api/notebooks/${notebook}/comments`, {
+    cell: 'c1',
+    text: 'Why?',
+  });
   const idOf = (email: string) =>
     (people.json.people as { id: string; email: string }[]).find((one) => one.email === email)
       ?.id ?? '';
@@ -275,6 +338,8 @@ beforeAll(async () => {
     key,
     editorId: idOf(cast.editor.email),
     ownerId: idOf(owner.email),
+    workshop: workshop.id,
+    thread: String(begun.json.thread),
   };
 });
 
@@ -348,6 +413,9 @@ describe('endpoints about oneself', () => {
   it.each([
     ['GET', '/api/notebooks', undefined],
     ['POST', '/api/notebooks', { title: 'Mine' }],
+    ['GET', '/api/search?q=R', undefined],
+    ['GET', '/api/templates', undefined],
+    ['POST', '/api/templates/00000000-0000-4000-8000-000000000000/notebooks', { title: 'Mine' }],
     ['GET', '/api/keys', undefined],
     ['POST', '/api/keys', { label: 'Saw' }],
     ['DELETE', '/api/keys/00000000-0000-4000-8000-000000000000', undefined],
@@ -364,6 +432,8 @@ describe('endpoints about oneself', () => {
     ['GET', '/api/keys', undefined],
     ['POST', '/api/keys', { label: 'Another' }],
     ['GET', '/api/notebooks', undefined],
+    ['GET', '/api/search?q=R', undefined],
+    ['GET', '/api/templates', undefined],
     ['DELETE', '/api/sessions', undefined],
   ])('%s %s does not take an API key for one', async (method, path, body) => {
     const headers = { authorization: `Bearer ${scene.key}` };

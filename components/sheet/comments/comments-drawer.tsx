@@ -39,12 +39,13 @@ export function CommentsDrawer(props: CommentsDrawerProps) {
     `/api/notebooks/${notebookId}/people`,
     askFor,
   );
+  const [beginning, setBeginning] = useState(false);
   const deeds = useMemo(() => commentDeeds(notebookId, onChanged), [notebookId, onChanged]);
   const common = {
     ...props,
     deeds,
     names: view?.people ?? {},
-    people: data?.people ?? [],
+    people: (data?.people ?? []).filter(({ id }) => id !== props.personId),
   };
   const place = cells.findIndex(({ id }) => id === cell);
   const own = cells[place];
@@ -68,19 +69,21 @@ export function CommentsDrawer(props: CommentsDrawerProps) {
         ) : (
           <div className="space-y-5">
             <CellThreads {...common} threads={threads.filter((one) => one.cell === cell)} />
-            {mayWrite && (
-              <Composer
-                label={
-                  threads.some((one) => one.cell === cell)
-                    ? 'Begin another thread'
-                    : 'Begin a thread'
-                }
-                does="Comment"
-                about={`${notebookId}-${cell}`}
-                people={common.people}
-                onSend={(text) => deeds.begin(cell, text)}
-              />
-            )}
+            {mayWrite &&
+              (threads.some((one) => one.cell === cell) && !beginning ? (
+                <Button onClick={() => setBeginning(true)}>Begin another thread</Button>
+              ) : (
+                <Composer
+                  key={String(beginning)}
+                  label="Begin a thread"
+                  does="Comment"
+                  about={`${notebookId}-${cell}`}
+                  people={common.people}
+                  autoFocus={beginning}
+                  onSend={(text) => deeds.begin(cell, text).then(() => setBeginning(false))}
+                  {...(beginning ? { onCancel: () => setBeginning(false) } : {})}
+                />
+              ))}
             <div className="flex gap-2 border-t border-hairline pt-3">
               <Button look="quiet" className="-ml-1.5" onClick={() => onShow(null)}>
                 All comments on this notebook

@@ -152,7 +152,7 @@ export function Composer(props: ComposerProps) {
         <p id={`${id}-hint`} className={`text-small ${left < 0 ? 'text-ruddle' : 'text-soft'}`}>
           {left < NEAR
             ? left < 0
-              ? `${-left} characters too many`
+              ? `${-left} ${left === -1 ? 'character' : 'characters'} too many`
               : `${left} characters left`
             : '@ mentions somebody, who gets a letter.'}
         </p>

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { notFound } from 'next/navigation';
+import { DuplicateVersion } from '@/components/notebooks/duplicate-version';
 import { answersFor } from '@/components/sheet/answers';
 import { ReadOnlySheet } from '@/components/sheet/read-only-sheet';
 import { blockOf, titleFields } from '@/components/sheet/title-fields';
@@ -11,6 +12,7 @@ import { Notice } from '@/components/ui/notice';
 import { RestoreButton } from '@/components/versions/restore-button';
 import { VersionChecks } from '@/components/versions/version-checks';
 import { sayNote } from '@/components/versions/version-table';
+import { workshopsOf } from '@/lib/accounts';
 import { personForPage } from '@/lib/accounts/session';
 import { listChecks, readNotebook, readVersion } from '@/lib/notebooks';
 
@@ -62,6 +64,11 @@ export default async function VersionPage({ params }: PageProps) {
           <Download href={`/api/notebooks/${id}/export?format=csv&version=${version.number}`}>
             CSV
           </Download>
+          <DuplicateVersion
+            notebook={notebook}
+            version={version.number}
+            workshops={await workshopsOf(person)}
+          />
           {old && notebook.role !== 'viewer' && notebook.archivedAt === null && (
             <RestoreButton notebookId={id} number={version.number} head={notebook.version} />
           )}
