@@ -74,7 +74,12 @@ export function ArchiveDialog({ notebook, onClose }: DeedProps) {
   );
 }
 
-export function DuplicateDialog({ notebook, workshops, onClose }: DeedProps) {
+interface DuplicateProps extends DeedProps {
+  /** The newest when left out. */
+  version?: number;
+}
+
+export function DuplicateDialog({ notebook, version, workshops, onClose }: DuplicateProps) {
   const router = useRouter();
   const [title, setTitle] = useState(`Copy of ${notebook.title}`.slice(0, TITLE_LENGTH));
   const [workshopId, setWorkshopId] = useState(
@@ -87,14 +92,15 @@ export function DuplicateDialog({ notebook, workshops, onClose }: DeedProps) {
       ready={title.trim() !== '' && workshopId !== ''}
       onClose={onClose}
       onDo={async () => {
-        const body = { title, workshopId };
+        const body = { title, workshopId, ...(version === undefined ? {} : { version }) };
         const { id } = await ask<{ id: string }>(`${pathOf(notebook)}/duplicate`, { body });
         router.push(`/notebooks/${id}`);
       }}
     >
       <p className="[overflow-wrap:anywhere]">
-        The newest version of “{notebook.title}” becomes a notebook of your own. Its comments,
-        people, client links, revisions and earlier versions stay behind.
+        {version === undefined ? 'The newest version' : `Version ${version}`} of “{notebook.title}”
+        becomes a notebook of your own. Its comments, people, client links, revisions and earlier
+        versions stay behind.
       </p>
       <TitleField title={title} onChange={setTitle} />
       {workshops.length > 1 && (
