@@ -1,6 +1,5 @@
 'use client';
 
-import Link from 'next/link';
 import { useState } from 'react';
 import { ask } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
@@ -35,12 +34,6 @@ export function LookIntoMail({ email, password, localMail }: LookIntoMailProps) 
       </Notice>
       {localMail && <LocalMailHint />}
       <SendAgain email={email} password={password} />
-      <p className="text-small text-soft">
-        Confirmed?{' '}
-        <Link href="/sign-in" className="text-snapline underline underline-offset-4">
-          Sign in
-        </Link>
-      </p>
     </div>
   );
 }

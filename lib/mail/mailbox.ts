@@ -46,9 +46,12 @@ export async function findLocalMail(id: string): Promise<LocalMail | null> {
   }
   const parsed = await simpleParser(raw, { skipTextToHtml: true, skipHtmlToText: true });
   const to = Array.isArray(parsed.to) ? parsed.to : [parsed.to];
+  const written = to.flatMap((one) => one?.value ?? []);
   return {
     id,
-    to: to.map((one) => one?.text ?? '').join(', '),
+    to: written
+      .map(({ name, address = '' }) => (name === '' ? address : `${name} <${address}>`))
+      .join(', '),
     subject: parsed.subject ?? '',
     at: momentOf(id),
     text: parsed.text ?? '',

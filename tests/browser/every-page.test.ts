@@ -1,5 +1,6 @@
 import { AxeBuilder } from '@axe-core/playwright';
 import { beforeAll, describe, expect, it } from 'vitest';
+import { letterTo } from '../setup/letters';
 import { IDA, useBrowser, type Visitor } from './support/browser';
 
 const { newVisitor } = useBrowser();
@@ -25,6 +26,13 @@ beforeAll(async () => {
   const { token: locked } = await post(`/api${first}/links`, { passphrase: 'lime and sand' });
   const { id } = await post('/api/notebooks', { title: 'Nothing issued of it' });
   const { token: waiting } = await post(`/api/notebooks/${id}/links`, {});
+  await ida.context.request.post('/api/passwords/forgotten', { data: { email: IDA } });
+  await letterTo(IDA, { subject: 'A new password' });
+  await ida.open('/mail');
+  const letter = await ida.page
+    .getByRole('link', { name: 'A new password' })
+    .first()
+    .getAttribute('href');
   paths = {
     front: '/',
     'sign-up': '/sign-up',
@@ -42,6 +50,8 @@ beforeAll(async () => {
     'nothing found': '/search?q=wimperg',
     'notebooks by title': '/notebooks?sort=title&role=owner',
     settings: '/settings',
+    letters: '/mail',
+    letter: String(letter),
     help: '/help',
     divide: '/divide?n=17&radius=1200+mm',
     'divide not reached': '/divide?n=7&radius=450+mm',
@@ -67,6 +77,8 @@ const PAGES = [
   'nothing found',
   'notebooks by title',
   'settings',
+  'letters',
+  'letter',
   'help',
   'divide',
   'divide not reached',
@@ -94,7 +106,7 @@ describe.each(['light', 'dark'] as const)('in %s', (colorScheme) => {
     expect(await faultsOf(ida)).toEqual([]);
   });
 
-  it.each(['/sign-in', '/sign-up', '/help'])(
+  it.each(['/sign-in', '/sign-up', '/forgot', '/confirm/nothing', '/reset/nothing', '/help'])(
     '%s has none for who is not signed in',
     async (path) => {
       const visitor = await newVisitor({ colorScheme });

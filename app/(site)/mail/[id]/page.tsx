@@ -31,7 +31,7 @@ export default async function LetterPage({ params }: PageProps) {
           To {letter.to}, written <Moment at={letter.at} />
         </p>
       </div>
-      <div className="grid gap-6 lg:grid-cols-2">
+      <div className="grid gap-6 lg:grid-cols-[minmax(0,7fr)_minmax(0,6fr)]">
         <section aria-labelledby="as-text" className="min-w-0 space-y-2">
           <h2 id="as-text" className="text-figure font-semibold">
             As text
