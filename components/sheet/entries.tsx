@@ -12,6 +12,7 @@ import { Grip } from './grip';
 import { NoteCell } from './note-cell';
 import { SectionCell } from './section-cell';
 import { blocksOf, sectionSizes, type Folds } from './state/blocks';
+import type { Fresh } from './state/use-notebook';
 import type { ShownLine } from './state/shown';
 import type { Evaluation } from './state/use-evaluation';
 
@@ -20,6 +21,8 @@ interface EntriesProps {
   evaluation: Evaluation;
   hand: Hand | null;
   folds: Folds;
+  /** What somebody else has just changed. */
+  fresh: Fresh | null;
   mayWrite: boolean;
   actions: SheetActions;
 }
@@ -30,7 +33,7 @@ const LAZY_FROM = 30;
 
 /** The entries of the sheet, one under another, and the place where the next one is begun. */
 export function Entries(props: EntriesProps) {
-  const { content, evaluation, hand, folds, mayWrite, actions } = props;
+  const { content, evaluation, hand, folds, fresh, mayWrite, actions } = props;
   const { cells } = content;
   const sizes = sectionSizes(cells);
   const late = evaluation.state === 'slow' || evaluation.state === 'failed';
@@ -51,6 +54,7 @@ export function Entries(props: EntriesProps) {
               folded={folds.has(cell.id)}
               count={sizes.get(cell.id) ?? 0}
               greyed={late}
+              freshBy={fresh?.ids.has(cell.id) === true ? fresh.by : null}
               isLazy={cells.length >= LAZY_FROM}
               readOnly={!mayWrite}
               actions={actions}
@@ -82,6 +86,8 @@ interface EntryProps {
   /** Cells in a section. */
   count: number;
   greyed: boolean;
+  /** Who has just changed it, if somebody else has. */
+  freshBy: string | null;
   isLazy: boolean;
   readOnly: boolean;
   actions: SheetActions;
@@ -97,14 +103,20 @@ const KIND_NAMES: Record<NotebookCell['kind'], string> = {
 const Entry = memo(function Entry(props: EntryProps) {
   const { cell, from, until, lines, hand, folded, count, greyed, isLazy, readOnly, actions } =
     props;
+  const { freshBy } = props;
   const common = { cell, place: from + 1, readOnly, actions };
   return (
     <div
       data-block
       data-from={from}
       data-until={until}
-      className={`group/block relative ${readOnly ? 'mb-5' : ''}`}
+      className={`group/block relative ${readOnly ? 'mb-5' : ''} ${freshBy === null ? '' : 'bg-ochre-wash outline-2 -outline-offset-2 outline-dashed outline-ochre'}`}
     >
+      {freshBy !== null && (
+        <p className="px-3 pt-1 text-small text-soft sm:ml-[6.125rem] print:hidden">
+          Changed by {freshBy} just now
+        </p>
+      )}
       {!readOnly && (
         <>
           <Gap before={cell.id} actions={actions} />

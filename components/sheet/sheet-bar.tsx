@@ -1,18 +1,22 @@
 'use client';
 
 import Link from 'next/link';
-import type { NotebookHead } from '@/lib/notebooks/types';
+import type { NotebookHead, Now } from '@/lib/notebooks/types';
 import { Button, LinkButton } from '@/components/ui/button';
 import { Disclosure, DISCLOSURE_ROW } from '@/components/ui/disclosure';
 import { CommentsButton } from './comments/comments-button';
+import { PeopleHere } from './people-here';
+import { saveWords } from './save-words';
 import type { Panel } from './sheet-dialogs';
 import type { Evaluation } from './state/use-evaluation';
-import type { NotebookOnScreen } from './state/use-notebook';
+import { nextNumber, type NotebookOnScreen } from './state/use-notebook';
 
 interface SheetBarProps {
   notebook: NotebookHead;
   sheet: NotebookOnScreen;
   evaluation: Evaluation;
+  /** The others who have it on the screen. */
+  people: Now['people'];
   mayWrite: boolean;
   mayShare: boolean;
   onPanel: (panel: Panel) => void;
@@ -35,8 +39,8 @@ const EXPORTS = { json: 'Results as JSON', tex: 'Sheet as TeX', csv: 'Marks as C
 
 /** Above the sheet: which one it is, whether it is kept, and what can be done with it as a whole. */
 export function SheetBar(props: SheetBarProps) {
-  const { notebook, sheet, evaluation, mayWrite, mayShare, onPanel, onFind, onKeys, onMarks } =
-    props;
+  const { notebook, sheet, evaluation, people, mayWrite, mayShare } = props;
+  const { onPanel, onFind, onKeys, onMarks } = props;
   return (
     <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-2 print:hidden">
       <div className="min-w-0">
@@ -50,19 +54,17 @@ export function SheetBar(props: SheetBarProps) {
         </h1>
         <p className="text-small text-soft">
           <span role="status" className={sheet.dirty ? 'font-semibold text-ochre' : ''}>
-            {sheet.dirty
-              ? `Changed since version ${sheet.kept.number}`
-              : `Version ${sheet.kept.number}, kept`}
+            {saveWords(sheet)}
           </span>
           {sheet.dirty &&
             (sheet.storeFull
               ? ' · not kept on this computer: save soon'
               : ' · kept on this computer until saved')}
-          {sheet.keepState.kind === 'keeping' && ' · keeping…'}
           {STATES[evaluation.state] && ` · ${STATES[evaluation.state]}`}
         </p>
       </div>
-      <div className="flex flex-wrap gap-2 print:hidden">
+      <div className="flex flex-wrap items-center gap-2 print:hidden">
+        <PeopleHere people={people} content={sheet.content} />
         <Button id={MARKS_BUTTON} className="lg:hidden" onClick={onMarks}>
           Marks
         </Button>
@@ -118,8 +120,12 @@ export function SheetBar(props: SheetBarProps) {
           ))}
         </Disclosure>
         {mayWrite && (
-          <Button look="main" disabled={!sheet.dirty} onClick={() => onPanel('keep')}>
-            Keep version {sheet.kept.number + 1}
+          <Button
+            look="main"
+            disabled={!sheet.dirty && sheet.kept.byItself !== true}
+            onClick={() => onPanel('keep')}
+          >
+            Keep version {nextNumber(sheet)}
           </Button>
         )}
       </div>

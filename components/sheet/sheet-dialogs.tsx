@@ -1,11 +1,10 @@
 'use client';
 
-import { lazy, Suspense, useState } from 'react';
+import { lazy, Suspense } from 'react';
 import type { NotebookHead } from '@/lib/notebooks/types';
-import { ConflictDialog } from './panels/conflict-dialog';
 import { KeepDialog } from './panels/keep-dialog';
 import { SettingsDialog } from './panels/settings-dialog';
-import type { NotebookOnScreen } from './state/use-notebook';
+import { nextNumber, type NotebookOnScreen } from './state/use-notebook';
 
 export type Panel = 'keep' | 'settings' | 'title-block' | 'people' | 'links' | 'issue' | 'conflict';
 
@@ -14,67 +13,55 @@ const LinksDialog = lazy(() => import('./panels/links-dialog'));
 const IssueDialog = lazy(() => import('@/components/revisions/issue-dialog'));
 const PeopleDialog = lazy(() => import('./panels/people-dialog'));
 const TitleBlockDialog = lazy(() => import('./panels/title-block-dialog'));
+const ConflictDialog = lazy(() => import('./panels/conflict-dialog'));
 
 interface SheetDialogsProps {
   panel: Panel | null;
   notebook: NotebookHead;
   sheet: NotebookOnScreen;
   personId: string;
-  personName: string;
   mayShare: boolean;
+  onPanel: (panel: Panel) => void;
   onClose: () => void;
 }
 
 export function SheetDialogs(props: SheetDialogsProps) {
-  const { panel, notebook, sheet, personName, mayShare, onClose } = props;
-  const { content, conflict, kept, keep, keepState, dispatch } = sheet;
-  const [later, setLater] = useState<typeof conflict>(null);
+  const { panel, notebook, sheet, mayShare, onPanel, onClose } = props;
+  const { content, kept, save, saveState, dispatch } = sheet;
 
-  // A conflict opens by itself, once; whoever closes it finds it again in the news above the sheet.
-  if (conflict && (panel === 'conflict' || conflict !== later)) {
-    const close = () => {
-      setLater(conflict);
-      onClose();
-    };
-    return (
-      <ConflictDialog
-        base={kept.content}
-        mine={content}
-        head={conflict}
-        state={keepState}
-        onClose={close}
-        onKeep={(together) => {
-          dispatch({ kind: 'replace', content: together });
-          void keep(
-            together,
-            conflict.number,
-            `brought together with version ${conflict.number}`,
-            personName,
-          ).then((done) => {
-            if (done) close();
-          });
-        }}
-        onTakeTheirs={() => {
-          const { number, content: theirs, savedAt, author } = conflict;
-          sheet.putAside({ number, content: theirs, savedAt, savedBy: author });
-          close();
-        }}
-      />
-    );
-  }
   switch (panel) {
     case 'keep':
       return (
         <KeepDialog
-          next={kept.number + 1}
-          state={keepState}
+          next={nextNumber(sheet)}
+          state={saveState}
           onClose={onClose}
           onKeep={(note) => {
-            void keep(content, kept.number, note, personName).then((done) => {
-              if (done) onClose();
+            void save({ note }).then((end) => {
+              if (end === 'saved') onClose();
+              if (end === 'asked') onPanel('conflict');
             });
           }}
         />
+      );
+    case 'conflict':
+      return sheet.questions === null ? null : (
+        <Suspense>
+          <ConflictDialog
+            content={content}
+            questions={sheet.questions}
+            state={saveState}
+            onAnswer={(sides) => {
+              void sheet.answer(sides);
+              onClose();
+            }}
+            onTakeTheirs={() => {
+              sheet.putAside();
+              onClose();
+            }}
+            onClose={onClose}
+          />
+        </Suspense>
       );
     case 'settings':
       return (

@@ -18,7 +18,7 @@ interface SheetNewsProps {
 /** What whoever writes should know now: a draft found, one put aside, a conflict, a lost connection. */
 export function SheetNews({ sheet, evaluation, archived, onPanel }: SheetNewsProps) {
   const connection = useConnection();
-  const { found, aside, conflict, keepState, storeFull, elsewhere } = sheet;
+  const { found, aside, questions, saveState, storeFull, elsewhere } = sheet;
   return (
     <div className="space-y-2 empty:hidden print:hidden">
       {archived && (
@@ -45,22 +45,23 @@ export function SheetNews({ sheet, evaluation, archived, onPanel }: SheetNewsPro
           keeps its own; save one, and the other is brought together with it.
         </Notice>
       )}
-      {conflict && (
+      {questions && (
         <Notice tone="caution">
-          {conflict.author} kept version {conflict.number} since you began.{' '}
+          {questions.author} changed the same as you in version {questions.number}. Your text is on
+          the sheet; theirs is in that version.{' '}
           <Button look="quiet" onClick={() => onPanel('conflict')}>
             Compare and choose
           </Button>
         </Notice>
       )}
-      {found && !conflict && (
+      {found && !questions && (
         <Notice>
           What you typed here until <Moment at={found.at} /> had not been kept; it is on the sheet
           again.{' '}
           <Button look="quiet" onClick={sheet.forgetFound}>
             Go on with it
           </Button>
-          <Button look="quiet" onClick={() => sheet.putAside(sheet.kept)}>
+          <Button look="quiet" onClick={() => sheet.putAside()}>
             Put it aside
           </Button>
         </Notice>
@@ -73,8 +74,11 @@ export function SheetNews({ sheet, evaluation, archived, onPanel }: SheetNewsPro
           </Button>
         </Notice>
       )}
-      {keepState.kind === 'failed' && (
-        <Notice tone="fault">Nothing was kept: {keepState.fault} Your text is still here.</Notice>
+      {sheet.dirty && saveState.kind === 'failed' && (
+        <Notice tone={saveState.again ? 'caution' : 'fault'}>
+          Not saved: {saveState.fault} Your text is still here
+          {saveState.again ? '; it is tried again.' : ', and kept on this computer.'}
+        </Notice>
       )}
     </div>
   );

@@ -2,7 +2,7 @@
 
 import { lazy, Suspense, useCallback, useEffect, useMemo, useState } from 'react';
 import { SWRConfig } from 'swr';
-import type { NotebookHead } from '@/lib/notebooks/types';
+import type { NotebookHead, Now } from '@/lib/notebooks/types';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { TitleBlock } from '@/components/drawing/title-block';
 import { Drawer } from '@/components/ui/drawer';
@@ -20,12 +20,14 @@ import { MARKS_BUTTON, SheetBar } from './sheet-bar';
 import { SheetDialogs, type Panel } from './sheet-dialogs';
 import { SheetLayout, zonesFor } from './sheet-layout';
 import { SheetNews } from './sheet-news';
+import { SinceLooked } from './since-looked';
 import { BoundedCache } from './state/bounded-cache';
 import { useArrival } from './state/use-arrival';
 import { useFolds } from './state/folds';
 import type { CellAnswer, Shown } from './state/shown';
 import { useEvaluation } from './state/use-evaluation';
-import { useNotebook } from './state/use-notebook';
+import { useNotebook, type Kept } from './state/use-notebook';
+import { useNow } from './state/use-now';
 import { useSheetActions } from './state/use-sheet-actions';
 import type { Place } from './state/uses';
 import { blockOf, titleFields } from './title-fields';
@@ -40,13 +42,26 @@ export interface SheetProps {
   notes: Readonly<Record<string, string>>;
   /** The person who looks. */
   personId: string;
-  personName: string;
+  /** The version that they last had on the screen; null when they never had. */
+  seenBefore: number | null;
   mayWrite: boolean;
   mayShare: boolean;
 }
 
 /** Answers kept in the browser: enough for undo to be at once. */
 const ANSWERS = 80;
+
+/** Milliseconds for which a cell that somebody else changed is marked. */
+const FRESH = 12_000;
+const NOBODY: Now['people'] = [];
+
+const openedAs = (notebook: NotebookHead, content: NotebookContent): Kept => ({
+  number: notebook.version,
+  content,
+  savedAt: notebook.savedAt,
+  savedBy: notebook.savedBy,
+  byItself: notebook.byItself,
+});
 
 /** Loaded when a proof is first asked for. */
 const ProofDrawer = lazy(() =>
@@ -68,17 +83,14 @@ export function Sheet(props: SheetProps) {
 }
 
 function SheetOnScreen(props: SheetProps) {
-  const { notebook, content: first, answers, personName, mayWrite } = props;
-  const [kept] = useState({
-    number: notebook.version,
-    content: first,
-    savedAt: notebook.savedAt,
-    savedBy: notebook.savedBy,
-  });
-  const sheet = useNotebook(notebook.id, kept, !mayWrite);
+  const { notebook, content: first, answers, mayWrite } = props;
+  const [opened] = useState(() => openedAs(notebook, first));
+  const sheet = useNotebook(notebook.id, opened, !mayWrite);
   const { content, dispatch, undo, redo } = sheet;
   const evaluation = useEvaluation(content, answers);
   const [hand, setHand] = useState<Hand | null>(null);
+  const now = useNow(notebook.id, sheet, hand?.id ?? null);
+  const [lookedAt, setLookedAt] = useState(props.seenBefore ?? opened.number);
   const [panel, setPanel] = useState<Panel | null>(null);
   const [said, say] = useState('');
   const [details, setDetails] = useState<Place | null>(null);
@@ -133,11 +145,26 @@ function SheetOnScreen(props: SheetProps) {
     else setTimeout(preload, 800);
   }, [mayWrite]);
 
+  // The page was asked for again and came with a newer version.
+  const { take, fresh, forgetFresh } = sheet;
+  useEffect(() => {
+    if (notebook.version > sheet.kept.number) take(openedAs(notebook, first));
+  }, [notebook, first, sheet.kept.number, take]);
+
+  useEffect(() => {
+    if (fresh === null) return;
+    const timer = setTimeout(forgetFresh, FRESH);
+    return () => clearTimeout(timer);
+  }, [fresh, forgetFresh]);
+
   useSheetKeys({
     ...aids.keys,
     undo: mayWrite ? undo : null,
     redo: mayWrite ? redo : null,
-    keep: mayWrite && sheet.dirty && panel === null ? () => setPanel('keep') : null,
+    keep:
+      mayWrite && (sheet.dirty || sheet.kept.byItself === true) && panel === null
+        ? () => setPanel('keep')
+        : null,
   });
 
   const spoken =
@@ -159,6 +186,7 @@ function SheetOnScreen(props: SheetProps) {
           notebook={notebook}
           sheet={sheet}
           evaluation={evaluation}
+          people={now?.people ?? NOBODY}
           mayWrite={mayWrite}
           mayShare={props.mayShare}
           onPanel={setPanel}
@@ -167,10 +195,16 @@ function SheetOnScreen(props: SheetProps) {
           onMarks={() => setListing(true)}
         />
         {aids.bar}
+        <SinceLooked
+          notebookId={notebook.id}
+          from={lookedAt}
+          to={sheet.kept.number}
+          onDismiss={() => setLookedAt(sheet.kept.number)}
+        />
         <SheetNews
           sheet={sheet}
           evaluation={evaluation}
-          archived={notebook.archivedAt !== null}
+          archived={now?.archived ?? notebook.archivedAt !== null}
           onPanel={setPanel}
         />
         <SheetLayout
@@ -194,6 +228,7 @@ function SheetOnScreen(props: SheetProps) {
             evaluation={evaluation}
             hand={mayWrite ? hand : null}
             folds={folds}
+            fresh={fresh}
             mayWrite={mayWrite}
             actions={actions}
           />
@@ -238,8 +273,8 @@ function SheetOnScreen(props: SheetProps) {
           notebook={notebook}
           sheet={sheet}
           personId={props.personId}
-          personName={personName}
           mayShare={props.mayShare}
+          onPanel={setPanel}
           onClose={() => setPanel(null)}
         />
         {drawer}

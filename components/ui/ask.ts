@@ -20,6 +20,8 @@ interface Asking {
   /** Sent as it is, in place of a body in JSON. */
   file?: Blob;
   signal?: AbortSignal;
+  /** Goes on when the page is left. */
+  keepalive?: boolean;
 }
 
 /**
@@ -28,7 +30,7 @@ interface Asking {
  */
 export async function ask<T>(
   path: string,
-  { method, body, file, signal }: Asking = {},
+  { method, body, file, signal, keepalive }: Asking = {},
 ): Promise<T> {
   let response: Response;
   try {
@@ -37,6 +39,7 @@ export async function ask<T>(
       headers: { ...typed(file?.type), ...typed(body === undefined ? '' : 'application/json') },
       body: file ?? (body === undefined ? null : JSON.stringify(body)),
       signal: signal ?? null,
+      keepalive: keepalive ?? false,
     });
   } catch (cause) {
     if (cause instanceof DOMException && cause.name === 'AbortError') throw cause;

@@ -141,3 +141,13 @@ export async function insertVersion(trx: Knex.Transaction, version: NewVersion):
     .update({ head: version.number, changed_at: savedAt });
   return savedAt;
 }
+
+/** Makes a version that was saved by itself one that was kept by hand. What it holds stays as it is. */
+export async function keepByHand(
+  trx: Knex.Transaction,
+  notebookId: string,
+  number: number,
+  note: string | null,
+): Promise<void> {
+  await trx('versions').where({ notebook_id: notebookId, number }).update({ by_itself: false, note });
+}

@@ -22,6 +22,7 @@ import { type Fate, type Work, runWork } from './run';
 
 export { EVALUATION_LIMITS } from './limits';
 export { CertificateRequest, type CertificateAnswer } from './certificate';
+export { countFollowing, outlineOf, type Definition, type Outline } from './dependents';
 export { PoolBusy } from './pool';
 export { EvaluateRequest, SettingsRequest, describeIssues } from './request';
 export type { OutcomeStore } from './outcomes';

@@ -37,7 +37,9 @@ export {
   createNotebook,
   readNotebook,
 } from './notebooks';
-export { NowQuery, findSeen, lookNow, type Now } from './now';
+export { ChangesQuery, readChanges } from './changes';
+export { EntriesQuery, listHistory } from './version-entries';
+export { NowQuery, findSeen, lookNow } from './now';
 export {
   HandingOver,
   NewPerson,

@@ -138,6 +138,7 @@ function headOf(person: Person, notebook: Notebook, role: Role, version: Version
     version: version.number,
     savedAt: version.savedAt.toISOString(),
     savedBy: version.author.name,
+    byItself: version.byItself,
     titleEntries: entries,
     titleBlock: block,
   };

@@ -2,10 +2,10 @@ import { z } from 'zod';
 import { database } from '@/db/client';
 import { commentsStamp } from '@/db/queries/comments';
 import { findPresence, listPresent, putPresence, type Presence } from '@/db/queries/presence';
-import type { Role } from '@/lib/access';
 import type { Person } from '@/lib/accounts';
 import { CONTENT_LIMITS } from './content-values';
 import { openFor } from './guard';
+import type { Now } from './types';
 
 /** Milliseconds after which somebody who was not heard of counts as gone. */
 const GONE = 30_000;
@@ -31,17 +31,6 @@ export const NowQuery = z.strictObject({
   seen: count.optional(),
 });
 export type NowQuery = z.infer<typeof NowQuery>;
-
-/** What is news on a notebook; without times, so that it is the same text until something happens. */
-export interface Now {
-  head: number;
-  archived: boolean;
-  role: Role;
-  /** Changes whenever its comments do. */
-  comments: string;
-  /** The others who have it on the screen. */
-  people: { id: string; name: string; cell: string | null }[];
-}
 
 /**
  * What is news on a notebook, and a note that the asking person is here. The note is written at most every ten seconds,

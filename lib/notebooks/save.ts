@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto';
 import type { Knex } from 'knex';
 import { z } from 'zod';
 import { inTransaction } from '@/db/client';
-import { insertVersion, type Version } from '@/db/queries/versions';
+import { insertVersion, keepByHand, type Version } from '@/db/queries/versions';
 import { Failure, type Action } from '@/lib/access';
 import type { Person } from '@/lib/accounts';
 import { record } from '@/lib/activity';
@@ -40,8 +40,8 @@ export type RestoreRequest = z.infer<typeof RestoreRequest>;
 
 /**
  * Stores the content as a new version on top of `base`. Content equal to the head's makes no version and says so,
- * whatever its base: a save sent twice because the answer was lost succeeds. Only keeping by hand what was saved by
- * itself makes one, so that it can have a note. With `merge`, content made on an older base is brought together with
+ * whatever its base: a save sent twice because the answer was lost succeeds. Keeping by hand what the sheet saved by
+ * itself makes that version one kept by hand, with the note; what somebody else's sheet saved, a version of its own. With `merge`, content made on an older base is brought together with
  * the head, and what comes of it is stored.
  * @throws Failure `stale-version` with the head when the head is not `base` any more, or with `merge` when both changed
  *   the same, then with the conflicts too: nothing is stored, and the caller holds both texts; `archived`; `invalid`
@@ -102,9 +102,12 @@ function addVersion(
     const head = await getVersion(trx, id, notebook.head);
     const sent = canonicalContent(added.content);
     const isHead = hashOfContent(sent) === head.contentHash;
-    if (isHead && (added.byItself || !head.byItself || added.note === null)) {
+    const byHand = head.byItself && !added.byItself && added.restoredFrom === null;
+    if (isHead && byHand && head.author.id === person.id) {
+      await keepByHand(trx, id, head.number, added.note === '' ? null : added.note);
       return asSaved(head, true, null);
     }
+    if (isHead && (!byHand || added.note === null)) return asSaved(head, true, null);
     const merged = isHead ? null : await broughtOnto(trx, id, onto, sent, head);
     const content = merged ?? sent;
     if (merged !== null && hashOfContent(merged) === head.contentHash) {
@@ -132,16 +135,16 @@ function addVersion(
         details: { version: added.restoredFrom, as: number },
       });
     }
-    return asSaved({ number, savedAt }, false, merged);
+    return asSaved({ number, savedAt, author: person }, false, merged);
   });
 }
 
 function asSaved(
-  { number, savedAt }: Pick<Version, 'number' | 'savedAt'>,
+  { number, savedAt, author }: Pick<Version, 'number' | 'savedAt' | 'author'>,
   unchanged: boolean,
   merged: NotebookContent | null,
 ): Saved {
-  const answer = { number, savedAt: savedAt.toISOString(), unchanged };
+  const answer = { number, author: author.name, savedAt: savedAt.toISOString(), unchanged };
   return merged === null
     ? { ...answer, merged: false }
     : { ...answer, merged: true, content: merged };

@@ -49,6 +49,8 @@ export interface NotebookHead {
   version: number;
   savedAt: Moment;
   savedBy: string;
+  /** Whether the newest version was saved by a sheet after a pause. */
+  byItself: boolean;
   /** What the notebook itself says in its title block, and the whole of it as it is shown. */
   titleEntries: TitleBlockEntries;
   titleBlock: TitleBlock;
@@ -79,6 +81,7 @@ export interface OpenVersion {
 /** The answer to a save. `unchanged`: the content was that of the head already, no version was made. */
 export interface Saved {
   number: number;
+  author: string;
   savedAt: Moment;
   unchanged: boolean;
   /** Brought together with a newer head than the one it was made on; `content` is what came of it. */
@@ -286,4 +289,31 @@ export interface TemplateLine {
   workshop: NamedWorkshop;
   version: number;
   changedAt: Moment;
+}
+
+/** What is news on a notebook; without times, so that it is the same text until something happens. */
+export interface Now {
+  head: number;
+  archived: boolean;
+  role: Role;
+  /** Changes whenever its comments do. */
+  comments: string;
+  /** The others who have it on the screen. */
+  people: { id: string; name: string; cell: string | null }[];
+}
+
+/** What became of a notebook between two versions, in words; `by` are the others who saved in between. */
+export interface Changes {
+  from: number;
+  to: number;
+  by: string[];
+  /** A sentence without its subject and full stop; sources stand between backticks. */
+  words: string;
+}
+
+/** An entry of the history: one version, or a run of those that one person's sheet saved by itself; newest first. */
+export interface HistoryEntry {
+  /** What changed, as a clause; null for the first version, and where it is not worked out yet. */
+  words: string | null;
+  versions: (VersionLine & { words: string | null })[];
 }

@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { applyChange, newCellId, sameContent, type Change } from '@/components/sheet/state/changes';
+import { applyChange, newCellId, type Change } from '@/components/sheet/state/changes';
 import { beginHistory, historyReducer, type History } from '@/components/sheet/state/history';
+import { mergeContents, sameContent } from '@/lib/notebooks/merge';
 import { contentOf, dimension, note } from './sample';
 
 const start = contentOf(dimension('a', 'R = 1200 mm'), note('b', '# Ring'), dimension('c', 'R/2'));
@@ -87,7 +88,10 @@ describe('the history of a notebook', () => {
   it('takes a joined or broken line back by itself, however fast it was typed', () => {
     const write = (source: string): Change => ({ kind: 'write', id: 'a', source });
     const typed = play([write('R'), write('R = 1'), write('R = 1\n'), write('R = 1\ns')], 10);
-    expect(typed.past.map(({ cells }) => cells[0]?.source)).toEqual(['R = 1200 mm', 'R = 1']);
+    expect(typed.past.map(({ content }) => content.cells[0]?.source)).toEqual([
+      'R = 1200 mm',
+      'R = 1',
+    ]);
   });
 
   it('does not join typing in two cells', () => {
@@ -121,6 +125,56 @@ describe('the history of a notebook', () => {
       at: 0,
     });
     expect(anew.future).toEqual([]);
+  });
+
+  it('takes in what others made beneath every step, so that undo takes back one’s own alone', () => {
+    const cells = start.cells.map((cell) => (cell.id === 'c' ? { ...cell, source: 'R/8' } : cell));
+    const theirs = { ...start, cells: [...cells, dimension('t', 'new of theirs')] };
+    const own = play([
+      { kind: 'write', id: 'a', source: 'R = 1' },
+      { kind: 'delete', ids: ['b'] },
+    ]);
+    const taken = historyReducer(own, { kind: 'shift', from: start, to: theirs });
+    expect(taken.past).toHaveLength(2);
+    expect(taken.present).toEqual(mergeContents(start, own.present, theirs).content);
+    expect(times(taken, 'undo', 2).present).toEqual(theirs);
+    const again = times(times(taken, 'undo', 2), 'redo', 2);
+    expect(again.present).toEqual(taken.present);
+  });
+
+  it('goes on with a burst of typing over what came in meanwhile', () => {
+    const write = (source: string): Change => ({ kind: 'write', id: 'a', source });
+    const theirs = { ...start, cells: [...start.cells, dimension('t', '1')] };
+    const first = historyReducer(beginHistory(start), {
+      kind: 'change',
+      change: write('R'),
+      at: 0,
+    });
+    const between = historyReducer(first, { kind: 'shift', from: start, to: theirs });
+    const last = historyReducer(between, { kind: 'change', change: write('R ='), at: 100 });
+    expect(last.past).toHaveLength(1);
+    expect(times(last, 'undo', 1).present).toEqual(theirs);
+  });
+
+  it('forgets steps that lie behind hundreds of newer versions, and is right about the others', () => {
+    let history = play([{ kind: 'write', id: 'a', source: 'first' }]);
+    let head = start;
+    for (let version = 0; version < 250; version += 1) {
+      const next = {
+        ...head,
+        cells: head.cells.map((cell) =>
+          cell.id === 'c' ? { ...cell, source: `R/${version}` } : cell,
+        ),
+      };
+      history = historyReducer(history, { kind: 'shift', from: head, to: next });
+      head = next;
+      if (version !== 150) continue;
+      const change: Change = { kind: 'write', id: 'a', source: 'second' };
+      history = historyReducer(history, { kind: 'change', change, at: 1e6 });
+    }
+    expect(history.past).toHaveLength(1);
+    const { cells } = times(history, 'undo', 1).present;
+    expect(cells.map(({ source }) => source)).toEqual(['first', '# Ring', 'R/249']);
   });
 
   it('is untouched by a change that changes nothing', () => {

@@ -1,6 +1,5 @@
 import { render, screen, within } from '@testing-library/react';
-import userEvent from '@testing-library/user-event';
-import { describe, expect, it, vi } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { splitMark } from '@/components/drawing/balloon';
 import { zoneLetter } from '@/components/drawing/zones';
 import { placedFaults } from '@/components/sheet/editor/source-editor';
@@ -8,12 +7,9 @@ import { smallestChange } from '@/components/sheet/editor/make-editor';
 import { EntryLine } from '@/components/sheet/entry-line';
 import { renderNote } from '@/components/sheet/note';
 import { headingsOf } from '@/components/sheet/note-headings';
-import { ConflictDialog } from '@/components/sheet/panels/conflict-dialog';
 import { readStep } from '@/components/sheet/read-step';
 import { piecesOf } from '@/components/sheet/source-text';
 import { isSum, stepTex, valueTex } from '@/components/sheet/value-tex';
-import type { NotebookContent } from '@/lib/notebooks/content';
-import { contentOf, dimension } from './sample';
 import { errorResult, numberResult, SUM_OF_ROOTS } from './sample-results';
 
 describe('an entry', () => {
@@ -173,43 +169,5 @@ describe('the drawing', () => {
   it('hangs the figures of a mark below its letter', () => {
     expect(splitMark('k_12')).toEqual({ stem: 'k', below: '12' });
     expect(splitMark('pitch')).toEqual({ stem: 'pitch', below: '' });
-  });
-});
-
-describe('the choice after a conflict', () => {
-  const base = contentOf(dimension('a', 'R = 1'), dimension('b', 'S = 1'));
-  const mine = contentOf(dimension('a', 'R = 2'), dimension('b', 'S = 1'));
-  const head = {
-    number: 5,
-    author: 'Tam Osgood',
-    savedAt: '2026-01-02T03:04:05.000Z',
-    content: contentOf(dimension('a', 'R = 3'), dimension('b', 'S = 9')),
-  };
-
-  it('shows both texts and keeps what was chosen, cell by cell', async () => {
-    HTMLDialogElement.prototype.showModal ??= function (this: HTMLDialogElement) {
-      this.setAttribute('open', '');
-    };
-    const keep = vi.fn<(content: NotebookContent) => void>();
-    const kept = () => keep.mock.lastCall?.[0].cells.map(({ source }) => source);
-    render(
-      <ConflictDialog
-        base={base}
-        mine={mine}
-        head={head}
-        state={{ kind: 'idle' }}
-        onKeep={keep}
-        onTakeTheirs={vi.fn()}
-        onClose={vi.fn()}
-      />,
-    );
-    for (const text of ['R = 2', 'R = 3', 'S = 1', 'S = 9'])
-      expect(screen.getByText(text)).toBeInTheDocument();
-    const user = userEvent.setup();
-    await user.click(screen.getByRole('button', { name: 'Keep as version 6' }));
-    expect(kept()).toEqual(['R = 2', 'S = 9']);
-    await user.click(screen.getAllByRole('radio', { name: /Tam Osgood/ })[0]!);
-    await user.click(screen.getByRole('button', { name: 'Keep as version 6' }));
-    expect(kept()).toEqual(['R = 3', 'S = 9']);
   });
 });

@@ -118,17 +118,29 @@ describe('a save on an old version, to be merged', () => {
 });
 
 describe('keeping by hand', () => {
-  test('what was saved by itself makes a version with the note; once more makes none', async () => {
+  test('what one’s own sheet saved by itself makes that very version one kept by hand, with the note', async () => {
     const id = await newNotebook(owner, start);
     const content = with2('R = 1 mm', 'n = 8');
     await saveVersion(owner, id, { base: 1, content, byItself: true });
     const kept = { base: 2, content, note: 'as measured' };
-    expect(await saveVersion(owner, id, kept)).toMatchObject({ number: 3, unchanged: false });
-    expect(await saveVersion(owner, id, kept)).toMatchObject({ number: 3, unchanged: true });
-    expect(await saveVersion(owner, id, { base: 3, content, byItself: true })).toMatchObject({
-      number: 3,
-      unchanged: true,
-    });
+    for (const request of [kept, kept, { base: 2, content, byItself: true }])
+      expect(await saveVersion(owner, id, request)).toMatchObject({ number: 2, unchanged: true });
+    const { versions } = await listVersions(owner, id);
+    expect(versions).toMatchObject([{ byItself: false, note: 'as measured' }, {}]);
+    expect((await readVersion(owner, id, 2)).content).toEqual(content);
+  });
+
+  test('what somebody else’s sheet saved makes a version of one’s own', async () => {
+    const id = await newNotebook(owner, start, [editor]);
+    const content = with2('R = 1 mm', 'n = 8');
+    await saveVersion(owner, id, { base: 1, content, byItself: true });
+    const kept = { base: 2, content, note: 'checked on site' };
+    expect(await saveVersion(editor, id, kept)).toMatchObject({ number: 3, author: 'Edda' });
+    expect((await listVersions(owner, id)).versions).toMatchObject([
+      { author: 'Edda', note: 'checked on site' },
+      { author: 'Owain', note: null, byItself: true },
+      {},
+    ]);
   });
 });
 

@@ -1,60 +1,69 @@
 'use client';
 
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
+import useSWR from 'swr';
 import type { NotebookCell, NotebookContent } from '@/lib/notebooks/content';
-import type { StaleHead } from '@/lib/notebooks/types';
+import { keyOfConflict, settle, type Conflict, type Side } from '@/lib/notebooks/merge';
+import { ask } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { Moment } from '@/components/ui/moment';
 import { Notice } from '@/components/ui/notice';
-import { bringTogether, findDifferences, type Difference, type Side } from '../state/conflict';
-import type { KeepState } from '../state/use-notebook';
+import { MarkedSource } from '@/components/versions/marked-source';
+import { shortFigure } from '@/components/versions/short-figure';
+import { evaluationRequest } from '../state/evaluation-request';
+import type { Questions } from '../state/questions';
+import type { CellAnswer } from '../state/shown';
+import type { SaveState } from '../state/use-saving';
 
 interface ConflictDialogProps {
-  base: NotebookContent;
-  mine: NotebookContent;
-  head: StaleHead;
-  state: KeepState;
-  onKeep: (content: NotebookContent) => void;
+  /** The sheet as it is now, with my readings in it. */
+  content: NotebookContent;
+  questions: Questions;
+  state: SaveState;
+  onAnswer: (sides: ReadonlyMap<string, Side>) => void;
   onTakeTheirs: () => void;
   onClose: () => void;
 }
 
 /**
- * Somebody kept a version while this sheet was being written. Both texts stand side by side, cell
- * by cell; nothing is decided, and nothing lost, until a choice is made.
+ * Two people changed the same. Both texts stand side by side with what each comes to, question by question; nothing
+ * is decided, and nothing lost, until a choice is made.
  */
-export function ConflictDialog(props: ConflictDialogProps) {
-  const { base, mine, head, state, onKeep, onTakeTheirs, onClose } = props;
-  const texts = { base, mine, theirs: head.content };
-  const differences = findDifferences(texts);
+export default function ConflictDialog(props: ConflictDialogProps) {
+  const { content, questions, state, onAnswer, onTakeTheirs, onClose } = props;
+  const { author, number, savedAt, conflicts } = questions;
   const [made, setMade] = useState<ReadonlyMap<string, Side>>(new Map());
-  const choices = new Map(differences.map(({ id, proposed }) => [id, made.get(id) ?? proposed]));
-  const choose = (id: string, side: Side) => setMade(new Map(made).set(id, side));
-  const chooseAll = (side: Side) => setMade(new Map(differences.map(({ id }) => [id, side])));
+  const chooseAll = (side: Side) =>
+    setMade(new Map(conflicts.map((conflict) => [keyOfConflict(conflict), side])));
+  const mine = useFigures(content);
+  const theirs = useFigures(
+    conflicts.reduce((held, conflict) => settle(held, conflict, 'theirs'), content),
+  );
 
   return (
-    <Dialog title={`${head.author} kept version ${head.number} meanwhile`} onClose={onClose} wide>
+    <Dialog title={`${author} changed the same in version ${number}`} onClose={onClose} wide>
       <p>
-        Version {head.number} was kept on <Moment at={head.savedAt} />, after you began. Choose for
-        each cell that differs; what you choose becomes version {head.number + 1}. Version{' '}
-        {head.number} stays in the list of versions, and your text stays in this browser until you
-        have chosen.
+        Version {number} was saved on <Moment at={savedAt} />, after you began. Everything else was
+        brought together. Choose for each of these; until you do, your text stays on this sheet and
+        in this browser, and version {number} stays in the list of versions.
       </p>
       <ul className="space-y-3">
-        {differences.map((difference) => (
-          <DifferenceRow
-            key={difference.id}
-            difference={difference}
-            choice={choices.get(difference.id) ?? 'mine'}
-            author={head.author}
-            onChoose={(side) => choose(difference.id, side)}
-          />
-        ))}
+        {conflicts.map((conflict) => {
+          const key = keyOfConflict(conflict);
+          return (
+            <Question
+              key={key}
+              conflict={conflict}
+              content={content}
+              author={author}
+              figures={{ mine, theirs }}
+              choice={made.get(key) ?? 'mine'}
+              onChoose={(side) => setMade(new Map(made).set(key, side))}
+            />
+          );
+        })}
       </ul>
-      {differences.length === 0 && (
-        <p>The cells of both are the same; only order or settings differ.</p>
-      )}
       {state.kind === 'failed' && <Notice tone="fault">{state.fault}</Notice>}
       <div className="flex flex-wrap justify-between gap-2 border-t border-hairline pt-3">
         <div className="flex flex-wrap gap-2">
@@ -66,13 +75,22 @@ export function ConflictDialog(props: ConflictDialogProps) {
           </Button>
         </div>
         <div className="flex flex-wrap gap-2">
-          <Button onClick={onTakeTheirs}>Take version {head.number}, put mine aside</Button>
+          <Button onClick={onTakeTheirs}>Take theirs, put my text aside</Button>
           <Button
             look="main"
             disabled={state.kind === 'keeping'}
-            onClick={() => onKeep(bringTogether(texts, choices))}
+            onClick={() =>
+              onAnswer(
+                new Map(
+                  conflicts.map((conflict) => {
+                    const key = keyOfConflict(conflict);
+                    return [key, made.get(key) ?? 'mine'] as const;
+                  }),
+                ),
+              )
+            }
           >
-            {state.kind === 'keeping' ? 'Keeping…' : `Keep as version ${head.number + 1}`}
+            Save what is chosen
           </Button>
         </div>
       </div>
@@ -80,18 +98,25 @@ export function ConflictDialog(props: ConflictDialogProps) {
   );
 }
 
-interface DifferenceRowProps {
-  difference: Difference;
-  choice: Side;
-  author: string;
-  onChoose: (side: Side) => void;
+/** What a text comes to, asked once. */
+function useFigures(content: NotebookContent): readonly CellAnswer[] | null {
+  const request = evaluationRequest(content);
+  const { data } = useSWR<{ cells: CellAnswer[] }>(
+    request.cells.length === 0 ? null : ['/api/evaluate', 'both', JSON.stringify(request)],
+    () => ask<{ cells: CellAnswer[] }>('/api/evaluate', { body: request }),
+    { revalidateOnFocus: false, revalidateIfStale: false },
+  );
+  return data?.cells ?? null;
 }
 
-const CHANGED = {
-  mine: 'changed by you',
-  theirs: 'changed by them',
-  both: 'changed by both',
-} as const;
+interface QuestionProps {
+  conflict: Conflict;
+  content: NotebookContent;
+  author: string;
+  figures: Record<Side, readonly CellAnswer[] | null>;
+  choice: Side;
+  onChoose: (side: Side) => void;
+}
 
 const KINDS: Record<NotebookCell['kind'], string> = {
   dimension: 'Dimension cell',
@@ -99,34 +124,37 @@ const KINDS: Record<NotebookCell['kind'], string> = {
   section: 'Section',
 };
 
-function DifferenceRow({ difference, choice, author, onChoose }: DifferenceRowProps) {
-  const { id, mine, theirs, changed } = difference;
+function Question(props: QuestionProps) {
+  const { conflict, content, author, figures, choice, onChoose } = props;
   const sides = [
-    { side: 'mine', cell: mine, name: 'Mine' },
-    { side: 'theirs', cell: theirs, name: author },
+    { side: 'mine', name: 'Mine' },
+    { side: 'theirs', name: author },
   ] as const;
   return (
     <li>
       <fieldset>
-        <legend className="text-small text-soft">
-          {KINDS[(mine ?? theirs)?.kind ?? 'dimension']}, {CHANGED[changed]}
-        </legend>
+        <legend className="text-small text-soft">{headOf(conflict, content)}</legend>
         <div className="grid sm:grid-cols-2">
-          {sides.map(({ side, cell, name }) => (
+          {sides.map(({ side, name }) => (
             <label
               key={side}
               className={`flex min-w-0 cursor-pointer gap-2 border p-2.5 ${choice === side ? 'border-snapline bg-snapline-wash' : 'border-hairline'}`}
             >
               <input
                 type="radio"
-                name={`side-${id}`}
+                name={`side-${keyOfConflict(conflict)}`}
                 checked={choice === side}
                 onChange={() => onChoose(side)}
                 className="mt-1 shrink-0 accent-snapline"
               />
-              <span className="min-w-0">
+              <span className="min-w-0 grow">
                 <span className="text-small font-semibold">{name}</span>
-                <CellText cell={cell} />
+                <Reading
+                  conflict={conflict}
+                  content={content}
+                  side={side}
+                  figures={figures[side]}
+                />
               </span>
             </label>
           ))}
@@ -136,18 +164,71 @@ function DifferenceRow({ difference, choice, author, onChoose }: DifferenceRowPr
   );
 }
 
-function CellText({ cell }: { cell: NotebookCell | null }) {
-  if (cell === null)
-    return <span className="block text-small italic text-soft">not on the sheet</span>;
-  const own = Object.entries(cell.settings ?? {}).map(
-    ([name, value]) => `${name} ${value ?? 'none'}`,
-  );
+function headOf(conflict: Conflict, content: NotebookContent): string {
+  if (conflict.kind === 'setting') return `Setting of the notebook: ${conflict.name}`;
+  const cell = cellOf(content, conflict.id);
+  const place = content.cells.findIndex(({ id }) => id === conflict.id) + 1;
+  const kind = KINDS[cell?.kind ?? 'dimension'];
+  const named = place > 0 ? `${kind} ${place}` : kind;
+  if (conflict.kind === 'place') return `${named}, moved to two places`;
+  if (conflict.mine === null) return `${named}, taken out by you and changed by them`;
+  if (conflict.theirs === null) return `${named}, changed by you and taken out by them`;
+  return `${named}, changed by both`;
+}
+
+const cellOf = (content: NotebookContent, id: string) =>
+  content.cells.find((cell) => cell.id === id) ?? null;
+
+interface ReadingProps {
+  conflict: Conflict;
+  content: NotebookContent;
+  side: Side;
+  figures: readonly CellAnswer[] | null;
+}
+
+const Plain = ({ children }: { children: ReactNode }) => (
+  <span className="block text-small">{children}</span>
+);
+
+function Reading({ conflict, content, side, figures }: ReadingProps) {
+  if (conflict.kind === 'setting') return <Plain>{conflict[side] ?? 'none'}</Plain>;
+  if (conflict.kind === 'place') {
+    const before = conflict[side] === null ? null : cellOf(content, conflict[side]);
+    const line = before?.source.split('\n')[0] ?? '';
+    return before === null ? (
+      <Plain>at the top of the sheet</Plain>
+    ) : (
+      <Plain>
+        after <code className="font-mono">{line || 'an empty cell'}</code>
+      </Plain>
+    );
+  }
+  // Mine as it stands now: it may have been written on since.
+  const standing = conflict.mine === null ? null : cellOf(content, conflict.id);
+  const cells = { mine: standing, theirs: conflict.theirs };
+  const cell = cells[side];
+  if (cell === null) return <Plain>taken out</Plain>;
+  const other = cells[side === 'mine' ? 'theirs' : 'mine'];
+  const results = figures?.find(({ id }) => id === cell.id)?.results ?? [];
   return (
     <>
-      <code className="block whitespace-pre-wrap font-mono text-small [overflow-wrap:anywhere]">
-        {cell.source || '(empty)'}
-      </code>
-      {own.length > 0 && <span className="block text-small text-soft">{own.join(', ')}</span>}
+      <MarkedSource source={cell.source} other={other?.source ?? ''} sign="differs" />
+      {cell.kind === 'dimension' && (
+        <span className="mt-1 block border-t border-hairline pt-1 text-small">
+          {figures === null && cell.source.trim() !== '' ? 'working out…' : null}
+          {results.map((result) => (
+            <span key={result.line} className="block [overflow-wrap:anywhere]">
+              {result.mark !== null && <b className="font-semibold">{result.mark} </b>}
+              {shortFigure(result)}
+            </span>
+          ))}
+        </span>
+      )}
+      {Object.entries(cell.settings ?? {}).map(([name, value]) => (
+        <span key={name} className="block text-small text-soft">
+          {`${name} ${value ?? 'none'}`}
+        </span>
+      ))}
     </>
   );
 }

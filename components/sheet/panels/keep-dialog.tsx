@@ -5,11 +5,11 @@ import { Button } from '@/components/ui/button';
 import { Dialog } from '@/components/ui/dialog';
 import { Field } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
-import type { KeepState } from '../state/use-notebook';
+import type { SaveState } from '../state/use-saving';
 
 interface KeepDialogProps {
   next: number;
-  state: KeepState;
+  state: SaveState;
   onKeep: (note: string) => void;
   onClose: () => void;
 }

@@ -5,6 +5,7 @@ import type {
   NotebookSettings,
 } from '@/lib/notebooks/content';
 import { settingsField } from '@/lib/notebooks/content-values';
+import { sameCell } from '@/lib/notebooks/merge';
 
 /** Everything a person can do to what is on the sheet. */
 export type Change =
@@ -70,32 +71,4 @@ export function applyChange(content: NotebookContent, change: Change): NotebookC
 export function newCellId(): string {
   const bytes = crypto.getRandomValues(new Uint8Array(12));
   return Array.from(bytes, (byte) => byte.toString(16).padStart(2, '0')).join('');
-}
-
-export function sameContent(a: NotebookContent, b: NotebookContent): boolean {
-  if (a === b) return true;
-  return (
-    sameSettings(a.settings, b.settings) &&
-    a.cells.length === b.cells.length &&
-    a.cells.every((cell, index) => sameCell(cell, b.cells[index]))
-  );
-}
-
-export function sameCell(a: NotebookCell | undefined, b: NotebookCell | undefined): boolean {
-  if (a === b) return true;
-  return (
-    a?.id === b?.id &&
-    a?.kind === b?.kind &&
-    a?.source === b?.source &&
-    sameSettings(a?.settings ?? {}, b?.settings ?? {})
-  );
-}
-
-function sameSettings(one: CellSettings, two: CellSettings): boolean {
-  return (
-    one.digits === two.digits &&
-    one.unit === two.unit &&
-    one.step === two.step &&
-    one.rounding === two.rounding
-  );
 }

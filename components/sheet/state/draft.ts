@@ -1,4 +1,5 @@
 import type { NotebookContent } from '@/lib/notebooks/content';
+import type { Questions } from './questions';
 
 /**
  * What was typed and not yet acknowledged by the server, kept in this browser. Two shelves: `typing`
@@ -10,6 +11,10 @@ export interface Draft {
   /** The content of that version: a merge needs to know what either side changed. */
   from: NotebookContent;
   content: NotebookContent;
+  /** What was sent to be saved and had no answer yet. */
+  sent?: NotebookContent;
+  /** Questions about it that had no answer yet. */
+  asked?: Questions;
   /** ISO 8601, UTC. */
   at: string;
 }
@@ -43,9 +48,13 @@ export function findDraft(store: Store, place: DraftPlace): Draft | null {
   try {
     const text = store.getItem(keyOf(place));
     const kept: unknown = text === null ? null : JSON.parse(text);
-    return isDraft(kept)
-      ? { base: kept.base, from: kept.from, content: kept.content, at: kept.at }
-      : null;
+    if (!isDraft(kept)) return null;
+    const { base, from, content, at, asked, sent } = kept;
+    return {
+      ...{ base, from, content, at },
+      ...(isQuestions(asked) ? { asked } : {}),
+      ...(isContent(sent) ? { sent } : {}),
+    };
   } catch {
     return null;
   }
@@ -101,6 +110,19 @@ function isDraft(value: unknown): value is Draft & { form: number } {
     typeof at === 'string' &&
     isContent(from) &&
     isContent(content)
+  );
+}
+
+/** Enough to be asked safely. */
+function isQuestions(value: unknown): value is Questions {
+  if (typeof value !== 'object' || value === null) return false;
+  const { author, number, savedAt, conflicts } = value as Record<string, unknown>;
+  return (
+    typeof author === 'string' &&
+    typeof number === 'number' &&
+    typeof savedAt === 'string' &&
+    Array.isArray(conflicts) &&
+    conflicts.every((one: unknown) => typeof one === 'object' && one !== null && 'kind' in one)
   );
 }
 

@@ -8,5 +8,6 @@ export {
   type Merge,
   type SettingValue,
 } from './merge';
+export { findMoved } from './order';
 export { sameCell, sameContent } from './same';
 export { settle, withhold, type Side } from './settle';

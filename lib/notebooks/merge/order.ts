@@ -61,7 +61,7 @@ function findContested(
 }
 
 /** The fewest ids that must have been moved to make one order of the other. */
-function findMoved(base: readonly string[], now: readonly string[]): Set<string> {
+export function findMoved(base: readonly string[], now: readonly string[]): Set<string> {
   const places = new Map(base.map((id, place) => [id, place]));
   const common = now.filter((id) => places.has(id));
   const stayed = longestIncreasing(common.map((id) => places.get(id) ?? 0));

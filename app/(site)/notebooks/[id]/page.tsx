@@ -6,7 +6,7 @@ import { Sheet } from '@/components/sheet/sheet';
 import { orNotFound } from '@/components/site/or-not-found';
 import { can } from '@/lib/access';
 import { personForPage } from '@/lib/accounts/session';
-import { isHurried, readNotebook } from '@/lib/notebooks';
+import { findSeen, isHurried, readNotebook } from '@/lib/notebooks';
 
 interface PageProps {
   params: Promise<{ id: string }>;
@@ -23,7 +23,8 @@ export async function generateMetadata({ params }: PageProps): Promise<Metadata>
 }
 
 export default async function NotebookPage({ params }: PageProps) {
-  const { person, notebook, content } = await open((await params).id);
+  const { id } = await params;
+  const { person, notebook, content } = await open(id);
   const actor = { kind: 'person', id: person.id } as const;
   const guarded = { id: notebook.id, roles: new Map([[person.id, notebook.role]]) };
   const answers = await answersFor(content);
@@ -31,13 +32,13 @@ export default async function NotebookPage({ params }: PageProps) {
   return (
     <div className="mx-auto max-w-sheet print:max-w-none">
       <Sheet
-        key={`${notebook.id}-${notebook.version}`}
+        key={notebook.id}
         notebook={notebook}
         content={content}
         answers={answers === null || isHurried(answers) ? null : answers}
         notes={notesOf(content)}
         personId={person.id}
-        personName={person.name}
+        seenBefore={await findSeen(person, id)}
         mayWrite={inUse && can(actor, 'versions.save', guarded)}
         mayShare={can(actor, 'people.change', guarded)}
       />

@@ -11,7 +11,7 @@ import { Moment } from '@/components/ui/moment';
 import { Notice } from '@/components/ui/notice';
 import { RestoreButton } from '@/components/versions/restore-button';
 import { VersionChecks } from '@/components/versions/version-checks';
-import { sayNote } from '@/components/versions/version-table';
+import { sayNote } from '@/components/versions/history-list';
 import { workshopsOf } from '@/lib/accounts';
 import { personForPage } from '@/lib/accounts/session';
 import { listChecks, readNotebook, readVersion } from '@/lib/notebooks';

@@ -1,5 +1,4 @@
 import { describe, expect, it } from 'vitest';
-import { bringTogether, findDifferences, type Side } from '@/components/sheet/state/conflict';
 import {
   dropDraft,
   findDraft,
@@ -10,60 +9,6 @@ import {
 import { contentOf, dimension, memoryStore, note } from './sample';
 
 const base = contentOf(dimension('a', 'R = 1'), dimension('b', 'R/2'), note('c', 'Ring'));
-
-describe('two texts that began from one version', () => {
-  const mine = contentOf(
-    dimension('a', 'R = 2'),
-    dimension('b', 'R/2'),
-    dimension('m', 'new of mine'),
-  );
-  const theirs = contentOf(
-    dimension('a', 'R = 3'),
-    dimension('t', 'new of theirs'),
-    dimension('b', 'R/4'),
-    note('c', 'Ring'),
-  );
-  const texts = { base, mine, theirs };
-  const differences = findDifferences(texts);
-
-  it('differ cell by cell, and it is known who changed what', () => {
-    expect(Object.fromEntries(differences.map((d) => [d.id, [d.changed, d.proposed]]))).toEqual({
-      a: ['both', 'mine'],
-      b: ['theirs', 'theirs'],
-      m: ['mine', 'mine'],
-      t: ['theirs', 'theirs'],
-      c: ['mine', 'mine'],
-    });
-  });
-
-  it('come together as proposed: each change stands, a clash goes to mine', () => {
-    const together = bringTogether(texts, new Map(differences.map((d) => [d.id, d.proposed])));
-    expect(together.cells.map(({ id, source }) => [id, source])).toEqual([
-      ['a', 'R = 2'],
-      ['t', 'new of theirs'],
-      ['b', 'R/4'],
-      ['m', 'new of mine'],
-    ]);
-  });
-
-  it('give mine or theirs exactly when every choice says so', () => {
-    const all = (side: Side) => new Map(differences.map((d) => [d.id, side] as const));
-    expect(bringTogether(texts, all('mine')).cells).toEqual(mine.cells);
-    const taken = bringTogether(texts, all('theirs')).cells;
-    expect(new Set(taken)).toEqual(new Set(theirs.cells));
-  });
-
-  it('keep the settings of the side that changed them', () => {
-    const inches = { ...theirs, settings: { ...theirs.settings, unit: 'in' as const } };
-    expect(bringTogether({ base, mine, theirs: inches }, new Map()).settings.unit).toBe('in');
-    const feet = { ...mine, settings: { ...mine.settings, unit: 'ft' as const } };
-    expect(bringTogether({ base, mine: feet, theirs: inches }, new Map()).settings.unit).toBe('ft');
-  });
-
-  it('show no difference where both made the same change', () => {
-    expect(findDifferences({ base, mine, theirs: mine })).toEqual([]);
-  });
-});
 
 describe('the draft in this browser', () => {
   const draft = {
@@ -113,6 +58,18 @@ describe('the draft in this browser', () => {
     expect(findDraft(store, { ...one, tab: 'b' })).toBeNull();
     dropDraft(store, one);
     expect(findDraft(store, one)).toBeNull();
+  });
+
+  it('comes back with what was sent without an answer, and with the questions that were open', () => {
+    const store = memoryStore();
+    const asked = {
+      author: 'Tam',
+      number: 5,
+      savedAt: '2026-01-02T03:04:05Z',
+      conflicts: [{ kind: 'setting', name: 'unit', mine: 'mm', theirs: 'in' } as const],
+    };
+    keepDraft(store, one, { ...draft, sent: base, asked });
+    expect(findDraft(store, one)).toEqual({ ...draft, sent: base, asked });
   });
 
   it('says so when the browser has no room, and does not throw', () => {
