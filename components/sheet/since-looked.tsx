@@ -23,7 +23,7 @@ export function SinceLooked({ notebookId, from, to, onDismiss }: SinceLookedProp
     askFor<Changes>,
     { keepPreviousData: true, revalidateOnFocus: false },
   );
-  if (data === undefined || data.by.length === 0) return null;
+  if (from >= to || data === undefined || data.by.length === 0) return null;
   return (
     <Notice>
       Since you looked (version {data.from}): {listed(data.by)} <Sentence text={data.words} />.{' '}

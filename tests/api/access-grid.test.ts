@@ -76,6 +76,13 @@ const endpoints: Endpoint[] = [
     allowed: 200,
   },
   {
+    name: 'GET changes',
+    action: 'versions.read',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/changes?from=1&to=1`,
+    allowed: 200,
+  },
+  {
     name: 'POST versions to be merged',
     action: 'versions.save',
     method: 'POST',

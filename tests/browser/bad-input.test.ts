@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { IDA, TAM, useBrowser, WREN } from './support/browser';
+import { IDA, useBrowser, WREN } from './support/browser';
 
 const { newVisitor } = useBrowser();
 
@@ -108,10 +108,11 @@ describe('wrong ways in', () => {
 });
 
 describe('nothing typed is lost', () => {
-  it('what was not kept is on the sheet again after a reload', async () => {
+  it('what could not be saved is on the sheet again after a reload', async () => {
     const ida = await newVisitor();
     await ida.signIn(IDA);
     await ida.beginNotebook('Torn off');
+    await ida.page.route('**/versions', (route) => route.abort());
     await ida.write('dimension', 'R = 77 mm');
     ida.page.on('dialog', (dialog) => void dialog.accept());
     await ida.page.reload({ waitUntil: 'networkidle' });
@@ -122,45 +123,6 @@ describe('nothing typed is lost', () => {
     await ida.page.getByText('The sheet is empty.').waitFor();
     await ida.page.getByRole('button', { name: 'Bring it back onto the sheet' }).click();
     await ida.page.getByText('R = 77 mm', { exact: true }).waitFor();
-  });
-
-  it('two people who write at once choose cell by cell, and both texts survive', async () => {
-    const ida = await newVisitor();
-    await ida.signIn(IDA);
-    const address = await ida.beginNotebook('Two hands');
-    await ida.write('dimension', 'R = 1 mm');
-    await ida.page.keyboard.press('Escape');
-    await ida.keep();
-    await ida.page.getByRole('button', { name: 'Hand over' }).click();
-    await ida.page.getByRole('button', { name: 'People on this notebook' }).click();
-    const people = ida.page.getByRole('dialog');
-    await people.getByLabel('Add by e-mail address').fill(TAM);
-    await people.getByLabel('As').selectOption('editor');
-    await people.getByRole('button', { name: 'Add' }).click();
-    await people.getByText(TAM).waitFor();
-    await people.getByRole('button', { name: 'Close' }).click();
-
-    const tam = await newVisitor();
-    await tam.signIn(TAM);
-    await tam.open(address);
-    await tam.page.getByText('R = 1 mm', { exact: true }).click();
-    await tam.page.keyboard.press('End');
-    await tam.page.keyboard.type(' + 20 mm');
-    await tam.keep('by Tam');
-
-    await ida.page.getByText('R = 1 mm', { exact: true }).click();
-    await ida.page.keyboard.press('End');
-    await ida.page.keyboard.type(' + 300 mm');
-    await ida.page.getByRole('button', { name: 'Keep version 3' }).click();
-    await ida.page.getByRole('dialog').getByRole('button', { name: 'Keep version 3' }).click();
-    const choice = ida.page.getByRole('dialog', { name: /kept version 3 meanwhile/ });
-    await choice.getByText('R = 1 mm + 20 mm').waitFor();
-    await choice.getByText('R = 1 mm + 300 mm').waitFor();
-    await choice.getByRole('button', { name: 'Keep as version 4' }).click();
-    await ida.page.getByText('Version 4, kept').waitFor();
-    expect(await ida.page.locator('[data-row]').innerText()).toContain('R = 1 mm + 300 mm');
-    await ida.page.goto(`${address}/versions/3`);
-    await ida.page.getByText('R = 1 mm + 20 mm', { exact: true }).waitFor();
   });
 
   it('a viewer reads, and is offered nothing that writes', async () => {
