@@ -33,6 +33,9 @@ interface Scene extends Cast {
   thread: string;
 }
 
+/** The id of nothing. */
+const NOTHING = '00000000-0000-4000-8000-000000000000';
+
 const base = (scene: Scene) => `/api/notebooks/${scene.notebook}`;
 
 const endpoints: Endpoint[] = [
@@ -142,6 +145,43 @@ const endpoints: Endpoint[] = [
     method: 'DELETE',
     path: (scene) => `${base(scene)}/people/${scene.ownerId}`,
     allowed: 409,
+  },
+  {
+    name: 'POST hand over',
+    action: 'people.change',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/hand-over`,
+    // To oneself, which is refused after the right was granted.
+    body: (scene) => ({ to: scene.ownerId }),
+    allowed: 422,
+  },
+  {
+    name: 'GET invitations',
+    action: 'people.change',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/invitations`,
+    allowed: 200,
+  },
+  {
+    name: 'DELETE invitation',
+    action: 'people.change',
+    method: 'DELETE',
+    path: (scene) => `${base(scene)}/invitations/${NOTHING}`,
+    allowed: 404,
+  },
+  {
+    name: 'POST letter of an invitation',
+    action: 'people.change',
+    method: 'POST',
+    path: (scene) => `${base(scene)}/invitations/${NOTHING}/letters`,
+    allowed: 404,
+  },
+  {
+    name: 'GET logo',
+    action: 'notebook.read',
+    method: 'GET',
+    path: (scene) => `${base(scene)}/logo/${'0'.repeat(64)}`,
+    allowed: 404,
   },
   {
     name: 'GET links',

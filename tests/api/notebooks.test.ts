@@ -186,14 +186,14 @@ describe('the people of a notebook', () => {
     expect(JSON.stringify(list)).not.toMatch(/hash|password|token/i);
   });
 
-  it('are not made up: an address without an account gets a plain sentence', async () => {
+  it('are not made up: an address without an account is invited and gets no role by itself', async () => {
     const email = freshEmail('nobody');
-    const answer = await cast.owner.post(`/api/notebooks/${cast.notebook}/people`, {
-      email,
-      role: 'viewer',
-    });
-    expect([answer.status, answer.json.code]).toEqual([422, 'unknown-email']);
-    expect(answer.json.detail).toContain(email);
+    const path = `/api/notebooks/${cast.notebook}`;
+    const answer = await cast.owner.post(`${path}/people`, { email, role: 'viewer' });
+    expect(answer.status).toBe(202);
+    expect(answer.json.invitation).toMatchObject({ email, role: 'viewer', expired: false });
+    expect((await cast.owner.get(`${path}/people`)).text).not.toContain(email);
+    expect((await cast.owner.get(`${path}/invitations`)).text).toContain(email);
   });
 
   it('always include an owner', async () => {

@@ -1,6 +1,6 @@
 import { AxeBuilder } from '@axe-core/playwright';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { letterTo } from '../setup/letters';
+import { letterTo, linkIn } from '../setup/letters';
 import { IDA, useBrowser, type Visitor } from './support/browser';
 
 const { newVisitor } = useBrowser();
@@ -33,7 +33,18 @@ beforeAll(async () => {
     .getByRole('link', { name: 'A new password' })
     .first()
     .getAttribute('href');
+  await ida.open('/workshops');
+  const workshop = String(await ida.page.locator('main li a').first().getAttribute('href'));
+  const email = `newcomer.${Date.now()}@quarrymoor.example`;
+  await post(`/api${workshop}/invitations`, { email, role: 'member' });
+  const invited = await letterTo(email, { subject: 'invites you to' });
   paths = {
+    workshops: '/workshops',
+    members: workshop,
+    invitation: new URL(linkIn(invited.text)).pathname,
+    'start values': `${workshop}/settings`,
+    'title block of the workshop': `${workshop}/title-block`,
+    activity: `${workshop}/activity`,
     front: '/',
     'sign-up': '/sign-up',
     notebooks: '/notebooks',
@@ -63,6 +74,12 @@ beforeAll(async () => {
 });
 
 const PAGES = [
+  'invitation',
+  'workshops',
+  'members',
+  'start values',
+  'title block of the workshop',
+  'activity',
   'front',
   'notebooks',
   'archived notebooks',

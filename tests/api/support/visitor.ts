@@ -43,7 +43,12 @@ export class Visitor {
       },
       ...(body === undefined
         ? {}
-        : { body: typeof body === 'string' ? body : JSON.stringify(body) }),
+        : {
+            body:
+              typeof body === 'string' || body instanceof Uint8Array
+                ? (body as BodyInit)
+                : JSON.stringify(body),
+          }),
     });
     for (const line of response.headers.getSetCookie()) this.keepCookie(line);
     const text = await response.text();
