@@ -2,12 +2,16 @@ import { afterAll, describe, expect, test } from 'vitest';
 import { closeDatabase, database } from '@/db/client';
 import { listNotebooksOf } from '@/db/queries/notebooks';
 import { insertSession, listSessionsOf } from '@/db/queries/sessions';
+import { findRevision, listRevisions } from '@/db/queries/revisions';
 import { findUserByEmail } from '@/db/queries/users';
 import { findVersion, listVersions } from '@/db/queries/versions';
 import { DEMO_PASSWORD, seedDemo, withdrawDemo } from '@/db/seeds/demo';
 import { verifyPassword } from '@/lib/accounts/passwords';
 import { evaluateCells, type Result } from '@/lib/language';
+import { readByToken } from '@/lib/notebooks';
+import { compareResults } from '@/lib/notebooks/compare-results';
 import { NotebookContent } from '@/lib/notebooks/content';
+import { tokenOf } from '@/lib/notebooks/link-tokens';
 
 afterAll(closeDatabase);
 
@@ -104,13 +108,55 @@ test('the window says which way its pitch was cut, and that seventeen of them fa
   expect(lineOf('short')).toMatchObject({ decimal: { re: '4.22540864509' }, degree: 16 });
 });
 
+describe('the revisions of the demo', () => {
+  test('are A and B of each notebook, checked, with the results of this very engine', async () => {
+    const owner = await findUserByEmail(database(), 'ida@ferrowick.example');
+    const entries = await listNotebooksOf(database(), owner?.id ?? '', { archived: false });
+    const demo = entries.filter(({ title }) => title in checks);
+    for (const { id } of demo) {
+      const revisions = await listRevisions(database(), id);
+      expect(revisions.map(({ letter }) => letter)).toEqual(['B', 'A']);
+      expect(revisions[0]?.purpose).toBe('for manufacture');
+      for (const { ordinal, checkedBy, version } of revisions) {
+        expect(checkedBy).not.toBeNull();
+        const frozen = await findRevision(database(), id, ordinal);
+        const content = await findVersion(database(), id, version);
+        const { cells, settings } = NotebookContent.parse(content?.content);
+        const now = evaluateCells(
+          cells.filter(({ kind }) => kind === 'dimension'),
+          settings,
+        );
+        expect(compareResults(frozen?.results as typeof now, now)).toEqual([]);
+        expect(frozen?.titleBlock).toMatchObject({ legalOwner: 'Ferrowick Yard' });
+      }
+    }
+  });
+
+  test('are read through the link that the start prints', async () => {
+    const link: { id: string } = await database()('client_links')
+      .where({ label: 'Olvane Hall Trustees' })
+      .first('id');
+    const view = await readByToken(tokenOf(link.id), undefined);
+    expect(view).toMatchObject({
+      kind: 'revision',
+      open: { revision: { letter: 'B' }, titleBlock: { title: 'Seventeen-light window' } },
+    });
+  });
+});
+
 describe('putting the demo in', () => {
   test('a second time changes nothing', async () => {
     const counts = async () =>
       Promise.all(
-        ['users', 'workshops', 'notebooks', 'versions', 'client_links'].map((table) =>
-          database()(table).count({ n: '*' }).first(),
-        ),
+        [
+          'users',
+          'workshops',
+          'notebooks',
+          'versions',
+          'client_links',
+          'revisions',
+          'version_checks',
+        ].map((table) => database()(table).count({ n: '*' }).first()),
       );
     const before = await counts();
     expect(await seedDemo(database())).not.toHaveProperty('linkToken');

@@ -14,6 +14,9 @@ afterAll(closeDatabase);
 const asking = (version = 1, more: object = {}) =>
   IssueRequest.parse({ version, purpose: 'for manufacture', ...more });
 
+/** Refused by nothing before the arithmetic starts, and far beyond any time: a value with some 57 000 coordinates. */
+const ENDLESS = `(${Array.from({ length: 15 }, (_, index) => `sqrt(1+sqrt(${index + 2}))`).join('+')})^99`;
+
 async function failureOf(work: Promise<unknown>): Promise<Failure> {
   const fault: unknown = await work.then(
     () => null,
@@ -146,6 +149,15 @@ describe('issuing', () => {
       'faulty-lines',
     );
     expect((await issueRevision(owner, notebook, asking(1, { faults: 2 }))).letter).toBe('A');
+  });
+
+  it('freezes nothing that the clock cut short, and says which line it was', async () => {
+    const { owner, notebook } = await newScene(['R = 1200 mm', `late = ${ENDLESS}`]);
+    const refused = await failureOf(issueRevision(owner, notebook, asking(1, { faults: 1 })));
+    expect(refused.code).toBe('not-settled');
+    expect(refused.message).toContain('late = ');
+    expect(refused.extra.retryAfter).toBeGreaterThan(0);
+    expect(await listRevisions(owner, notebook)).toEqual([]);
   });
 
   it('leaves a line in the activity record that names no person', async () => {
