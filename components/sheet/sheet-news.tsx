@@ -1,5 +1,6 @@
 'use client';
 
+import { BringBack } from '@/components/notebooks/bring-back';
 import { Button } from '@/components/ui/button';
 import { Moment } from '@/components/ui/moment';
 import { Notice } from '@/components/ui/notice';
@@ -12,17 +13,22 @@ interface SheetNewsProps {
   sheet: NotebookOnScreen;
   evaluation: Evaluation;
   archived: boolean;
+  /** The id of the notebook, for an owner, who may bring it back. */
+  bringBack: string | null;
   onPanel: (panel: Panel) => void;
 }
 
 /** What whoever writes should know now: a draft found, one put aside, a conflict, a lost connection. */
-export function SheetNews({ sheet, evaluation, archived, onPanel }: SheetNewsProps) {
+export function SheetNews({ sheet, evaluation, archived, bringBack, onPanel }: SheetNewsProps) {
   const connection = useConnection();
   const { found, aside, questions, saveState, storeFull, elsewhere } = sheet;
   return (
     <div className="space-y-2 empty:hidden print:hidden">
       {archived && (
-        <Notice tone="caution">This notebook is archived: it can be read, but not changed.</Notice>
+        <Notice tone="caution">
+          This notebook is archived: it can be read, but not changed.{' '}
+          {bringBack !== null && <BringBack notebookId={bringBack} />}
+        </Notice>
       )}
       {connection === 'lost' ? (
         <Notice tone="caution" title="The connection is lost">

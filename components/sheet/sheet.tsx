@@ -114,6 +114,8 @@ function SheetOnScreen(props: SheetProps) {
     notebook,
     content,
     personId: props.personId,
+    inUse: !(now?.archived ?? notebook.archivedAt !== null),
+    stamp: now?.comments ?? null,
     onShowCell: showCell,
   });
   const actions = useMemo<SheetActions>(
@@ -205,6 +207,7 @@ function SheetOnScreen(props: SheetProps) {
           sheet={sheet}
           evaluation={evaluation}
           archived={now?.archived ?? notebook.archivedAt !== null}
+          bringBack={notebook.role === 'owner' ? notebook.id : null}
           onPanel={setPanel}
         />
         <SheetLayout

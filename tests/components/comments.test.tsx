@@ -100,6 +100,19 @@ describe('the box for a comment', () => {
     expect(box).toHaveValue('');
   });
 
+  it('closes the offers with Escape, and does not open them again for the same name', async () => {
+    const box = open(() => Promise.resolve(), 'escape');
+    const user = userEvent.setup();
+    await user.type(box, 'Ask @ri');
+    expect(screen.getAllByRole('option')).toHaveLength(2);
+    await user.keyboard('{Escape}');
+    fireEvent.select(box);
+    await user.type(box, 'l');
+    expect(screen.queryByRole('option')).toBeNull();
+    await user.type(box, ' and @zo');
+    expect(screen.getAllByRole('option')).toHaveLength(1);
+  });
+
   it('keeps the text when it is refused, and says why', async () => {
     const box = open(() => Promise.reject(new Error('The notebook is archived.')), 'two');
     const user = userEvent.setup();

@@ -43,6 +43,8 @@ export function Composer(props: ComposerProps) {
   const [fault, setFault] = useState<string | null>(null);
   const [busy, setBusy] = useState(false);
   const box = useRef<HTMLTextAreaElement>(null);
+  /** Where the `@` stands whose offers were closed. */
+  const waved = useRef<number | null>(null);
   const id = useId();
 
   const offers = beginning === null ? [] : offersFor(beginning.text, people);
@@ -50,7 +52,10 @@ export function Composer(props: ComposerProps) {
   const left = COMMENT_LIMITS.length - lengthOfComment(sent);
 
   const look = (element: HTMLTextAreaElement) => {
-    setBeginning(findBeginning(element.value, element.selectionEnd));
+    const next = findBeginning(element.value, element.selectionEnd);
+    // What was waved away stays so, however the cursor moves within it.
+    if (next?.from !== waved.current) waved.current = null;
+    setBeginning(waved.current === null ? next : null);
     setChosen(0);
   };
 
@@ -88,8 +93,10 @@ export function Composer(props: ComposerProps) {
       const by = event.key === 'ArrowDown' ? 1 : event.key === 'ArrowUp' ? -1 : null;
       if (by !== null) setChosen((chosen + by + offers.length) % offers.length);
       else if (event.key === 'Enter' || event.key === 'Tab') take(offer);
-      else if (event.key === 'Escape') setBeginning(null);
-      else return;
+      else if (event.key === 'Escape') {
+        waved.current = beginning?.from ?? null;
+        setBeginning(null);
+      } else return;
       event.preventDefault();
       return;
     }

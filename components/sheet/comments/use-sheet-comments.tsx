@@ -1,6 +1,15 @@
 'use client';
 
-import { lazy, Suspense, useCallback, useMemo, useRef, useState, type ReactNode } from 'react';
+import {
+  lazy,
+  Suspense,
+  useCallback,
+  useEffect,
+  useMemo,
+  useRef,
+  useState,
+  type ReactNode,
+} from 'react';
 import useSWR from 'swr';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import type { CommentsView, NotebookHead } from '@/lib/notebooks/types';
@@ -14,9 +23,6 @@ import {
   type SheetComments,
   type ThreadCount,
 } from './comments-context';
-
-/** A comment of somebody else is seen within five seconds. */
-const ASK_MS = 4_000;
 
 /** A part that is not here while the connection is down must not take the sheet with it. */
 function Unreachable() {
@@ -34,6 +40,10 @@ interface Options {
   notebook: NotebookHead;
   content: NotebookContent;
   personId: string;
+  /** Not archived. */
+  inUse: boolean;
+  /** Changes whenever the comments do, as the sheet hears every few seconds; null until it has. */
+  stamp: string | null;
   /** Brings a cell into sight. */
   onShowCell: (id: string) => void;
 }
@@ -50,11 +60,11 @@ function threadInAddress(): string | null {
 }
 
 /** The comments of a sheet: their numbers for the margin, and the drawer in which they are read and written. */
-export function useSheetComments({ notebook, content, personId, onShowCell }: Options) {
+export function useSheetComments(options: Options) {
+  const { notebook, content, personId, inUse, stamp, onShowCell } = options;
   const path = `/api/notebooks/${notebook.id}/comments`;
   const [shown, setShown] = useState<CommentsShown | null>(null);
   const arrived = useRef(false);
-  const inUse = notebook.archivedAt === null;
 
   const show = useCallback((cell: string | null) => setShown({ cell, thread: null }), []);
 
@@ -70,11 +80,13 @@ export function useSheetComments({ notebook, content, personId, onShowCell }: Op
   };
 
   const { data, mutate } = useSWR<CommentsView, unknown>(path, askFor, {
-    refreshInterval: ASK_MS,
-    dedupingInterval: 1_000,
     keepPreviousData: true,
     onSuccess: arrive,
   });
+
+  useEffect(() => {
+    if (stamp !== null) void mutate();
+  }, [stamp, mutate]);
 
   const context = useMemo<SheetComments>(() => {
     const counts = new Map<string, ThreadCount>();
