@@ -68,14 +68,14 @@ function Summary({ invitation }: { invitation: InvitationView }) {
       {rows.map(([label, value]) => (
         <div
           key={label}
-          className="grid grid-cols-[6rem_minmax(0,1fr)] border-b border-hairline px-3 py-1.5 last:border-b-0"
+          className="grid grid-cols-[6rem_minmax(0,1fr)] items-baseline border-b border-hairline px-3 py-1.5 last:border-b-0"
         >
           <dt className="text-small text-soft">{label}</dt>
           <dd className="font-medium [overflow-wrap:anywhere]">{value}</dd>
         </div>
       ))}
       {state === 'open' && (
-        <div className="grid grid-cols-[6rem_minmax(0,1fr)] border-t border-hairline px-3 py-1.5">
+        <div className="grid grid-cols-[6rem_minmax(0,1fr)] items-baseline px-3 py-1.5">
           <dt className="text-small text-soft">Valid until</dt>
           <dd>
             <Moment at={expiresAt} />
