@@ -126,13 +126,15 @@ describe.each(['notebook', 'version', 'client', 'revision'])('the %s on paper', 
     const feet = pages.map(({ words }) => {
       const top = words.find(({ text }) => text === 'Legal')?.top ?? 0;
       expect(top).toBeGreaterThan(0);
-      return words
-        .filter((word) => word.bottom > top && word.text !== 'Sheet')
-        .map(({ text }) => text)
-        .filter((text) => !/^\d+$/.test(text))
-        // The reader of the PDF puts the same words into another order where other things stand above.
-        .sort()
-        .join(' ');
+      return (
+        words
+          .filter((word) => word.bottom > top && word.text !== 'Sheet')
+          .map(({ text }) => text)
+          .filter((text) => !/^\d+$/.test(text))
+          // The reader of the PDF puts the same words into another order where other things stand above.
+          .sort()
+          .join(' ')
+      );
     });
     expect(new Set(feet).size).toBe(1);
   });
