@@ -37,7 +37,7 @@ export function RevisionList({ notebookId, revisions }: RevisionListProps) {
             <p className="font-medium [overflow-wrap:anywhere]">
               <Link
                 href={`/notebooks/${notebookId}/revisions/${revision.letter}`}
-                className="text-snapline underline-offset-4 hover:underline"
+                className="text-snapline underline underline-offset-4"
               >
                 Revision {revision.letter}
               </Link>
@@ -57,7 +57,7 @@ export function RevisionList({ notebookId, revisions }: RevisionListProps) {
               issued <Moment at={revision.issuedAt} /> by {revision.issuedBy}, from{' '}
               <Link
                 href={`/notebooks/${notebookId}/versions/${revision.version}`}
-                className="underline-offset-4 hover:underline"
+                className="underline underline-offset-4"
               >
                 version {revision.version}
               </Link>
