@@ -110,7 +110,7 @@ const Entry = memo(function Entry(props: EntryProps) {
       data-block
       data-from={from}
       data-until={until}
-      className={`group/block relative ${readOnly ? 'mb-5' : ''} ${freshBy === null ? '' : 'bg-ochre-wash outline-2 -outline-offset-2 outline-dashed outline-ochre'}`}
+      className={`group/block relative ${readOnly ? 'mb-5' : ''} ${freshBy === null ? '' : 'bg-ochre-wash [--surface:var(--ochre-wash)] outline-2 -outline-offset-2 outline-dashed outline-ochre'}`}
     >
       {freshBy !== null && (
         <p className="px-3 pt-1 text-small text-soft sm:ml-[6.125rem] print:hidden">

@@ -91,6 +91,9 @@ function SheetOnScreen(props: SheetProps) {
   const [hand, setHand] = useState<Hand | null>(null);
   const now = useNow(notebook.id, sheet, hand?.id ?? null);
   const [lookedAt, setLookedAt] = useState(props.seenBefore ?? opened.number);
+  // What one saves oneself one has looked at.
+  if (sheet.kept.isOwn === true && sheet.kept.number === lookedAt + 1)
+    setLookedAt(sheet.kept.number);
   const [panel, setPanel] = useState<Panel | null>(null);
   const [said, say] = useState('');
   const [details, setDetails] = useState<Place | null>(null);

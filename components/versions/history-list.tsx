@@ -64,7 +64,7 @@ export function HistoryList(props: HistoryListProps) {
                   key={version.number}
                   className="border-b border-hairline last:border-b-0 hover:bg-hand max-md:block max-md:px-3 max-md:py-2.5"
                 >
-                  <td className={`${CELL} whitespace-nowrap`}>
+                  <td className={`${CELL} whitespace-nowrap max-md:float-right`}>
                     <Choose name="from" number={version.number} chosen={second} />
                     <Choose name="to" number={version.number} chosen={newest} />
                   </td>
@@ -110,7 +110,9 @@ export function HistoryList(props: HistoryListProps) {
         <Button type="submit" look="main">
           Compare the two chosen
         </Button>
-        <span className="text-small text-soft">the left column is the earlier one</span>
+        <span className="text-small text-soft max-md:hidden">
+          from the left column to the right one
+        </span>
       </div>
     </form>
   );
@@ -145,7 +147,7 @@ const VersionLink = ({ notebookId, number }: { notebookId: string; number: numbe
     href={`/notebooks/${notebookId}/versions/${number}`}
     className="font-mono font-medium text-snapline underline-offset-4 hover:underline"
   >
-    <span className="sr-only">Version </span>
+    <span className="md:sr-only">Version </span>
     {number}
   </Link>
 );

@@ -26,6 +26,8 @@ export interface Kept {
   savedBy: string;
   /** Saved after a pause, not kept by hand. */
   byItself?: boolean;
+  /** This sheet saved it, and nothing of anybody else's came with it. */
+  isOwn?: boolean;
 }
 
 /** Cells that somebody else has just changed, and who. */
@@ -106,8 +108,9 @@ export function useNotebook(id: string, first: Kept, readOnly: boolean) {
     (version: Kept, from: NotebookContent | null) => {
       if (from !== null) take(version, from);
       else {
-        latest.current = { ...latest.current, kept: version };
-        setKept(version);
+        const own = { ...version, isOwn: true };
+        latest.current = { ...latest.current, kept: own };
+        setKept(own);
       }
       setFound(null);
     },
