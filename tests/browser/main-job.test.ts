@@ -51,7 +51,7 @@ describe('the main job', () => {
     await index.getByRole('link', { name: /^R\s*1200 mm/ }).waitFor();
 
     await ida.keep('first figures');
-    await ida.page.getByText('Version 2, kept').waitFor();
+    await ida.page.getByText(/^Version \d+, kept$/).waitFor();
 
     await ida.page.getByRole('button', { name: 'Hand over' }).click();
     await ida.page.getByRole('button', { name: /^Issue a revision/ }).click();
@@ -132,7 +132,7 @@ describe('the main job', () => {
 
     await ida.open(`${address}/versions`);
     expect(await ida.page.getByRole('row').count()).toBe(4);
-    await ida.page.getByRole('link', { name: '2', exact: true }).click();
+    await ida.page.getByRole('link', { name: 'Version 2', exact: true }).click();
     await ida.page.getByText('Superseded').waitFor();
     await ida.page.waitForLoadState('networkidle');
     await ida.awaken();

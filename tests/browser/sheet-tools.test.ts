@@ -188,11 +188,11 @@ describe('a connection that is lost', () => {
   it('is said, with where the text is meanwhile, and so is that it is back', async () => {
     const { ida } = await threeCells('On the scaffold');
     const { page, context } = ida;
-    await page.getByText('kept on this computer until saved').waitFor();
     await context.setOffline(true);
     await page.getByText('The connection is lost').waitFor();
     await page.getByText('R = 1200 mm', { exact: true }).click();
     await page.keyboard.type(' + 1 mm');
+    await page.getByText('kept on this computer until saved').waitFor();
     await page.waitForTimeout(600);
     expect(await page.getByRole('group', { name: 'Exact value' }).count()).toBe(3);
     await context.setOffline(false);

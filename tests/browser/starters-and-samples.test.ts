@@ -61,6 +61,6 @@ describe('a sample of the reference', () => {
     await page.goto(address);
     await page.getByText('R = 5 mm', { exact: true }).waitFor();
     await page.locator('[data-row]').nth(1).waitFor();
-    await page.getByText('Changed since version 1').waitFor();
+    await page.getByText(/^(Changed since version 1|Saved as version 2)$/).waitFor();
   });
 });
