@@ -1,3 +1,5 @@
+import type { NotebookContent } from '@/lib/notebooks/content';
+
 /**
  * What it costs the server that open sheets ask for news, against a served copy with the demo in it:
  * `npm run bench:presence -- http://127.0.0.1:3000 [people] [looks]`. So many sheets of one notebook each ask every three
@@ -58,10 +60,9 @@ async function send<T>(path: string, body: unknown): Promise<T> {
   return (await answer.json()) as T;
 }
 
-const settings = { digits: 12, unit: 'mm', step: null, rounding: 'half-even' };
-const content = (size: number) => ({
+const content = (size: number): NotebookContent => ({
   format: 1,
-  settings,
+  settings: { digits: 12, unit: 'mm', step: null, rounding: 'half-even' },
   cells: [{ id: 'c', kind: 'dimension', source: `R = ${size} mm` }],
 });
 const { id } = await send<{ id: string }>('/api/notebooks', {
