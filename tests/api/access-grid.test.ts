@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { insertMembership } from '@/db/queries/workshops';
 import { ALLOWED, ROLES, type Action, type Role } from '@/lib/access';
+import { doorsLeftOut, listEndpoints } from '../layout/doors';
 import { openDatabase } from '../setup/server';
 import { content, issue, newCast, newKey, newLink, type Cast } from './support/notebook';
 import { Visitor, newcomer } from './support/visitor';
@@ -407,6 +408,19 @@ function expectNothingLeaked(text: string): void {
     expect(text).not.toContain(secret);
   }
 }
+
+describe('the grid', () => {
+  it('leaves out no endpoint of a notebook', async () => {
+    const doors = listEndpoints().filter(({ pattern }) =>
+      pattern.startsWith('/api/notebooks/[id]'),
+    );
+    const requests = await Promise.all(
+      endpoints.map(async ({ method, path }) => ({ method, address: await path(scene) })),
+    );
+    expect(doors.length).toBeGreaterThan(5);
+    expect(doorsLeftOut(doors, requests)).toEqual([]);
+  });
+});
 
 describe.each(endpoints)('$name ($action)', (endpoint) => {
   it.each(ROLES.map((role) => [role]))('answers the %s as the table says', async (role: Role) => {

@@ -6,6 +6,7 @@ import {
   WORKSHOP_ROLES,
   type WorkshopAction,
 } from '@/lib/access';
+import { doorsLeftOut, listEndpoints } from '../layout/doors';
 import { openDatabase } from '../setup/server';
 import { newKey, newLink, newNotebook } from './support/notebook';
 import { Visitor, newcomer } from './support/visitor';
@@ -206,6 +207,15 @@ function expectNothingLeaked(text: string): void {
 }
 
 describe('the grid', () => {
+  it('leaves out no endpoint of a workshop', () => {
+    const doors = listEndpoints().filter(({ pattern }) =>
+      pattern.startsWith('/api/workshops/[id]'),
+    );
+    const requests = endpoints.map(({ method, path }) => ({ method, address: path(scene) }));
+    expect(doors.length).toBeGreaterThan(5);
+    expect(doorsLeftOut(doors, requests)).toEqual([]);
+  });
+
   it('has an endpoint for every action in a workshop', () => {
     const asked = new Set(endpoints.map(({ action }) => action));
     // These are asked over all workshops of a person at once: nobody is turned away from one.
