@@ -2,6 +2,7 @@
 
 import Link from 'next/link';
 import { createContext, useContext, useEffect, useState, type ReactNode } from 'react';
+import { ALLOWED } from '@/lib/access';
 import type { NotebookLine } from '@/lib/notebooks/types';
 import { ask, sayFault } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
@@ -133,7 +134,7 @@ function ChooseNotebook({ lines, onClose, onChoose }: ChooseNotebookProps) {
     void ask<{ notebooks: NotebookLine[] }>('/api/notebooks?size=500').then(
       (answer) => {
         if (gone) return;
-        const mine = answer.notebooks.filter(({ role }) => role !== 'viewer');
+        const mine = answer.notebooks.filter(({ role }) => ALLOWED[role].has('versions.save'));
         setNotebooks(mine);
         setChosen(mine[0]?.id ?? '');
       },

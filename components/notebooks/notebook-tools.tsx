@@ -1,6 +1,7 @@
 'use client';
 
 import { useState, type ComponentType } from 'react';
+import { ALLOWED } from '@/lib/access';
 import type { MemberWorkshop } from '@/lib/accounts/types';
 import type { NotebookLine } from '@/lib/notebooks/types';
 import { Button } from '@/components/ui/button';
@@ -28,9 +29,11 @@ const DIALOGS: Record<Deed, ComponentType<DeedProps>> = {
 function deedsFor({ role, archivedAt }: NotebookLine): Deed[] {
   const inUse = archivedAt === null;
   return [
-    ...(role !== 'viewer' && inUse ? (['rename'] as const) : []),
+    ...(ALLOWED[role].has('notebook.rename') && inUse ? (['rename'] as const) : []),
     'duplicate' as const,
-    ...(role === 'owner' && inUse ? (['move', 'template', 'archive'] as const) : []),
+    ...(ALLOWED[role].has('notebook.archive') && inUse
+      ? (['move', 'template', 'archive'] as const)
+      : []),
   ];
 }
 
@@ -54,7 +57,7 @@ export function NotebookTools({ notebook, workshops }: NotebookToolsProps) {
   const says = words(notebook);
   return (
     <span className="inline-flex items-center gap-2">
-      {notebook.archivedAt !== null && notebook.role === 'owner' && (
+      {notebook.archivedAt !== null && ALLOWED[notebook.role].has('notebook.archive') && (
         <Button
           look="quiet"
           aria-label={`Bring back ${notebook.title}`}

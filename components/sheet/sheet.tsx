@@ -2,6 +2,7 @@
 
 import { lazy, Suspense, useCallback, useEffect, useMemo, useState } from 'react';
 import { SWRConfig } from 'swr';
+import { ALLOWED } from '@/lib/access';
 import type { NotebookHead, Now } from '@/lib/notebooks/types';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import { TitleBlock } from '@/components/drawing/title-block';
@@ -210,7 +211,7 @@ function SheetOnScreen(props: SheetProps) {
           sheet={sheet}
           evaluation={evaluation}
           archived={now?.archived ?? notebook.archivedAt !== null}
-          bringBack={notebook.role === 'owner' ? notebook.id : null}
+          bringBack={ALLOWED[notebook.role].has('notebook.archive') ? notebook.id : null}
           onPanel={setPanel}
         />
         <SheetLayout

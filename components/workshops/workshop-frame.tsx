@@ -1,13 +1,13 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
-import type { WorkshopRole } from '@/lib/access';
+import { ALLOWED_IN_WORKSHOP, type WorkshopAction, type WorkshopRole } from '@/lib/access';
 
 const PARTS = {
-  members: { path: '', title: 'Members', admins: false },
-  settings: { path: '/settings', title: 'Start values and issuing', admins: false },
-  'title-block': { path: '/title-block', title: 'Title block and logo', admins: false },
-  activity: { path: '/activity', title: 'Activity', admins: true },
-} as const;
+  members: { path: '', title: 'Members', needs: 'members.list' },
+  settings: { path: '/settings', title: 'Start values and issuing', needs: 'workshop.read' },
+  'title-block': { path: '/title-block', title: 'Title block and logo', needs: 'workshop.read' },
+  activity: { path: '/activity', title: 'Activity', needs: 'activity.read' },
+} as const satisfies Record<string, { path: string; title: string; needs: WorkshopAction }>;
 
 export type WorkshopPart = keyof typeof PARTS;
 
@@ -19,8 +19,8 @@ interface WorkshopFrameProps {
 
 /** Head and index of a workshop's pages. */
 export function WorkshopFrame({ workshop, part, children }: WorkshopFrameProps) {
-  const parts = Object.entries(PARTS).filter(
-    ([, { admins }]) => !admins || workshop.role === 'admin',
+  const parts = Object.entries(PARTS).filter(([, { needs }]) =>
+    ALLOWED_IN_WORKSHOP[workshop.role].has(needs),
   );
   return (
     <div className="mx-auto max-w-page space-y-5">

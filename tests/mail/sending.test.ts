@@ -83,7 +83,7 @@ interface Row {
   last_fault: string | null;
 }
 
-const rows = (): Promise<Row[]> => db<Row>('outgoing_mail').orderBy('queued_at') as never;
+const rows = (): Promise<Row[]> => db<Row>('outgoing_mail').orderBy('queued_at');
 const files = () => readdirSync(folder).sort();
 const parsed = () =>
   Promise.all(files().map((file) => simpleParser(readFileSync(join(folder, file)))));
@@ -215,7 +215,7 @@ describe('two instances on one database', () => {
 
   it('do not let a late failure of one undo what the other one sent', async () => {
     await queueLetter(db, letter());
-    let fail = (_error: Error): void => undefined;
+    let fail: (error: Error) => void = () => undefined;
     let begun = false;
     const late: Transport = {
       send: () => {

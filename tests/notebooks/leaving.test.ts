@@ -67,7 +67,7 @@ async function newNotebook(owner: Person): Promise<string> {
 }
 
 const countOf = async (table: string, where: object) =>
-  (await database()(table).where(where)).length as number;
+  (await database()(table).where(where)).length;
 
 describe('deleting an account', () => {
   it('takes with it the notebooks and workshops that only the person is in', async () => {

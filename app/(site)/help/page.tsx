@@ -7,7 +7,7 @@ import { Filter, Filtered } from '@/components/help/filter';
 import { PutProvider } from '@/components/help/put-in';
 import { CAUTIONS, WORDS } from '@/components/help/text';
 import { KEYS } from '@/components/sheet/cell-keys';
-import { Failure } from '@/lib/access';
+import { ALLOWED, Failure } from '@/lib/access';
 import { isId } from '@/lib/accounts';
 import { currentPerson } from '@/lib/accounts/session';
 import { readNotebook } from '@/lib/notebooks';
@@ -59,7 +59,8 @@ async function sheetBehind(asked: string | string[] | undefined) {
       throw fault;
     },
   );
-  const mayWrite = found !== null && found.role !== 'viewer' && found.archivedAt === null;
+  const mayWrite =
+    found !== null && ALLOWED[found.role].has('versions.save') && found.archivedAt === null;
   const from = mayWrite ? { id: found.id, title: found.title } : null;
   return { signedIn: true, from };
 }

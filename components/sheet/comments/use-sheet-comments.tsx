@@ -11,6 +11,7 @@ import {
   type ReactNode,
 } from 'react';
 import useSWR from 'swr';
+import { ALLOWED } from '@/lib/access';
 import type { NotebookContent } from '@/lib/notebooks/content';
 import type { CommentsView, NotebookHead } from '@/lib/notebooks/types';
 import { askFor } from '@/components/ui/ask';
@@ -123,7 +124,7 @@ export function useSheetComments(options: Options) {
         shown={shown}
         personId={personId}
         mayWrite={inUse}
-        mayResolve={inUse && notebook.role !== 'viewer'}
+        mayResolve={inUse && ALLOWED[notebook.role].has('comments.resolve')}
         onChanged={() => mutate()}
         onShow={show}
         onShowCell={onShowCell}

@@ -10,6 +10,7 @@ import { Sentence } from '@/components/ui/sentence';
 import { compareVersions } from '@/components/versions/compared';
 import { Comparison } from '@/components/versions/comparison';
 import { RestoreButton } from '@/components/versions/restore-button';
+import { ALLOWED } from '@/lib/access';
 import { personForPage } from '@/lib/accounts/session';
 import { ChangesQuery, readChanges, readNotebook, readVersion } from '@/lib/notebooks';
 
@@ -41,7 +42,7 @@ export default async function ComparePage({ params, searchParams }: PageProps) {
   );
   const everything = sent.all === '1';
   const cells = everything ? all : all.filter(({ state }) => state !== 'same');
-  const mayRestore = notebook.role !== 'viewer' && notebook.archivedAt === null;
+  const mayRestore = ALLOWED[notebook.role].has('versions.restore') && notebook.archivedAt === null;
   const here = `${path}?from=${from}&to=${to}`;
   return (
     <div className="mx-auto max-w-sheet space-y-4">

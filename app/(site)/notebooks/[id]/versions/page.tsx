@@ -4,6 +4,7 @@ import { notFound } from 'next/navigation';
 import { orNotFound } from '@/components/site/or-not-found';
 import { LinkButton } from '@/components/ui/button';
 import { HistoryList } from '@/components/versions/history-list';
+import { ALLOWED } from '@/lib/access';
 import { personForPage } from '@/lib/accounts/session';
 import { EntriesQuery, listChecks, listHistory, readNotebook } from '@/lib/notebooks';
 
@@ -42,7 +43,7 @@ export default async function VersionsPage({ params, searchParams }: PageProps) 
       <HistoryList
         notebookId={id}
         head={notebook.version}
-        mayRestore={notebook.role !== 'viewer' && notebook.archivedAt === null}
+        mayRestore={ALLOWED[notebook.role].has('versions.restore') && notebook.archivedAt === null}
         entries={entries}
         checks={await listChecks(person, id)}
       />

@@ -6,6 +6,7 @@ import { Notice } from '@/components/ui/notice';
 import { ActivityFilter } from '@/components/workshops/activity-filter';
 import { ActivityList } from '@/components/workshops/activity-list';
 import { WorkshopFrame } from '@/components/workshops/workshop-frame';
+import { ALLOWED_IN_WORKSHOP } from '@/lib/access';
 import { DEED_GROUPS, titleOfGroup } from '@/lib/activity';
 import { personForPage } from '@/lib/accounts/session';
 import { ActivityQuery, readActivity, readWorkshop } from '@/lib/workshops';
@@ -23,7 +24,7 @@ export default async function ActivityPage({ params, searchParams }: PageProps) 
   const { id } = await params;
   const person = await personForPage(`/workshops/${id}/activity`);
   const workshop = await orNotFound(readWorkshop(person, id));
-  if (workshop.role !== 'admin') notFound();
+  if (!ALLOWED_IN_WORKSHOP[workshop.role].has('activity.read')) notFound();
   const sent = await searchParams;
   const given = (name: string) => (typeof sent[name] === 'string' ? sent[name] : '');
   const asked = {

@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { orNotFound } from '@/components/site/or-not-found';
 import { IssuingForm, NameForm, StartForm } from '@/components/workshops/settings-form';
 import { WorkshopFrame } from '@/components/workshops/workshop-frame';
+import { ALLOWED_IN_WORKSHOP } from '@/lib/access';
 import { personForPage } from '@/lib/accounts/session';
 import { readWorkshop } from '@/lib/workshops';
 
@@ -16,7 +17,10 @@ export default async function WorkshopSettingsPage({ params }: PageProps) {
   const person = await personForPage(`/workshops/${id}/settings`);
   const workshop = await orNotFound(readWorkshop(person, id));
   const { start, issuing } = workshop.settings;
-  const form = { path: `/api/workshops/${id}`, mayChange: workshop.role === 'admin' };
+  const form = {
+    path: `/api/workshops/${id}`,
+    mayChange: ALLOWED_IN_WORKSHOP[workshop.role].has('workshop.change'),
+  };
   return (
     <WorkshopFrame workshop={workshop} part="settings">
       {!form.mayChange && <p className="text-small text-soft">Only an admin changes these.</p>}

@@ -5,6 +5,7 @@ import { orNotFound } from '@/components/site/or-not-found';
 import { LogoForm } from '@/components/workshops/logo-form';
 import { TitleBlockForm } from '@/components/workshops/title-block-form';
 import { WorkshopFrame } from '@/components/workshops/workshop-frame';
+import { ALLOWED_IN_WORKSHOP } from '@/lib/access';
 import { personForPage } from '@/lib/accounts/session';
 import { TitleBlockEntries, titleBlockOf } from '@/lib/notebooks';
 import { readWorkshop } from '@/lib/workshops';
@@ -23,7 +24,10 @@ export default async function WorkshopTitleBlockPage({ params }: PageProps) {
   const person = await personForPage(`/workshops/${id}/title-block`);
   const workshop = await orNotFound(readWorkshop(person, id));
   const { start, titleBlock } = workshop.settings;
-  const form = { path: `/api/workshops/${id}`, mayChange: workshop.role === 'admin' };
+  const form = {
+    path: `/api/workshops/${id}`,
+    mayChange: ALLOWED_IN_WORKSHOP[workshop.role].has('workshop.change'),
+  };
   const block = titleBlockOf({
     notebook: SAMPLE,
     workshop,

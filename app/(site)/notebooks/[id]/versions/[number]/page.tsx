@@ -12,6 +12,7 @@ import { Notice } from '@/components/ui/notice';
 import { RestoreButton } from '@/components/versions/restore-button';
 import { VersionChecks } from '@/components/versions/version-checks';
 import { sayNote } from '@/components/versions/history-list';
+import { ALLOWED } from '@/lib/access';
 import { workshopsOf } from '@/lib/accounts';
 import { personForPage } from '@/lib/accounts/session';
 import { listChecks, readNotebook, readVersion } from '@/lib/notebooks';
@@ -69,9 +70,11 @@ export default async function VersionPage({ params }: PageProps) {
             version={version.number}
             workshops={await workshopsOf(person)}
           />
-          {old && notebook.role !== 'viewer' && notebook.archivedAt === null && (
-            <RestoreButton notebookId={id} number={version.number} head={notebook.version} />
-          )}
+          {old &&
+            ALLOWED[notebook.role].has('versions.restore') &&
+            notebook.archivedAt === null && (
+              <RestoreButton notebookId={id} number={version.number} head={notebook.version} />
+            )}
         </div>
       </div>
       <VersionChecks
@@ -79,7 +82,7 @@ export default async function VersionPage({ params }: PageProps) {
         number={version.number}
         checks={checks}
         mayCheck={
-          notebook.role !== 'viewer' &&
+          ALLOWED[notebook.role].has('versions.check') &&
           notebook.archivedAt === null &&
           !checks.some((one) => one.person.id === person.id)
         }
