@@ -143,7 +143,7 @@ function Figures({ lines, side }: { lines: readonly ComparedLine[]; side: 'befor
             key={index}
             className={`min-w-0 border-l-4 pl-2.5 ${line.differs ? 'border-ochre' : 'border-transparent'}`}
           >
-            <Figure result={result} differs={line.differs} />
+            <Figure result={result} word={line.differs ? wordFor(line, side) : null} />
             {side === 'after' && line.difference !== null && (
               <p className="text-small font-semibold">{line.difference}</p>
             )}
@@ -154,7 +154,13 @@ function Figures({ lines, side }: { lines: readonly ComparedLine[]; side: 'befor
   );
 }
 
-function Figure({ result, differs }: { result: Result; differs: boolean }) {
+/** What a figure is to the other version: a line that is only in one of the two has nothing to differ from. */
+function wordFor({ before, after }: ComparedLine, side: 'before' | 'after'): string {
+  if (before !== null && after !== null) return 'differs';
+  return side === 'after' ? 'new' : 'gone';
+}
+
+function Figure({ result, word }: { result: Result; word: string | null }) {
   const tex = result.kind === 'error' || result.kind === 'list' ? null : valueTex(result);
   const cut = cutFigure(result);
   return (
@@ -168,7 +174,7 @@ function Figure({ result, differs }: { result: Result; differs: boolean }) {
             <Tex tex={tex} />
           </span>
         )}
-        {differs && <span className="text-small text-ochre">differs</span>}
+        {word !== null && <span className="text-small text-ochre">{word}</span>}
       </div>
       {result.kind === 'truth' && <p className="text-small">{exactFigure(result)}</p>}
       {cut !== null && (
