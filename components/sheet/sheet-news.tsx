@@ -60,7 +60,7 @@ export function SheetNews({ sheet, evaluation, archived, bringBack, onPanel }: S
           </Button>
         </Notice>
       )}
-      {found && !questions && (
+      {found && sheet.dirty && !questions && (
         <Notice>
           What you typed here until <Moment at={found.at} /> had not been kept; it is on the sheet
           again.{' '}

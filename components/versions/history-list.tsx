@@ -145,9 +145,10 @@ function Choose({ name, number, chosen }: ChooseProps) {
 const VersionLink = ({ notebookId, number }: { notebookId: string; number: number }) => (
   <Link
     href={`/notebooks/${notebookId}/versions/${number}`}
+    aria-label={`Version ${number}`}
     className="font-mono font-medium text-snapline underline-offset-4 hover:underline"
   >
-    <span className="md:sr-only">Version </span>
+    <span className="md:hidden">Version </span>
     {number}
   </Link>
 );
