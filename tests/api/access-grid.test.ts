@@ -321,6 +321,14 @@ const endpoints: Endpoint[] = [
     allowed: 204,
   },
   {
+    // One that there is not: withdrawing is the author's alone, whatever the role.
+    name: 'DELETE comment',
+    action: 'comments.write',
+    method: 'DELETE',
+    path: (scene) => `${base(scene)}/comments/${NOTHING}`,
+    allowed: 404,
+  },
+  {
     name: 'POST duplicate',
     action: 'notebook.duplicate',
     method: 'POST',
@@ -418,7 +426,31 @@ describe('the grid', () => {
       endpoints.map(async ({ method, path }) => ({ method, address: await path(scene) })),
     );
     expect(doors.length).toBeGreaterThan(5);
-    expect(doorsLeftOut(doors, requests)).toEqual([]);
+    // Leaving takes the role away with which the next question would be asked: it has a test of its own.
+    expect(doorsLeftOut(doors, requests)).toEqual(['POST /api/notebooks/[id]/leave']);
+  });
+});
+
+describe('POST leave (notebook.leave)', () => {
+  it('lets everybody with a role go once, except the only owner', async () => {
+    const { notebook, owner, editor, viewer, stranger } = await newCast('R = 1200 mm');
+    const leave = async (as: Visitor, headers: Record<string, string> = {}) => {
+      const { status, json } = await as.ask('POST', `/api/notebooks/${notebook}/leave`, {
+        headers,
+      });
+      return [status, (json as typeof json | null)?.code];
+    };
+    expect(await leave(new Visitor())).toEqual(SIGN_IN);
+    expect(await leave(new Visitor(), { authorization: `Bearer ${scene.key}` })).toEqual(SIGN_IN);
+    expect(await leave(new Visitor(), { authorization: `Bearer ${scene.token}` })).toEqual(SIGN_IN);
+    expect(await leave(stranger)).toEqual([404, 'not-found']);
+    const elsewhere = { origin: 'https://elsewhere.example' };
+    expect(await leave(viewer, elsewhere)).toEqual([403, 'foreign-origin']);
+    for (const goes of [editor, viewer]) {
+      expect(await leave(goes)).toEqual([204, undefined]);
+      expect(await leave(goes)).toEqual([404, 'not-found']);
+    }
+    expect(await leave(owner)).toEqual([409, 'last-owner']);
   });
 });
 

@@ -20,6 +20,8 @@ const age = (id: string, { id: userId }: Person, seconds: number) =>
     .where({ notebook_id: id, user_id: userId })
     .update({ seen_at: new Date(Date.now() - seconds * 1000) });
 
+const commentsMark = expect.any(String) as string;
+
 test('people see who else is here and with which cell in hand, until nothing is heard of them', async () => {
   const id = await newNotebook(owner, start, [editor]);
   expect(await lookNow(owner, id, { seen: 1 })).toEqual({
@@ -27,6 +29,7 @@ test('people see who else is here and with which cell in hand, until nothing is 
     archived: false,
     role: 'owner',
     people: [],
+    comments: commentsMark,
   });
   await lookNow(editor, id, { seen: 1, cell: 'a' });
   const now = await lookNow(owner, id, { seen: 1 });
