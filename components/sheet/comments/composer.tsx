@@ -1,6 +1,6 @@
 'use client';
 
-import { useId, useRef, useState, type KeyboardEvent } from 'react';
+import { useId, useLayoutEffect, useRef, useState, type KeyboardEvent } from 'react';
 import { COMMENT_LIMITS, lengthOfComment } from '@/lib/notebooks/comment-text';
 import { sayFault } from '@/components/ui/ask';
 import { Button } from '@/components/ui/button';
@@ -45,7 +45,17 @@ export function Composer(props: ComposerProps) {
   const box = useRef<HTMLTextAreaElement>(null);
   /** Where the `@` stands whose offers were closed. */
   const waved = useRef<number | null>(null);
+  /** Where the cursor goes once the name that was taken is in the box. */
+  const cursor = useRef<number | null>(null);
   const id = useId();
+
+  // Before the next key can arrive, or it would be written in the wrong place.
+  useLayoutEffect(() => {
+    if (cursor.current === null) return;
+    box.current?.focus();
+    box.current?.setSelectionRange(cursor.current, cursor.current);
+    cursor.current = null;
+  }, [text]);
 
   const offers = beginning === null ? [] : offersFor(beginning.text, people);
   const sent = withMentions(text.trim(), people);
@@ -66,11 +76,7 @@ export function Composer(props: ComposerProps) {
     const next = text.slice(0, beginning.from) + label + text.slice(end).replace(/^ /, '');
     write(next);
     setBeginning(null);
-    const cursor = beginning.from + label.length;
-    requestAnimationFrame(() => {
-      box.current?.focus();
-      box.current?.setSelectionRange(cursor, cursor);
-    });
+    cursor.current = beginning.from + label.length;
   };
 
   const send = async () => {
