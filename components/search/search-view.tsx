@@ -76,6 +76,7 @@ export function SearchView({ query, archived, first }: SearchViewProps) {
     <div className="space-y-5">
       <form
         role="search"
+        aria-label="This search"
         className="space-y-2"
         onSubmit={(event) => {
           event.preventDefault();

@@ -19,7 +19,12 @@ export function SiteHeader({ who }: SiteHeaderProps) {
           <span className="text-figure font-semibold">Surdwork</span>
         </Link>
         {signedIn && (
-          <form action="/search" role="search" className="max-sm:order-last max-sm:w-full">
+          <form
+            action="/search"
+            role="search"
+            aria-label="All notebooks"
+            className="max-sm:order-last max-sm:w-full"
+          >
             <label className="flex items-center gap-2 text-small">
               <span className="sr-only">Search all notebooks</span>
               <input

@@ -30,7 +30,7 @@ export function ActivityList({ entries }: ActivityListProps) {
             {entry.notebookId ? (
               <Link
                 href={`/notebooks/${entry.notebookId}`}
-                className="text-snapline underline-offset-4 hover:underline"
+                className="text-snapline underline underline-offset-4 hover:no-underline"
               >
                 {entry.subject}
               </Link>

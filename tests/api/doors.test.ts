@@ -50,6 +50,8 @@ const FOR_KEYS: Readonly<Record<string, KeyScope>> = {
 
 type PageFor =
   | { for: 'anyone' }
+  /** For whoever is not signed in; others are led to their notebooks. */
+  | { for: 'guest' }
   /** A secret in the address decides; what an unknown one is answered with, whoever brings it. */
   | { for: 'holder'; unknown: 200 | 404 }
   | { for: 'person' }
@@ -62,8 +64,8 @@ const PAGES: Readonly<Record<string, PageFor>> = {
   '/': { for: 'anyone' },
   '/help': { for: 'anyone' },
   '/divide': { for: 'anyone' },
-  '/sign-in': { for: 'anyone' },
-  '/sign-up': { for: 'anyone' },
+  '/sign-in': { for: 'guest' },
+  '/sign-up': { for: 'guest' },
   '/forgot': { for: 'anyone' },
   '/confirm/[token]': { for: 'holder', unknown: 200 },
   '/reset/[token]': { for: 'holder', unknown: 200 },
@@ -85,6 +87,12 @@ const PAGES: Readonly<Record<string, PageFor>> = {
   '/workshops/[id]/activity': { for: 'workshop', action: 'activity.read' },
   '/workshops/[id]/settings': { for: 'workshop', action: 'workshop.read' },
   '/workshops/[id]/title-block': { for: 'workshop', action: 'workshop.read' },
+};
+
+/** What some pages have to be asked. */
+const QUESTIONS: Readonly<Record<string, string>> = {
+  '/search': '?q=R',
+  '/notebooks/[id]/compare': '?from=1&to=1',
 };
 
 interface Scene extends Cast {
@@ -188,7 +196,7 @@ describe('every page', () => {
         .replace('[id]', pattern.startsWith('/workshops') ? scene.workshop : scene.notebook)
         .replace('[letter]', 'A'),
       '1',
-    );
+    ) + (QUESTIONS[pattern] ?? '');
 
   describe.each(Object.entries(PAGES))('%s', (pattern, page) => {
     it.each(comers)('is open to the $who as the tables say', async (comer) => {
@@ -198,7 +206,8 @@ describe('every page', () => {
         page.for === 'person' ||
         (page.for === 'notebook' && ALLOWED[comer.notebook].has(page.action)) ||
         (page.for === 'workshop' && ALLOWED_IN_WORKSHOP[comer.workshop].has(page.action));
-      expect(answer.status).toBe(open ? 200 : page.for === 'holder' ? page.unknown : 404);
+      const closed = page.for === 'holder' ? page.unknown : page.for === 'guest' ? 307 : 404;
+      expect(answer.status).toBe(open ? 200 : closed);
       if (!open) {
         for (const secret of ['Rose window', '1200', scene.owner.email, scene.editor.email]) {
           expect(answer.text).not.toContain(secret);
@@ -208,7 +217,7 @@ describe('every page', () => {
 
     it('sends signed-out people to sign in, or lets them in, as was decided', async () => {
       const answer = await new Visitor().get(addressOf(pattern));
-      const guarded = page.for !== 'anyone' && page.for !== 'holder';
+      const guarded = !['anyone', 'guest', 'holder'].includes(page.for);
       const unguarded = page.for === 'holder' ? page.unknown : 200;
       expect(answer.status).toBe(guarded ? 307 : unguarded);
       if (answer.status !== 307) return;

@@ -163,7 +163,7 @@ describe('finding on the sheet', () => {
     await press('Escape');
     await press('Home');
     await press('Control+f');
-    const bar = page.getByRole('search');
+    const bar = page.getByRole('search', { name: 'Find on this sheet' });
     await bar.getByRole('textbox').waitFor();
     await type('a37');
     await bar.getByText('1 of 2, in cell 38').waitFor();
@@ -215,12 +215,16 @@ describe.each(['light', 'dark'] as const)('in %s', (colorScheme) => {
     expect(await overflow(page)).toBeLessThanOrEqual(0);
 
     await press('Control+f');
-    await page.getByRole('search').getByRole('textbox').waitFor();
+    await page.getByRole('search', { name: 'Find on this sheet' }).getByRole('textbox').waitFor();
     await type('r');
     await page.getByRole('button', { name: 'Replace' }).click();
     expect(await faults()).toEqual([]);
     expect(await overflow(page)).toBeLessThanOrEqual(0);
-    await page.getByRole('search').getByRole('textbox').first().press('Escape');
+    await page
+      .getByRole('search', { name: 'Find on this sheet' })
+      .getByRole('textbox')
+      .first()
+      .press('Escape');
 
     for (const [key, title] of [
       ['F2', 'Rename the mark r'],
