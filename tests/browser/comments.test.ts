@@ -119,7 +119,7 @@ it('the key in a cell opens its comments, and the mark looked for leads to its c
   await page.getByText('No notebook of yours has “wimperg”.', { exact: false }).waitFor();
   // A mark that no other sheet of these tests has: an R would stand on a later page of the answers.
   await field.fill('pace');
-  const link = page.getByRole('link', { name: 'pace = 2 riser + going' });
+  const link = page.getByRole('link', { name: 'pace pace = 2 riser + going' });
   await link.click();
   await page.waitForURL(/#cell-/);
   await page.locator('[data-entry]:focus').waitFor();
